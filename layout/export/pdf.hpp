@@ -1,0 +1,22 @@
+// SPDX-License-Identifier: MIT
+#pragma once
+
+#include "layout/sheet/sheet.hpp"
+
+#include <stdexcept>
+#include <string>
+
+namespace dialwright::layout {
+
+struct ExportError : std::runtime_error {
+    using std::runtime_error::runtime_error;
+};
+
+/// The book as a PDF file's bytes: pages exactly of their sheets' sizes, PrintScaling None, a bookmark a sheet, no date.
+/// The same book gives the same bytes.
+/// @throws ExportError  a coordinate is not finite or beyond what PDF carries, a page side is outside 5 to 5080 mm,
+///                      or the library reports an error
+/// Accuracy: positions as written within 0.002 mm of the sheet's.
+[[nodiscard]] std::string pdf_of(const SheetBook& book);
+
+} // namespace dialwright::layout
