@@ -1,0 +1,46 @@
+// SPDX-License-Identifier: MIT
+#pragma once
+
+#include "layout/drawing/drawing.hpp"
+#include "layout/lettering/font_files.hpp"
+
+#include <cstdint>
+#include <hb.h>
+#include <memory>
+#include <string_view>
+#include <vector>
+
+namespace dialwright::layout {
+
+/// One face of a font file, open for shaping and for outlines. In this header a `Point` holds units of the font, x to
+/// the right and y up from the base line; `Lettering` scales them.
+class Face {
+  public:
+    /// A glyph's contours: closed, outer ones anticlockwise, inner ones clockwise.
+    struct Shape {
+        std::vector<Path> outlines;
+        Box box;
+    };
+
+    /// Nothing if the file cannot be read or holds no outlines that can be shaped.
+    [[nodiscard]] static std::unique_ptr<Face> opened(const FontFile& file);
+    ~Face();
+    Face(const Face&) = delete;
+    Face& operator=(const Face&) = delete;
+
+    /// Exact: straight lines stay so and quadratic curves become the cubic ones that run through the same points. A
+    /// glyph that is a picture or colour only has no outlines. Kept after the first call.
+    [[nodiscard]] const Shape& shape(std::uint32_t glyph) const;
+    /// Whether the face draws a letter with its marks, be it as one glyph or as several; a space draws nothing.
+    [[nodiscard]] bool draws(std::u32string_view letter) const;
+    /// Height of the outline of H; failing that the font's own statement, failing that 0.7 em.
+    [[nodiscard]] double cap_height() const;
+    [[nodiscard]] hb_font_t* shaper() const;
+
+  private:
+    struct Handles;
+    explicit Face(std::unique_ptr<Handles> handles);
+    std::unique_ptr<Handles> handles_;
+};
+
+} // namespace dialwright::layout
