@@ -31,12 +31,11 @@ class Almanac {
     };
     Instant first_;
     Instant last_;
-    double start_days_ = 0.0; // the first node, days from J2000.0 UTC
-    std::vector<Node> nodes_;
+    std::vector<Node> nodes_; // two days apart; first_ is the third
 };
 
 /// The Sun at many instants, in their order, over any years: from a table where a year has many of them, singly where
-/// it has few.
+/// it has few. Accuracy: as Almanac.
 /// @throws std::invalid_argument  an instant lies outside the years of apparent_sun()
 [[nodiscard]] std::vector<ApparentSun> apparent_suns(std::span<const Instant> instants);
 

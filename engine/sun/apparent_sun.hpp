@@ -5,6 +5,8 @@
 #include "engine/site/site.hpp"
 #include "engine/time/instant.hpp"
 
+#include <chrono>
+
 namespace dialwright {
 
 /// The Sun's geocentric apparent place at one instant: light-time, aberration, precession and nutation applied;
@@ -15,11 +17,18 @@ struct ApparentSun {
     Angle equation_of_time;     ///< apparent − mean solar time: positive when a dial is fast of the mean Sun
 };
 
-/// The years whose instants are accepted: 1800 up to the end of 2199. The theory is stated for 1900 to 2100.
+/// The years whose instants are accepted, and a margin for tables that reach over their ends.
 inline constexpr int k_first_sun_year = 1800;
 inline constexpr int k_last_sun_year = 2199;
+inline constexpr std::chrono::days k_sun_margin{10};
 
-/// @throws std::invalid_argument  the instant lies outside the years 1800 to 2199
+/// The Sun at an instant, straight from the theory: about 40 µs. For many instants use Almanac or apparent_suns().
+/// @throws std::invalid_argument  the instant lies outside the years 1800 to 2199 and their margin
+/// The equation of time is the Sun's hour angle less that of UTC − 12 h. The classical definition (Meeus, ch. 28; NREL)
+/// takes the Sun's mean longitude for the mean Sun, at TT; a clock's mean Sun runs on UT1. The two differ by
+/// (TT − UT1)/365, 0.19 s today: this E is what a dial and a clock show.
+/// Accuracy: 0.02″ from 1972 to the last leap second announced, if UT1 = UTC. See apparent_sun.cpp for what that costs.
+/// Source: IAU SOFA, through ERFA. Tests: tests/published/meeus_25b.txt, tests/against/libnova.cpp, ephem.
 [[nodiscard]] ApparentSun apparent_sun(Instant utc);
 
 /// The Sun in the sky frame of a place at `longitude` (east positive); hour angle in [−180°, 180°).

@@ -12,18 +12,17 @@ namespace dialwright {
 /// The year that a dial is cut for: for each calendar date and hour UT, the mean of that date's own declination and
 /// equation of time over all years of a span of whole leap cycles. Derivation: mean_year.cpp.
 ///
-/// Days are counted on the mean calendar: 0 is 1 January 0h UT, 59 is the end of 28 February; 1 March begins at 59 + q,
-/// where q is the share of leap years in the span (0.25 as a rule). All functions of a day are periodic and smooth.
+/// Days are counted on the mean calendar: 0 is 1 January 0h UT, 59 is the end of 28 February; 1 March begins at 59.25,
+/// after a gap for the share of leap years. All functions of a day are periodic and smooth, with a year of 365.25 days.
 class MeanYear {
   public:
-    /// @throws std::invalid_argument  not a whole number of four-year cycles, or not within 1900 to 2100
+    /// @throws std::invalid_argument  not a whole number of four-year cycles, or not within 1901 to 2099 (1900 and 2100 have no leap day)
     MeanYear(int first_year, int last_year);
 
     [[nodiscard]] int first_year() const { return first_year_; }
     [[nodiscard]] int last_year() const { return last_year_; }
 
-    /// 365 + q.
-    [[nodiscard]] double length_days() const { return length_days_; }
+    [[nodiscard]] double length_days() const { return k_length_days; }
 
     struct Season {
         Angle declination;
@@ -37,7 +36,7 @@ class MeanYear {
     /// The day of a date at an hour UT. 29 February stands for the mean of those years that have one.
     /// @param date  a valid month and day
     [[nodiscard]] double day_of(std::chrono::month_day date, double hour_ut = 12.0) const;
-    /// The date on which a day falls; the stretch of q days between 28 February and 1 March is 29 February.
+    /// The date on which a day falls; the quarter of a day between 28 February and 1 March is 29 February.
     [[nodiscard]] std::chrono::month_day date_of(double day) const;
 
     /// The greatest declination of the year: half the way from the December to the June solstice.
@@ -53,6 +52,8 @@ class MeanYear {
     [[nodiscard]] std::optional<double> day_of_declination(Angle declination, bool sun_going_north) const;
 
   private:
+    static constexpr double k_leap_share = 0.25;
+    static constexpr double k_length_days = 365.0 + k_leap_share;
     static constexpr int k_harmonics = 8;
     struct Harmonic { // radians
         double declination_cos = 0.0, declination_sin = 0.0;
@@ -64,8 +65,6 @@ class MeanYear {
 
     int first_year_;
     int last_year_;
-    double leap_share_; // q
-    double length_days_;
     std::array<Harmonic, k_harmonics + 1> harmonics_{};
     Angle obliquity_;
     double march_equinox_day_ = 0.0, june_solstice_day_ = 0.0, september_equinox_day_ = 0.0, december_solstice_day_ = 0.0;
