@@ -1,0 +1,210 @@
+// SPDX-License-Identifier: MIT
+//
+// A path is walked in steps. Between two steps whose states differ (unlit or outside; cast by the left edge; cast by
+// the right edge) the change is found by halving; between two visible steps chords are halved until they lie within
+// the tolerance; between two lit steps outside the window the window is looked for. Great circles on a flat plate need only
+// the lit stretch: their shadow is a straight line, cut to the window in closed form.
+#include "engine/cast/trace.hpp"
+
+#include <algorithm>
+#include <cmath>
+
+namespace dialwright {
+namespace {
+
+double distance_from_chord(PlatePoint p, PlatePoint a, PlatePoint b) {
+    const double du = b.u_mm - a.u_mm, dv = b.v_mm - a.v_mm;
+    const double pu = p.u_mm - a.u_mm, pv = p.v_mm - a.v_mm;
+    const double length = std::hypot(du, dv);
+    if (length < 1e-12)
+        return std::hypot(pu, pv);
+    const double along = std::clamp((pu * du + pv * dv) / (length * length), 0.0, 1.0);
+    return std::hypot(pu - along * du, pv - along * dv);
+}
+
+/// The part of a + t d, t in [first, last], inside the box; false if none.
+bool cut_to_box(PlatePoint a, double du, double dv, const PlateBox& box, double& first, double& last) {
+    const auto cut = [&](double start, double slope, double low, double high) {
+        if (std::abs(slope) < 1e-300)
+            return start >= low && start <= high;
+        double enter = (low - start) / slope, leave = (high - start) / slope;
+        if (enter > leave)
+            std::swap(enter, leave);
+        first = std::max(first, enter);
+        last = std::min(last, leave);
+        return first < last;
+    };
+    return cut(a.u_mm, du, box.left_mm, box.right_mm) && cut(a.v_mm, dv, box.bottom_mm, box.top_mm);
+}
+
+template <Surface S> class Walk {
+  public:
+    Walk(const Caster<S>& caster, const SunPath& path, const PlateBox& window, double tolerance_mm)
+        : caster_{caster}, path_{path}, window_{window}, tolerance_mm_{tolerance_mm} {}
+
+    std::vector<PlatePolyline> curve() {
+        Step before = step(path_.first);
+        if (before.visible())
+            begin(before);
+        for (int i = 1; i <= path_.steps; ++i) {
+            const Step after = step(i == path_.steps ? path_.last : parameter(i));
+            join(before, after, 0);
+            before = after;
+        }
+        drop_dots();
+        return std::move(lines_);
+    }
+
+    std::vector<PlatePolyline> straight() {
+        ends_of_light();
+        if (!(first_lit_ < last_lit_))
+            return {};
+        // Two lit Suns well inside the stretch give the line; its ends, which may be at infinity, only how far it runs.
+        const double span = last_lit_ - first_lit_;
+        const auto a = cast(first_lit_ + 0.4 * span), b = cast(first_lit_ + 0.6 * span);
+        if (!a || !b)
+            return {};
+        double du = b->point.u_mm - a->point.u_mm, dv = b->point.v_mm - a->point.v_mm;
+        const double length = std::hypot(du, dv);
+        if (length < 1e-12)
+            return {};
+        du /= length;
+        dv /= length;
+        const auto along = [&](double parameter_of_end, double otherwise) {
+            const auto end = cast(parameter_of_end);
+            return end ? (end->point.u_mm - a->point.u_mm) * du + (end->point.v_mm - a->point.v_mm) * dv : otherwise;
+        };
+        constexpr double k_far_mm = 1e15;
+        double first = along(first_lit_, -k_far_mm), last = along(last_lit_, k_far_mm);
+        if (!cut_to_box(a->point, du, dv, window_, first, last) || last - first < k_dot_mm)
+            return {};
+        const auto at = [&](double t) { return PlatePoint{a->point.u_mm + t * du, a->point.v_mm + t * dv}; };
+        return {{at(first), at(last)}};
+    }
+
+  private:
+    static constexpr double k_dot_mm = 1e-6;
+    static constexpr int k_halvings = 50;
+
+    struct Step {
+        double at;
+        std::optional<Cast> cast;
+        int state; ///< 0 not drawn, 1 left edge, 2 right edge
+        [[nodiscard]] bool visible() const { return state != 0; }
+    };
+
+    [[nodiscard]] double parameter(int i) const {
+        return path_.first + (path_.last - path_.first) * (double(i) / path_.steps);
+    }
+    [[nodiscard]] std::optional<Cast> cast(double t) const { return caster_.cast(path_.at(t), path_.light, path_.edge); }
+    [[nodiscard]] Step step(double t) const {
+        auto shadow = cast(t);
+        const int state = shadow && window_.contains(shadow->point) ? (shadow->edge == Edge::left ? 1 : 2) : 0;
+        return {t, shadow, state};
+    }
+
+    void begin(const Step& s) { lines_.push_back({s.cast->point}); }
+
+    /// Draws from `a` to `b`; what is visible at `a` has been begun.
+    void join(const Step& a, const Step& b, int depth) {
+        if (a.state != b.state) {
+            Step low = a, high = b;
+            for (int i = 0; i < k_halvings; ++i) {
+                const Step middle = step((low.at + high.at) / 2);
+                (middle.state == a.state ? low : high) = middle;
+            }
+            if (a.visible())
+                refine(a, low, 0);
+            if (high.visible())
+                begin(high);
+            if (high.at < b.at && depth < 8)
+                join(high, b, depth + 1);
+        } else if (a.visible()) {
+            refine(a, b, 0);
+        } else if (depth < 14 && may_enter(a, b, depth)) {
+            const Step middle = step((a.at + b.at) / 2);
+            join(a, middle, depth + 1);
+            join(middle, b, depth + 1);
+        }
+    }
+
+    /// Whether a stretch with both ends outside the window or unlit might come in between.
+    [[nodiscard]] bool may_enter(const Step& a, const Step& b, int depth) const {
+        if (a.cast && b.cast) {
+            const PlatePoint p = a.cast->point, q = b.cast->point;
+            double first = -0.1, last = 1.1;
+            return cut_to_box(p, q.u_mm - p.u_mm, q.v_mm - p.v_mm, window_, first, last);
+        }
+        return (a.cast || b.cast) && depth < 5;
+    }
+
+    void refine(const Step& a, const Step& b, int depth) {
+        constexpr int k_deepest = 26;
+        const Step middle = step((a.at + b.at) / 2);
+        const auto near_chord = [&](const std::optional<Cast>& c) {
+            return c && distance_from_chord(c->point, a.cast->point, b.cast->point) <= tolerance_mm_;
+        };
+        const bool flat = near_chord(middle.cast) && near_chord(cast(a.at + 0.25 * (b.at - a.at))) &&
+                          near_chord(cast(a.at + 0.75 * (b.at - a.at)));
+        if (middle.state != a.state && depth < k_deepest) {
+            join(a, middle, 0);
+            join(middle, b, 0);
+            return;
+        }
+        if (flat || depth >= k_deepest) {
+            lines_.back().push_back(b.cast->point);
+            return;
+        }
+        refine(a, middle, depth + 1);
+        refine(middle, b, depth + 1);
+    }
+
+    /// The longest lit stretch of a great circle, found by steps and halving.
+    void ends_of_light() {
+        int first = -1, last = -1;
+        for (int i = 0; i <= path_.steps; ++i) {
+            if (!cast(parameter(i)))
+                continue;
+            if (first < 0)
+                first = i;
+            last = i;
+        }
+        if (first < 0)
+            return;
+        const auto end_between = [&](double lit, double unlit) {
+            for (int i = 0; i < k_halvings; ++i) {
+                const double middle = (lit + unlit) / 2;
+                (cast(middle) ? lit : unlit) = middle;
+            }
+            return lit;
+        };
+        first_lit_ = first > 0 ? end_between(parameter(first), parameter(first - 1)) : path_.first;
+        last_lit_ = last < path_.steps ? end_between(parameter(last), parameter(last + 1)) : path_.last;
+    }
+
+    void drop_dots() {
+        std::erase_if(lines_, [](const PlatePolyline& line) {
+            return line.size() < 2 || (line.size() == 2 && std::hypot(line[0].u_mm - line[1].u_mm,
+                                                                      line[0].v_mm - line[1].v_mm) < k_dot_mm);
+        });
+    }
+
+    const Caster<S>& caster_;
+    const SunPath& path_;
+    const PlateBox& window_;
+    double tolerance_mm_;
+    double first_lit_ = 0.0, last_lit_ = 0.0;
+    std::vector<PlatePolyline> lines_;
+};
+
+} // namespace
+
+template <Surface S>
+std::vector<PlatePolyline> trace(const Caster<S>& caster, const SunPath& path, const PlateBox& window, double tolerance_mm) {
+    Walk<S> walk{caster, path, window, tolerance_mm};
+    return path.great_circle && S::straight_paths ? walk.straight() : walk.curve();
+}
+
+template std::vector<PlatePolyline> trace<Plane>(const Caster<Plane>&, const SunPath&, const PlateBox&, double);
+
+} // namespace dialwright

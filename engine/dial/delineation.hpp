@@ -1,0 +1,46 @@
+// SPDX-License-Identifier: MIT
+#pragma once
+
+#include "engine/dial/dial_plan.hpp"
+
+#include <string>
+#include <vector>
+
+namespace dialwright {
+
+enum class Family { hour, clock_hour, date };
+
+/// One line of the dial, not yet trimmed to the plate's borders.
+struct DialLine {
+    Family family = Family::hour;
+    std::string label;                ///< of a date line
+    double time_h = 0.0;              ///< of an hour line, the dial's own time
+    int step_min = 60;                ///< the coarsest of 60, 30, 15, 10, 5, 2, 1 minutes that the time is a whole number of
+    Angle hour_angle;                 ///< of an hour line; of the mean Sun for the clock's
+    std::optional<Angle> direction;   ///< of a straight hour line, from the centre, clockwise from +v
+    std::optional<Angle> declination; ///< of a date line
+    std::vector<PlatePolyline> pieces;
+};
+
+/// What the mathematics says of one face: the style and every line that the Sun can show inside the window.
+struct Delineation {
+    PlateFrame frame;
+    Style style;
+    Season season;                     ///< of the mean year
+    std::vector<DialLine> lines;       ///< hours by time, then dates in the plan's order
+    std::vector<double> unlit_hours;   ///< whole hours that the plan asks for and that are never lit
+    std::vector<std::string> unlit_dates; ///< date lines of which nothing falls into the window
+};
+
+[[nodiscard]] Caster<Plane> caster_of(const DialPlan& plan);
+
+/// @param window  plate frame, mm
+/// @throws std::invalid_argument  the plan's nodus is not above the plate
+[[nodiscard]] Delineation delineate(const DialPlan& plan, const MeanYear& year, const PlateBox& window);
+
+/// What a dial as planned shows at the Sun's place: the time on its own scale by the line on which the shadow falls,
+/// in [0, 24). On clock-time curves the curve of the half year that `day_of_year` lies in.
+/// @param day_of_year  of the mean year
+[[nodiscard]] double reading_of(const DialPlan& plan, const MeanYear& year, const SkyPlace& sun, double day_of_year);
+
+} // namespace dialwright

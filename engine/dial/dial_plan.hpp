@@ -1,0 +1,62 @@
+// SPDX-License-Identifier: MIT
+#pragma once
+
+#include "engine/cast/trace.hpp"
+#include "engine/sun/mean_year.hpp"
+
+#include <optional>
+#include <string>
+#include <vector>
+
+namespace dialwright {
+
+/// The kinds of time that a dial's hour lines can show.
+enum class HourTime {
+    sun,  ///< the site's own apparent time
+    zone, ///< apparent time of the zone's standard meridian: corrected for longitude
+    clock ///< mean time of the zone's standard meridian: yearly curves
+};
+
+/// Which part of the year a clock-time curve is drawn for.
+enum class HalfYear { whole, december_to_june, june_to_december };
+
+/// How far an hour line runs.
+enum class HourExtent {
+    style, ///< as the shadow of the whole style: from the centre to the border
+    nodus  ///< as the shadow of the nodus alone, between the solstices
+};
+
+struct HourPlan {
+    HourTime time = HourTime::sun;
+    std::optional<double> first_h, last_h; ///< on the dial's own time, 0 to 24; nothing: all that are ever lit
+    int divide_min = 60;                   ///< a divisor of 60
+    HalfYear half_year = HalfYear::whole;
+    HourExtent extent = HourExtent::style;
+};
+
+struct DatePlan {
+    struct Line {
+        std::string label;
+        Angle declination;
+    };
+    std::vector<Line> lines;
+};
+
+/// All that the mathematics needs to delineate one face.
+struct DialPlan {
+    Site site;
+    Angle zone_meridian; ///< east positive
+    Attitude attitude;
+    double nodus_height_mm = 0.0;
+    double gnomon_thickness_mm = 0.0;
+    Skyline skyline;
+    HourPlan hours;
+    DatePlan dates;
+};
+
+/// Hour angle of the dial's own time T (hours); of the mean Sun where the time is the clock's.
+[[nodiscard]] Angle hour_angle_of(HourTime time, double time_h, const Site& site, Angle zone_meridian);
+/// The dial's own time, in [0, 24), at which the (mean) Sun has an hour angle.
+[[nodiscard]] double time_of(HourTime time, Angle hour_angle, const Site& site, Angle zone_meridian);
+
+} // namespace dialwright

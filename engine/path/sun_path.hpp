@@ -1,0 +1,51 @@
+// SPDX-License-Identifier: MIT
+#pragma once
+
+#include "engine/site/site.hpp"
+#include "engine/style/gnomon_edges.hpp"
+#include "engine/sun/mean_year.hpp"
+
+#include <functional>
+#include <optional>
+
+namespace dialwright {
+
+/// Which Suns of a path count.
+enum class Light {
+    seen,      ///< the Sun lights the plate and stands above the site's skyline
+    plate_only ///< the Sun lights the plate: for the shadow of a style that runs on beyond the nodus
+};
+
+/// A curve in the sky frame whose shadow is a line on the dial. A new family of lines is a new maker of paths; nothing
+/// else knows how the curve comes about.
+struct SunPath {
+    std::function<SkyPlace(double)> at;
+    double first = 0.0, last = 1.0; ///< of the parameter
+    bool great_circle = false;      ///< its shadow is straight wherever the surface keeps great circles straight
+    Light light = Light::seen;
+    std::optional<Edge> edge;       ///< the casting edge where the path is told; else by the Sun's hour angle
+    int steps = 96;                 ///< parameter steps within which the path does not turn twice
+};
+
+/// The declinations that the Sun reaches in the mean year: ± this.
+struct Season {
+    Angle least, greatest;
+};
+
+/// The hour line of one hour angle, as shadows of the nodus alone: the season's Suns.
+[[nodiscard]] SunPath hour_path_of_nodus(Angle hour_angle, const Season& season);
+
+/// The hour line of one hour angle, as the shadow of the whole style, in both directions beyond the nodus' own: every
+/// Sun of the hour's half circle, pole to pole, whether or not it comes there. The shadow of a point of the style that stands k times as far
+/// from the centre is k times as far from it too, so that this is the one half-line from the centre.
+[[nodiscard]] SunPath hour_path_of_style(Angle hour_angle);
+
+/// The date line of one declination, through the whole turn of hour angles, from midnight to midnight.
+[[nodiscard]] SunPath declination_path(Angle declination);
+
+/// A clock-time curve: the Suns of one mean-time hour through the mean year. The hour angle is that of the apparent
+/// Sun when the mean Sun stands at `mean_hour_angle`.
+/// @param first_day, last_day  days of the mean year, last > first, at most a year apart; may pass the year's end
+[[nodiscard]] SunPath mean_time_path(Angle mean_hour_angle, const MeanYear& year, double first_day, double last_day);
+
+} // namespace dialwright
