@@ -1,7 +1,8 @@
 // SPDX-License-Identifier: MIT
 #pragma once
 
-#include "engine/site/site.hpp"
+#include "engine/dial/dial_plan.hpp"
+#include "layout/plate/plate_spec.hpp"
 
 #include <chrono>
 #include <optional>
@@ -9,6 +10,17 @@
 #include <vector>
 
 namespace dialwright::cli {
+
+using dialwright::HourTime;
+using layout::Borders;
+using layout::Cutting;
+using layout::Gnomon;
+using layout::LetteringChoice;
+using layout::Numerals;
+using layout::NumeralStand;
+using layout::Plate;
+using layout::PlatePointMm;
+using layout::PlateShape;
 
 /// What a design file says, with what it leaves open filled in by the trade's habit (each such filling is in `assumed`).
 /// Lengths are millimetres. One struct a section of the file; docs/design-file.md describes each key.
@@ -28,40 +40,6 @@ struct Dial {
     Faces faces = Faces::upper;         ///< equatorial only
 };
 
-enum class PlateShape { round, rectangle, octagon, polygon };
-struct PlatePointMm {
-    double right_mm = 0.0, up_mm = 0.0;
-};
-struct Plate {
-    PlateShape shape = PlateShape::round;
-    double width_mm = 0.0, height_mm = 0.0; ///< round: both the diameter; octagon: both across flats
-    std::vector<PlatePointMm> corners;      ///< polygon, any turn, from the maker's own origin
-    std::optional<PlatePointMm> centre;     ///< where the dial's centre (or the nodus' foot where there is none) stands
-                                            ///< from the middle of the plate's box
-    std::string material;
-};
-
-struct Borders {
-    double margin_mm = 0.0;       ///< plate's edge to the outer border
-    double chapter_ring_mm = 0.0; ///< between outer and inner line of the ring that holds the numerals
-    double inner_mm = 0.0;        ///< radius of the border round the centre at which lines stop
-};
-
-enum class GnomonKind { edge, pin };
-struct Hole {
-    PlatePointMm at; ///< along the substyle from the foot of the style (right_mm = along, up_mm = across)
-};
-struct Gnomon {
-    std::optional<double> nodus_height_mm;
-    double thickness_mm = 0.0;
-    std::optional<double> foot_mm; ///< length of the foot along the substyle, from the centre
-    int holes = 0;                 ///< fixing holes, evenly along the foot
-    double hole_diameter_mm = 0.0;
-};
-
-enum class HourTime { sun, zone, clock };
-enum class Numerals { roman, roman_iiii, arabic };
-enum class NumeralStand { along_border, upright };
 struct Hours {
     HourTime time = HourTime::sun;
     std::optional<double> first_h, last_h; ///< on the dial's own time; not given: all that are ever lit
@@ -84,20 +62,6 @@ struct Dates {
 
 struct Years {
     int first = 2027, last = 2046;
-};
-
-struct LetteringChoice {
-    std::string family = "EB Garamond";
-    double numeral_height_mm = 0.0; ///< capitals
-    double label_height_mm = 0.0;
-    std::string motto;
-    double motto_height_mm = 0.0;
-    std::string place_line; ///< empty: none
-};
-
-struct Cutting {
-    double line_width_mm = 0.4; ///< the tool's own line: hour lines; finer ones are never thinner than half of it
-    double least_gap_mm = 0.8;  ///< clear material between two lines
 };
 
 struct Print {

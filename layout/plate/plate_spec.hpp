@@ -1,0 +1,54 @@
+// SPDX-License-Identifier: MIT
+#pragma once
+
+#include <optional>
+#include <string>
+
+namespace dialwright::layout {
+
+/// What the maker says of the plate, apart from what the Sun draws on it. Lengths are millimetres.
+
+enum class PlateShape { round, rectangle, octagon, polygon };
+struct PlatePointMm {
+    double right_mm = 0.0, up_mm = 0.0;
+};
+struct Plate {
+    PlateShape shape = PlateShape::round;
+    double width_mm = 0.0, height_mm = 0.0; ///< round: both the diameter; octagon: both across flats
+    std::vector<PlatePointMm> corners;      ///< polygon, any turn, from the maker's own origin
+    std::optional<PlatePointMm> centre;     ///< where the dial's centre (or the nodus' foot where there is none) stands
+                                            ///< from the middle of the plate's box
+    std::string material;
+};
+
+struct Borders {
+    double margin_mm = 0.0;       ///< plate's edge to the outer border
+    double chapter_ring_mm = 0.0; ///< between outer and inner line of the ring that holds the numerals
+    double inner_mm = 0.0;        ///< radius of the border round the centre at which lines stop
+};
+
+struct Gnomon {
+    std::optional<double> nodus_height_mm;
+    double thickness_mm = 0.0;
+    std::optional<double> foot_mm; ///< length of the foot along the substyle, from the centre
+    int holes = 0;                 ///< fixing holes, evenly along the foot
+    double hole_diameter_mm = 0.0;
+};
+
+enum class Numerals { roman, roman_iiii, arabic };
+enum class NumeralStand { along_border, upright };
+struct LetteringChoice {
+    std::string family = "EB Garamond";
+    double numeral_height_mm = 0.0; ///< capitals
+    double label_height_mm = 0.0;
+    std::string motto;
+    double motto_height_mm = 0.0;
+    std::string place_line; ///< empty: none
+};
+
+struct Cutting {
+    double line_width_mm = 0.4; ///< the tool's own line: hour lines; finer ones are never thinner than half of it
+    double least_gap_mm = 0.8;  ///< clear material between two lines
+};
+
+} // namespace dialwright::layout
