@@ -1,16 +1,12 @@
 // SPDX-License-Identifier: MIT
 #pragma once
 
+#include "layout/sheet/export_error.hpp"
 #include "layout/sheet/sheet.hpp"
 
-#include <stdexcept>
 #include <string>
 
 namespace dialwright::layout {
-
-struct ExportError : std::runtime_error {
-    using std::runtime_error::runtime_error;
-};
 
 /// The book as a PDF file's bytes: pages exactly of their sheets' sizes, PrintScaling None, a bookmark a sheet, no date.
 /// The same book gives the same bytes.

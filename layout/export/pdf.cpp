@@ -1,0 +1,204 @@
+// SPDX-License-Identifier: MIT
+#include "layout/export/pdf.hpp"
+
+#include "layout/export/pdf_page.hpp"
+#include "layout/lettering/sheet_font.hpp"
+
+#include <fmt/format.h>
+
+#include <cmath>
+#include <map>
+
+namespace dialwright::layout {
+namespace {
+
+void record_trouble(HPDF_STATUS error, HPDF_STATUS detail, void* data) {
+    auto* trouble = static_cast<PdfTrouble*>(data);
+    if (trouble->error == HPDF_OK) { // what follows the first is only its echo
+        trouble->error = error;
+        trouble->detail = detail;
+    }
+}
+
+/// A document of the library and its fonts, which are loaded when the first note asks for them.
+class PdfDocument {
+  public:
+    PdfDocument() : document_{HPDF_New(&record_trouble, &trouble_)} {
+        if (document_ == nullptr) {
+            throw ExportError("The PDF could not be made: no memory is left.");
+        }
+        HPDF_UseUTFEncodings(document_);
+        HPDF_SetCurrentEncoder(document_, "UTF-8");
+        HPDF_SetCompressionMode(document_, HPDF_COMP_ALL);
+    }
+    ~PdfDocument() { HPDF_Free(document_); }
+    PdfDocument(const PdfDocument&) = delete;
+    PdfDocument& operator=(const PdfDocument&) = delete;
+
+    [[nodiscard]] HPDF_Doc get() const { return document_; }
+    [[nodiscard]] const PdfTrouble& trouble() const { return trouble_; }
+    [[nodiscard]] HPDF_Font font(bool bold) {
+        HPDF_Font& font = bold ? bold_ : regular_;
+        if (font == nullptr) {
+            const std::string& file = sheet_font(bold).file;
+            const char* name = HPDF_LoadTTFontFromFile(document_, file.c_str(), HPDF_TRUE);
+            trouble_.check();
+            font = HPDF_GetFont(document_, name, "UTF-8");
+            trouble_.check();
+        }
+        return font;
+    }
+    [[nodiscard]] std::string bytes();
+
+  private:
+    PdfTrouble trouble_;
+    HPDF_Doc document_;
+    HPDF_Font regular_ = nullptr, bold_ = nullptr;
+};
+
+/// Kept in memory and handed over: the library's own way to a file does not notice a full disk.
+std::string PdfDocument::bytes() {
+    // Once and last, because each call takes back the one before and a later call of another kind lowers the version.
+    HPDF_SetViewerPreference(document_, HPDF_PRINT_SCALING_NONE);
+    HPDF_SaveToStream(document_);
+    trouble_.check();
+    HPDF_UINT32 left = HPDF_GetStreamSize(document_);
+    std::string all(left, '\0');
+    HPDF_ReadFromStream(document_, reinterpret_cast<HPDF_BYTE*>(all.data()), &left);
+    trouble_.check();
+    if (left != all.size()) {
+        throw ExportError("The PDF could not be made: the PDF library gave back only a part of it.");
+    }
+    return all;
+}
+
+bool is_finite(Point p) {
+    return std::isfinite(p.x_mm) && std::isfinite(p.y_mm);
+}
+
+bool is_finite(const Piece& piece) {
+    if (const auto* arc = std::get_if<ArcTo>(&piece)) {
+        return is_finite(arc->to) && is_finite(arc->centre) && std::isfinite(arc->sweep.in_radians());
+    }
+    if (const auto* curve = std::get_if<CurveTo>(&piece)) {
+        return is_finite(curve->control_1) && is_finite(curve->control_2) && is_finite(curve->to);
+    }
+    return is_finite(end_of(piece));
+}
+
+/// Before anything is left out by its box, because a number that is none falls through every comparison.
+void require_finite(const Mark& mark) {
+    bool good = std::isfinite(mark.width_mm) && mark.width_mm >= 0;
+    for (const Path& path : mark.paths) {
+        good = good && is_finite(path.start);
+        for (const Piece& piece : path.pieces) {
+            good = good && is_finite(piece);
+        }
+    }
+    if (!good) {
+        throw ExportError(fmt::format("“{}” has a point that is no number, so no PDF was made.",
+                                      mark.name.empty() ? name_of(mark.layer) : mark.name));
+    }
+}
+
+/// The boxes of each drawing's marks, found once for all the sheets that show it.
+class BoxesOfMarks {
+  public:
+    const std::vector<Box>& of(const Drawing& drawing) {
+        const auto [place, is_new] = boxes_.try_emplace(&drawing);
+        if (is_new) {
+            for (const Mark& mark : drawing.marks) {
+                require_finite(mark);
+                place->second.push_back(bounds_of(mark));
+            }
+        }
+        return place->second;
+    }
+
+  private:
+    std::map<const Drawing*, std::vector<Box>> boxes_;
+};
+
+/// A box that the placed box lies in.
+Box placed(const Placing& placing, const Box& box) {
+    Box out;
+    if (!box.empty()) {
+        out.add(placing(Point{box.left_mm, box.bottom_mm}));
+        out.add(placing(Point{box.right_mm, box.bottom_mm}));
+        out.add(placing(Point{box.right_mm, box.top_mm}));
+        out.add(placing(Point{box.left_mm, box.top_mm}));
+    }
+    return out;
+}
+
+void draw_window(PdfPage& page, const Window& window, BoxesOfMarks& boxes) {
+    const Placing& p = window.placing;
+    const bool good = std::isfinite(p.turn.in_radians()) && is_finite(p.shift) && p.scale_x > 0 && p.scale_y > 0 &&
+                      std::isfinite(p.scale_x) && std::isfinite(p.scale_y);
+    if (!good) {
+        throw ExportError("A view of the work has a place or a scale that is no number, so no PDF was made.");
+    }
+    if (window.drawing == nullptr || window.opening.empty()) {
+        return;
+    }
+    const std::vector<Box>& marks = boxes.of(*window.drawing);
+    page.open(window.opening);
+    for (std::size_t i = 0; i < marks.size(); ++i) {
+        if (placed(p, marks[i]).meets(window.opening)) {
+            page.mark(p(window.drawing->marks[i]), window.opening);
+        }
+    }
+    page.close();
+}
+
+void add_sheet(PdfDocument& document, const Sheet& sheet, BoxesOfMarks& boxes) {
+    const auto fits = [](double side) { return side >= 5.0 && side <= 5080.0; };
+    if (!fits(sheet.width_mm) || !fits(sheet.height_mm)) {
+        throw ExportError(fmt::format("A sheet of {:.1f} × {:.1f} mm is no PDF page: each side takes 5 to 5080 mm.",
+                                      sheet.width_mm, sheet.height_mm));
+    }
+    HPDF_Page page = HPDF_AddPage(document.get());
+    document.trouble().check();
+    HPDF_Page_SetWidth(page, static_cast<HPDF_REAL>(sheet.width_mm * 72.0 / 25.4));
+    HPDF_Page_SetHeight(page, static_cast<HPDF_REAL>(sheet.height_mm * 72.0 / 25.4));
+    PdfPage paper{page, document.trouble()};
+    for (const Window& window : sheet.windows) {
+        draw_window(paper, window, boxes);
+    }
+    const Box whole{0, 0, sheet.width_mm, sheet.height_mm};
+    for (const Mark& mark : sheet.furniture) {
+        require_finite(mark);
+        paper.mark(mark, whole);
+    }
+    for (const Note& note : sheet.notes) {
+        paper.note(note, document.font(note.bold));
+    }
+    HPDF_Outline bookmark =
+        HPDF_CreateOutline(document.get(), nullptr, sheet.title.c_str(), HPDF_GetEncoder(document.get(), "UTF-8"));
+    document.trouble().check();
+    HPDF_Outline_SetDestination(bookmark, HPDF_Page_CreateDestination(page));
+    document.trouble().check();
+}
+
+} // namespace
+
+std::string pdf_of(const SheetBook& book) {
+    if (book.sheets.empty()) {
+        throw ExportError("There is nothing to print: the book has no sheets.");
+    }
+    PdfDocument document;
+    BoxesOfMarks boxes;
+    if (!book.title.empty()) {
+        HPDF_SetInfoAttr(document.get(), HPDF_INFO_TITLE, book.title.c_str());
+    }
+    if (!book.subject.empty()) {
+        HPDF_SetInfoAttr(document.get(), HPDF_INFO_SUBJECT, book.subject.c_str());
+    }
+    document.trouble().check();
+    for (const Sheet& sheet : book.sheets) {
+        add_sheet(document, sheet, boxes);
+    }
+    return document.bytes();
+}
+
+} // namespace dialwright::layout
