@@ -10,6 +10,7 @@
 #include "engine/sun/apparent_sun.hpp"
 
 #include <erfa.h>
+#include <erfam.h>
 
 #include <array>
 #include <cmath>

@@ -43,7 +43,7 @@ struct Sum { // radians
 Instant moment_of(int y, double t) {
     double elapsed = t;
     if (t > k_days_before_march)
-        elapsed += (year{y}.is_leap() ? 1.0 : 0.0) - k_leap_share;
+        elapsed += (year{y}.is_leap() ? 1.0 : 0.0) - MeanYear::k_leap_share;
     return Instant{sys_days{year{y} / January / 1}} + round<microseconds>(duration<double, days::period>(elapsed));
 }
 

@@ -16,6 +16,9 @@ namespace dialwright {
 /// after a gap for the share of leap years. All functions of a day are periodic and smooth, with a year of 365.25 days.
 class MeanYear {
   public:
+    static constexpr double k_leap_share = 0.25; ///< of a day, between 28 February and 1 March
+    static constexpr double k_length_days = 365.0 + k_leap_share;
+
     /// @throws std::invalid_argument  not a whole number of four-year cycles, or not within 1901 to 2099 (1900 and 2100 have no leap day)
     MeanYear(int first_year, int last_year);
 
@@ -52,8 +55,6 @@ class MeanYear {
     [[nodiscard]] std::optional<double> day_of_declination(Angle declination, bool sun_going_north) const;
 
   private:
-    static constexpr double k_leap_share = 0.25;
-    static constexpr double k_length_days = 365.0 + k_leap_share;
     static constexpr int k_harmonics = 8;
     struct Harmonic { // radians
         double declination_cos = 0.0, declination_sin = 0.0;
