@@ -142,7 +142,7 @@ bool Face::draws(std::u32string_view letter) const {
     for (std::size_t i = 0; i < letter.size(); ++i)
         hb_buffer_add(buffer.get(), static_cast<hb_codepoint_t>(letter[i]), static_cast<unsigned>(i));
     hb_buffer_set_content_type(buffer.get(), HB_BUFFER_CONTENT_TYPE_UNICODE);
-    hb_buffer_set_script(buffer.get(), scripts_of(letter).front());
+    hb_buffer_set_script(buffer.get(), static_cast<hb_script_t>(scripts_of(letter).front()));
     hb_buffer_set_direction(buffer.get(), HB_DIRECTION_LTR);
     hb_shape(shaper(), buffer.get(), nullptr, 0);
     unsigned count = 0;

@@ -5,10 +5,11 @@
 #include "layout/lettering/font_files.hpp"
 
 #include <cstdint>
-#include <hb.h>
 #include <memory>
 #include <string_view>
 #include <vector>
+
+struct hb_font_t;
 
 namespace dialwright::layout {
 

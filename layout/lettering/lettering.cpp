@@ -6,6 +6,7 @@
 #include "layout/lettering/text_runs.hpp"
 
 #include <cmath>
+#include <hb.h>
 #include <numbers>
 #include <optional>
 #include <stdexcept>
@@ -18,7 +19,7 @@ namespace {
 struct Run {
     std::size_t start = 0, end = 0;
     const Face* face = nullptr;
-    hb_script_t script = HB_SCRIPT_LATIN;
+    Script script = 0;
     std::uint8_t level = 0;
 };
 
@@ -36,7 +37,7 @@ Path scaled(const Path& path, double scale, Point shift) {
 }
 
 /// Letters of these scripts hang together, and space between them would tear the line of the pen.
-bool is_joined(hb_script_t script) {
+bool is_joined(Script script) {
     return script == HB_SCRIPT_ARABIC || script == HB_SCRIPT_SYRIAC || script == HB_SCRIPT_NKO ||
            script == HB_SCRIPT_MONGOLIAN || script == HB_SCRIPT_DEVANAGARI || script == HB_SCRIPT_BENGALI;
 }
@@ -76,12 +77,15 @@ class Setter {
                                  static_cast<int>(text_.size()), static_cast<unsigned>(run.start),
                                  static_cast<int>(run.end - run.start));
         hb_buffer_set_direction(buffer_, run.level % 2 == 1 ? HB_DIRECTION_RTL : HB_DIRECTION_LTR);
-        hb_buffer_set_script(buffer_, run.script);
+        hb_buffer_set_script(buffer_, static_cast<hb_script_t>(run.script));
         // No language: the letters must not depend on the machine's user.
-        const hb_feature_t apart[] = {{HB_TAG('l', 'i', 'g', 'a'), 0, 0, static_cast<unsigned>(-1)},
-                                      {HB_TAG('c', 'l', 'i', 'g'), 0, 0, static_cast<unsigned>(-1)}};
-        const bool tracked = tracking_mm_ != 0.0 && !is_joined(run.script);
-        hb_shape(run.face->shaper(), buffer_, apart, tracked ? 2U : 0U);
+        const auto feature = [](hb_tag_t tag, std::uint32_t value) {
+            return hb_feature_t{tag, value, HB_FEATURE_GLOBAL_START, HB_FEATURE_GLOBAL_END};
+        };
+        const hb_feature_t wanted[] = {feature(HB_TAG('l', 'n', 'u', 'm'), 1), feature(HB_TAG('l', 'i', 'g', 'a'), 0),
+                                       feature(HB_TAG('c', 'l', 'i', 'g'), 0)};
+        const bool apart = tracking_mm_ != 0.0 && !is_joined(run.script);
+        hb_shape(run.face->shaper(), buffer_, wanted, apart ? 3U : 1U);
     }
 
     void start_glyph(bool tracked) {
@@ -167,7 +171,7 @@ const Face& Lettering::Faces::face_for(std::u32string_view letter) {
 
 std::vector<Run> Lettering::Faces::runs(std::u32string_view text) {
     const std::vector<std::uint8_t> levels = direction_levels(text);
-    const std::vector<hb_script_t> scripts = scripts_of(text);
+    const std::vector<Script> scripts = scripts_of(text);
     std::vector<Run> found;
     for (std::size_t start = 0, end = 0; start < text.size(); start = end) {
         end = start + 1;

@@ -45,7 +45,8 @@ class Lettering {
     Lettering(Lettering&&) noexcept;
     Lettering& operator=(Lettering&&) noexcept;
 
-    /// Kerning and ligatures are the font's own; a line with tracking has no ligatures.
+    /// Kerning and ligatures are the font's own; a line with tracking has no ligatures. Figures are those that stand as
+    /// high as capitals, where the font has them.
     /// @param text     UTF-8, one line; any script, left to right or right to left, numbers in either
     /// @param size_mm  height of the capitals, measured on the outline of H, the size that an engraver asks for; > 0
     /// @param tracking_mm  added between glyphs, but not where a script joins its letters

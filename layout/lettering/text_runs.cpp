@@ -5,6 +5,7 @@
 
 #include <algorithm>
 #include <fmt/format.h>
+#include <hb.h>
 #include <iterator>
 #include <numeric>
 
@@ -57,7 +58,7 @@ hb_script_t script_of(char32_t character) {
     return hb_unicode_script(hb_unicode_funcs_get_default(), static_cast<hb_codepoint_t>(character));
 }
 
-bool shared_by_scripts(hb_script_t script) {
+bool shared_by_scripts(Script script) {
     return script == HB_SCRIPT_COMMON || script == HB_SCRIPT_INHERITED || script == HB_SCRIPT_UNKNOWN;
 }
 
@@ -184,13 +185,13 @@ std::vector<std::uint8_t> direction_levels(std::u32string_view text) {
     return levels;
 }
 
-std::vector<hb_script_t> scripts_of(std::u32string_view text) {
-    std::vector<hb_script_t> scripts;
+std::vector<Script> scripts_of(std::u32string_view text) {
+    std::vector<Script> scripts;
     scripts.reserve(text.size());
     std::transform(text.begin(), text.end(), std::back_inserter(scripts), script_of);
     const auto first = std::find_if_not(scripts.begin(), scripts.end(), shared_by_scripts);
-    hb_script_t before = first == scripts.end() ? HB_SCRIPT_LATIN : *first;
-    for (hb_script_t& script : scripts) {
+    Script before = first == scripts.end() ? Script{HB_SCRIPT_LATIN} : *first;
+    for (Script& script : scripts) {
         if (shared_by_scripts(script))
             script = before;
         before = script;

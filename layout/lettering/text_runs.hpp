@@ -3,7 +3,6 @@
 
 #include <cstddef>
 #include <cstdint>
-#include <hb.h>
 #include <string>
 #include <string_view>
 #include <vector>
@@ -27,8 +26,11 @@ namespace dialwright::layout {
 /// its first letter does. Source: Unicode Standard Annex 9, of which explicit embeddings and isolates are left out.
 [[nodiscard]] std::vector<std::uint8_t> direction_levels(std::u32string_view text);
 
+/// A script by its four letters in ISO 15924, first letter in the highest byte ('Latn', 'Grek').
+using Script = std::uint32_t;
+
 /// Script of each character; those that all scripts share take that of the letter before them, else after them.
-[[nodiscard]] std::vector<hb_script_t> scripts_of(std::u32string_view text);
+[[nodiscard]] std::vector<Script> scripts_of(std::u32string_view text);
 
 /// Order from left to right in which runs with these levels stand on the line (the annex's rule L2).
 [[nodiscard]] std::vector<std::size_t> visual_order(const std::vector<std::uint8_t>& levels);
