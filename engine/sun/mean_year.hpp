@@ -20,6 +20,7 @@ class MeanYear {
     static constexpr double k_length_days = 365.0 + k_leap_share;
 
     /// @throws std::invalid_argument  not a whole number of four-year cycles, or not within 1901 to 2099 (1900 and 2100 have no leap day)
+    /// Cost: 15 places of the Sun for each year of the span, 40 µs each.
     MeanYear(int first_year, int last_year);
 
     [[nodiscard]] int first_year() const { return first_year_; }
@@ -32,11 +33,14 @@ class MeanYear {
         Angle equation_of_time; ///< apparent − mean: positive when a dial is fast of the mean Sun
     };
     /// @param day  days on the mean calendar; any real number, taken round the year
+    /// Accuracy against the mean of the dates taken one by one, 2021–2040: 1.7″ and 0.1 s (2025–2028: 3″ and 0.4 s).
+    /// Test: tests/engine/sun/mean_year_test.cpp
     [[nodiscard]] Season at(double day) const;
     /// How fast declination and equation of time change, per day.
     [[nodiscard]] Season rate_at(double day) const;
 
-    /// The day of a date at an hour UT. 29 February stands for the mean of those years that have one.
+    /// The day of a date at an hour UT. 29 February, noon, stands midway between its neighbours; the mean over the leap
+    /// years alone is up to 21″ in declination away, as they need not lie in the middle of the span.
     /// @param date  a valid month and day
     [[nodiscard]] double day_of(std::chrono::month_day date, double hour_ut = 12.0) const;
     /// The date on which a day falls; the quarter of a day between 28 February and 1 March is 29 February.
@@ -55,7 +59,7 @@ class MeanYear {
     [[nodiscard]] std::optional<double> day_of_declination(Angle declination, bool sun_going_north) const;
 
   private:
-    static constexpr int k_harmonics = 8;
+    static constexpr int k_harmonics = 7;
     struct Harmonic { // radians
         double declination_cos = 0.0, declination_sin = 0.0;
         double equation_cos = 0.0, equation_sin = 0.0;
