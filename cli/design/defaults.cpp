@@ -1,0 +1,148 @@
+// SPDX-License-Identifier: MIT
+// Proportions are common practice, no source, unless a line says otherwise. S is the plate's smaller side.
+#include "cli/design/defaults.hpp"
+
+#include "cli/design/sections.hpp"
+
+#include <fmt/format.h>
+
+#include <algorithm>
+#include <cmath>
+
+namespace dialwright::cli {
+
+namespace {
+
+class Filler {
+  public:
+    Filler(Design& design, const ReadingState& state) : design_{design}, state_{state} {}
+
+    [[nodiscard]] bool wants(std::string_view key) const { return !state_.gives(key); }
+
+    void note(std::string_view key, std::string value, std::string_view why) {
+        design_.assumed.push_back({std::string{key}, std::move(value), std::string{why}});
+    }
+
+    /// A note for a default that the design's struct holds already.
+    void note_unless_given(std::string_view key, std::string value, std::string_view why) {
+        if (wants(key))
+            note(key, std::move(value), why);
+    }
+
+    /// Sets a length that is not given, as it is.
+    void fill(double& target, std::string_view key, double mm, std::string_view why) {
+        if (!wants(key))
+            return;
+        target = mm;
+        note(key, length_text(mm, design_.units), why);
+    }
+
+    /// To 0.5 mm or 1/16 in, and never to nothing.
+    void fill_tidy(double& target, std::string_view key, double mm, std::string_view why) {
+        const double step = inches() ? 25.4 / 16.0 : 0.5;
+        fill(target, key, mm <= 0.0 ? 0.0 : std::max(1.0, std::round(mm / step)) * step, why);
+    }
+
+    [[nodiscard]] bool inches() const { return design_.units == Units::inches; }
+
+  private:
+    Design& design_;
+    const ReadingState& state_;
+};
+
+/// The dial's centre is set outside the plate's box, so no lines crowd round it.
+bool centre_is_off(const Plate& plate) {
+    return plate.centre && (std::abs(plate.centre->right_mm) > plate.width_mm / 2 ||
+                            std::abs(plate.centre->up_mm) > plate.height_mm / 2);
+}
+
+void fill_borders_and_letters(Design& design, Filler& filler, double s) {
+    Borders& borders = design.borders;
+    LetteringChoice& letters = design.lettering;
+    filler.fill_tidy(borders.margin_mm, "borders: margin", std::clamp(0.02 * s, 3.0, 12.0), "1/50 of the plate");
+    filler.fill_tidy(borders.chapter_ring_mm, "borders: chapter ring", 0.10 * s, "1/10 of the plate");
+    const bool off = centre_is_off(design.plate);
+    filler.fill_tidy(borders.inner_mm, "borders: inner border", off ? 0.0 : 0.05 * s,
+                     off ? "the centre is off the plate" : "1/20 of the plate");
+    const double ring = borders.chapter_ring_mm > 0.0 ? borders.chapter_ring_mm : 0.10 * s;
+    filler.fill_tidy(letters.numeral_height_mm, "lettering: numeral height", 0.45 * ring,
+                     "a little under half of the chapter ring");
+    filler.fill_tidy(letters.label_height_mm, "lettering: label height", std::max(3.0, 0.014 * s),
+                     "1/70 of the plate, and no less than 3 mm");
+    if (!letters.motto.empty())
+        filler.fill_tidy(letters.motto_height_mm, "lettering: motto height", std::max(4.0, 0.022 * s),
+                         "1/45 of the plate, and no less than 4 mm");
+    filler.note_unless_given("lettering: font", letters.family, "an old-style face that cuts well");
+    filler.note_unless_given("lettering: place line", "no", "not asked for");
+}
+
+void fill_gnomon_and_cutting(Design& design, Filler& filler, double s) {
+    Gnomon& gnomon = design.gnomon;
+    filler.fill_tidy(gnomon.thickness_mm, "gnomon: thickness", std::clamp(0.015 * s, 1.5, 12.0),
+                     "1/65 of the plate: stiff, and its shadow has clean edges");
+    filler.note_unless_given("gnomon: holes", "0", "how it is fixed is the maker's choice");
+    if (gnomon.holes > 0)
+        filler.fill_tidy(gnomon.hole_diameter_mm, "gnomon: hole diameter", std::clamp(gnomon.thickness_mm, 2.0, 5.0),
+                         "by the gnomon's thickness");
+    Cutting& cutting = design.cutting;
+    filler.fill(cutting.line_width_mm, "cutting: line width", filler.inches() ? 25.4 / 64.0 : 0.4,
+                "what a graver or a small cutter leaves");
+    filler.fill(cutting.least_gap_mm, "cutting: least gap", 2.0 * cutting.line_width_mm, "twice the line width");
+}
+
+void note_hours_and_dates(Design& design, Filler& filler) {
+    filler.note_unless_given("hours: time", "sun", "the time that the dial's own place has by the Sun");
+    filler.note_unless_given("hours: divide", "15 min", "quarters, where they leave the least gap");
+    filler.note_unless_given("hours: numerals", "roman", "with IV; \"roman iiii\" gives IIII");
+    filler.note_unless_given("hours: count", "12", "as clocks show it");
+    filler.note_unless_given("hours: stand", "along border", "heads outward along the chapter ring");
+    filler.note_unless_given("hours: noon mark", "yes", "where the day is halved");
+    filler.note_unless_given("dates: solstices", "yes", "the ends of the shadow's walk");
+    filler.note_unless_given("dates: equinoxes", "yes", "the straight line between them");
+    filler.note_unless_given("dates: signs", "no", "not asked for");
+    filler.note_unless_given("dates: months", "no", "not asked for");
+    filler.note_unless_given("dates: labels", "yes", "so that each date line says what it is");
+    filler.note_unless_given("years", fmt::format("{} to {}", design.years.first, design.years.last),
+                             "the Sun's mean path over five leap cycles");
+}
+
+void fill_print(Design& design, Filler& filler) {
+    Print& print = design.print;
+    const bool inches = filler.inches();
+    if (filler.wants("print: paper")) {
+        print.paper = inches ? "Letter" : "A4";
+        filler.note("print: paper", print.paper, "the common office paper");
+    }
+    filler.fill(print.margin_mm, "print: margin", inches ? 25.4 * 5.0 / 16.0 : 8.0, "what printers can't reach");
+    filler.fill(print.overlap_mm, "print: overlap", inches ? 25.4 * 3.0 / 8.0 : 10.0, "room for glue");
+    filler.note_unless_given("print: own size", "yes", "one page of the work's own size as well");
+}
+
+/// "Wall dial at Thornholme".
+std::string title_of(const Design& design) {
+    static constexpr const char* k_names[] = {"Level dial", "Wall dial", "Leaning dial", "Equatorial dial"};
+    const std::string kind = k_names[static_cast<std::size_t>(design.dial.kind)];
+    return design.place.name.empty() ? kind : kind + " at " + design.place.name;
+}
+
+} // namespace
+
+void fill_defaults(Design& design, const ReadingState& state) {
+    const double s = smaller_side_mm(design.plate);
+    Filler filler{design, state};
+    if (filler.wants("title")) {
+        design.title = title_of(design);
+        filler.note("title", design.title, "what is made, and where");
+    }
+    filler.note_unless_given("units", "mm", "no other is named");
+    if (design.dial.kind == DialKind::wall)
+        filler.note_unless_given("dial: lean", "upright", "as walls are");
+    if (design.dial.kind == DialKind::equatorial)
+        filler.note_unless_given("dial: faces", "upper", "the summer face alone");
+    fill_borders_and_letters(design, filler, s);
+    fill_gnomon_and_cutting(design, filler, s);
+    note_hours_and_dates(design, filler);
+    fill_print(design, filler);
+}
+
+} // namespace dialwright::cli

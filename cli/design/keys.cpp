@@ -1,0 +1,130 @@
+// SPDX-License-Identifier: MIT
+#include "cli/design/keys.hpp"
+
+#include "cli/design/nearest.hpp"
+
+#include <fmt/format.h>
+
+#include <algorithm>
+#include <array>
+
+namespace dialwright::cli {
+
+namespace {
+
+constexpr auto k_keys = std::to_array<KnownKey>({
+    {"", "title"},
+    {"", "units"},
+    {"", "years"},
+
+    {"", "place"},
+    {"place", "name"},
+    {"place", "latitude"},
+    {"place", "longitude"},
+    {"place", "zone"},
+
+    {"", "dial"},
+    {"dial", "kind"},
+    {"dial", "facing"},
+    {"dial", "lean"},
+    {"dial", "faces"},
+
+    {"", "plate"},
+    {"plate", "shape"},
+    {"plate", "diameter"},
+    {"plate", "width"},
+    {"plate", "height"},
+    {"plate", "across"},
+    {"plate", "corners"},
+    {"plate", "centre"},
+    {"plate", "material"},
+
+    {"", "borders"},
+    {"borders", "margin"},
+    {"borders", "chapter ring"},
+    {"borders", "inner border"},
+
+    {"", "gnomon"},
+    {"gnomon", "nodus height"},
+    {"gnomon", "thickness"},
+    {"gnomon", "foot"},
+    {"gnomon", "holes"},
+    {"gnomon", "hole diameter"},
+
+    {"", "hours"},
+    {"hours", "time"},
+    {"hours", "from"},
+    {"hours", "to"},
+    {"hours", "divide"},
+    {"hours", "numerals"},
+    {"hours", "count"},
+    {"hours", "stand"},
+    {"hours", "noon mark"},
+
+    {"", "dates"},
+    {"dates", "solstices"},
+    {"dates", "equinoxes"},
+    {"dates", "signs"},
+    {"dates", "months"},
+    {"dates", "days"},
+    {"dates: days", "on"},
+    {"dates: days", "label"},
+    {"dates", "labels"},
+
+    {"", "lettering"},
+    {"lettering", "font"},
+    {"lettering", "numeral height"},
+    {"lettering", "label height"},
+    {"lettering", "motto"},
+    {"lettering", "motto height"},
+    {"lettering", "place line"},
+
+    {"", "cutting"},
+    {"cutting", "line width"},
+    {"cutting", "least gap"},
+
+    {"", "print"},
+    {"print", "paper"},
+    {"print", "margin"},
+    {"print", "overlap"},
+    {"print", "own size"},
+});
+
+} // namespace
+
+std::span<const KnownKey> known_keys() {
+    return k_keys;
+}
+
+bool is_known(std::string_view section, std::string_view name) {
+    return std::any_of(k_keys.begin(), k_keys.end(),
+                       [&](const KnownKey& key) { return key.section == section && key.name == name; });
+}
+
+std::vector<std::string_view> keys_of(std::string_view section) {
+    std::vector<std::string_view> names;
+    for (const KnownKey& key : k_keys)
+        if (key.section == section)
+            names.push_back(key.name);
+    return names;
+}
+
+std::string full_name(std::string_view section, std::string_view name) {
+    return section.empty() ? std::string{name} : fmt::format("{}: {}", section, name);
+}
+
+std::string hint_for_unknown(std::string_view section, std::string_view name) {
+    const std::vector<std::string_view> here = keys_of(section);
+    if (const std::string_view meant = nearest(name, here); !meant.empty())
+        return fmt::format("did you mean \"{}\"?", meant);
+    constexpr std::size_t k_longest = 60;
+    for (const KnownKey& key : k_keys) {
+        if (key.section == section || slips_between(key.name, name.substr(0, k_longest)) > 1)
+            continue;
+        return key.section.empty() ? fmt::format("\"{}\" stands at the top of the file, not indented", key.name)
+                                   : fmt::format("\"{}\" belongs under \"{}\"", key.name, key.section);
+    }
+    return fmt::format("{} may hold {}", section.empty() ? "the file" : "this section", one_of(here));
+}
+
+} // namespace dialwright::cli

@@ -1,0 +1,198 @@
+// SPDX-License-Identifier: MIT
+#include "cli/design/document.hpp"
+#include "cli/design/nearest.hpp"
+#include "cli/design/quantity.hpp"
+#include "cli/design/scanner.hpp"
+
+#include <fmt/format.h>
+
+#include <algorithm>
+#include <array>
+#include <cmath>
+
+namespace dialwright::cli {
+
+namespace {
+
+constexpr std::array<std::string_view, 12> k_months = {"January",   "February", "March",    "April",
+                                                       "May",       "June",     "July",     "August",
+                                                       "September", "October",  "November", "December"};
+constexpr const char* k_day_hint = "write it as in 14 June";
+constexpr const char* k_hour_hint = "write it as in 5:30 or 5 pm";
+constexpr int k_first_year = 1900, k_last_year = 2100;
+
+bool same_letters(std::string_view lower, std::string_view name) {
+    return lower.size() <= name.size() && std::equal(lower.begin(), lower.end(), name.begin(), [](char a, char b) {
+               return a == (b >= 'A' && b <= 'Z' ? b - 'A' + 'a' : b);
+           });
+}
+
+/// 1 to 12 for a month's name or its first letters (three at least); 0 for none.
+unsigned month_named(std::string_view word) {
+    for (unsigned i = 0; i < k_months.size(); ++i)
+        if (word.size() >= 3 && same_letters(word, k_months[i]))
+            return i + 1;
+    return 0;
+}
+
+Read<std::chrono::month_day> checked_day(double month, double day, std::string_view text) {
+    using namespace std::chrono;
+    if (month < 1.0 || month > 12.0)
+        return Trouble{fmt::format("{}: there is no month {}", quoted(text), month), k_day_hint};
+    const std::string_view name = k_months[static_cast<std::size_t>(month) - 1];
+    const std::chrono::month in{static_cast<unsigned>(month)};
+    // 2024 has a 29 February.
+    const auto last = static_cast<unsigned>(year_month_day_last{year{2024}, month_day_last{in}}.day());
+    if (day < 1.0 || day > last)
+        return Trouble{fmt::format("{}: {} has {} days", quoted(text), name, last), k_day_hint};
+    return month_day{in, std::chrono::day{static_cast<unsigned>(day)}};
+}
+
+/// Takes the "st", "nd", "rd" or "th" of "14th June".
+void take_ordinal(Scanner& scan) {
+    for (const std::string_view ending : {"st", "nd", "rd", "th"})
+        if (scan.take_word(ending))
+            return;
+}
+
+Read<std::chrono::month_day> day_with_name(Scanner& scan, std::string_view text) {
+    double day = 0.0;
+    bool whole = false;
+    const auto take_day = [&] {
+        const Scrap number = scan.take();
+        day = number.number;
+        whole = number.whole;
+        take_ordinal(scan);
+    };
+    if (scan.number_next())
+        take_day();
+    const std::string word{scan.rest_word()};
+    const bool named = scan.word_next();
+    if (named)
+        scan.take();
+    scan.take_sign(".");
+    if (day == 0.0 && !whole && scan.number_next())
+        take_day();
+    if (named && month_named(word) == 0) {
+        const std::string_view meant = nearest(word, k_months);
+        return Trouble{quoted(text) + ": " + quoted(word) + " is not a month",
+                       meant.empty() ? k_day_hint : fmt::format("did you mean {}?", meant)};
+    }
+    if (!named || !whole)
+        return Trouble{quoted(text) + " is not a day of the year", k_day_hint};
+    if (scan.number_next())
+        return Trouble{quoted(text) + " goes on after the day", "give the day without its year, as in 14 June"};
+    if (!scan.at_end())
+        return Trouble{quoted(text) + " is not a day of the year", k_day_hint};
+    return checked_day(month_named(word), day, text);
+}
+
+/// The range that starts at `first` as near as may be to the one asked for.
+Years good_years_near(int first, int last) {
+    first = std::clamp(first, k_first_year, k_last_year - 3);
+    const int cycles = std::max(1, static_cast<int>(std::lround((last - first + 1) / 4.0)));
+    const int most = (k_last_year - first + 1) / 4;
+    return {first, first + 4 * std::min(cycles, most) - 1};
+}
+
+} // namespace
+
+Read<std::chrono::month_day> day_of_year(std::string_view text) {
+    Read<Scanner> read = Scanner::over(text);
+    if (!read)
+        return read.trouble();
+    Scanner scan = *read;
+    if (!(scan.number_next() && scan.sign_next("-", 1) && scan.number_next(2)))
+        return day_with_name(scan, text);
+    const Scrap month = scan.take();
+    scan.take();
+    const Scrap day = scan.take();
+    if (!scan.at_end() && scan.sign_next("-"))
+        return Trouble{quoted(text) + " is a day of one year", "give the day without its year, as in 14 June or 06-14"};
+    if (!scan.at_end() || !month.whole || !day.whole)
+        return Trouble{quoted(text) + " is not a day of the year", k_day_hint};
+    return checked_day(month.number, day.number, text);
+}
+
+Read<double> hour_of_day(std::string_view text) {
+    Read<Scanner> read = Scanner::over(text);
+    if (!read)
+        return read.trouble();
+    Scanner scan = *read;
+    if (scan.take_word("noon") && scan.at_end())
+        return 12.0;
+    if (!scan.number_next())
+        return Trouble{quoted(text) + " is not an hour", k_hour_hint};
+    const Scrap hour = scan.take();
+    double part_min = 0.0;
+    bool whole = hour.whole;
+    if (scan.take_sign(":")) {
+        if (!scan.number_next())
+            return Trouble{quoted(text) + " has no minutes after its colon", k_hour_hint};
+        const Scrap minute = scan.take();
+        whole = whole && minute.whole && minute.text.size() == 2;
+        part_min = minute.number;
+    }
+    if (!whole)
+        return Trouble{quoted(text) + " is not an hour with its minutes", k_hour_hint};
+    if (part_min >= 60.0)
+        return Trouble{quoted(text) + " has more than 59 minutes", k_hour_hint};
+    double hours = hour.number;
+    const bool morning = scan.take_word("am");
+    if (morning || scan.take_word("pm")) {
+        if (hours < 1.0 || hours > 12.0)
+            return Trouble{quoted(text) + " has an hour that clocks of twelve hours don't show", k_hour_hint};
+        hours = (hours == 12.0 ? 0.0 : hours) + (morning ? 0.0 : 12.0);
+    }
+    hours += part_min / 60.0;
+    if (!scan.at_end())
+        return Trouble{quoted(text) + " goes on after the hour with " + quoted(scan.rest_word()), k_hour_hint};
+    if (hours > 24.0)
+        return Trouble{quoted(text) + " is after the end of the day", "give 0:00 to 24:00"};
+    return hours;
+}
+
+Read<Years> years(std::string_view text) {
+    const std::string hint = "write it as in 2027 to 2046";
+    Read<Scanner> read = Scanner::over(text);
+    if (!read)
+        return read.trouble();
+    Scanner scan = *read;
+    const Trouble unreadable{quoted(text) + " is not a range of years", hint};
+    if (!scan.number_next())
+        return unreadable;
+    const Scrap first = scan.take();
+    const bool joined = scan.take_word("to") || scan.take_sign("-");
+    if (!joined && scan.at_end() && first.whole && first.number < 9999.0) {
+        const Years good = good_years_near(static_cast<int>(first.number), static_cast<int>(first.number) + 19);
+        return Trouble{quoted(text) + " is one year; the Sun comes back to its place in four",
+                       fmt::format("write {} to {}", good.first, good.last)};
+    }
+    if (!joined || !scan.number_next())
+        return unreadable;
+    const Scrap last = scan.take();
+    if (!scan.at_end() || !first.whole || !last.whole || first.number > 9999.0 || last.number > 9999.0)
+        return unreadable;
+    const Years found{static_cast<int>(first.number), static_cast<int>(last.number)};
+    if (found.last < found.first)
+        return Trouble{quoted(text) + " ends before it starts", hint};
+    const Years good = good_years_near(found.first, found.last);
+    const std::string suggestion = fmt::format("write {} to {}", good.first, good.last);
+    if (found.first < k_first_year || found.last > k_last_year)
+        return Trouble{fmt::format("{} reaches outside {} to {}", quoted(text), k_first_year, k_last_year), suggestion};
+    const int count = found.last - found.first + 1;
+    if (count % 4 != 0)
+        return Trouble{fmt::format("{} is {} years, not whole leap cycles of four", quoted(text), count), suggestion};
+    return found;
+}
+
+std::string day_text(std::chrono::month_day day) {
+    return fmt::format("{} {}", static_cast<unsigned>(day.day()), k_months[static_cast<unsigned>(day.month()) - 1]);
+}
+
+std::string hour_text(double hours) {
+    const auto total_min = static_cast<int>(std::lround(hours * 60.0));
+    return fmt::format("{}:{:02}", total_min / 60, total_min % 60);
+}
+
+} // namespace dialwright::cli

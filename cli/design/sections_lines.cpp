@@ -1,0 +1,119 @@
+// SPDX-License-Identifier: MIT
+// Which lines the dial bears: hours and dates.
+#include "cli/design/sections.hpp"
+
+#include <fmt/format.h>
+
+#include <algorithm>
+#include <array>
+
+namespace dialwright::cli {
+
+namespace {
+
+constexpr std::array<Choice<HourTime>, 3> k_times = {
+    {{"sun", HourTime::sun}, {"zone", HourTime::zone}, {"clock", HourTime::clock}}};
+constexpr std::array<Choice<Numerals>, 3> k_numerals = {
+    {{"roman", Numerals::roman}, {"roman iiii", Numerals::roman_iiii}, {"arabic", Numerals::arabic}}};
+constexpr std::array<Choice<NumeralStand>, 2> k_stands = {
+    {{"along border", NumeralStand::along_border}, {"upright", NumeralStand::upright}}};
+constexpr std::array k_divisions_min = {60, 30, 15, 10, 5, 2, 1};
+constexpr std::size_t k_most_days = 100;
+constexpr std::size_t k_longest_label = 80;
+
+void read_division(Design& design, const Section& hours) {
+    const auto division = hours.read("divide", minutes);
+    if (!division)
+        return;
+    if (std::find(k_divisions_min.begin(), k_divisions_min.end(), *division) == k_divisions_min.end())
+        hours.error("divide", quoted(*hours.text("divide")) + " does not divide an hour as dials do",
+                    "give 60, 30, 15, 10, 5, 2 or 1 min");
+    else
+        design.hours.divide_min = *division;
+}
+
+/// An item of "days": a plain date, or a date with its label.
+std::optional<NamedDay> read_named_day(const Node& item, ReadingState& state) {
+    const std::string hint = "write \"- 14 June\", or \"- {on: 14 June, label: the name}\"";
+    if (item.kind == Node::Kind::text) {
+        const auto day = day_of_year(item.text);
+        if (day)
+            return NamedDay{*day, day_text(*day)};
+        state.error(item.at, "dates: days", day.trouble().message, day.trouble().hint);
+        return std::nullopt;
+    }
+    if (item.kind != Node::Kind::mapping) {
+        state.error(item.at, "dates: days", fmt::format("{} stands where a day is wanted", kind_name(item)), hint);
+        return std::nullopt;
+    }
+    const Section section{item, "dates: days", state};
+    if (!section.has("on"))
+        section.missing("on", hint);
+    const auto day = section.read("on", day_of_year);
+    const auto label = section.line("label", k_longest_label);
+    if (!day)
+        return std::nullopt;
+    return NamedDay{*day, label.value_or(day_text(*day))};
+}
+
+void read_days(Design& design, const Section& dates) {
+    const Entry* entry = dates.entry("days");
+    if (entry == nullptr)
+        return;
+    const Node& list = entry->value;
+    if (list.kind != Node::Kind::list || list.items.size() > k_most_days) {
+        const std::string found = list.kind == Node::Kind::list
+                                      ? fmt::format("{} days are given", list.items.size())
+                                      : fmt::format("{} stands where a list of days is wanted", kind_name(list));
+        dates.error("days", found, fmt::format("give a list of at most {}, as in [14 June, 1 May]", k_most_days));
+        return;
+    }
+    for (const Node& item : list.items) {
+        const auto named = read_named_day(item, dates.state());
+        if (!named)
+            continue;
+        const auto same = [&](const NamedDay& other) { return other.day == named->day; };
+        if (std::any_of(design.dates.days.begin(), design.dates.days.end(), same))
+            dates.state().error(item.at, "dates: days", day_text(named->day) + " is given twice", "keep one of them");
+        else
+            design.dates.days.push_back(*named);
+    }
+}
+
+} // namespace
+
+void read_hours(Design& design, const Section& top) {
+    const Section hours{top.entry("hours"), "hours", top.state()};
+    Hours& made = design.hours;
+    made.time = hours.choice<HourTime>("time", k_times).value_or(made.time);
+    made.first_h = hours.read("from", hour_of_day);
+    made.last_h = hours.read("to", hour_of_day);
+    if (made.first_h && made.last_h && *made.first_h >= *made.last_h)
+        hours.error("to",
+                    fmt::format("the hours end at {}, before they start at {}", hour_text(*made.last_h),
+                                hour_text(*made.first_h)),
+                    "give \"from\" the earlier hour; afternoon hours as in 20:00 or 8 pm");
+    read_division(design, hours);
+    made.numerals = hours.choice<Numerals>("numerals", k_numerals).value_or(made.numerals);
+    if (const auto count = hours.read("count", whole_number)) {
+        if (*count == 12 || *count == 24)
+            made.count = *count;
+        else
+            hours.error("count", fmt::format("hours are not counted to {}", *count), "give 12 or 24");
+    }
+    made.stand = hours.choice<NumeralStand>("stand", k_stands).value_or(made.stand);
+    hours.read_into(made.noon_mark, "noon mark", yes_or_no);
+}
+
+void read_dates(Design& design, const Section& top) {
+    const Section dates{top.entry("dates"), "dates", top.state()};
+    Dates& made = design.dates;
+    dates.read_into(made.solstices, "solstices", yes_or_no);
+    dates.read_into(made.equinoxes, "equinoxes", yes_or_no);
+    dates.read_into(made.signs, "signs", yes_or_no);
+    dates.read_into(made.months, "months", yes_or_no);
+    read_days(design, dates);
+    dates.read_into(made.labels, "labels", yes_or_no);
+}
+
+} // namespace dialwright::cli

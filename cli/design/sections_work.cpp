@@ -1,0 +1,95 @@
+// SPDX-License-Identifier: MIT
+// What is put on the plate and how it is cut: borders, gnomon, lettering, cutting, print.
+#include "cli/design/sections.hpp"
+
+#include <fmt/format.h>
+
+namespace dialwright::cli {
+
+namespace {
+
+/// Leaves `target` alone when there is no good value.
+void length_into(double& target, const Section& section, std::string_view key, double least_mm, double most_mm) {
+    if (const auto mm = section.length(key, least_mm, most_mm))
+        target = *mm;
+}
+
+void line_into(std::string& target, const Section& section, std::string_view key, std::size_t most) {
+    if (const auto text = section.line(key, most))
+        target = *text;
+}
+
+constexpr double k_least_letter_mm = 0.5;
+constexpr double k_largest_letter_mm = 1000.0;
+
+} // namespace
+
+void read_borders(Design& design, const Section& top) {
+    const Section borders{top.entry("borders"), "borders", top.state()};
+    Borders& made = design.borders;
+    length_into(made.margin_mm, borders, "margin", 0.0, k_largest_plate_mm / 2);
+    length_into(made.chapter_ring_mm, borders, "chapter ring", 0.0, k_largest_plate_mm / 2);
+    length_into(made.inner_mm, borders, "inner border", 0.0, k_largest_plate_mm / 2);
+}
+
+void read_gnomon(Design& design, const Section& top) {
+    const Section gnomon{top.entry("gnomon"), "gnomon", top.state()};
+    Gnomon& made = design.gnomon;
+    if (const auto mm = gnomon.length("nodus height", 1.0, k_largest_plate_mm))
+        made.nodus_height_mm = *mm;
+    length_into(made.thickness_mm, gnomon, "thickness", 0.0, k_largest_plate_mm);
+    if (const auto mm = gnomon.length("foot", 1.0, k_largest_plate_mm))
+        made.foot_mm = *mm;
+    made.holes = gnomon.count("holes", 0, 20).value_or(0);
+    length_into(made.hole_diameter_mm, gnomon, "hole diameter", 0.2, 100.0);
+    if (gnomon.has("hole diameter") && !gnomon.has("holes"))
+        gnomon.error("hole diameter", "there are no holes to have it", "say how many, as in \"holes: 2\"");
+    if (made.foot_mm && made.hole_diameter_mm >= *made.foot_mm)
+        gnomon.error("hole diameter",
+                     fmt::format("a hole of {} does not fit in a foot of {}",
+                                 length_text(made.hole_diameter_mm, design.units),
+                                 length_text(*made.foot_mm, design.units)),
+                     "make the holes smaller or the foot longer");
+    else if (made.foot_mm && made.holes * made.hole_diameter_mm >= *made.foot_mm)
+        gnomon.error("holes",
+                     fmt::format("{} holes of {} do not fit in a foot of {}", made.holes,
+                                 length_text(made.hole_diameter_mm, design.units),
+                                 length_text(*made.foot_mm, design.units)),
+                     "make fewer or smaller holes");
+}
+
+void read_lettering(Design& design, const Section& top) {
+    const Section lettering{top.entry("lettering"), "lettering", top.state()};
+    LetteringChoice& made = design.lettering;
+    line_into(made.family, lettering, "font", 100);
+    length_into(made.numeral_height_mm, lettering, "numeral height", k_least_letter_mm, k_largest_letter_mm);
+    length_into(made.label_height_mm, lettering, "label height", k_least_letter_mm, k_largest_letter_mm);
+    line_into(made.motto, lettering, "motto", 200);
+    length_into(made.motto_height_mm, lettering, "motto height", k_least_letter_mm, k_largest_letter_mm);
+    if (lettering.has("motto height") && !lettering.has("motto"))
+        lettering.error("motto height", "there is no motto to have it", "give the motto, or leave this out");
+    line_into(made.place_line, lettering, "place line", 200);
+    // "yes" and "no" are read as such: nobody cuts them into a plate.
+    const Read<bool> wanted = yes_or_no(made.place_line);
+    if (!wanted)
+        return;
+    const std::string where =
+        latitude_text(design.place.site.latitude) + "  " + longitude_text(design.place.site.longitude);
+    made.place_line = !*wanted ? std::string{} : (design.place.name.empty() ? where : design.place.name + "  " + where);
+}
+
+void read_cutting(Design& design, const Section& top) {
+    const Section cutting{top.entry("cutting"), "cutting", top.state()};
+    length_into(design.cutting.line_width_mm, cutting, "line width", 0.05, 10.0);
+    length_into(design.cutting.least_gap_mm, cutting, "least gap", 0.05, 50.0);
+}
+
+void read_print(Design& design, const Section& top) {
+    const Section print{top.entry("print"), "print", top.state()};
+    line_into(design.print.paper, print, "paper", 100);
+    length_into(design.print.margin_mm, print, "margin", 0.0, 50.0);
+    length_into(design.print.overlap_mm, print, "overlap", 0.0, 100.0);
+    print.read_into(design.print.own_size, "own size", yes_or_no);
+}
+
+} // namespace dialwright::cli
