@@ -20,15 +20,24 @@ struct Release {
     void operator()(FcPattern* pattern) const { FcPatternDestroy(pattern); }
     void operator()(FcObjectSet* names) const { FcObjectSetDestroy(names); }
     void operator()(FcFontSet* fonts) const { FcFontSetDestroy(fonts); }
+    void operator()(FcConfig* list) const { FcConfigDestroy(list); }
 };
 using Pattern = std::unique_ptr<FcPattern, Release>;
 using FontSet = std::unique_ptr<FcFontSet, Release>;
 
-const FcChar8* as_fontconfig(const std::string& text) { return reinterpret_cast<const FcChar8*>(text.c_str()); }
-std::string as_text(const FcChar8* text) { return reinterpret_cast<const char*>(text); }
+const FcChar8* as_fontconfig(const std::string& text) {
+    return reinterpret_cast<const FcChar8*>(text.c_str());
+}
+std::string as_text(const FcChar8* text) {
+    return reinterpret_cast<const char*>(text);
+}
 
-int wanted_slant(bool italic) { return italic ? FC_SLANT_ITALIC : FC_SLANT_ROMAN; }
-int wanted_weight(bool bold) { return bold ? FC_WEIGHT_BOLD : FC_WEIGHT_REGULAR; }
+int wanted_slant(bool italic) {
+    return italic ? FC_SLANT_ITALIC : FC_SLANT_ROMAN;
+}
+int wanted_weight(bool bold) {
+    return bold ? FC_WEIGHT_BOLD : FC_WEIGHT_REGULAR;
+}
 
 double number(FcPattern* font, const char* object, double if_absent) {
     double value = if_absent;
@@ -78,7 +87,7 @@ double design_size(FcPattern* font) {
 FontSet listed(FcPattern* pattern) {
     const std::unique_ptr<FcObjectSet, Release> names{FcObjectSetBuild(
         FC_FAMILY, FC_FILE, FC_INDEX, FC_SLANT, FC_WEIGHT, FC_WIDTH, FC_OUTLINE, FC_COLOR, FC_VARIABLE, nullptr)};
-    return FontSet{FcFontList(nullptr, pattern, names.get())};
+    return FontSet{FcFontList(font_list(), pattern, names.get())};
 }
 
 std::string in_small_letters(std::string text) {
@@ -137,6 +146,13 @@ std::string nearest_families(const std::string& family) {
 
 } // namespace
 
+_FcConfig* font_list() {
+    static const std::unique_ptr<FcConfig, Release> fonts{FcInitLoadConfigAndFonts()};
+    if (!fonts)
+        throw LetteringError("the list of the fonts of this machine cannot be read: check its fontconfig set-up");
+    return fonts.get();
+}
+
 FontFile font_file(std::string_view family, bool italic, bool bold) {
     const std::string name{family};
     const bool has_name = !name.empty() && name.find('\0') == std::string::npos;
@@ -180,10 +196,10 @@ StandIns::StandIns(std::string_view family, bool italic, bool bold) : sorted_{st
     FcPatternAddBool(pattern.get(), FC_OUTLINE, FcTrue);
     // The language of the machine's user would otherwise choose the fonts.
     FcPatternAddString(pattern.get(), FC_LANG, as_fontconfig("und"));
-    FcConfigSubstitute(nullptr, pattern.get(), FcMatchPattern);
+    FcConfigSubstitute(font_list(), pattern.get(), FcMatchPattern);
     FcDefaultSubstitute(pattern.get());
     FcResult result = FcResultMatch;
-    sorted_->all.reset(FcFontSort(nullptr, pattern.get(), FcFalse, nullptr, &result));
+    sorted_->all.reset(FcFontSort(font_list(), pattern.get(), FcFalse, nullptr, &result));
     for (int i = 0; sorted_->all && i < sorted_->all->nfont; ++i)
         if (has_outlines(sorted_->all->fonts[i]) && file_of(sorted_->all->fonts[i]))
             sorted_->usable.push_back(sorted_->all->fonts[i]);
@@ -191,9 +207,13 @@ StandIns::StandIns(std::string_view family, bool italic, bool bold) : sorted_{st
 
 StandIns::~StandIns() = default;
 
-std::size_t StandIns::size() const { return sorted_->usable.size(); }
+std::size_t StandIns::size() const {
+    return sorted_->usable.size();
+}
 
-FontFile StandIns::file(std::size_t place) const { return file_of(sorted_->usable.at(place)).value(); }
+FontFile StandIns::file(std::size_t place) const {
+    return file_of(sorted_->usable.at(place)).value();
+}
 
 bool StandIns::lists(std::size_t place, char32_t character) const {
     FcCharSet* characters = nullptr;

@@ -6,7 +6,14 @@
 #include <string>
 #include <string_view>
 
+struct _FcConfig; // fontconfig's own name for what its calls take as FcConfig
+
 namespace dialwright::layout {
+
+/// The machine's fonts as fontconfig lists them: read once (3 ms) and given back when the program ends. Every call of
+/// fontconfig takes this one, since its own default would be read a second time and never be given back.
+/// @throws LetteringError  the machine's set-up of fontconfig cannot be read
+[[nodiscard]] _FcConfig* font_list();
 
 /// A face in a font file of the system.
 struct FontFile {

@@ -1,7 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "layout/lettering/lettering.hpp"
 
-#include "layout/lettering/face.hpp"
+#include "layout/lettering/font_face.hpp"
 #include "layout/lettering/font_files.hpp"
 #include "layout/lettering/text_runs.hpp"
 
@@ -18,7 +18,7 @@ namespace {
 /// Characters [start, end) of the text that one face draws in one script and direction.
 struct Run {
     std::size_t start = 0, end = 0;
-    const Face* face = nullptr;
+    const FontFace* face = nullptr;
     Script script = 0;
     std::uint8_t level = 0;
 };
@@ -102,7 +102,7 @@ class Setter {
     }
 
     void add_outlines(const Run& run, const hb_glyph_info_t& info, const hb_glyph_position_t& place, double scale) {
-        const Face::Shape& shape = run.face->shape(info.codepoint);
+        const FontFace::Shape& shape = run.face->shape(info.codepoint);
         if (info.codepoint == 0)
             throw LetteringError("no installed font draws " + named(text_[info.cluster]) +
                                  ": install one that does, or change the text");
@@ -136,16 +136,17 @@ struct Lettering::Faces {
     std::string family;
     bool italic = false, bold = false;
     FontFile file;
-    std::unique_ptr<Face> own;
-    std::optional<StandIns> stand_ins;                 ///< sorted when first needed
-    std::vector<std::optional<std::unique_ptr<Face>>> opened; ///< of the stand-ins; holds nullptr for one that cannot be read
+    std::unique_ptr<FontFace> own;
+    std::optional<StandIns> stand_ins; ///< sorted when first needed
+    /// Of the stand-ins, when first needed; holds nullptr for one that cannot be read.
+    std::vector<std::optional<std::unique_ptr<FontFace>>> opened;
 
-    const Face& face_for(std::u32string_view letter);
+    const FontFace& face_for(std::u32string_view letter);
     std::vector<Run> runs(std::u32string_view text);
 };
 
 /// The family itself where it can, else the first stand-in that draws the letter with all its marks.
-const Face& Lettering::Faces::face_for(std::u32string_view letter) {
+const FontFace& Lettering::Faces::face_for(std::u32string_view letter) {
     if (own->draws(letter))
         return *own;
     if (!stand_ins) {
@@ -156,7 +157,7 @@ const Face& Lettering::Faces::face_for(std::u32string_view letter) {
         if (!stand_ins->lists(i, letter.front()))
             continue;
         if (!opened[i])
-            opened[i] = Face::opened(stand_ins->file(i));
+            opened[i] = FontFace::opened(stand_ins->file(i));
         if (*opened[i] && (*opened[i])->draws(letter))
             return **opened[i];
     }
@@ -177,7 +178,7 @@ std::vector<Run> Lettering::Faces::runs(std::u32string_view text) {
         end = start + 1;
         while (end < text.size() && joins_letter_before(text[end]))
             ++end;
-        const Face& face = face_for(text.substr(start, end - start));
+        const FontFace& face = face_for(text.substr(start, end - start));
         const bool goes_on = !found.empty() && found.back().face == &face && found.back().level == levels[start] &&
                              found.back().script == scripts[start];
         if (goes_on)
@@ -193,7 +194,7 @@ Lettering::Lettering(std::string_view family, bool italic, bool bold) : faces_{s
     faces_->italic = italic;
     faces_->bold = bold;
     faces_->file = font_file(family, italic, bold);
-    faces_->own = Face::opened(faces_->file);
+    faces_->own = FontFace::opened(faces_->file);
     if (!faces_->own)
         throw LetteringError("the font file " + faces_->file.path + " of \"" + faces_->family +
                              "\" cannot be read: install the font again or name another under lettering: font");
@@ -203,7 +204,9 @@ Lettering::~Lettering() = default;
 Lettering::Lettering(Lettering&&) noexcept = default;
 Lettering& Lettering::operator=(Lettering&&) noexcept = default;
 
-const std::string& Lettering::file() const { return faces_->file.path; }
+const std::string& Lettering::file() const {
+    return faces_->file.path;
+}
 
 LetteredLine Lettering::line(std::string_view text, double size_mm, double tracking_mm) const {
     if (!(size_mm > 0.0) || !std::isfinite(size_mm) || !std::isfinite(tracking_mm))

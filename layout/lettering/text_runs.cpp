@@ -154,7 +154,9 @@ std::string named(char32_t character) {
     return fmt::format("\"{}\" (U+{:04X})", as_utf8(character), static_cast<std::uint32_t>(character));
 }
 
-bool is_space(char32_t character) { return category(character) == HB_UNICODE_GENERAL_CATEGORY_SPACE_SEPARATOR; }
+bool is_space(char32_t character) {
+    return category(character) == HB_UNICODE_GENERAL_CATEGORY_SPACE_SEPARATOR;
+}
 
 bool joins_letter_before(char32_t character) {
     const hb_unicode_general_category_t kind = category(character);

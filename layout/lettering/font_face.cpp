@@ -1,5 +1,5 @@
 // SPDX-License-Identifier: MIT
-#include "layout/lettering/face.hpp"
+#include "layout/lettering/font_face.hpp"
 
 #include "layout/lettering/text_runs.hpp"
 
@@ -24,7 +24,9 @@ struct Release {
 template <typename T>
 using Owned = std::unique_ptr<T, Release>;
 
-Point point(const FT_Vector* at) { return {static_cast<double>(at->x), static_cast<double>(at->y)}; }
+Point point(const FT_Vector* at) {
+    return {static_cast<double>(at->x), static_cast<double>(at->y)};
+}
 
 /// What FreeType calls back while it walks an outline.
 struct Walk {
@@ -77,7 +79,7 @@ std::vector<Path> walked(FT_Outline& outline) {
 
 } // namespace
 
-struct Face::Handles {
+struct FontFace::Handles {
     Owned<hb_blob_t> bytes; ///< outlives the two that read from it
     Owned<hb_font_t> font;
     Owned<std::remove_pointer_t<FT_Library>> library;
@@ -85,10 +87,10 @@ struct Face::Handles {
     std::unordered_map<std::uint32_t, Shape> shapes;
 };
 
-Face::Face(std::unique_ptr<Handles> handles) : handles_{std::move(handles)} {}
-Face::~Face() = default;
+FontFace::FontFace(std::unique_ptr<Handles> handles) : handles_{std::move(handles)} {}
+FontFace::~FontFace() = default;
 
-std::unique_ptr<Face> Face::opened(const FontFile& file) {
+std::unique_ptr<FontFace> FontFace::opened(const FontFile& file) {
     auto handles = std::make_unique<Handles>();
     handles->bytes.reset(hb_blob_create_from_file_or_fail(file.path.c_str()));
     if (!handles->bytes)
@@ -113,10 +115,10 @@ std::unique_ptr<Face> Face::opened(const FontFile& file) {
     handles->face.reset(face);
     if (!FT_IS_SCALABLE(face) || face->units_per_EM == 0)
         return nullptr;
-    return std::unique_ptr<Face>{new Face{std::move(handles)}};
+    return std::unique_ptr<FontFace>{new FontFace{std::move(handles)}};
 }
 
-const Face::Shape& Face::shape(std::uint32_t glyph) const {
+const FontFace::Shape& FontFace::shape(std::uint32_t glyph) const {
     const auto [place, is_new] = handles_->shapes.try_emplace(glyph);
     FT_Face face = handles_->face.get();
     if (is_new && FT_Load_Glyph(face, glyph, FT_LOAD_NO_SCALE | FT_LOAD_NO_HINTING | FT_LOAD_NO_BITMAP) == 0 &&
@@ -128,7 +130,7 @@ const Face::Shape& Face::shape(std::uint32_t glyph) const {
     return place->second;
 }
 
-bool Face::draws(std::u32string_view letter) const {
+bool FontFace::draws(std::u32string_view letter) const {
     // Most letters are plain: one glyph for each character, found in the font's own table.
     const auto plain = [this](char32_t character) {
         hb_codepoint_t glyph = 0;
@@ -157,7 +159,7 @@ bool Face::draws(std::u32string_view letter) const {
     return inked || unseen;
 }
 
-double Face::cap_height() const {
+double FontFace::cap_height() const {
     hb_codepoint_t glyph = 0;
     if (hb_font_get_nominal_glyph(shaper(), 'H', &glyph) != 0 && !shape(glyph).box.empty())
         return shape(glyph).box.height_mm();
@@ -167,6 +169,8 @@ double Face::cap_height() const {
     return 0.7 * handles_->face->units_per_EM;
 }
 
-hb_font_t* Face::shaper() const { return handles_->font.get(); }
+hb_font_t* FontFace::shaper() const {
+    return handles_->font.get();
+}
 
 } // namespace dialwright::layout

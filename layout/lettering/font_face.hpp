@@ -15,7 +15,7 @@ namespace dialwright::layout {
 
 /// One face of a font file, open for shaping and for outlines. In this header a `Point` holds units of the font, x to
 /// the right and y up from the base line; `Lettering` scales them.
-class Face {
+class FontFace {
   public:
     /// A glyph's contours: closed, outer ones anticlockwise, inner ones clockwise.
     struct Shape {
@@ -24,10 +24,10 @@ class Face {
     };
 
     /// Nothing if the file cannot be read or holds no outlines that can be shaped.
-    [[nodiscard]] static std::unique_ptr<Face> opened(const FontFile& file);
-    ~Face();
-    Face(const Face&) = delete;
-    Face& operator=(const Face&) = delete;
+    [[nodiscard]] static std::unique_ptr<FontFace> opened(const FontFile& file);
+    ~FontFace();
+    FontFace(const FontFace&) = delete;
+    FontFace& operator=(const FontFace&) = delete;
 
     /// Exact: straight lines stay so and quadratic curves become the cubic ones that run through the same points. A
     /// glyph that is a picture or colour only has no outlines. Kept after the first call.
@@ -40,7 +40,7 @@ class Face {
 
   private:
     struct Handles;
-    explicit Face(std::unique_ptr<Handles> handles);
+    explicit FontFace(std::unique_ptr<Handles> handles);
     std::unique_ptr<Handles> handles_;
 };
 
