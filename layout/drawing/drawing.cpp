@@ -276,6 +276,22 @@ Box bounds_of(const Drawing& drawing) {
     return box;
 }
 
+bool is_finite(const Mark& mark) {
+    const auto good = [](Point p) { return std::isfinite(p.x_mm) && std::isfinite(p.y_mm); };
+    const auto good_piece = [&](const Piece& piece) {
+        if (const auto* arc = std::get_if<ArcTo>(&piece)) {
+            return good(arc->to) && good(arc->centre) && std::isfinite(arc->sweep.in_radians());
+        }
+        if (const auto* curve = std::get_if<CurveTo>(&piece)) {
+            return good(curve->control_1) && good(curve->control_2) && good(curve->to);
+        }
+        return good(end_of(piece));
+    };
+    return std::isfinite(mark.width_mm) && std::all_of(mark.paths.begin(), mark.paths.end(), [&](const Path& path) {
+               return good(path.start) && std::all_of(path.pieces.begin(), path.pieces.end(), good_piece);
+           });
+}
+
 Point Placing::operator()(Point p) const {
     const double c = cos(turn), s = sin(turn);
     const double x = mirrored ? -p.x_mm : p.x_mm;

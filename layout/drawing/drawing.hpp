@@ -96,6 +96,9 @@ struct Drawing {
 [[nodiscard]] Box bounds_of(const Mark& mark);
 [[nodiscard]] Box bounds_of(const Drawing& drawing);
 
+/// Whether all its numbers are numbers. Boxes do not tell: what is no number falls through every comparison.
+[[nodiscard]] bool is_finite(const Mark& mark);
+
 /// A placing of a drawing on a page: mirror (x → −x) if asked, turn, scale along the page, shift, in this order.
 struct Placing {
     Angle turn;

@@ -72,30 +72,8 @@ std::string PdfDocument::bytes() {
     return all;
 }
 
-bool is_finite(Point p) {
-    return std::isfinite(p.x_mm) && std::isfinite(p.y_mm);
-}
-
-bool is_finite(const Piece& piece) {
-    if (const auto* arc = std::get_if<ArcTo>(&piece)) {
-        return is_finite(arc->to) && is_finite(arc->centre) && std::isfinite(arc->sweep.in_radians());
-    }
-    if (const auto* curve = std::get_if<CurveTo>(&piece)) {
-        return is_finite(curve->control_1) && is_finite(curve->control_2) && is_finite(curve->to);
-    }
-    return is_finite(end_of(piece));
-}
-
-/// Before anything is left out by its box, because a number that is none falls through every comparison.
 void require_finite(const Mark& mark) {
-    bool good = std::isfinite(mark.width_mm) && mark.width_mm >= 0;
-    for (const Path& path : mark.paths) {
-        good = good && is_finite(path.start);
-        for (const Piece& piece : path.pieces) {
-            good = good && is_finite(piece);
-        }
-    }
-    if (!good) {
+    if (!is_finite(mark)) {
         throw ExportError(fmt::format("“{}” has a point that is no number, so no PDF was made.",
                                       mark.name.empty() ? name_of(mark.layer) : mark.name));
     }
@@ -133,8 +111,9 @@ Box placed(const Placing& placing, const Box& box) {
 
 void draw_window(PdfPage& page, const Window& window, BoxesOfMarks& boxes) {
     const Placing& p = window.placing;
-    const bool good = std::isfinite(p.turn.in_radians()) && is_finite(p.shift) && p.scale_x > 0 && p.scale_y > 0 &&
-                      std::isfinite(p.scale_x) && std::isfinite(p.scale_y);
+    const bool good = std::isfinite(p.turn.in_radians()) && std::isfinite(p.shift.x_mm) &&
+                      std::isfinite(p.shift.y_mm) && p.scale_x > 0 && p.scale_y > 0 && std::isfinite(p.scale_x) &&
+                      std::isfinite(p.scale_y);
     if (!good) {
         throw ExportError("A view of the work has a place or a scale that is no number, so no PDF was made.");
     }
