@@ -23,7 +23,8 @@ namespace dialwright::layout {
 [[nodiscard]] bool joins_letter_before(char32_t character);
 
 /// Direction of each character as an embedding level: even runs left to right, odd right to left. The line runs as
-/// its first letter does. Source: Unicode Standard Annex 9, of which explicit embeddings and isolates are left out.
+/// its first letter does. Source: Unicode Standard Annex 9. Left out: explicit embeddings and isolates, pairs of
+/// brackets (N0), and the annex's other treatment of signs beside numbers after Arabic (W2).
 [[nodiscard]] std::vector<std::uint8_t> direction_levels(std::u32string_view text);
 
 /// A script by its four letters in ISO 15924, first letter in the highest byte ('Latn', 'Grek').
