@@ -33,8 +33,8 @@ struct SolarDay {
     std::optional<HorizonPassage> rise;
     std::optional<HorizonPassage> set;
     Instant noon;           ///< upper transit: the hour angle is 0
-    Angle noon_altitude;    ///< geocentric, no refraction; above 90° never: see noon_azimuth
-    Angle noon_azimuth;     ///< 180° or 0°
+    Angle noon_altitude;    ///< geocentric, no refraction
+    Angle noon_azimuth;     ///< 180°, or 0° where the Sun passes north of overhead
     Angle declination;      ///< at noon
     Angle equation_of_time; ///< at noon
 };
