@@ -3,11 +3,12 @@
 // A path is walked in steps. Between two steps whose states differ (unlit or outside; cast by the left edge; cast by
 // the right edge) the change is found by halving; between two visible steps chords are halved until they lie within
 // the tolerance; between two lit steps outside the window the window is looked for. Great circles on a flat plate need only
-// the lit stretch: their shadow is a straight line, cut to the window in closed form.
+// the lit stretches: their shadows are straight lines, cut to the window in closed form.
 #include "engine/cast/trace.hpp"
 
 #include <algorithm>
 #include <cmath>
+#include <utility>
 
 namespace dialwright {
 namespace {
@@ -56,51 +57,48 @@ template <Surface S> class Walk {
     }
 
     std::vector<PlatePolyline> straight() {
-        ends_of_light();
-        if (!(first_lit_ < last_lit_))
-            return {};
-        // Two lit Suns well inside the stretch give the line; its ends, which may be at infinity, only how far it runs.
-        const double span = last_lit_ - first_lit_;
-        const auto a = cast(first_lit_ + 0.4 * span), b = cast(first_lit_ + 0.6 * span);
-        if (!a || !b)
-            return {};
-        double du = b->point.u_mm - a->point.u_mm, dv = b->point.v_mm - a->point.v_mm;
-        const double length = std::hypot(du, dv);
-        if (length < 1e-12)
-            return {};
-        du /= length;
-        dv /= length;
-        const auto along = [&](double parameter_of_end, double otherwise) {
-            const auto end = cast(parameter_of_end);
-            return end ? (end->point.u_mm - a->point.u_mm) * du + (end->point.v_mm - a->point.v_mm) * dv : otherwise;
-        };
-        constexpr double k_far_mm = 1e15;
-        double first = along(first_lit_, -k_far_mm), last = along(last_lit_, k_far_mm);
-        if (!cut_to_box(a->point, du, dv, window_, first, last) || last - first < k_dot_mm)
-            return {};
-        const auto at = [&](double t) { return PlatePoint{a->point.u_mm + t * du, a->point.v_mm + t * dv}; };
-        return {{at(first), at(last)}};
+        double first = path_.first, low = first;
+        int light = light_at(first);
+        for (int i = 1; i <= path_.steps; ++i) {
+            const double high = i == path_.steps ? path_.last : parameter(i);
+            const int next = light_at(high);
+            for (int changes = 0; light != next && changes < 4; ++changes) {
+                const auto [before, after] = change_between(low, high, light);
+                if (light != k_unseen)
+                    add_straight(first, before);
+                first = low = after;
+                light = light_at(after);
+            }
+            low = high;
+        }
+        if (light != k_unseen)
+            add_straight(first, path_.last);
+        return std::move(lines_);
     }
 
   private:
     static constexpr double k_dot_mm = 1e-6;
     static constexpr int k_halvings = 50;
+    static constexpr int k_unseen = 0;
 
     struct Step {
         double at;
         std::optional<Cast> cast;
-        int state; ///< 0 not drawn, 1 left edge, 2 right edge
-        [[nodiscard]] bool visible() const { return state != 0; }
+        int state; ///< k_unseen, or the casting edge
+        [[nodiscard]] bool visible() const { return state != k_unseen; }
     };
 
     [[nodiscard]] double parameter(int i) const {
         return path_.first + (path_.last - path_.first) * (double(i) / path_.steps);
     }
     [[nodiscard]] std::optional<Cast> cast(double t) const { return caster_.cast(path_.at(t), path_.light, path_.edge); }
+    [[nodiscard]] static int state_of(const std::optional<Cast>& shadow) {
+        return !shadow ? k_unseen : shadow->edge == Edge::left ? 1 : 2;
+    }
     [[nodiscard]] Step step(double t) const {
         auto shadow = cast(t);
-        const int state = shadow && window_.contains(shadow->point) ? (shadow->edge == Edge::left ? 1 : 2) : 0;
-        return {t, shadow, state};
+        const bool inside = shadow && window_.contains(shadow->point);
+        return {t, shadow, inside ? state_of(shadow) : k_unseen};
     }
 
     void begin(const Step& s) { lines_.push_back({s.cast->point}); }
@@ -131,9 +129,13 @@ template <Surface S> class Walk {
     /// Whether a stretch with both ends outside the window or unlit might come in between.
     [[nodiscard]] bool may_enter(const Step& a, const Step& b, int depth) const {
         if (a.cast && b.cast) {
+            // The curve bulges from its chord, by no more than a part of the chord's length.
             const PlatePoint p = a.cast->point, q = b.cast->point;
-            double first = -0.1, last = 1.1;
-            return cut_to_box(p, q.u_mm - p.u_mm, q.v_mm - p.v_mm, window_, first, last);
+            const double du = q.u_mm - p.u_mm, dv = q.v_mm - p.v_mm, bulge_mm = 0.25 * std::hypot(du, dv);
+            const PlateBox wider{window_.left_mm - bulge_mm, window_.bottom_mm - bulge_mm,
+                                 window_.right_mm + bulge_mm, window_.top_mm + bulge_mm};
+            double first = 0.0, last = 1.0;
+            return cut_to_box(p, du, dv, wider, first, last);
         }
         return (a.cast || b.cast) && depth < 5;
     }
@@ -159,27 +161,41 @@ template <Surface S> class Walk {
         refine(middle, b, depth + 1);
     }
 
-    /// The longest lit stretch of a great circle, found by steps and halving.
-    void ends_of_light() {
-        int first = -1, last = -1;
-        for (int i = 0; i <= path_.steps; ++i) {
-            if (!cast(parameter(i)))
-                continue;
-            if (first < 0)
-                first = i;
-            last = i;
+    /// The state of the light alone: the window is not asked.
+    [[nodiscard]] int light_at(double t) const { return state_of(cast(t)); }
+
+    /// The last parameter of a state and the first of another, from `low` (in the state) towards `high` (not in it).
+    [[nodiscard]] std::pair<double, double> change_between(double low, double high, int state) const {
+        for (int i = 0; i < k_halvings; ++i) {
+            const double middle = (low + high) / 2;
+            (light_at(middle) == state ? low : high) = middle;
         }
-        if (first < 0)
+        return {low, high};
+    }
+
+    /// The straight shadow of a lit stretch. Two Suns well inside it give the line; its ends, which may be at infinity,
+    /// only how far it runs.
+    void add_straight(double first_lit, double last_lit) {
+        const double span = last_lit - first_lit;
+        const auto a = cast(first_lit + 0.4 * span), b = cast(first_lit + 0.6 * span);
+        if (!a || !b)
             return;
-        const auto end_between = [&](double lit, double unlit) {
-            for (int i = 0; i < k_halvings; ++i) {
-                const double middle = (lit + unlit) / 2;
-                (cast(middle) ? lit : unlit) = middle;
-            }
-            return lit;
+        double du = b->point.u_mm - a->point.u_mm, dv = b->point.v_mm - a->point.v_mm;
+        const double length = std::hypot(du, dv);
+        if (length < k_dot_mm)
+            return;
+        du /= length;
+        dv /= length;
+        const auto along = [&](double parameter_of_end, double otherwise) {
+            const auto end = cast(parameter_of_end);
+            return end ? (end->point.u_mm - a->point.u_mm) * du + (end->point.v_mm - a->point.v_mm) * dv : otherwise;
         };
-        first_lit_ = first > 0 ? end_between(parameter(first), parameter(first - 1)) : path_.first;
-        last_lit_ = last < path_.steps ? end_between(parameter(last), parameter(last + 1)) : path_.last;
+        constexpr double k_far_mm = 1e15;
+        double first = along(first_lit, -k_far_mm), last = along(last_lit, k_far_mm);
+        if (!cut_to_box(a->point, du, dv, window_, first, last) || last - first < k_dot_mm)
+            return;
+        const auto at = [&](double t) { return PlatePoint{a->point.u_mm + t * du, a->point.v_mm + t * dv}; };
+        lines_.push_back({at(first), at(last)});
     }
 
     void drop_dots() {
@@ -193,7 +209,6 @@ template <Surface S> class Walk {
     const SunPath& path_;
     const PlateBox& window_;
     double tolerance_mm_;
-    double first_lit_ = 0.0, last_lit_ = 0.0;
     std::vector<PlatePolyline> lines_;
 };
 

@@ -1,9 +1,14 @@
 // SPDX-License-Identifier: MIT
 #include "engine/style/gnomon_edges.hpp"
 
+#include <Eigen/Geometry>
+
 #include <cmath>
 
 namespace dialwright {
+namespace {
+constexpr double k_in_plane = 1e-9; // sine
+}
 
 GnomonEdges::GnomonEdges(const PlateFrame& frame, const Style& style, Angle latitude, double thickness_mm)
     : thickness_mm_{thickness_mm}, right_{cos(style.substyle), -sin(style.substyle)},
@@ -16,9 +21,13 @@ GnomonEdges::GnomonEdges(const PlateFrame& frame, const Style& style, Angle lati
 }
 
 Edge GnomonEdges::casting(Angle hour_angle) const {
+    if (!(thickness_mm_ > 0))
+        return Edge::right;
     const Angle from_substyle = hour_angle - substyle_hour_angle_;
-    const bool positive = sin(from_substyle * 2.0) * hour_sense_ >= 0;
-    return positive ? Edge::right : Edge::left;
+    const bool shadow_to_right = sin(from_substyle) * hour_sense_ >= 0;
+    // Exactly 6 h away both edges' shadows fall on one line across the substyle: it starts on the side to which it runs.
+    const bool above_top = cos(from_substyle) > -k_in_plane;
+    return shadow_to_right == above_top ? Edge::right : Edge::left;
 }
 
 PlatePoint GnomonEdges::shift(Edge edge) const {
@@ -27,7 +36,6 @@ PlatePoint GnomonEdges::shift(Edge edge) const {
 }
 
 bool GnomonEdges::both_cast(Angle hour_angle) const {
-    constexpr double k_in_plane = 1e-9;
     return thickness_mm_ > 0 && std::abs(sin(hour_angle - substyle_hour_angle_)) < k_in_plane;
 }
 

@@ -22,6 +22,7 @@ class GnomonEdges {
     GnomonEdges(const PlateFrame& frame, const Style& style, Angle latitude, double thickness_mm);
 
     [[nodiscard]] double thickness_mm() const { return thickness_mm_; }
+    /// The edge that bounds the shadow; right throughout where the gnomon has no thickness and the edges are one.
     [[nodiscard]] Edge casting(Angle hour_angle) const;
     /// How far the casting edge stands from the middle of the gnomon, plate frame.
     [[nodiscard]] PlatePoint shift(Edge edge) const;
