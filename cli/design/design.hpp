@@ -11,6 +11,7 @@
 
 namespace dialwright::cli {
 
+using dialwright::HalfYear;
 using dialwright::HourTime;
 using layout::Borders;
 using layout::Cutting;
@@ -46,6 +47,7 @@ struct Hours {
     int divide_min = 15;                   ///< the finest division asked for: 60, 30, 15, 10, 5, 2, 1
     Numerals numerals = Numerals::roman;
     int count = 12; ///< 12 or 24
+    HalfYear curves = HalfYear::whole; ///< of clock time
     NumeralStand stand = NumeralStand::along_border;
     bool noon_mark = true;
 };

@@ -1,0 +1,136 @@
+// SPDX-License-Identifier: MIT
+#include "cli/plan/face_plans.hpp"
+
+#include "engine/time/zone.hpp"
+
+#include <array>
+#include <cmath>
+#include <fmt/format.h>
+#include <stdexcept>
+
+namespace dialwright::cli {
+namespace {
+
+constexpr std::array<const char*, 12> k_months{"January", "February", "March",     "April",   "May",      "June",
+                                               "July",    "August",   "September", "October", "November", "December"};
+/// The signs in the order of the Sun's longitude; U+FE0E asks for the plain form of the letter.
+constexpr std::array<const char*, 12> k_signs{"♈", "♉", "♊", "♋", "♌", "♍", "♎", "♏", "♐", "♑", "♒", "♓"};
+
+class DateLines {
+  public:
+    explicit DateLines(const Design& design, const MeanYear& year)
+        : year_{year}, local_noon_ut_h_{12.0 - design.place.site.longitude.in_hours()} {}
+
+    void add(std::string label, Angle declination) {
+        constexpr Angle k_same = Angle::degrees(0.01);
+        for (DatePlan::Line& line : plan.lines)
+            if (abs(line.declination - declination) < k_same) {
+                line.label += " · " + label;
+                return;
+            }
+        plan.lines.push_back({std::move(label), declination});
+    }
+    void add_day(std::chrono::month_day day, std::string label) {
+        add(label.empty() ? date_text(day) : std::move(label), year_.at(year_.day_of(day, local_noon_ut_h_)).declination);
+    }
+    [[nodiscard]] std::string date_of(double day) const { return date_text(year_.date_of(day)); }
+
+    DatePlan plan;
+
+  private:
+    const MeanYear& year_;
+    double local_noon_ut_h_;
+};
+
+std::string pair_text(const std::string& first, const std::string& second) { return first + " · " + second; }
+
+Attitude attitude_of(const Design& design, bool upper_face) {
+    switch (design.dial.kind) {
+    case DialKind::level:
+        return {};
+    case DialKind::wall:
+    case DialKind::leaning:
+        return {design.dial.facing, design.dial.lean};
+    case DialKind::equatorial:
+        break;
+    }
+    return equatorial_attitude(design.place.site.latitude, upper_face);
+}
+
+FacePlan plan_of(const Design& design, const MeanYear& year, bool upper_face) {
+    FacePlan face;
+    const bool equatorial = design.dial.kind == DialKind::equatorial;
+    face.name = !equatorial ? "" : upper_face ? "upper" : "lower";
+    const auto zone = Zone::find(design.place.zone);
+    if (!zone)
+        throw std::invalid_argument(fmt::format("no time zone \"{}\"", design.place.zone));
+
+    DialPlan& dial = face.dial;
+    dial.site = design.place.site;
+    dial.zone_meridian = zone->meridian(design.years.first);
+    dial.attitude = attitude_of(design, upper_face);
+    dial.nodus_height_mm = design.gnomon.nodus_height_mm.value_or(0.0);
+    dial.gnomon_thickness_mm = equatorial ? 0.0 : design.gnomon.thickness_mm;
+    dial.hours = {design.hours.time, design.hours.first_h, design.hours.last_h, design.hours.divide_min, design.hours.curves, HourExtent::style};
+    dial.dates = date_plan(design, year);
+
+    layout::FaceSpec& spec = face.spec;
+    spec.name = equatorial ? face.name + " face" : "";
+    spec.plate = design.plate;
+    spec.borders = design.borders;
+    spec.gnomon = design.gnomon;
+    spec.lettering = design.lettering;
+    spec.cutting = design.cutting;
+    spec.numerals = design.hours.numerals;
+    spec.stand = design.hours.stand;
+    spec.numeral_count = design.hours.count;
+    spec.noon_mark = design.hours.noon_mark;
+    spec.date_labels = design.dates.labels;
+    spec.compass = design.dial.kind == DialKind::level;
+    // Who reads a level dial stands where the gnomon's foot is lowest and looks along it to the elevated pole.
+    const bool south = design.place.site.latitude < Angle{};
+    spec.reader_up = Angle::degrees(design.dial.kind == DialKind::level && south ? 180 : 0);
+    return face;
+}
+
+} // namespace
+
+std::string date_text(std::chrono::month_day day) {
+    return fmt::format("{} {}", unsigned(day.day()), k_months[unsigned(day.month()) - 1]);
+}
+
+DatePlan date_plan(const Design& design, const MeanYear& year) {
+    DateLines lines{design, year};
+    const Angle tilt = year.obliquity();
+    if (design.dates.solstices) {
+        lines.add(lines.date_of(year.june_solstice_day()), tilt);
+        lines.add(lines.date_of(year.december_solstice_day()), -tilt);
+    }
+    if (design.dates.equinoxes)
+        lines.add(pair_text(lines.date_of(year.march_equinox_day()), lines.date_of(year.september_equinox_day())), Angle{});
+    if (design.dates.signs)
+        for (const auto& [first, second] : {std::pair{3, 3}, {2, 4}, {1, 5}, {0, 6}, {11, 7}, {10, 8}, {9, 9}}) {
+            const Angle longitude = Angle::degrees(30.0 * first);
+            const std::string label = first == second ? k_signs[std::size_t(first)]
+                                                      : fmt::format("{} {}", k_signs[std::size_t(first)], k_signs[std::size_t(second)]);
+            lines.add(label, arc_sine(sin(tilt) * sin(longitude)));
+        }
+    if (design.dates.months)
+        for (unsigned month = 1; month <= 12; ++month)
+            lines.add_day(std::chrono::month{month} / 1, "");
+    for (const NamedDay& day : design.dates.days)
+        lines.add_day(day.day, day.label);
+    return std::move(lines.plan);
+}
+
+std::vector<FacePlan> face_plans(const Design& design, const MeanYear& year) {
+    std::vector<FacePlan> faces;
+    const bool both = design.dial.kind == DialKind::equatorial && design.dial.faces == Faces::both;
+    if (both || design.dial.kind != DialKind::equatorial || design.dial.faces == Faces::upper)
+        faces.push_back(plan_of(design, year, true));
+    if (both || (design.dial.kind == DialKind::equatorial && design.dial.faces == Faces::lower))
+        faces.push_back(plan_of(design, year, false));
+    return faces;
+}
+
+} // namespace dialwright::cli

@@ -1,0 +1,54 @@
+// SPDX-License-Identifier: MIT
+#pragma once
+
+#include "layout/lettering/lettering.hpp"
+#include "layout/plate/clear_map.hpp"
+#include "layout/plate/face.hpp"
+#include "layout/plate/points.hpp"
+
+namespace dialwright::layout {
+
+/// A face while it is being drawn. The steps of draw_face add to it in turn; everything is in the work frame (mm from
+/// the middle of the plate's box), and is turned for the reader at the end.
+struct Bench {
+    Bench(const FaceSpec& face_spec, const Delineation& delineated, const Placement& placed);
+
+    const FaceSpec& spec;
+    const Delineation& delineation;
+    Point foot;                   ///< of the nodus
+    std::optional<Point> centre;  ///< where it is on the field
+    Rings rings;
+    std::vector<Outline> keep_out; ///< the border round the centre, and labels that lines stop for
+    Point up;                     ///< unit, the reader's
+    Lettering lettering;
+    ClearMap clear;
+
+    std::vector<Mark> marks;
+    std::vector<DrawnLine> lines;
+    std::vector<std::string> warnings;
+
+    /// Widths in their order of weight.
+    [[nodiscard]] double width_of_step(int step_min) const;
+    [[nodiscard]] double date_width() const { return 0.6 * spec.cutting.line_width_mm; }
+    [[nodiscard]] Region field() const { return {{rings.divisions}, keep_out}; }
+
+    void engrave(const Polyline& line, double width_mm, std::string name);
+    void add_line(const DialLine& line, const Polyline& piece, std::string label, double width_mm);
+    void add_filled(std::vector<Path> paths, std::string name, Layer layer = Layer::engrave);
+    [[nodiscard]] Polyline to_work(const PlatePolyline& piece) const;
+};
+
+/// The anticlockwise turn at which text runs so that it stands upright for the reader along a line of direction `along`.
+[[nodiscard]] Angle upright_turn(Point along, Point up);
+
+void draw_borders(Bench& bench);
+void draw_hours(Bench& bench);
+void draw_dates(Bench& bench);
+void draw_gnomon_seat(Bench& bench, double foot_mm);
+void draw_compass(Bench& bench);
+void draw_inscriptions(Bench& bench);
+
+/// The gnomon's foot along the substyle: what the design says, else from the centre to beneath the nodus.
+[[nodiscard]] double gnomon_foot_mm(const Bench& bench);
+
+} // namespace dialwright::layout

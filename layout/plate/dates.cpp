@@ -1,0 +1,182 @@
+// SPDX-License-Identifier: MIT
+//
+// A date line's label runs along the line, beside it. It is put where it stands clear of every hour line, towards the
+// reader's left; where no such place is long enough, on the place that crosses the fewest, and the hour lines then
+// stop for it, as an engraver would have them.
+#include "layout/plate/bench.hpp"
+
+#include <algorithm>
+#include <cmath>
+#include <fmt/format.h>
+
+namespace dialwright::layout {
+namespace {
+
+/// A line by its length.
+class Rule {
+  public:
+    explicit Rule(const Polyline& line) : line_{line}, at_{0.0} {
+        for (std::size_t i = 0; i + 1 < line.size(); ++i)
+            at_.push_back(at_.back() + distance(line[i], line[i + 1]));
+    }
+    [[nodiscard]] double length_mm() const { return at_.back(); }
+    [[nodiscard]] Point point(double s) const {
+        const auto [i, part] = place(s);
+        return between(line_[i], line_[i + 1], part);
+    }
+
+  private:
+    [[nodiscard]] std::pair<std::size_t, double> place(double s) const {
+        const auto after = std::upper_bound(at_.begin() + 1, at_.end() - 1, s);
+        const auto i = std::size_t(after - at_.begin()) - 1;
+        const double run = at_[i + 1] - at_[i];
+        return {i, run > 0 ? (s - at_[i]) / run : 0.0};
+    }
+    const Polyline& line_;
+    std::vector<double> at_;
+};
+
+struct LabelPlace {
+    double score = -1e300;
+    std::vector<TurnedBox> chunks;
+    Point start, middle, end; ///< on the label's own base line, in reading order
+    bool found = false;
+};
+
+class DateDrawer {
+  public:
+    explicit DateDrawer(Bench& bench)
+        : bench_{bench}, cap_mm_{bench.spec.lettering.label_height_mm}, room_{bench.clear}, room_without_hours_{bench.clear} {}
+
+    void draw() {
+        std::vector<const DialLine*> dates;
+        for (const DialLine& line : bench_.delineation.lines)
+            if (line.family == Family::date)
+                dates.push_back(&line);
+        if (dates.empty())
+            return;
+        if (bench_.spec.date_labels && cap_mm_ > 0) {
+            block_lines();
+            for (const DialLine* date : dates)
+                place_label(*date);
+        }
+        for (const DialLine* date : dates)
+            for (const PlatePolyline& piece : date->pieces)
+                for (const Polyline& part : clipped(bench_.to_work(piece), bench_.field()))
+                    bench_.add_line(*date, part, date->label, bench_.date_width());
+    }
+
+  private:
+    void block_lines() {
+        for (const DialLine& line : bench_.delineation.lines) {
+            const bool hour_line = line.family != Family::date;
+            if (hour_line && line.step_min < 60)
+                continue;
+            for (const PlatePolyline& piece : line.pieces)
+                for (const Polyline& part : clipped(bench_.to_work(piece), bench_.field())) {
+                    room_.block(part);
+                    if (!hour_line)
+                        room_without_hours_.block(part);
+                }
+        }
+        room_.measure();
+        room_without_hours_.measure();
+    }
+
+    void place_label(const DialLine& date) {
+        const LetteredLine text = bench_.lettering.line(date.label, cap_mm_, 0.04 * cap_mm_);
+        LabelPlace best = search(date, text, room_);
+        const bool in_the_clear = best.found;
+        if (!best.found)
+            best = search(date, text, room_without_hours_);
+        if (!best.found) {
+            bench_.warnings.push_back(fmt::format("no room for the label \"{}\" beside its date line: give it a smaller height or a shorter text", date.label));
+            return;
+        }
+        set(date, text, best);
+        for (const TurnedBox& chunk : best.chunks) {
+            TurnedBox grown = chunk;
+            grown.half_width_mm += 0.35 * cap_mm_;
+            grown.half_height_mm += 0.35 * cap_mm_;
+            placed_.push_back(grown);
+            bench_.clear.block(chunk);
+            if (!in_the_clear)
+                bench_.keep_out.push_back(Outline::polygon(grown.corners()));
+        }
+    }
+
+    [[nodiscard]] LabelPlace search(const DialLine& date, const LetteredLine& text, const ClearMap& room) const {
+        LabelPlace best;
+        for (const PlatePolyline& piece : date.pieces)
+            for (const Polyline& part : clipped(bench_.to_work(piece), bench_.field())) {
+                const Rule rule{part};
+                const double half = text.ink.width_mm() / 2 + 0.4 * cap_mm_;
+                for (double s = half; s <= rule.length_mm() - half; s += std::max(1.0, 0.4 * cap_mm_))
+                    for (const double side : {1.0, -1.0})
+                        consider(rule, s, side, text, room, best);
+            }
+        return best;
+    }
+
+    void consider(const Rule& rule, double s, double side, const LetteredLine& text, const ClearMap& room, LabelPlace& best) const {
+        const double half = text.ink.width_mm() / 2;
+        const Point right{bench_.up.y_mm, -bench_.up.x_mm};
+        const Point whole_run = rule.point(s + half) - rule.point(s - half);
+        if (length(whole_run) < 1.6 * half)
+            return; // doubled back
+        const double sense = dot(whole_run, right) >= 0 ? 1.0 : -1.0; // reads to the reader's right
+        LabelPlace place;
+        const int chunks = std::max(2, int(std::ceil(2 * half / (1.5 * cap_mm_))));
+        const double off = side * (0.5 + 0.45) * cap_mm_;
+        double clearance = 1e300;
+        std::vector<Point> bases;
+        for (int i = 0; i < chunks; ++i) {
+            const double from = s + sense * half * (2.0 * i / chunks - 1), to = s + sense * half * (2.0 * (i + 1) / chunks - 1);
+            const Point a = rule.point(from), b = rule.point(to), along = unit(b - a);
+            const TurnedBox box{between(a, b, 0.5) + off * left_of(along), distance(a, b) / 2, cap_mm_ / 2, turn_of(along)};
+            clearance = std::min(clearance, room.clearance_mm(box));
+            if (clearance < 0.3 * cap_mm_ || std::any_of(placed_.begin(), placed_.end(), [&](const TurnedBox& p) { return p.overlaps(box); }))
+                return;
+            place.chunks.push_back(box);
+        }
+        const auto base = [&](double t) {
+            const Point along = unit(rule.point(t + 0.01 * sense * half) - rule.point(t - 0.01 * sense * half));
+            return rule.point(t) + (off - cap_mm_ / 2) * left_of(along);
+        };
+        place.start = base(s - sense * half);
+        place.middle = base(s);
+        place.end = base(s + sense * half);
+        place.score = std::min(clearance, cap_mm_) - 0.02 * dot(place.middle, right) / std::max(1.0, cap_mm_);
+        place.found = true;
+        if (place.score > best.score)
+            best = place;
+    }
+
+    void set(const DialLine& date, const LetteredLine& text, const LabelPlace& place) {
+        const std::string name = "label " + date.label;
+        const Point chord = place.end - place.start;
+        const double sagitta = cross(unit(chord), place.middle - place.start); // + bulges to the left: heads outward
+        if (std::abs(sagitta) < 0.02 * cap_mm_) {
+            const Point along = unit(chord);
+            const double lead = text.ink.left_mm;
+            bench_.add_filled(set_straight(text, place.start - lead * along, turn_of(along)), name);
+            return;
+        }
+        const double half = length(chord) / 2;
+        const double radius = (half * half + sagitta * sagitta) / (2 * std::abs(sagitta));
+        const Point towards_centre = (sagitta > 0 ? -1.0 : 1.0) * left_of(unit(chord));
+        const Point centre = place.middle + radius * towards_centre;
+        bench_.add_filled(set_on_circle(text, centre, radius, turn_of(place.middle - centre), sagitta < 0), name);
+    }
+
+    Bench& bench_;
+    double cap_mm_;
+    ClearMap room_, room_without_hours_;
+    std::vector<TurnedBox> placed_;
+};
+
+} // namespace
+
+void draw_dates(Bench& bench) { DateDrawer{bench}.draw(); }
+
+} // namespace dialwright::layout

@@ -1,0 +1,138 @@
+// SPDX-License-Identifier: MIT
+#include "layout/plate/face.hpp"
+
+#include "layout/plate/bench.hpp"
+#include "layout/plate/numerals.hpp"
+
+#include <algorithm>
+#include <fmt/format.h>
+#include <stdexcept>
+
+namespace dialwright::layout {
+namespace {
+
+constexpr double k_numeral_share = 0.64; // of the chapter ring; the rest is for the divisions
+
+Outline inner_border(const Outline& from, double by_mm, const char* what) {
+    const auto made = from.inset(by_mm);
+    if (!made)
+        throw std::invalid_argument(fmt::format("the {} needs {:.1f} mm inside the border outside it, and the plate has no such room", what, by_mm));
+    return *made;
+}
+
+PlateBox window_of(const Outline& edge, Point foot) {
+    const Box box = edge.box();
+    return {box.left_mm - foot.x_mm, box.bottom_mm - foot.y_mm, box.right_mm - foot.x_mm, box.top_mm - foot.y_mm};
+}
+
+Bench& drawn(Bench& bench, double foot_mm) {
+    draw_borders(bench);
+    draw_gnomon_seat(bench, foot_mm);
+    draw_dates(bench); // labels first ask for room; hour lines then stop for them
+    draw_hours(bench);
+    draw_compass(bench);
+    draw_inscriptions(bench);
+    return bench;
+}
+
+void report_unlit(const Delineation& delineation, std::vector<std::string>& warnings) {
+    if (!delineation.unlit_hours.empty()) {
+        std::string hours;
+        for (const double hour : delineation.unlit_hours)
+            hours += (hours.empty() ? "" : ", ") + time_label(hour);
+        warnings.push_back(fmt::format("never lit on this face, so left out: {}", hours));
+    }
+    for (const std::string& date : delineation.unlit_dates)
+        warnings.push_back(fmt::format("date line \"{}\" does not fall on this face, so it is left out", date));
+}
+
+} // namespace
+
+Rings Rings::of(const FaceSpec& spec) {
+    const Outline edge = Outline::of(spec.plate);
+    const Outline outer = inner_border(edge, spec.borders.margin_mm, "outer border");
+    const Outline numerals = inner_border(outer, k_numeral_share * spec.borders.chapter_ring_mm, "chapter ring");
+    const Outline divisions = inner_border(numerals, (1 - k_numeral_share) * spec.borders.chapter_ring_mm, "chapter ring");
+    return {edge, outer, numerals, divisions};
+}
+
+Bench::Bench(const FaceSpec& face_spec, const Delineation& delineated, const Placement& placed)
+    : spec{face_spec}, delineation{delineated}, foot{placed.foot}, rings{Rings::of(face_spec)},
+      up{clockwise_from_up(face_spec.reader_up)}, lettering{face_spec.lettering.family},
+      clear{rings.divisions, std::max(0.5, std::max(face_spec.plate.width_mm, face_spec.plate.height_mm) / 320)} {
+    if (delineated.style.centre) {
+        const Point at = layout::to_work(*delineated.style.centre, foot);
+        if (rings.divisions.contains(at))
+            centre = at;
+    }
+}
+
+double Bench::width_of_step(int step_min) const {
+    const double tool = spec.cutting.line_width_mm;
+    return step_min >= 60 ? tool : step_min >= 30 ? 0.8 * tool : step_min >= 15 ? 0.65 * tool : 0.5 * tool;
+}
+
+void Bench::engrave(const Polyline& line, double width_mm, std::string name) {
+    marks.push_back({Layer::engrave, {polyline(line)}, width_mm, false, std::move(name)});
+    clear.block(line);
+}
+
+void Bench::add_line(const DialLine& line, const Polyline& piece, std::string label, double width_mm) {
+    DrawnLine drawn_line;
+    drawn_line.family = line.family;
+    drawn_line.label = label;
+    drawn_line.time_h = line.time_h;
+    drawn_line.hour_angle = line.hour_angle;
+    drawn_line.direction = line.direction;
+    drawn_line.declination = line.declination;
+    for (const Point& p : piece)
+        drawn_line.points.push_back(to_plate(p, foot));
+    lines.push_back(std::move(drawn_line));
+    engrave(piece, width_mm, (line.family == Family::date ? "date line " : "hour line ") + label);
+}
+
+void Bench::add_filled(std::vector<Path> paths, std::string name, Layer layer) {
+    if (!paths.empty())
+        marks.push_back({layer, std::move(paths), 0.0, true, std::move(name)});
+}
+
+Polyline Bench::to_work(const PlatePolyline& piece) const {
+    Polyline line;
+    line.reserve(piece.size());
+    for (const PlatePoint& p : piece)
+        line.push_back(layout::to_work(p, foot));
+    return line;
+}
+
+Angle upright_turn(Point along, Point up) {
+    return dot(left_of(along), up) >= 0 ? turn_of(along) : turn_of(-1.0 * along);
+}
+
+Face draw_face(DialPlan plan, const MeanYear& year, const FaceSpec& spec) {
+    Face face;
+    face.name = spec.name;
+    face.placement = place_on_plate(plan, year, spec);
+    plan.nodus_height_mm = face.placement.nodus_height_mm;
+    face.delineation = delineate(plan, year, window_of(Outline::of(spec.plate), face.placement.foot));
+
+    Bench bench{spec, face.delineation, face.placement};
+    face.gnomon_foot_mm = gnomon_foot_mm(bench);
+    drawn(bench, face.gnomon_foot_mm);
+
+    const auto by_family_and_time = [](const DrawnLine& a, const DrawnLine& b) {
+        const bool date_a = a.family == Family::date, date_b = b.family == Family::date;
+        return date_a != date_b ? date_b : (!date_a && a.time_h < b.time_h);
+    };
+    std::stable_sort(bench.lines.begin(), bench.lines.end(), by_family_and_time);
+    face.lines = std::move(bench.lines);
+    face.warnings = std::move(bench.warnings);
+    report_unlit(face.delineation, face.warnings);
+
+    const Placing turn{spec.reader_up, {}, 1.0, 1.0, false}; // reader_up runs clockwise: turn it back
+    face.drawing.name = spec.name.empty() ? "plate" : spec.name;
+    for (const Mark& mark : bench.marks)
+        face.drawing.marks.push_back(spec.reader_up == Angle{} ? mark : turn(mark));
+    return face;
+}
+
+} // namespace dialwright::layout

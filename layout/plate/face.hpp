@@ -1,0 +1,81 @@
+// SPDX-License-Identifier: MIT
+#pragma once
+
+#include "engine/dial/delineation.hpp"
+#include "layout/plate/outline.hpp"
+#include "layout/plate/plate_spec.hpp"
+
+#include <string>
+#include <vector>
+
+namespace dialwright::layout {
+
+/// All that layout needs to know to draw one face.
+struct FaceSpec {
+    std::string name; ///< "upper face"; empty for a dial with one face
+    Plate plate;
+    Borders borders;
+    Gnomon gnomon;
+    LetteringChoice lettering;
+    Cutting cutting;
+    Numerals numerals = Numerals::roman;
+    NumeralStand stand = NumeralStand::along_border;
+    int numeral_count = 12;
+    bool noon_mark = true;
+    bool date_labels = true;
+    bool compass = false;  ///< level plates
+    Angle reader_up;       ///< what is up for the reader of the plate, clockwise from +v
+};
+
+/// Where the dial stands on its plate.
+struct Placement {
+    Point foot; ///< of the nodus, work frame (mm from the middle of the plate's box)
+    double nodus_height_mm = 0.0;
+    std::string why_place, why_height; ///< for the maker; empty where the design says it
+};
+
+/// The borders from the plate's edge inward.
+struct Rings {
+    Outline edge;      ///< of the plate
+    Outline outer;     ///< outer border of the chapter ring
+    Outline numerals;  ///< inner border of the band of numerals
+    Outline divisions; ///< inner border of the band of divisions; the field of the dial
+    /// @throws std::invalid_argument  the borders leave no field; the message says how much the plate has
+    static Rings of(const FaceSpec& spec);
+};
+
+/// A line as it is drawn: one unbroken piece, trimmed to the borders. Lines in several pieces are several of these.
+struct DrawnLine {
+    Family family = Family::hour;
+    std::string label; ///< the numeral of a whole hour, "9:15" between, a date line's label
+    double time_h = 0.0;
+    Angle hour_angle;
+    std::optional<Angle> direction;
+    std::optional<Angle> declination;
+    std::vector<PlatePoint> points; ///< plate frame, mm, before the page is turned
+};
+
+/// One face, ready for paper.
+struct Face {
+    std::string name;
+    Delineation delineation;
+    Placement placement;
+    double gnomon_foot_mm = 0.0;  ///< length of the gnomon's foot along the substyle
+    std::vector<DrawnLine> lines; ///< hours by time, then dates
+    Drawing drawing;              ///< turned so that the reader's up is the page's
+    std::vector<std::string> warnings;
+};
+
+/// Finds where the dial stands on its plate: the centre so that the lines of all lit hours have as much room as they
+/// can, the nodus as high as lets the date lines cross the line of the hour nearest to the substyle. What the design says is kept.
+/// @param plan  its nodus_height_mm is 0 where it is to be found
+[[nodiscard]] Placement place_on_plate(const DialPlan& plan, const MeanYear& year, const FaceSpec& spec);
+
+/// Delineates and draws one face.
+/// @throws LetteringError, std::invalid_argument  with a message for the maker
+[[nodiscard]] Face draw_face(DialPlan plan, const MeanYear& year, const FaceSpec& spec);
+
+[[nodiscard]] inline Point to_work(PlatePoint p, Point foot) { return {foot.x_mm + p.u_mm, foot.y_mm + p.v_mm}; }
+[[nodiscard]] inline PlatePoint to_plate(Point p, Point foot) { return {p.x_mm - foot.x_mm, p.y_mm - foot.y_mm}; }
+
+} // namespace dialwright::layout

@@ -1,0 +1,129 @@
+// SPDX-License-Identifier: MIT
+#include "layout/plate/bench.hpp"
+
+#include <algorithm>
+#include <cmath>
+#include <fmt/format.h>
+
+namespace dialwright::layout {
+namespace {
+
+/// The substyle's direction on the work; nothing where the style stands square on the plate.
+std::optional<Point> substyle_direction(const Bench& bench) {
+    constexpr Angle k_square = Angle::degrees(89.99);
+    if (bench.delineation.style.height > k_square)
+        return std::nullopt;
+    return clockwise_from_up(bench.delineation.style.substyle);
+}
+
+void add_hole(Bench& bench, Point at, double diameter_mm, const std::string& name) {
+    const double arm = 0.9 * diameter_mm;
+    bench.marks.push_back({Layer::drill, {circle(at, diameter_mm / 2)}, 0.15, false, name});
+    bench.marks.push_back({Layer::drill,
+                           {polyline({at - Point{arm, 0}, at + Point{arm, 0}}), polyline({at - Point{0, arm}, at + Point{0, arm}})},
+                           0.1, false, name + " centre"});
+}
+
+} // namespace
+
+void draw_borders(Bench& bench) {
+    const double w = bench.spec.cutting.line_width_mm;
+    const auto border = [&](const Outline& outline, double width, const char* name, Layer layer = Layer::engrave) {
+        bench.marks.push_back({layer, {outline.path()}, width, false, name});
+    };
+    border(bench.rings.edge, 0.2, "plate's edge", Layer::cut);
+    if (bench.spec.borders.margin_mm > 0)
+        border(bench.rings.outer, 1.5 * w, "outer border");
+    if (bench.spec.borders.chapter_ring_mm > 0) {
+        border(bench.rings.numerals, w, "border of the numerals");
+        border(bench.rings.divisions, 0.65 * w, "border of the divisions");
+    }
+    if (bench.centre && bench.spec.borders.inner_mm > 0) {
+        const Outline inner = Outline::round(*bench.centre, bench.spec.borders.inner_mm);
+        bench.keep_out.push_back(inner);
+        bench.clear.block(TurnedBox{*bench.centre, bench.spec.borders.inner_mm, bench.spec.borders.inner_mm, Angle{}});
+        if (bench.rings.divisions.distance_mm(*bench.centre) > bench.spec.borders.inner_mm)
+            border(inner, 0.65 * w, "inner border");
+    }
+}
+
+double gnomon_foot_mm(const Bench& bench) {
+    if (bench.spec.gnomon.foot_mm)
+        return *bench.spec.gnomon.foot_mm;
+    if (!bench.centre || !substyle_direction(bench))
+        return 0.0;
+    return distance(*bench.centre, bench.foot);
+}
+
+void draw_gnomon_seat(Bench& bench, double foot_mm) {
+    const Gnomon& gnomon = bench.spec.gnomon;
+    const auto along = substyle_direction(bench);
+    const double arm = 3.0;
+    bench.marks.push_back({Layer::guide,
+                           {polyline({bench.foot - Point{arm, 0}, bench.foot + Point{arm, 0}}),
+                            polyline({bench.foot - Point{0, arm}, bench.foot + Point{0, arm}})},
+                           0.15, false, "nodus' foot"});
+    if (!along) { // a pin square on the plate
+        if (gnomon.hole_diameter_mm > 0)
+            add_hole(bench, bench.foot, gnomon.hole_diameter_mm, "hole for the pin");
+        return;
+    }
+    const Point start = bench.centre ? *bench.centre : bench.foot - foot_mm / 2 * *along;
+    const Polyline substyle{start, start + std::max(foot_mm, 1.0) * *along};
+    bench.marks.push_back({Layer::guide, {polyline(substyle)}, 0.15, false, "substyle"});
+    bench.clear.block(substyle);
+    if (foot_mm <= 0)
+        return;
+    if (gnomon.thickness_mm > 0) {
+        const Point side = gnomon.thickness_mm / 2 * left_of(*along);
+        const Point end = start + foot_mm * *along;
+        bench.marks.push_back({Layer::score, {polyline({start - side, end - side, end + side, start + side}, true)}, 0.15, false, "gnomon's foot"});
+        bench.clear.block(TurnedBox{between(start, end, 0.5), foot_mm / 2, gnomon.thickness_mm / 2, turn_of(*along)});
+    }
+    for (int i = 0; i < gnomon.holes; ++i)
+        add_hole(bench, start + foot_mm * (i + 0.5) / gnomon.holes * *along, gnomon.hole_diameter_mm, fmt::format("fixing hole {}", i + 1));
+}
+
+void draw_compass(Bench& bench) {
+    if (!bench.spec.compass)
+        return;
+    // On the free side, opposite to noon; north is +y of the work on a level plate.
+    const double size = std::min(bench.spec.plate.width_mm, bench.spec.plate.height_mm);
+    bench.clear.measure();
+    const Point down = -1.0 * bench.up;
+    const Point start = bench.centre.value_or(bench.foot);
+    Point best{};
+    double best_room = 0;
+    for (double along = 0; along < size; along += size / 200)
+        if (const double room = bench.clear.clearance_mm(start + along * down); room > best_room + 1e-6) {
+            best_room = room;
+            best = start + along * down;
+        }
+    const double radius = std::min(0.8 * best_room, 0.065 * size);
+    if (radius < 3.0) {
+        bench.warnings.push_back("no room for a compass mark");
+        return;
+    }
+    const LetteredLine letter = bench.lettering.line("N", 0.45 * radius);
+    const double reach = radius - letter.ink.height_mm() - 0.12 * radius;
+    std::vector<Path> points;
+    const auto ray = [&](double degrees, double reach_mm, double waist_mm) {
+        const Point tip = best + reach_mm * clockwise_from_up(Angle::degrees(degrees));
+        const Point left = best + waist_mm * clockwise_from_up(Angle::degrees(degrees - 45));
+        const Point right = best + waist_mm * clockwise_from_up(Angle::degrees(degrees + 45));
+        // Half of each point is filled, as on an old chart.
+        points.push_back(polyline({best, tip, right}, true));
+        bench.marks.push_back({Layer::engrave, {polyline({best, tip, left}, true)}, 0.5 * bench.spec.cutting.line_width_mm, false, "compass mark"});
+    };
+    for (const double degrees : {0.0, 90.0, 180.0, 270.0})
+        ray(degrees, degrees == 0 ? reach : 0.78 * reach, 0.2 * reach);
+    bench.add_filled(std::move(points), "compass mark");
+    // The N stands beyond the north point, upright for the reader.
+    const Point right{bench.up.y_mm, -bench.up.x_mm};
+    const Point middle = best + (reach + 0.12 * radius + letter.ink.height_mm() / 2) * Point{0, 1};
+    const Point at = middle - (letter.ink.left_mm + letter.ink.width_mm() / 2) * right - letter.ink.height_mm() / 2 * bench.up;
+    bench.add_filled(set_straight(letter, at, turn_of(right)), "compass mark N");
+    bench.clear.block(TurnedBox{best, radius, radius, Angle{}});
+}
+
+} // namespace dialwright::layout

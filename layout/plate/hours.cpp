@@ -1,0 +1,352 @@
+// SPDX-License-Identifier: MIT
+#include "layout/plate/bench.hpp"
+#include "layout/plate/numerals.hpp"
+
+#include <algorithm>
+#include <cmath>
+#include <fmt/format.h>
+#include <map>
+
+namespace dialwright::layout {
+namespace {
+
+/// One drawn side of a straight hour line (the noon gap has two): what runs over the field, and its tick in the ring.
+struct Ray {
+    const DialLine* line;
+    int minute;
+    std::vector<Polyline> field; ///< from the centre outward
+    Polyline tick;               ///< across the band of divisions, from the field outward; empty where the line does not reach it
+    [[nodiscard]] Point direction() const { return unit(tick.back() - tick.front()); }
+};
+
+class HourDrawer {
+  public:
+    explicit HourDrawer(Bench& bench) : bench_{bench} {}
+
+    void draw() {
+        for (const DialLine& line : bench_.delineation.lines) {
+            if (line.family == Family::hour)
+                add_rays(line);
+            else if (line.family == Family::clock_hour)
+                clock_lines_.push_back(&line);
+        }
+        choose_steps();
+        for (const Ray& ray : rays_)
+            draw_ray(ray);
+        draw_clock_lines();
+        draw_numerals();
+        draw_noon_mark();
+    }
+
+  private:
+    void add_rays(const DialLine& line) {
+        for (const PlatePolyline& piece : line.pieces) {
+            const Polyline whole = bench_.to_work(piece);
+            Ray ray{&line, int(std::lround(line.time_h * 60)), clipped(whole, bench_.field()), {}};
+            const auto in_ring = clipped(whole, {{bench_.rings.numerals}, {bench_.rings.divisions}});
+            if (ray.field.empty())
+                continue;
+            // Only the outer end is a tick; a line whose centre is off the plate enters through the ring as well.
+            if (!in_ring.empty() && distance(in_ring.back().front(), ray.field.back().back()) < 1e-6)
+                ray.tick = in_ring.back();
+            rays_.push_back(std::move(ray));
+        }
+    }
+
+    /// Clear way between two rays where they meet the field's border.
+    [[nodiscard]] static double gap_mm(const Ray& a, const Ray& b) {
+        const Point at_a = a.field.back().back(), at_b = b.field.back().back();
+        const Point along = unit(a.field.back().back() - a.field.back().front());
+        return std::abs(cross(along, at_b - at_a));
+    }
+
+    /// For each hour the finest whole step at which all its divisions stand clear of each other.
+    void choose_steps() {
+        static constexpr int k_steps[] = {1, 2, 5, 10, 15, 30, 60};
+        for (int hour = 0; hour < 24; ++hour) {
+            std::vector<const Ray*> within;
+            for (const Ray& ray : rays_)
+                if (ray.minute >= hour * 60 && ray.minute <= hour * 60 + 60)
+                    within.push_back(&ray);
+            for (const int step : k_steps) {
+                step_of_hour_[hour] = step;
+                if (stand_clear(within, step))
+                    break;
+            }
+        }
+    }
+
+    [[nodiscard]] bool stand_clear(const std::vector<const Ray*>& rays, int step) const {
+        const Ray* before = nullptr;
+        for (const Ray* ray : rays) {
+            if (ray->minute % step != 0)
+                continue;
+            const double lines = before ? (bench_.width_of_step(before->line->step_min) + bench_.width_of_step(ray->line->step_min)) / 2 : 0;
+            if (before && before->minute != ray->minute && gap_mm(*before, *ray) - lines < bench_.spec.cutting.least_gap_mm)
+                return false;
+            before = ray;
+        }
+        return true;
+    }
+
+    [[nodiscard]] bool drawn(const Ray& ray) const {
+        if (ray.minute % 60 == 0)
+            return true;
+        return ray.minute % step_of_hour_.at(ray.minute / 60) == 0;
+    }
+
+    /// The last `wanted_mm` of a ray's field part.
+    [[nodiscard]] static Polyline end_part(const Polyline& field, double wanted_mm) {
+        const double whole = distance(field.front(), field.back());
+        if (wanted_mm >= whole)
+            return field;
+        return {between(field.back(), field.front(), wanted_mm / whole), field.back()};
+    }
+
+    void draw_ray(const Ray& ray) {
+        if (!drawn(ray))
+            return;
+        const int step = ray.line->step_min;
+        const double width = bench_.width_of_step(step);
+        const double band = bench_.rings.numerals.distance_mm(bench_.rings.divisions.is_round()
+                                                                  ? bench_.rings.divisions.centre() + Point{bench_.rings.divisions.radius_mm(), 0}
+                                                                  : bench_.rings.divisions.corners().front());
+        if (step >= 60) {
+            for (std::size_t i = 0; i + 1 < ray.field.size(); ++i)
+                bench_.add_line(*ray.line, ray.field[i], label_of(*ray.line), width);
+            const bool noon_mark_here = bench_.spec.noon_mark && ray.minute == 720 && !ray.tick.empty();
+            Polyline last = {ray.field.back().front(), ray.tick.empty() || noon_mark_here ? ray.field.back().back() : ray.tick.back()};
+            bench_.add_line(*ray.line, last, label_of(*ray.line), width);
+            return;
+        }
+        if (ray.tick.empty())
+            return; // divisions live in the ring
+        const double into_field = step == 30 ? 1.4 * band : step == 15 ? 0.5 * band : 0.0;
+        const double across = step >= 10 ? 1.0 : step == 5 ? 0.7 : 0.45;
+        Polyline mark{between(ray.tick.back(), ray.tick.front(), across), ray.tick.back()};
+        if (into_field > 0)
+            mark.front() = end_part(ray.field.back(), into_field).front();
+        bench_.add_line(*ray.line, mark, label_of(*ray.line), width);
+    }
+
+    [[nodiscard]] std::string label_of(const DialLine& line) const {
+        const int minute = int(std::lround(line.time_h * 60));
+        return minute % 60 == 0 ? numeral(minute / 60, bench_.spec.numerals, bench_.spec.numeral_count) : time_label(line.time_h);
+    }
+
+    void draw_clock_lines() {
+        for (const DialLine* line : clock_lines_) {
+            if (line->step_min < 60)
+                continue;
+            for (const PlatePolyline& piece : line->pieces)
+                for (const Polyline& part : clipped(bench_.to_work(piece), bench_.field()))
+                    bench_.add_line(*line, part, label_of(*line), bench_.width_of_step(60));
+        }
+    }
+
+    // Numerals ---------------------------------------------------------------------------------------------------
+
+    struct Numeral {
+        std::string text;
+        Point at;     ///< middle of the capitals
+        Point normal; ///< of the border, outward
+    };
+
+    [[nodiscard]] std::vector<Numeral> numerals(const Outline& middle) const {
+        std::vector<Numeral> made;
+        const auto add = [&](const DialLine& line, Point from, Point direction) {
+            const auto exit = middle.exit(from, direction);
+            if (exit)
+                made.push_back({label_of(line), exit->at, exit->normal});
+        };
+        for (std::size_t i = 0; i < rays_.size(); ++i) {
+            const Ray& ray = rays_[i];
+            if (ray.minute % 60 != 0 || ray.tick.empty())
+                continue;
+            const bool second_of_pair = i > 0 && rays_[i - 1].minute == ray.minute;
+            if (second_of_pair)
+                continue;
+            Point from = ray.tick.front();
+            if (i + 1 < rays_.size() && rays_[i + 1].minute == ray.minute && !rays_[i + 1].tick.empty())
+                from = between(from, rays_[i + 1].tick.front(), 0.5); // over the middle of the noon gap
+            add(*ray.line, from, ray.direction());
+        }
+        for (const DialLine* line : clock_lines_) {
+            if (line->step_min < 60)
+                continue;
+            const auto [from, direction] = clock_numeral_ray(*line);
+            if (length(direction) > 0)
+                add(*line, from, direction);
+        }
+        return made;
+    }
+
+    /// From the curve's middle outward, away from the centre or along the parallel hour lines.
+    [[nodiscard]] std::pair<Point, Point> clock_numeral_ray(const DialLine& line) const {
+        Point sum{};
+        double count = 0;
+        for (const PlatePolyline& piece : line.pieces)
+            for (const Polyline& part : clipped(bench_.to_work(piece), bench_.field()))
+                for (const Point& p : part) {
+                    sum = sum + p;
+                    count += 1;
+                }
+        if (count == 0)
+            return {{}, {}};
+        const Point middle = (1 / count) * sum;
+        const auto& centre = bench_.delineation.style.centre;
+        if (centre)
+            return {middle, middle - layout::to_work(*centre, bench_.foot)};
+        const Style& style = bench_.delineation.style;
+        return {middle, -1.0 * clockwise_from_up(style.substyle)};
+    }
+
+    [[nodiscard]] Angle numeral_turn(const Numeral& n, bool heads_out) const {
+        if (bench_.spec.stand == NumeralStand::upright)
+            return upright_turn({bench_.up.y_mm, -bench_.up.x_mm}, bench_.up);
+        const Point heads = heads_out ? n.normal : -1.0 * n.normal;
+        return turn_of({heads.y_mm, -heads.x_mm});
+    }
+
+    /// Keeps a numeral that follows a straight side within that side's length.
+    [[nodiscard]] static Point kept_on_side(const Outline& middle, const Numeral& n, double half_width_mm) {
+        if (middle.is_round())
+            return n.at;
+        const Point along = left_of(n.normal);
+        const auto room = [&](double way) {
+            double least = 1e300;
+            for (const Point& corner : middle.corners())
+                if (const double ahead = dot(corner - n.at, along) * way; ahead > -1e-6 && std::abs(dot(corner - n.at, n.normal)) < 1e-3)
+                    least = std::min(least, ahead);
+            return least;
+        };
+        const double ahead = room(1), behind = room(-1);
+        if (ahead + behind < 2 * half_width_mm || ahead > 1e200 || behind > 1e200)
+            return n.at;
+        const double shift = ahead < half_width_mm ? ahead - half_width_mm : behind < half_width_mm ? half_width_mm - behind : 0.0;
+        return n.at + shift * along;
+    }
+
+    void draw_numerals() {
+        const double band = bench_.rings.outer.distance_mm(bench_.rings.numerals.is_round()
+                                                               ? bench_.rings.numerals.centre() + Point{bench_.rings.numerals.radius_mm(), 0}
+                                                               : bench_.rings.numerals.corners().front());
+        if (band <= 0 || bench_.spec.lettering.numeral_height_mm <= 0)
+            return;
+        const auto middle = bench_.rings.outer.inset(bench_.spec.borders.chapter_ring_mm * 0.32);
+        if (!middle)
+            return;
+        std::vector<Numeral> all = numerals(*middle);
+        if (all.empty())
+            return;
+        double height = bench_.spec.lettering.numeral_height_mm;
+        const double asked = height;
+        while (height > 0.55 * asked && !all_apart(all, *middle, height))
+            height *= 0.95;
+        if (!all_apart(all, *middle, height))
+            drop_crowded(all, *middle, height);
+        if (height < asked)
+            bench_.warnings.push_back(fmt::format("numerals are {:.1f} mm high instead of {:.1f} mm, so that they stand clear of each other", height, asked));
+        for (const Numeral& n : all)
+            set_numeral(n, *middle, height);
+    }
+
+    [[nodiscard]] TurnedBox box_of(const Numeral& n, const Outline& middle, double height) const {
+        const LetteredLine line = bench_.lettering.line(n.text, height, 0.06 * height);
+        const double half_width = line.ink.width_mm() / 2;
+        const bool along_border = bench_.spec.stand == NumeralStand::along_border;
+        const Point at = along_border ? kept_on_side(middle, n, half_width + 0.2 * height) : n.at;
+        return {at, half_width + 0.12 * height, height / 2, numeral_turn(n, heads_out())};
+    }
+
+    [[nodiscard]] bool all_apart(const std::vector<Numeral>& all, const Outline& middle, double height) const {
+        std::vector<TurnedBox> boxes;
+        for (const Numeral& n : all)
+            boxes.push_back(box_of(n, middle, height));
+        for (std::size_t i = 0; i < boxes.size(); ++i)
+            for (std::size_t k = i + 1; k < boxes.size(); ++k)
+                if (boxes[i].overlaps(boxes[k]))
+                    return false;
+        return true;
+    }
+
+    void drop_crowded(std::vector<Numeral>& all, const Outline& middle, double height) {
+        std::vector<Numeral> kept;
+        std::string dropped;
+        for (const Numeral& n : all) {
+            const TurnedBox box = box_of(n, middle, height);
+            const bool clash = std::any_of(kept.begin(), kept.end(), [&](const Numeral& k) { return box.overlaps(box_of(k, middle, height)); });
+            if (!clash)
+                kept.push_back(n);
+            else
+                dropped += (dropped.empty() ? "" : ", ") + n.text;
+        }
+        all = std::move(kept);
+        bench_.warnings.push_back(fmt::format("no room for the numerals {}: their hour lines stand too close together at the border", dropped));
+    }
+
+    /// Whether heads point outward: the way in which noon, or else the middle hour, stands upright for the reader.
+    [[nodiscard]] bool heads_out() const {
+        const Ray* noon = nullptr;
+        for (const Ray& ray : rays_)
+            if (!ray.tick.empty() && (!noon || std::abs(ray.minute - 720) < std::abs(noon->minute - 720)))
+                noon = &ray;
+        if (noon)
+            return dot(noon->direction(), bench_.up) >= -1e-9;
+        const DialLine* best = nullptr;
+        for (const DialLine* line : clock_lines_)
+            if (!best || std::abs(line->time_h - 12) < std::abs(best->time_h - 12))
+                best = line;
+        return !best || dot(clock_numeral_ray(*best).second, bench_.up) >= 0;
+    }
+
+    void set_numeral(const Numeral& n, const Outline& middle, double height) {
+        const LetteredLine line = bench_.lettering.line(n.text, height, 0.06 * height);
+        const bool outward = heads_out();
+        const std::string name = "numeral " + n.text;
+        if (middle.is_round() && bench_.spec.stand == NumeralStand::along_border) {
+            const double radius = middle.radius_mm() + (outward ? -height / 2 : height / 2);
+            bench_.add_filled(set_on_circle(line, middle.centre(), radius, turn_of(n.at - middle.centre()), !outward), name);
+            return;
+        }
+        const TurnedBox box = box_of(n, middle, height);
+        const Point along{cos(box.turn), sin(box.turn)};
+        const double ink_middle = (line.ink.left_mm + line.ink.right_mm) / 2;
+        bench_.add_filled(set_straight(line, box.middle - ink_middle * along - height / 2 * left_of(along), box.turn), name);
+    }
+
+    void draw_noon_mark() {
+        if (!bench_.spec.noon_mark)
+            return;
+        std::vector<const Ray*> noon;
+        double nearest = 1e300;
+        for (const Ray& ray : rays_)
+            if (ray.minute == 720 && !ray.tick.empty())
+                noon.push_back(&ray);
+        if (noon.empty())
+            return;
+        const Point inner = between(noon.front()->tick.front(), noon.back()->tick.front(), 0.5);
+        const Point outer = between(noon.front()->tick.back(), noon.back()->tick.back(), 0.5);
+        for (const Ray& ray : rays_)
+            if (ray.minute != 720 && !ray.tick.empty() && drawn(ray))
+                nearest = std::min(nearest, std::abs(cross(noon.front()->direction(), ray.tick.front() - inner)));
+        const double height = distance(inner, outer);
+        const double gap = distance(noon.front()->tick.front(), noon.back()->tick.front());
+        const double half_width = std::min({0.36 * height + gap / 2, nearest - bench_.spec.cutting.least_gap_mm});
+        if (half_width < bench_.spec.cutting.line_width_mm)
+            return;
+        const Point out = unit(outer - inner), side = half_width * left_of(out), middle = between(inner, outer, 0.5);
+        bench_.add_filled({polyline({inner, middle - side, outer, middle + side}, true)}, "noon mark");
+    }
+
+    Bench& bench_;
+    std::vector<Ray> rays_;
+    std::vector<const DialLine*> clock_lines_;
+    std::map<int, int> step_of_hour_;
+};
+
+} // namespace
+
+void draw_hours(Bench& bench) { HourDrawer{bench}.draw(); }
+
+} // namespace dialwright::layout
