@@ -1,16 +1,29 @@
 // SPDX-License-Identifier: MIT
 #include "layout/export/pdf.hpp"
 
+#include "layout/export/pdf_font.hpp"
 #include "layout/export/pdf_page.hpp"
-#include "layout/lettering/sheet_font.hpp"
 
 #include <fmt/format.h>
 
 #include <cmath>
 #include <map>
+#include <memory>
+#include <set>
 
 namespace dialwright::layout {
 namespace {
+
+/// What the library has complained of so far. Its callback writes here; whoever called it throws.
+struct PdfTrouble {
+    HPDF_STATUS error = HPDF_OK, detail = 0;
+    void check() const {
+        if (error != HPDF_OK) {
+            throw ExportError(fmt::format(
+                "The PDF could not be made: the PDF library stopped with error 0x{:04X} ({}).", error, detail));
+        }
+    }
+};
 
 void record_trouble(HPDF_STATUS error, HPDF_STATUS detail, void* data) {
     auto* trouble = static_cast<PdfTrouble*>(data);
@@ -20,7 +33,7 @@ void record_trouble(HPDF_STATUS error, HPDF_STATUS detail, void* data) {
     }
 }
 
-/// A document of the library and its fonts, which are loaded when the first note asks for them.
+/// A document of the library, and the fonts of its notes.
 class PdfDocument {
   public:
     PdfDocument() : document_{HPDF_New(&record_trouble, &trouble_)} {
@@ -29,43 +42,51 @@ class PdfDocument {
         }
         HPDF_UseUTFEncodings(document_);
         HPDF_SetCurrentEncoder(document_, "UTF-8");
-        HPDF_SetCompressionMode(document_, HPDF_COMP_ALL);
     }
     ~PdfDocument() { HPDF_Free(document_); }
     PdfDocument(const PdfDocument&) = delete;
     PdfDocument& operator=(const PdfDocument&) = delete;
 
     [[nodiscard]] HPDF_Doc get() const { return document_; }
-    [[nodiscard]] const PdfTrouble& trouble() const { return trouble_; }
-    [[nodiscard]] HPDF_Font font(bool bold) {
-        HPDF_Font& font = bold ? bold_ : regular_;
-        if (font == nullptr) {
-            const std::string& file = sheet_font(bold).file;
-            const char* name = HPDF_LoadTTFontFromFile(document_, file.c_str(), HPDF_TRUE);
-            trouble_.check();
-            font = HPDF_GetFont(document_, name, "UTF-8");
-            trouble_.check();
-        }
-        return font;
-    }
+    void check() const { trouble_.check(); }
+    void load_fonts(const SheetBook& book);
+    [[nodiscard]] const PdfFont& font(bool bold) const { return bold ? *bold_ : *regular_; }
     [[nodiscard]] std::string bytes();
 
   private:
     PdfTrouble trouble_;
     HPDF_Doc document_;
-    HPDF_Font regular_ = nullptr, bold_ = nullptr;
+    std::unique_ptr<PdfFont> regular_, bold_;
 };
+
+/// With the characters that all notes use together, so that each font is embedded once.
+void PdfDocument::load_fonts(const SheetBook& book) {
+    std::set<char32_t> regular, bold;
+    for (const Sheet& sheet : book.sheets) {
+        for (const Note& note : sheet.notes) {
+            const std::u32string characters = note_characters(note.text, sheet_font(note.bold));
+            (note.bold ? bold : regular).insert(characters.begin(), characters.end());
+        }
+    }
+    if (!regular.empty()) {
+        regular_ = std::make_unique<PdfFont>(document_, sheet_font(false), regular);
+    }
+    if (!bold.empty()) {
+        bold_ = std::make_unique<PdfFont>(document_, sheet_font(true), bold);
+    }
+    check();
+}
 
 /// Kept in memory and handed over: the library's own way to a file does not notice a full disk.
 std::string PdfDocument::bytes() {
     // Once and last, because each call takes back the one before and a later call of another kind lowers the version.
     HPDF_SetViewerPreference(document_, HPDF_PRINT_SCALING_NONE);
     HPDF_SaveToStream(document_);
-    trouble_.check();
+    check();
     HPDF_UINT32 left = HPDF_GetStreamSize(document_);
     std::string all(left, '\0');
     HPDF_ReadFromStream(document_, reinterpret_cast<HPDF_BYTE*>(all.data()), &left);
-    trouble_.check();
+    check();
     if (left != all.size()) {
         throw ExportError("The PDF could not be made: the PDF library gave back only a part of it.");
     }
@@ -137,10 +158,10 @@ void add_sheet(PdfDocument& document, const Sheet& sheet, BoxesOfMarks& boxes) {
                                       sheet.width_mm, sheet.height_mm));
     }
     HPDF_Page page = HPDF_AddPage(document.get());
-    document.trouble().check();
+    document.check();
     HPDF_Page_SetWidth(page, static_cast<HPDF_REAL>(sheet.width_mm * 72.0 / 25.4));
     HPDF_Page_SetHeight(page, static_cast<HPDF_REAL>(sheet.height_mm * 72.0 / 25.4));
-    PdfPage paper{page, document.trouble()};
+    PdfPage paper{page};
     for (const Window& window : sheet.windows) {
         draw_window(paper, window, boxes);
     }
@@ -150,13 +171,17 @@ void add_sheet(PdfDocument& document, const Sheet& sheet, BoxesOfMarks& boxes) {
         paper.mark(mark, whole);
     }
     for (const Note& note : sheet.notes) {
-        paper.note(note, document.font(note.bold));
+        if (!note.text.empty()) {
+            paper.note(note, document.font(note.bold));
+        }
     }
+    paper.finish();
+    document.check();
     HPDF_Outline bookmark =
         HPDF_CreateOutline(document.get(), nullptr, sheet.title.c_str(), HPDF_GetEncoder(document.get(), "UTF-8"));
-    document.trouble().check();
+    document.check();
     HPDF_Outline_SetDestination(bookmark, HPDF_Page_CreateDestination(page));
-    document.trouble().check();
+    document.check();
 }
 
 } // namespace
@@ -173,7 +198,8 @@ std::string pdf_of(const SheetBook& book) {
     if (!book.subject.empty()) {
         HPDF_SetInfoAttr(document.get(), HPDF_INFO_SUBJECT, book.subject.c_str());
     }
-    document.trouble().check();
+    document.check();
+    document.load_fonts(book);
     for (const Sheet& sheet : book.sheets) {
         add_sheet(document, sheet, boxes);
     }

@@ -2,12 +2,14 @@
 #include "layout/export/pdf_page.hpp"
 
 #include "layout/drawing/clipping.hpp"
-#include "layout/lettering/sheet_font.hpp"
 #include "layout/sheet/export_error.hpp"
 #include "layout/sheet/note_width.hpp"
 
 #include <fmt/format.h>
+#include <hpdf_pages.h>
+#include <zlib.h>
 
+#include <algorithm>
 #include <cmath>
 
 // Lines end square (butt): an hour line that stops at a border must not run over it by half its width, and a bar's
@@ -20,89 +22,86 @@ namespace {
 constexpr double k_points_a_mm = 72.0 / 25.4;
 constexpr double k_chord_mm = 0.001;
 
-/// The bytes for the library: UTF-8 it can read, of characters the font has; "?" for the others.
-std::string printable_text(const std::string& text, const SheetFont& font) {
-    std::string out;
-    std::string_view rest{text};
-    while (!rest.empty()) {
-        const std::string_view before = rest;
-        const char32_t character = take_character(rest);
-        if (font.has(character)) {
-            out += before.substr(0, before.size() - rest.size());
-        } else {
-            out += '?';
-        }
-    }
-    return out;
-}
-
 bool same(const std::optional<Tone>& a, Tone b) {
     return a && a->red == b.red && a->green == b.green && a->blue == b.blue;
 }
 
-HPDF_REAL real(double value) {
-    return static_cast<HPDF_REAL>(value);
+/// The library removes a filter that it has not applied itself, but lets a stream write an entry of its own.
+HPDF_STATUS write_filter(HPDF_Dict, HPDF_Stream stream) {
+    return HPDF_Stream_WriteStr(stream, "/Filter /FlateDecode\n");
 }
 
 } // namespace
 
-void PdfTrouble::check() const {
-    if (error != HPDF_OK) {
-        throw ExportError(
-            fmt::format("The PDF could not be made: the PDF library stopped with error 0x{:04X} ({}).", error, detail));
-    }
-}
-
-HPDF_REAL PdfPage::points(double mm) const {
-    const double value = mm * k_points_a_mm;
-    // The library cuts numbers off at 32,767; the largest page is 14,400.
-    if (!std::isfinite(value) || std::abs(value) > 32000.0) {
+/// A number and a space. From whole thousandths, because there are a hundred thousand of them.
+void PdfPage::number(double points) {
+    // The largest page is 14,400; what lies far outside of it is a mistake of ours or of the design.
+    if (!std::isfinite(points) || std::abs(points) > 32000.0) {
         throw ExportError(
             fmt::format("“{}” runs off the paper to a place that a PDF can't name, so no PDF was made.", drawing_now_));
     }
-    return real(value);
+    const long thousandths = std::lround(points * 1000.0);
+    if (thousandths < 0) {
+        text_ += '-';
+    }
+    const fmt::format_int whole{std::abs(thousandths) / 1000};
+    text_.append(whole.data(), whole.size());
+    if (const long rest = std::abs(thousandths) % 1000; rest != 0) {
+        const fmt::format_int digits{1000 + rest}; // "1" and the three decimals
+        text_ += '.';
+        text_.append(digits.data() + 1, rest % 100 == 0 ? 1U : rest % 10 == 0 ? 2U : 3U);
+    }
+    text_ += ' ';
+}
+
+void PdfPage::length(double mm) {
+    number(mm * k_points_a_mm);
+}
+
+void PdfPage::point(Point p) {
+    length(p.x_mm);
+    length(p.y_mm);
+}
+
+void PdfPage::colour(Tone tone, std::string_view operation) {
+    number(tone.red);
+    number(tone.green);
+    number(tone.blue);
+    text_ += operation;
 }
 
 void PdfPage::stroke_style(Tone tone, double width_mm) {
     if (!joins_set_) {
-        HPDF_Page_SetLineCap(page_, HPDF_BUTT_END);
-        HPDF_Page_SetLineJoin(page_, HPDF_ROUND_JOIN);
+        text_ += "0 J 1 j\n";
         joins_set_ = true;
     }
     if (!same(stroke_tone_, tone)) {
-        HPDF_Page_SetRGBStroke(page_, real(tone.red), real(tone.green), real(tone.blue));
+        colour(tone, "RG\n");
         stroke_tone_ = tone;
     }
     if (width_mm_ != width_mm) {
-        HPDF_Page_SetLineWidth(page_, points(width_mm));
+        length(width_mm);
+        text_ += "w\n";
         width_mm_ = width_mm;
     }
-    trouble_.check();
 }
 
 void PdfPage::fill_style(Tone tone) {
     if (!same(fill_tone_, tone)) {
-        HPDF_Page_SetRGBFill(page_, real(tone.red), real(tone.green), real(tone.blue));
+        colour(tone, "rg\n");
         fill_tone_ = tone;
     }
-    trouble_.check();
-}
-
-void PdfPage::start(Point p) {
-    HPDF_Page_MoveTo(page_, points(p.x_mm), points(p.y_mm));
-}
-
-void PdfPage::line(Point p) {
-    HPDF_Page_LineTo(page_, points(p.x_mm), points(p.y_mm));
 }
 
 void PdfPage::path(const Path& path) {
     const auto curve_to = [this](const CurveTo& curve) {
-        HPDF_Page_CurveTo(page_, points(curve.control_1.x_mm), points(curve.control_1.y_mm),
-                          points(curve.control_2.x_mm), points(curve.control_2.y_mm), points(curve.to.x_mm),
-                          points(curve.to.y_mm));
+        point(curve.control_1);
+        point(curve.control_2);
+        point(curve.to);
+        text_ += "c\n";
     };
-    start(path.start);
+    point(path.start);
+    text_ += "m\n";
     Point at = path.start;
     for (std::size_t i = 0; i < path.pieces.size(); ++i) {
         const Piece& piece = path.pieces[i];
@@ -113,47 +112,57 @@ void PdfPage::path(const Path& path) {
         } else if (const auto* curve = std::get_if<CurveTo>(&piece)) {
             curve_to(*curve);
         } else if (!(path.closed && i + 1 == path.pieces.size() && end_of(piece) == path.start)) {
-            line(end_of(piece)); // closing the path draws a last straight side by itself
+            point(end_of(piece)); // closing the path draws a last straight side by itself
+            text_ += "l\n";
         }
         at = end_of(piece);
     }
     if (path.closed) {
-        HPDF_Page_ClosePath(page_);
+        text_ += "h\n";
     }
-    trouble_.check();
 }
 
-void PdfPage::fill_inside(const Mark& mark, const Box& opening) {
-    const bool whole = opening.contains(bounds_of(mark));
+void PdfPage::fill_inside(const Mark& mark, const Box& box, const Box& opening) {
+    const bool whole = opening.contains(box);
     bool any = false;
     for (const Path& one : mark.paths) {
         if (whole) {
-            path(one);
-            any = any || !one.pieces.empty();
+            if (!one.pieces.empty()) {
+                path(one);
+                any = true;
+            }
             continue;
         }
         const std::vector<Point> ring = ring_inside(flattened(one, k_chord_mm), opening);
         if (ring.size() < 3) {
             continue;
         }
-        start(ring.front());
+        point(ring.front());
+        text_ += "m\n";
         for (std::size_t i = 1; i < ring.size(); ++i) {
-            line(ring[i]);
+            point(ring[i]);
+            text_ += "l\n";
         }
-        HPDF_Page_ClosePath(page_);
+        text_ += "h\n";
         any = true;
     }
     if (any) {
-        HPDF_Page_Fill(page_);
+        text_ += "f\n";
     }
 }
 
-void PdfPage::stroke_inside(const Mark& mark, const Box& opening) {
+void PdfPage::stroke_inside(const Mark& mark, const Box& box, const Box& opening) {
+    const bool whole = opening.contains(box);
     // Cut half a width outside the opening, the square end of any slant lies outside it too: the page's own clipping
     // then takes off what is left.
     const Box reach = opening.grown(mark.width_mm / 2);
     bool any = false;
     for (const Path& one : mark.paths) {
+        if (whole && !one.pieces.empty()) {
+            path(one);
+            any = true;
+            continue;
+        }
         for (const Path& part : line_inside(one, reach)) {
             if (!part.pieces.empty()) {
                 path(part);
@@ -162,49 +171,45 @@ void PdfPage::stroke_inside(const Mark& mark, const Box& opening) {
         }
     }
     if (any) {
-        HPDF_Page_Stroke(page_);
+        text_ += "S\n";
     }
 }
 
 void PdfPage::mark(const Mark& mark, const Box& opening) {
-    drawing_now_ = mark.name.empty() ? std::string{name_of(mark.layer)} : mark.name;
-    if (!opening.meets(bounds_of(mark))) {
+    drawing_now_ = mark.name.empty() ? name_of(mark.layer) : std::string_view{mark.name};
+    const Box box = bounds_of(mark);
+    if (!opening.meets(box)) {
         return;
     }
     if (mark.filled) {
         fill_style(tone_of(mark.layer));
-        fill_inside(mark, opening);
+        fill_inside(mark, box, opening);
     } else {
         stroke_style(tone_of(mark.layer), mark.width_mm);
-        stroke_inside(mark, opening);
+        stroke_inside(mark, box, opening);
     }
-    trouble_.check();
 }
 
 void PdfPage::open(const Box& opening) {
     drawing_now_ = "the opening";
-    HPDF_Page_GSave(page_);
-    HPDF_Page_Rectangle(page_, points(opening.left_mm), points(opening.bottom_mm), points(opening.width_mm()),
-                        points(opening.height_mm()));
-    HPDF_Page_Clip(page_);
-    HPDF_Page_EndPath(page_);
-    trouble_.check();
+    text_ += "q ";
+    point({opening.left_mm, opening.bottom_mm});
+    point({opening.width_mm(), opening.height_mm()});
+    text_ += "re W n\n";
 }
 
 void PdfPage::close() {
-    HPDF_Page_GRestore(page_);
+    text_ += "Q\n";
     // The page is again as it was before it was opened, whatever was set since.
     stroke_tone_.reset();
     fill_tone_.reset();
     width_mm_ = -1;
     joins_set_ = false;
-    trouble_.check();
 }
 
-void PdfPage::note(const Note& note, HPDF_Font font) {
+void PdfPage::note(const Note& note, const PdfFont& font) {
     drawing_now_ = note.text;
-    const std::string text = printable_text(note.text, sheet_font(note.bold));
-    if (text.empty()) {
+    if (note.text.empty()) {
         return;
     }
     const double width_mm = note_width_mm(note.text, note.size_mm, note.bold);
@@ -214,13 +219,28 @@ void PdfPage::note(const Note& note, HPDF_Font font) {
         throw ExportError(fmt::format("The note “{}” has no usable size or turn, so no PDF was made.", note.text));
     }
     fill_style(tone_of(Layer::engrave));
-    HPDF_Page_BeginText(page_);
-    HPDF_Page_SetFontAndSize(page_, font, points(note.size_mm));
-    HPDF_Page_SetTextMatrix(page_, real(c), real(s), real(-s), real(c), points(note.at.x_mm - back_mm * c),
-                            points(note.at.y_mm - back_mm * s));
-    HPDF_Page_ShowText(page_, text.c_str());
-    HPDF_Page_EndText(page_);
-    trouble_.check();
+    text_ += "BT /";
+    text_ += HPDF_Page_GetLocalFontName(page_, font.get());
+    text_ += ' ';
+    length(note.size_mm);
+    // A long line's end must not drift with a coarse turn, so the turn has more decimals than `number` gives.
+    text_ += fmt::format("Tf {:.7f} {:.7f} {:.7f} {:.7f} ", c, s, -s, c);
+    point({note.at.x_mm - back_mm * c, note.at.y_mm - back_mm * s});
+    text_ += "Tm " + font.shown(note.text) + " Tj ET\n";
+}
+
+void PdfPage::finish() {
+    uLongf length = compressBound(static_cast<uLong>(text_.size()));
+    std::string packed(length, '\0');
+    if (compress2(reinterpret_cast<Bytef*>(packed.data()), &length, reinterpret_cast<const Bytef*>(text_.data()),
+                  static_cast<uLong>(text_.size()), Z_BEST_SPEED) != Z_OK) {
+        throw ExportError("The PDF could not be made: no memory is left.");
+    }
+    auto* attributes = static_cast<HPDF_PageAttr>(page_->attr);
+    HPDF_Stream_Write(attributes->stream, reinterpret_cast<const HPDF_BYTE*>(packed.data()),
+                      static_cast<HPDF_UINT>(length));
+    attributes->contents->filter = HPDF_STREAM_FILTER_NONE;
+    attributes->contents->write_fn = &write_filter;
 }
 
 } // namespace dialwright::layout

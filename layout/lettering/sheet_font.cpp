@@ -7,6 +7,7 @@
 #include <ft2build.h>
 #include FT_FREETYPE_H
 #include FT_ADVANCES_H
+#include <hb-subset.h>
 
 #include <memory>
 
@@ -14,6 +15,8 @@ namespace dialwright::layout {
 namespace {
 
 using Pattern = std::unique_ptr<FcPattern, decltype(&FcPatternDestroy)>;
+
+using Face = std::unique_ptr<hb_face_t, decltype(&hb_face_destroy)>;
 
 struct Found {
     std::string family, file;
@@ -57,7 +60,8 @@ std::string file_of_sheet_font(bool bold) {
 }
 
 SheetFont read_sheet_font(bool bold) {
-    SheetFont font{file_of_sheet_font(bold), {}};
+    SheetFont font;
+    font.file = file_of_sheet_font(bold);
     FT_Library library = nullptr;
     FT_Face face = nullptr;
     if (FT_Init_FreeType(&library) != 0) {
@@ -68,6 +72,15 @@ SheetFont read_sheet_font(bool bold) {
         throw LetteringError("The font file " + font.file + " can't be read.");
     }
     const std::unique_ptr<FT_FaceRec_, decltype(&FT_Done_Face)> face_end{face, &FT_Done_Face};
+    const auto thousandths = [face](FT_Long units) { return static_cast<int>(units * 1000 / face->units_per_EM); };
+    const char* name = FT_Get_Postscript_Name(face);
+    font.name = name != nullptr ? name : "SheetFont";
+    font.ascent = thousandths(face->ascender);
+    font.descent = thousandths(face->descender);
+    font.left = thousandths(face->bbox.xMin);
+    font.bottom = thousandths(face->bbox.yMin);
+    font.right = thousandths(face->bbox.xMax);
+    font.top = thousandths(face->bbox.yMax);
     font.advances.reserve(4096);
     FT_UInt glyph = 0;
     for (FT_ULong c = FT_Get_First_Char(face, &glyph); glyph != 0; c = FT_Get_Next_Char(face, c, &glyph)) {
@@ -88,6 +101,42 @@ const SheetFont& sheet_font(bool bold) {
     }
     static const SheetFont k_regular = read_sheet_font(false);
     return k_regular;
+}
+
+FontSubset subset_of(const SheetFont& font, const std::set<char32_t>& characters) {
+    const std::unique_ptr<hb_blob_t, decltype(&hb_blob_destroy)> whole{hb_blob_create_from_file(font.file.c_str()),
+                                                                       &hb_blob_destroy};
+    const Face face{hb_face_create(whole.get(), 0), &hb_face_destroy};
+    const std::unique_ptr<hb_subset_input_t, decltype(&hb_subset_input_destroy)> wanted{
+        hb_subset_input_create_or_fail(), &hb_subset_input_destroy};
+    if (!wanted) {
+        throw LetteringError("The font of the notes could not be cut down: no memory is left.");
+    }
+    for (const char32_t character : characters) {
+        hb_set_add(hb_subset_input_unicode_set(wanted.get()), character);
+    }
+    // Notes are set glyph by glyph, so what the font knows of ligatures and kerning is left out.
+    for (const char* table : {"GSUB", "GPOS", "GDEF"}) {
+        hb_set_add(hb_subset_input_set(wanted.get(), HB_SUBSET_SETS_DROP_TABLE_TAG), hb_tag_from_string(table, 4));
+    }
+    hb_subset_input_set_flags(wanted.get(), HB_SUBSET_FLAGS_NO_HINTING | HB_SUBSET_FLAGS_NOTDEF_OUTLINE);
+    const Face part{hb_subset_or_fail(face.get(), wanted.get()), &hb_face_destroy};
+    if (!part) {
+        throw LetteringError("The font file " + font.file + " can't be read.");
+    }
+    FontSubset subset;
+    const std::unique_ptr<hb_blob_t, decltype(&hb_blob_destroy)> bytes{hb_face_reference_blob(part.get()),
+                                                                       &hb_blob_destroy};
+    unsigned int length = 0;
+    const char* data = hb_blob_get_data(bytes.get(), &length);
+    subset.file.assign(data, length);
+    const std::unique_ptr<hb_font_t, decltype(&hb_font_destroy)> sized{hb_font_create(part.get()), &hb_font_destroy};
+    for (const char32_t character : characters) {
+        hb_codepoint_t glyph = 0;
+        hb_font_get_nominal_glyph(sized.get(), character, &glyph);
+        subset.glyphs[character] = glyph;
+    }
+    return subset;
 }
 
 char32_t take_character(std::string_view& text) {

@@ -24,6 +24,7 @@ constexpr double k_names_mm = 4.4; // a strip of neighbours' names
 constexpr double k_small_mm = 2.6, k_small_line_mm = 3.5;
 constexpr double k_title_mm = 3.4, k_title_line_mm = 4.4;
 constexpr double k_label_mm = 7.0, k_label_room_mm = 20.0;
+constexpr double k_longest_line_mm = 190.0; // longer ones are hard to read
 constexpr double k_square_mm = 10.0;
 constexpr double k_inch_mm = 25.4;
 
@@ -65,7 +66,8 @@ double notes_height(const Surround& surround) {
            static_cast<double>(surround.note_lines.size()) * k_small_line_mm + 1.0;
 }
 
-void set_notes(Surround& surround, const SheetWords& words, double width_mm) {
+void set_notes(Surround& surround, const SheetWords& words, double room_mm) {
+    const double width_mm = std::min(room_mm, k_longest_line_mm);
     surround.notes_width_mm = width_mm;
     surround.title_lines =
         words.title.empty() ? std::vector<std::string>{} : wrapped(words.title, width_mm, k_title_mm, true);
@@ -194,7 +196,7 @@ Surround surround_of(double width_mm, double height_mm, double margin_mm, bool i
     surround.right_mm = surround.top_mm = surround.tiled ? k_names_mm : k_gap_mm;
     const double names = surround.tiled ? k_names_mm : 1.0;
     const double bar_block = k_bar_up_mm + bar_down(inches);
-    surround.left_mm = std::max(names + bar_block, k_square_mm + 2 * k_hair_mm + 0.8);
+    surround.left_mm = std::max(names + bar_block, k_square_mm + 2 * k_hair_mm + 1.5);
     const double width = width_mm - 2 * margin_mm - surround.left_mm - surround.right_mm;
     surround.bar_x_mm = bar_for(width, k_label_room_mm);
     surround.bar_y_mm = bar_for(height_mm - 2 * margin_mm - surround.top_mm, 45.0);
