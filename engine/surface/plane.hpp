@@ -25,7 +25,7 @@ class Plane {
     /// @param shifted_mm  the nodus' foot, plate frame
     /// @return mm in the plate frame; nothing where the plate's face is unlit
     /// Accuracy: 1e-9 of the result while the Sun is 0.01° or more above the plate's plane.
-    /// Source: Meeus, Astronomical Algorithms, 2nd ed. 1998, ch. 58. Test: tests/published/meeus_58.txt
+    /// Source: Meeus, Astronomical Algorithms, 2nd ed. 1998, ch. 58. Test: tests/published/dial/meeus_58.txt
     [[nodiscard]] std::optional<PlatePoint> shadow_of_nodus(const SiteDirection& sun, PlatePoint shifted_mm = {}) const {
         const double height = light(sun);
         if (!(height > 0))

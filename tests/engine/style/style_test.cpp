@@ -1,7 +1,6 @@
 // SPDX-License-Identifier: MIT
 #include "engine/style/style.hpp"
 #include "tests/engine/random_plates.hpp"
-#include "tests/published/published.hpp"
 
 #include <Eigen/Geometry>
 #include <catch2/catch.hpp>
@@ -34,17 +33,6 @@ const Attitude k_level{};
 Attitude wall(Angle declination_west_of_south) { return {Angle::degrees(180) + declination_west_of_south, Angle{}}; }
 
 } // namespace
-
-TEST_CASE("Waugh's table for a level dial", "[engine][style][published]") {
-    const test::Published book{"waugh_level.txt"};
-    const Dial dial{Angle::degrees(book.value("latitude_deg")), k_level};
-    for (const auto& row : book.rows("hour")) {
-        const double expected = row.at(1) + row.at(2) / 60;
-        CAPTURE(row.at(0));
-        CHECK_THAT(dial.line(Angle::hours(row.at(0))).in_degrees(), WithinAbs(expected, book.value("tolerance_deg")));
-        CHECK_THAT(360 - dial.line(Angle::hours(-row.at(0))).in_degrees(), WithinAbs(expected, book.value("tolerance_deg")));
-    }
-}
 
 TEST_CASE("Level and direct south dials by the classical formulas", "[engine][style][classical]") {
     constexpr int k_seed = 201;

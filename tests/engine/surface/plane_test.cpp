@@ -1,8 +1,6 @@
 // SPDX-License-Identifier: MIT
 #include "engine/surface/plane.hpp"
-#include "engine/style/style.hpp"
 #include "tests/engine/random_plates.hpp"
-#include "tests/published/published.hpp"
 
 #include <catch2/catch.hpp>
 
@@ -27,27 +25,6 @@ void require_same(const std::optional<PlatePoint>& a, const std::optional<PlateP
 }
 
 } // namespace
-
-TEST_CASE("Meeus' plane dial", "[engine][surface][published]") {
-    const test::Published book{"meeus_58.txt"};
-    const Angle latitude = Angle::degrees(book.value("latitude_deg"));
-    const Attitude attitude{Angle::degrees(book.value("normal_azimuth_deg")),
-                            Angle::degrees(book.value("normal_altitude_deg"))};
-    const Plane plane{frame_of(attitude), book.value("nodus_height")};
-    const double tolerance = book.value("shadow_tolerance");
-    for (const auto& row : book.rows("shadow")) {
-        const auto point = plane.shadow_of_nodus(to_site({Angle::degrees(row.at(1)), Angle::degrees(row.at(0))}, latitude));
-        REQUIRE(point);
-        CHECK_THAT(point->u_mm, WithinAbs(row.at(2), tolerance));
-        CHECK_THAT(point->v_mm, WithinAbs(row.at(3), tolerance));
-    }
-    const Style style = style_of(plane.frame(), plane.nodus_height_mm(), latitude);
-    REQUIRE(style.centre);
-    CHECK_THAT(style.centre->u_mm, WithinAbs(book.rows("centre").front().at(0), tolerance));
-    CHECK_THAT(style.centre->v_mm, WithinAbs(book.rows("centre").front().at(1), tolerance));
-    CHECK_THAT(style.height.in_degrees(),
-               WithinAbs(book.value("style_height_deg"), book.value("style_height_tolerance_deg")));
-}
 
 TEST_CASE("Shadow, nodus and Sun lie on one straight line", "[engine][surface]") {
     constexpr int k_seed = 111;
