@@ -59,7 +59,7 @@ class MeanYear {
     [[nodiscard]] std::optional<double> day_of_declination(Angle declination, bool sun_going_north) const;
 
   private:
-    static constexpr int k_harmonics = 7;
+    static constexpr int k_harmonics = 6;
     struct Harmonic { // radians
         double declination_cos = 0.0, declination_sin = 0.0;
         double equation_cos = 0.0, equation_sin = 0.0;
