@@ -141,7 +141,8 @@ double reading_of(const DialPlan& plan, const MeanYear& year, const SkyPlace& su
         return time_of(plan.hours.time, sun.hour_angle, plan.site, plan.zone_meridian);
     const double june = year.june_solstice_day(), december = year.december_solstice_day();
     const bool going_north = day_of_year < june || day_of_year >= december;
-    const Angle declination = std::clamp(sun.declination, -year.obliquity(), year.obliquity());
+    // An instant's own Sun may pass the mean year's solstices by some seconds of arc.
+    const Angle declination = std::clamp(sun.declination, year.at(december).declination, year.at(june).declination);
     const double day = year.day_of_declination(declination, going_north).value_or(day_of_year);
     const Angle mean_hour_angle = sun.hour_angle - year.at(day).equation_of_time;
     return time_of(HourTime::clock, mean_hour_angle, plan.site, plan.zone_meridian);
