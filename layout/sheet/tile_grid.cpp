@@ -15,6 +15,10 @@ Point turn_quarter(Point p) {
     return {-p.y_mm, p.x_mm};
 }
 
+Box turn_quarter(const Box& box) {
+    return box.empty() ? box : Box{-box.top_mm, box.left_mm, -box.bottom_mm, box.right_mm};
+}
+
 /// First and last index of the boxes that an interval may come into, a box wider on both sides for rounding.
 struct Range {
     int first, last;
@@ -44,6 +48,14 @@ class Occupancy {
                 }
             }
         }
+    }
+    [[nodiscard]] bool any_free(const Box& box) {
+        bool any = false;
+        each_free(box, [&](const Box&) {
+            any = true;
+            return false;
+        });
+        return any;
     }
     [[nodiscard]] std::vector<bool> take() { return std::move(found_); }
 
@@ -131,6 +143,10 @@ TileGrid grid_over(const Box& work, double width_mm, double height_mm, double ov
 std::vector<bool> occupied(const TileGrid& grid, const FlatDrawing& drawing, bool turned) {
     Occupancy occupancy{grid};
     for (const FlatDrawing::Part& part : drawing.parts()) {
+        // Most marks stand where others have been found already.
+        if (!occupancy.any_free(turned ? turn_quarter(part.box) : part.box)) {
+            continue;
+        }
         std::vector<std::vector<Point>> lines = part.lines;
         Box box;
         for (std::vector<Point>& line : lines) {
