@@ -5,6 +5,7 @@
 #include "layout/plate/plate_spec.hpp"
 
 #include <chrono>
+#include <map>
 #include <optional>
 #include <string>
 #include <vector>
@@ -80,8 +81,13 @@ struct Assumption {
     std::string why;
 };
 
+struct FilePlace {
+    int line = 1, column = 1;
+};
+
 struct Design {
     std::string file;
+    std::map<std::string, FilePlace> where; ///< of each key and section that the file gives: "place: latitude"
     std::string title;
     Place place;
     Dial dial;

@@ -18,75 +18,6 @@ const Entry* Node::find(std::string_view key) const {
 
 namespace {
 
-/// Bytes of the UTF-8 character that starts at `text`[i]; 0 when there is none (a stray or missing byte, an overlong
-/// form, a surrogate, or beyond U+10FFFF). Source: RFC 3629, section 4.
-std::size_t utf8_length(std::string_view text, std::size_t i) {
-    const auto byte = [&](std::size_t k) { return k < text.size() ? static_cast<unsigned char>(text[k]) : 0U; };
-    const auto follows = [&](std::size_t k, unsigned low = 0x80, unsigned high = 0xBF) {
-        return byte(k) >= low && byte(k) <= high;
-    };
-    const unsigned first = byte(i);
-    if (first < 0x80)
-        return 1;
-    if (first >= 0xC2 && first <= 0xDF)
-        return follows(i + 1) ? 2 : 0;
-    if (first >= 0xE0 && first <= 0xEF) {
-        const bool second = follows(i + 1, first == 0xE0 ? 0xA0 : 0x80, first == 0xED ? 0x9F : 0xBF);
-        return second && follows(i + 2) ? 3 : 0;
-    }
-    if (first >= 0xF0 && first <= 0xF4) {
-        const bool second = follows(i + 1, first == 0xF0 ? 0x90 : 0x80, first == 0xF4 ? 0x8F : 0xBF);
-        return second && follows(i + 2) && follows(i + 3) ? 4 : 0;
-    }
-    return 0;
-}
-
-/// U+0000 to U+001F and U+007F to U+009F, but tab, line end and next line (U+0085).
-bool is_control(std::string_view text, std::size_t i) {
-    const auto byte = static_cast<unsigned char>(text[i]);
-    if (byte == '\t' || byte == '\n')
-        return false;
-    if (byte == 0xC2 && i + 1 < text.size()) {
-        const auto second = static_cast<unsigned char>(text[i + 1]);
-        return second < 0xA0 && second != 0x85;
-    }
-    return byte < 0x20 || byte == 0x7F;
-}
-
-/// Without a byte order mark, and every line end a line feed, so that lines are counted as an editor counts them.
-std::string plain_lines(std::string_view text) {
-    if (text.starts_with("\xEF\xBB\xBF"))
-        text.remove_prefix(3);
-    std::string plain;
-    plain.reserve(text.size());
-    for (std::size_t i = 0; i < text.size(); ++i) {
-        if (text[i] != '\r')
-            plain += text[i];
-        else if (i + 1 == text.size() || text[i + 1] != '\n')
-            plain += '\n';
-    }
-    return plain;
-}
-
-std::optional<DesignError> bad_character(std::string_view text, const std::string& file) {
-    Position at;
-    for (std::size_t i = 0; i < text.size();) {
-        const std::size_t length = utf8_length(text, i);
-        if (length == 0)
-            return DesignError{
-                file, at.line, at.column, "", "this byte is not UTF-8 text", "save the file with the encoding UTF-8"};
-        if (is_control(text, i))
-            return DesignError{
-                file, at.line, at.column, "", "there is a control character here", "save the file as plain UTF-8 text"};
-        if (text[i] == '\n')
-            at = {at.line + 1, 1};
-        else
-            ++at.column;
-        i += length;
-    }
-    return std::nullopt;
-}
-
 /// Thrown by the builder where going on would only bring confusion; the error is recorded already.
 struct Stop {};
 
@@ -115,6 +46,11 @@ class Builder : public YAML::EventHandler {
                 static_cast<int>(std::count_if(before.begin(), before.end(), starts_character)) + 1};
     }
 
+    /// Where the innermost list or mapping starts that is not closed yet.
+    [[nodiscard]] std::optional<Position> last_opened() const {
+        return open_.empty() ? std::nullopt : std::optional{open_.back().node.at};
+    }
+
     void error(Position at, std::string message, std::string hint) {
         errors_.push_back({file_, at.line, at.column, "", std::move(message), std::move(hint)});
     }
@@ -128,15 +64,20 @@ class Builder : public YAML::EventHandler {
     }
     void OnDocumentEnd() override {}
     void OnAnchor(const YAML::Mark& mark, const std::string& name) override {
-        error(place_of(mark), "\"&" + name + "\" is a YAML anchor, which a design file does without",
-              "write the value where it is needed; put quotes round a text that starts with &");
+        if (!std::exchange(said_anchor_, true))
+            error(place_of(mark), "\"&" + name + "\" is a YAML anchor, which a design file does without",
+                  "write the value where it is needed; put quotes round a text that starts with &");
     }
     void OnAlias(const YAML::Mark& mark, YAML::anchor_t) override {
-        error(place_of(mark), "this is a YAML alias, which a design file does without",
-              "write the value here; put quotes round a text that starts with *");
+        if (!std::exchange(said_alias_, true))
+            error(place_of(mark), "this is a YAML alias, which a design file does without",
+                  "write the value here; put quotes round a text that starts with *");
         if (awaits_key())
             throw Stop{};
-        place(Node{});
+        Node node;
+        node.kind = Node::Kind::refused;
+        node.at = place_of(mark);
+        place(std::move(node));
     }
     void OnNull(const YAML::Mark& mark, YAML::anchor_t) override {
         if (awaits_key()) {
@@ -150,6 +91,7 @@ class Builder : public YAML::EventHandler {
     void OnScalar(const YAML::Mark& mark, const std::string& tag, YAML::anchor_t, const std::string& value) override {
         const Position at = place_of(mark);
         refuse_tag(tag, at);
+        refuse_unclosed_quote(mark, at);
         if (awaits_key()) {
             open_key(at, value);
             return;
@@ -191,11 +133,38 @@ class Builder : public YAML::EventHandler {
                   "leave the tag out; put quotes round a text that starts with !");
     }
 
+    /// yaml-cpp takes all the rest of the file for the text of a quote that is never closed.
+    void refuse_unclosed_quote(const YAML::Mark& mark, Position at) {
+        const auto start = static_cast<std::size_t>(std::max(mark.pos, 0));
+        if (start >= text_.size() || (text_[start] != '"' && text_[start] != '\''))
+            return;
+        const char quote = text_[start];
+        for (std::size_t i = start + 1; i < text_.size(); ++i) {
+            if (quote == '"' && text_[i] == '\\')
+                ++i;
+            else if (text_[i] == quote && quote == '\'' && i + 1 < text_.size() && text_[i + 1] == quote)
+                ++i;
+            else if (text_[i] == quote)
+                return;
+        }
+        error(at, "a quoted text is never closed", "close it with the quote that it starts with");
+        throw Stop{};
+    }
+
+    /// "plate: diameter" for a key of the innermost mapping.
+    [[nodiscard]] std::string path_to(const std::string& key) const {
+        std::string path;
+        for (const Open& open : open_)
+            if (open.has_key)
+                path += open.key + ": ";
+        return path + key;
+    }
+
     void open_key(Position at, const std::string& key) {
         Open& open = open_.back();
         const Entry* before = open.node.find(key);
         if (before != nullptr)
-            errors_.push_back({file_, at.line, at.column, key,
+            errors_.push_back({file_, at.line, at.column, path_to(key),
                                "this key is given twice, first on line " + std::to_string(before->at.line),
                                "keep one of them"});
         open.again = before != nullptr;
@@ -256,7 +225,7 @@ class Builder : public YAML::EventHandler {
     std::optional<Node> root_;
     std::vector<DesignError> errors_;
     std::size_t nodes_ = 0;
-    bool started_ = false;
+    bool started_ = false, said_anchor_ = false, said_alias_ = false;
 };
 
 /// yaml-cpp's own messages in a maker's words.
@@ -275,6 +244,11 @@ std::pair<std::string, std::string> in_plain_words(const std::string& message) {
         return {"a [ is never closed", "close it with ]"};
     if (message == YAML::ErrorMsg::FLOW_END)
         return {"a ] or } closes nothing", "take it out, or put quotes round the text"};
+    if (message == YAML::ErrorMsg::UNKNOWN_ANCHOR)
+        return {"this is a YAML alias, which a design file does without",
+                "write the value here; put quotes round a text that starts with *"};
+    if (message.starts_with(YAML::ErrorMsg::INVALID_ESCAPE))
+        return {"a \\ in double quotes starts a code that is not known", "write \\\\, or use single quotes"};
     if (message == YAML::ErrorMsg::EOF_IN_SCALAR)
         return {"a quoted text is never closed", "close it with the quote that it starts with"};
     if (message == YAML::ErrorMsg::TAB_IN_INDENTATION)
@@ -286,17 +260,17 @@ std::pair<std::string, std::string> in_plain_words(const std::string& message) {
     return {"the file can't be followed here (" + message + ")", "check the line's quotes, colons and indentation"};
 }
 
-/// A tab before the first word of the line that an error is on.
-bool starts_with_tab(std::string_view text, int line) {
+/// Where a tab stands among the spaces that a line starts with.
+std::optional<Position> indenting_tab(std::string_view text, int line) {
     std::size_t start = 0;
     for (int i = 1; i < line && start != std::string_view::npos; ++i) {
         start = text.find('\n', start);
         start = start == std::string_view::npos ? start : start + 1;
     }
-    if (start == std::string_view::npos)
-        return false;
     const std::size_t word = text.find_first_not_of(' ', start);
-    return word != std::string_view::npos && text[word] == '\t';
+    if (start == std::string_view::npos || word == std::string_view::npos || text[word] != '\t')
+        return std::nullopt;
+    return Position{line, static_cast<int>(word - start) + 1};
 }
 
 DesignError at_top(const std::string& file, std::string message, std::string hint) {
@@ -311,8 +285,8 @@ DocumentReading read_document(std::string_view text, const std::string& file) {
     if (text.size() > k_largest_file_bytes)
         return {std::nullopt, {at_top(file, "the file is larger than 1 MB", "a design needs a few kB at most")}};
     const std::string plain = plain_lines(text);
-    if (auto bad = bad_character(plain, file))
-        return {std::nullopt, {*bad}};
+    if (const auto bad = first_bad_character(plain))
+        return {std::nullopt, {{file, bad->at.line, bad->at.column, "", bad->message, bad->hint}}};
 
     Builder builder{plain, file};
     bool whole = false;
@@ -324,10 +298,12 @@ DocumentReading read_document(std::string_view text, const std::string& file) {
         whole = true;
     } catch (const Stop&) {
     } catch (const YAML::Exception& trouble) {
-        const Position at = builder.place_of(trouble.mark);
-        const auto [message, hint] = in_plain_words(
-            starts_with_tab(plain, at.line) ? std::string{YAML::ErrorMsg::TAB_IN_INDENTATION} : trouble.msg);
-        builder.error(at, message, hint);
+        const Position mark = builder.place_of(trouble.mark);
+        const std::optional<Position> tab = indenting_tab(plain, mark.line);
+        const auto [message, hint] = in_plain_words(tab ? YAML::ErrorMsg::TAB_IN_INDENTATION : trouble.msg);
+        const bool unclosed =
+            trouble.msg == YAML::ErrorMsg::END_OF_MAP_FLOW || trouble.msg == YAML::ErrorMsg::END_OF_SEQ_FLOW;
+        builder.error(unclosed ? builder.last_opened().value_or(mark) : tab.value_or(mark), message, hint);
     }
     DocumentReading reading = builder.take();
     if (!whole) {
@@ -344,21 +320,6 @@ DocumentReading read_document(std::string_view text, const std::string& file) {
         reading.root.reset();
     }
     return reading;
-}
-
-std::string quoted(std::string_view text) {
-    constexpr std::size_t k_longest = 60;
-    std::string shown = "\"";
-    for (std::size_t i = 0; i < text.size();) {
-        const std::size_t length = std::max<std::size_t>(utf8_length(text, i), 1);
-        if (i + length > k_longest) {
-            shown += "…";
-            break;
-        }
-        shown += text[i] == '\n' || text[i] == '\t' ? std::string{" "} : std::string{text.substr(i, length)};
-        i += length;
-    }
-    return shown + '"';
 }
 
 } // namespace dialwright::cli

@@ -2,6 +2,7 @@
 #pragma once
 
 #include "cli/design/design_error.hpp"
+#include "cli/design/plain_text.hpp"
 
 #include <optional>
 #include <string>
@@ -10,17 +11,12 @@
 
 namespace dialwright::cli {
 
-/// A place in the text, from 1; columns count characters, not bytes.
-struct Position {
-    int line = 1, column = 1;
-    friend constexpr auto operator<=>(const Position&, const Position&) = default;
-};
-
 struct Entry;
 
 /// A piece of a design file: a text, a list, or a mapping of keys to pieces. Numbers stay text, exactly as written.
 struct Node {
-    enum class Kind { empty, text, list, mapping };
+    /// `refused` stands for a value that has had its error already, such as an alias: readers pass over it.
+    enum class Kind { empty, text, list, mapping, refused };
     Kind kind = Kind::empty;
     Position at; ///< where it starts; of an empty value, where its key stands
     std::string text;
@@ -50,8 +46,5 @@ inline constexpr std::size_t k_most_nodes = 20'000;
 /// anchors and aliases, tags, keys that are not text, deep nesting, too many pieces, a second document. A byte order
 /// mark and any kind of line end are accepted. Never throws for what is in the text.
 [[nodiscard]] DocumentReading read_document(std::string_view text, const std::string& file);
-
-/// `text` for a message: in double quotes, on one line, cut short when long.
-[[nodiscard]] std::string quoted(std::string_view text);
 
 } // namespace dialwright::cli

@@ -1,7 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "cli/design/quantity.hpp"
+#include "cli/design/plain_text.hpp"
 
-#include "cli/design/document.hpp"
 #include "cli/design/scanner.hpp"
 
 #include <fmt/format.h>
@@ -31,34 +31,34 @@ constexpr std::array k_length_units = {
 /// "14", "14.5", "1/2", "14 1/2".
 Read<double> scan_mixed_number(Scanner& scan, std::string_view whole_text) {
     if (!scan.number_next())
-        return Trouble{quoted(whole_text) + " is not a length", k_length_hint};
+        return Trouble{in_quotes(whole_text) + " is not a length", k_length_hint};
     Scrap first = scan.take();
     double sum = 0.0;
     if (scan.number_next() && scan.sign_next("/", 1)) {
         if (!first.whole)
-            return Trouble{quoted(whole_text) + " has a fraction after a decimal point", k_length_hint};
+            return Trouble{in_quotes(whole_text) + " has a fraction after a decimal point", k_length_hint};
         sum = first.number;
         first = scan.take();
     }
     if (!scan.take_sign("/"))
         return sum + first.number;
     if (!scan.number_next() || !first.whole)
-        return Trouble{quoted(whole_text) + " has half a fraction", "write it as in 14 1/2 in"};
+        return Trouble{in_quotes(whole_text) + " has half a fraction", "write it as in 14 1/2 in"};
     const Scrap below = scan.take();
     if (below.number <= 0.0 || !below.whole)
-        return Trouble{quoted(whole_text) + " has a fraction that divides by " + below.text,
+        return Trouble{in_quotes(whole_text) + " has a fraction that divides by " + below.text,
                        "write it as in 14 1/2 in"};
     return sum + first.number / below.number;
 }
 
 Read<double> scan_unit(Scanner& scan, std::string_view whole_text) {
     if (scan.at_end() || scan.number_next())
-        return Trouble{quoted(whole_text) + " has no unit", k_length_hint};
+        return Trouble{in_quotes(whole_text) + " has no unit", k_length_hint};
     const std::string spelling = scan.take().text;
     const auto* unit = std::find_if(k_length_units.begin(), k_length_units.end(),
                                     [&](const LengthUnit& u) { return u.spelling == spelling; });
     if (unit == k_length_units.end())
-        return Trouble{quoted(whole_text) + ": " + quoted(spelling) + " is not a unit of length",
+        return Trouble{in_quotes(whole_text) + ": " + in_quotes(spelling) + " is not a unit of length",
                        "use mm, cm, m, in or ft"};
     return unit->mm;
 }
@@ -84,7 +84,7 @@ Read<double> length_mm(std::string_view text) {
             return unit;
         // Only "1 ft 2 in" has two parts.
         if (last_unit != 0.0 && !(last_unit == 304.8 && *unit == 25.4))
-            return Trouble{quoted(text) + " has two lengths where one is wanted", k_length_hint};
+            return Trouble{in_quotes(text) + " has two lengths where one is wanted", k_length_hint};
         sum += *number * *unit;
         last_unit = *unit;
         // A full stop after an abbreviated inch is a habit of writing, not a fault.
@@ -92,7 +92,8 @@ Read<double> length_mm(std::string_view text) {
             scan.take_sign(".");
     } while (scan.number_next());
     if (!scan.at_end())
-        return Trouble{quoted(text) + " goes on after the length with " + quoted(scan.rest_word()), k_length_hint};
+        return Trouble{in_quotes(text) + " goes on after the length with " + in_quotes(scan.rest_word()),
+                       k_length_hint};
     return negative ? -sum : sum;
 }
 
@@ -103,18 +104,18 @@ Read<int> minutes(std::string_view text) {
         return read.trouble();
     Scanner scan = *read;
     if (!scan.number_next())
-        return Trouble{quoted(text) + " is not a number of minutes", hint};
+        return Trouble{in_quotes(text) + " is not a number of minutes", hint};
     const Scrap number = scan.take();
     if (scan.at_end())
-        return Trouble{quoted(text) + " has no unit", hint};
+        return Trouble{in_quotes(text) + " has no unit", hint};
     const bool in_hours = scan.take_word("h") || scan.take_word("hour") || scan.take_word("hours");
     if (!in_hours && !scan.take_word("min") && !scan.take_word("minute") && !scan.take_word("minutes"))
-        return Trouble{quoted(text) + ": " + quoted(scan.rest_word()) + " is not a unit of time", hint};
+        return Trouble{in_quotes(text) + ": " + in_quotes(scan.rest_word()) + " is not a unit of time", hint};
     if (!scan.at_end())
-        return Trouble{quoted(text) + " goes on after the minutes with " + quoted(scan.rest_word()), hint};
+        return Trouble{in_quotes(text) + " goes on after the minutes with " + in_quotes(scan.rest_word()), hint};
     const double value = number.number * (in_hours ? 60.0 : 1.0);
     if (value != std::floor(value) || value > 1440.0)
-        return Trouble{quoted(text) + " is not a whole number of minutes within a day", hint};
+        return Trouble{in_quotes(text) + " is not a whole number of minutes within a day", hint};
     return static_cast<int>(value);
 }
 
@@ -126,7 +127,7 @@ Read<bool> yes_or_no(std::string_view text) {
         return true;
     if (word == "no" || word == "false")
         return false;
-    return Trouble{quoted(text) + " is neither yes nor no", "write yes or no"};
+    return Trouble{in_quotes(text) + " is neither yes nor no", "write yes or no"};
 }
 
 Read<int> whole_number(std::string_view text) {
@@ -135,10 +136,10 @@ Read<int> whole_number(std::string_view text) {
         return read.trouble();
     Scanner scan = *read;
     if (!scan.number_next())
-        return Trouble{quoted(text) + " is not a whole number", "write it as in 4"};
+        return Trouble{in_quotes(text) + " is not a whole number", "write it as in 4"};
     const Scrap number = scan.take();
     if (!scan.at_end() || !number.whole || number.number > std::numeric_limits<int>::max())
-        return Trouble{quoted(text) + " is not a whole number", "write it as in 4"};
+        return Trouble{in_quotes(text) + " is not a whole number", "write it as in 4"};
     return static_cast<int>(number.number);
 }
 

@@ -1,5 +1,5 @@
 // SPDX-License-Identifier: MIT
-#include "cli/design/document.hpp"
+#include "cli/design/plain_text.hpp"
 #include "cli/design/quantity.hpp"
 #include "cli/design/scanner.hpp"
 
@@ -68,9 +68,9 @@ Read<int> scan_hemisphere(Scanner& scan, const Circle& circle, std::string_view 
     const std::string letters = compass_letters(scan.rest_word());
     const std::string hint = fmt::format("write it as in {}", circle.example);
     if (letters.size() == 1 && circle.other.find(letters) != std::string_view::npos)
-        return Trouble{fmt::format("{} ends in a letter that no {} has", quoted(text), circle.name), hint};
+        return Trouble{fmt::format("{} ends in a letter that no {} has", in_quotes(text), circle.name), hint};
     if (letters != circle.plus && letters != circle.minus)
-        return Trouble{fmt::format("{} is not a {}", quoted(text), circle.name), hint};
+        return Trouble{fmt::format("{} is not a {}", in_quotes(text), circle.name), hint};
     scan.take();
     return letters == circle.plus ? 1 : -1;
 }
@@ -95,11 +95,12 @@ Read<Angle> on_circle(std::string_view text, const Circle& circle) {
         return side.trouble();
     if (!scan.at_end())
         return Trouble{
-            fmt::format("{} goes on after the {} with {}", quoted(text), circle.name, quoted(scan.rest_word())), hint};
+            fmt::format("{} goes on after the {} with {}", in_quotes(text), circle.name, in_quotes(scan.rest_word())),
+            hint};
     if (has_sign && *side != 0)
-        return Trouble{quoted(text) + " has both a sign and a letter", "keep one of them: " + hint};
+        return Trouble{in_quotes(text) + " has both a sign and a letter", "keep one of them: " + hint};
     if (*degrees > circle.most_degrees)
-        return Trouble{fmt::format("{} is no {}: it is over {}°", quoted(text), circle.name, circle.most_degrees),
+        return Trouble{fmt::format("{} is no {}: it is over {}°", in_quotes(text), circle.name, circle.most_degrees),
                        circle.most_degrees < 100 ? "give 90° S to 90° N" : "give 180° W to 180° E"};
     return Angle::degrees(minus || *side < 0 ? -*degrees : *degrees);
 }
@@ -128,21 +129,21 @@ Read<Angle> longitude(std::string_view text) {
 }
 
 Read<Angle> bearing(std::string_view text) {
-    const Trouble unreadable{quoted(text) + " is not a direction", k_bearing_hint};
+    const Trouble unreadable{in_quotes(text) + " is not a direction", k_bearing_hint};
     Read<Scanner> read = Scanner::over(text);
     if (!read)
         return read.trouble();
     Scanner scan = *read;
     if (!scan.word_next()) {
         if (scan.take_sign("-"))
-            return Trouble{quoted(text) + " is a direction below 0°", "count 0° to 360° from north through east"};
+            return Trouble{in_quotes(text) + " is a direction below 0°", "count 0° to 360° from north through east"};
         const Read<double> degrees = scan_degrees(scan, text);
         if (!degrees)
             return unreadable;
         if (!scan.at_end())
             return unreadable;
         if (*degrees > 360.0)
-            return Trouble{quoted(text) + " is a direction over 360°", "count 0° to 360° from north through east"};
+            return Trouble{in_quotes(text) + " is a direction over 360°", "count 0° to 360° from north through east"};
         return Angle::degrees(*degrees == 360.0 ? 0.0 : *degrees);
     }
     const std::string from = scan_compass(scan);
@@ -161,7 +162,7 @@ Read<Angle> bearing(std::string_view text) {
     if (!scan.at_end() || (from != "n" && from != "s") || (to != "e" && to != "w"))
         return unreadable;
     if (*degrees > 90.0)
-        return Trouble{quoted(text) + " turns by more than 90°", "give 0° to 90° from north or south"};
+        return Trouble{in_quotes(text) + " turns by more than 90°", "give 0° to 90° from north or south"};
     const double turn = to == "e" ? *degrees : -*degrees;
     return Angle::degrees(from == "n" ? (turn < 0.0 ? 360.0 + turn : turn) : 180.0 - turn);
 }
@@ -176,15 +177,15 @@ Read<Angle> lean(std::string_view text) {
         return Angle{};
     const Read<double> degrees = scan_degrees(scan, text);
     if (!degrees)
-        return Trouble{quoted(text) + " is not a lean from upright", hint};
+        return Trouble{in_quotes(text) + " is not a lean from upright", hint};
     const bool back = scan.take_word("back") || scan.take_word("backward") || scan.take_word("backwards");
     const bool forward = !back && (scan.take_word("forward") || scan.take_word("forwards"));
     if (!scan.at_end())
-        return Trouble{quoted(text) + " is not a lean from upright", hint};
+        return Trouble{in_quotes(text) + " is not a lean from upright", hint};
     if (!back && !forward && *degrees != 0.0)
-        return Trouble{quoted(text) + " does not say which way it leans", hint};
+        return Trouble{in_quotes(text) + " does not say which way it leans", hint};
     if (*degrees > 90.0)
-        return Trouble{quoted(text) + " leans by more than 90°", "give 0° to 90°, counted from upright"};
+        return Trouble{in_quotes(text) + " leans by more than 90°", "give 0° to 90°, counted from upright"};
     return Angle::degrees(forward ? -*degrees : *degrees);
 }
 
@@ -198,7 +199,7 @@ Read<Angle> plain_angle(std::string_view text) {
     if (!degrees)
         return degrees.trouble();
     if (!scan.at_end())
-        return Trouble{quoted(text) + " is not an angle", "write it as in 5° 30' or 5.5"};
+        return Trouble{in_quotes(text) + " is not an angle", "write it as in 5° 30' or 5.5"};
     return Angle::degrees(minus ? -*degrees : *degrees);
 }
 

@@ -1,6 +1,6 @@
 // SPDX-License-Identifier: MIT
-#include "cli/design/document.hpp"
 #include "cli/design/nearest.hpp"
+#include "cli/design/plain_text.hpp"
 #include "cli/design/quantity.hpp"
 #include "cli/design/scanner.hpp"
 
@@ -38,21 +38,22 @@ unsigned month_named(std::string_view word) {
 Read<std::chrono::month_day> checked_day(double month, double day, std::string_view text) {
     using namespace std::chrono;
     if (month < 1.0 || month > 12.0)
-        return Trouble{fmt::format("{}: there is no month {}", quoted(text), month), k_day_hint};
+        return Trouble{fmt::format("{}: there is no month {}", in_quotes(text), month), k_day_hint};
     const std::string_view name = k_months[static_cast<std::size_t>(month) - 1];
     const std::chrono::month in{static_cast<unsigned>(month)};
     // 2024 has a 29 February.
     const auto last = static_cast<unsigned>(year_month_day_last{year{2024}, month_day_last{in}}.day());
     if (day < 1.0 || day > last)
-        return Trouble{fmt::format("{}: {} has {} days", quoted(text), name, last), k_day_hint};
+        return Trouble{fmt::format("{}: {} has {} days", in_quotes(text), name, last), k_day_hint};
     return month_day{in, std::chrono::day{static_cast<unsigned>(day)}};
 }
 
-/// Takes the "st", "nd", "rd" or "th" of "14th June".
+/// Takes the "st", "nd", "rd", "th" or full stop after the number of a day.
 void take_ordinal(Scanner& scan) {
     for (const std::string_view ending : {"st", "nd", "rd", "th"})
         if (scan.take_word(ending))
             return;
+    scan.take_sign(".");
 }
 
 Read<std::chrono::month_day> day_with_name(Scanner& scan, std::string_view text) {
@@ -75,24 +76,24 @@ Read<std::chrono::month_day> day_with_name(Scanner& scan, std::string_view text)
         take_day();
     if (named && month_named(word) == 0) {
         const std::string_view meant = nearest(word, k_months);
-        return Trouble{quoted(text) + ": " + quoted(word) + " is not a month",
+        return Trouble{in_quotes(text) + ": " + in_quotes(word) + " is not a month",
                        meant.empty() ? k_day_hint : fmt::format("did you mean {}?", meant)};
     }
     if (!named || !whole)
-        return Trouble{quoted(text) + " is not a day of the year", k_day_hint};
+        return Trouble{in_quotes(text) + " is not a day of the year", k_day_hint};
     if (scan.number_next())
-        return Trouble{quoted(text) + " goes on after the day", "give the day without its year, as in 14 June"};
+        return Trouble{in_quotes(text) + " goes on after the day", "give the day without its year, as in 14 June"};
     if (!scan.at_end())
-        return Trouble{quoted(text) + " is not a day of the year", k_day_hint};
+        return Trouble{in_quotes(text) + " is not a day of the year", k_day_hint};
     return checked_day(month_named(word), day, text);
 }
 
-/// The range that starts at `first` as near as may be to the one asked for.
+/// Whole leap cycles, as many and as near as may be to the years asked for.
 Years good_years_near(int first, int last) {
-    first = std::clamp(first, k_first_year, k_last_year - 3);
-    const int cycles = std::max(1, static_cast<int>(std::lround((last - first + 1) / 4.0)));
-    const int most = (k_last_year - first + 1) / 4;
-    return {first, first + 4 * std::min(cycles, most) - 1};
+    const int most = (k_last_year - k_first_year + 1) / 4;
+    const int cycles = std::clamp(static_cast<int>(std::lround((last - first + 1) / 4.0)), 1, most);
+    const int start = std::clamp(first, k_first_year, k_last_year - 4 * cycles + 1);
+    return {start, start + 4 * cycles - 1};
 }
 
 } // namespace
@@ -108,9 +109,10 @@ Read<std::chrono::month_day> day_of_year(std::string_view text) {
     scan.take();
     const Scrap day = scan.take();
     if (!scan.at_end() && scan.sign_next("-"))
-        return Trouble{quoted(text) + " is a day of one year", "give the day without its year, as in 14 June or 06-14"};
+        return Trouble{in_quotes(text) + " is a day of one year",
+                       "give the day without its year, as in 14 June or 06-14"};
     if (!scan.at_end() || !month.whole || !day.whole)
-        return Trouble{quoted(text) + " is not a day of the year", k_day_hint};
+        return Trouble{in_quotes(text) + " is not a day of the year", k_day_hint};
     return checked_day(month.number, day.number, text);
 }
 
@@ -122,33 +124,33 @@ Read<double> hour_of_day(std::string_view text) {
     if (scan.take_word("noon") && scan.at_end())
         return 12.0;
     if (!scan.number_next())
-        return Trouble{quoted(text) + " is not an hour", k_hour_hint};
+        return Trouble{in_quotes(text) + " is not an hour", k_hour_hint};
     const Scrap hour = scan.take();
     double part_min = 0.0;
     bool whole = hour.whole;
     if (scan.take_sign(":")) {
         if (!scan.number_next())
-            return Trouble{quoted(text) + " has no minutes after its colon", k_hour_hint};
+            return Trouble{in_quotes(text) + " has no minutes after its colon", k_hour_hint};
         const Scrap minute = scan.take();
         whole = whole && minute.whole && minute.text.size() == 2;
         part_min = minute.number;
     }
     if (!whole)
-        return Trouble{quoted(text) + " is not an hour with its minutes", k_hour_hint};
+        return Trouble{in_quotes(text) + " is not an hour with its minutes", k_hour_hint};
     if (part_min >= 60.0)
-        return Trouble{quoted(text) + " has more than 59 minutes", k_hour_hint};
+        return Trouble{in_quotes(text) + " has more than 59 minutes", k_hour_hint};
     double hours = hour.number;
     const bool morning = scan.take_word("am");
     if (morning || scan.take_word("pm")) {
         if (hours < 1.0 || hours > 12.0)
-            return Trouble{quoted(text) + " has an hour that clocks of twelve hours don't show", k_hour_hint};
+            return Trouble{in_quotes(text) + " has an hour that clocks of twelve hours don't show", k_hour_hint};
         hours = (hours == 12.0 ? 0.0 : hours) + (morning ? 0.0 : 12.0);
     }
     hours += part_min / 60.0;
     if (!scan.at_end())
-        return Trouble{quoted(text) + " goes on after the hour with " + quoted(scan.rest_word()), k_hour_hint};
+        return Trouble{in_quotes(text) + " goes on after the hour with " + in_quotes(scan.rest_word()), k_hour_hint};
     if (hours > 24.0)
-        return Trouble{quoted(text) + " is after the end of the day", "give 0:00 to 24:00"};
+        return Trouble{in_quotes(text) + " is after the end of the day", "give 0:00 to 24:00"};
     return hours;
 }
 
@@ -158,14 +160,14 @@ Read<Years> years(std::string_view text) {
     if (!read)
         return read.trouble();
     Scanner scan = *read;
-    const Trouble unreadable{quoted(text) + " is not a range of years", hint};
+    const Trouble unreadable{in_quotes(text) + " is not a range of years", hint};
     if (!scan.number_next())
         return unreadable;
     const Scrap first = scan.take();
     const bool joined = scan.take_word("to") || scan.take_sign("-");
     if (!joined && scan.at_end() && first.whole && first.number < 9999.0) {
         const Years good = good_years_near(static_cast<int>(first.number), static_cast<int>(first.number) + 19);
-        return Trouble{quoted(text) + " is one year; the Sun comes back to its place in four",
+        return Trouble{in_quotes(text) + " is one year; the Sun comes back to its place in four",
                        fmt::format("write {} to {}", good.first, good.last)};
     }
     if (!joined || !scan.number_next())
@@ -175,14 +177,16 @@ Read<Years> years(std::string_view text) {
         return unreadable;
     const Years found{static_cast<int>(first.number), static_cast<int>(last.number)};
     if (found.last < found.first)
-        return Trouble{quoted(text) + " ends before it starts", hint};
+        return Trouble{in_quotes(text) + " ends before it starts", hint};
     const Years good = good_years_near(found.first, found.last);
     const std::string suggestion = fmt::format("write {} to {}", good.first, good.last);
     if (found.first < k_first_year || found.last > k_last_year)
-        return Trouble{fmt::format("{} reaches outside {} to {}", quoted(text), k_first_year, k_last_year), suggestion};
+        return Trouble{fmt::format("{} reaches outside {} to {}", in_quotes(text), k_first_year, k_last_year),
+                       suggestion};
     const int count = found.last - found.first + 1;
     if (count % 4 != 0)
-        return Trouble{fmt::format("{} is {} years, not whole leap cycles of four", quoted(text), count), suggestion};
+        return Trouble{fmt::format("{} is {} years, not whole leap cycles of four", in_quotes(text), count),
+                       suggestion};
     return found;
 }
 

@@ -1,7 +1,6 @@
 // SPDX-License-Identifier: MIT
 #include "cli/design/scanner.hpp"
-
-#include "cli/design/document.hpp"
+#include "cli/design/plain_text.hpp"
 
 #include <array>
 #include <charconv>
@@ -80,7 +79,7 @@ std::size_t end_of_number(std::string_view text, std::size_t from) {
 Read<Scanner> Scanner::over(std::string_view text) {
     constexpr std::size_t k_longest = 200;
     if (text.size() > k_longest)
-        return Trouble{quoted(text) + " is too long", "write one quantity, as in 360 mm, 54° 14' N or 14 June"};
+        return Trouble{in_quotes(text) + " is too long", "write one quantity, as in 360 mm, 54° 14' N or 14 June"};
     const std::string plain = plainly_spelt(text);
     Scanner scan;
     for (std::size_t i = 0; i < plain.size();) {
@@ -94,12 +93,12 @@ Read<Scanner> Scanner::over(std::string_view text) {
         if (is_digit(plain[i]) || point_first) {
             end = end_of_number(plain, i);
             if (end + 1 < plain.size() && plain[end] == ',' && is_digit(plain[end + 1]))
-                return Trouble{quoted(text) + " has a comma in a number", "write a decimal point, as in 14.2"};
+                return Trouble{in_quotes(text) + " has a comma in a number", "write a decimal point, as in 14.2"};
             scrap.kind = Scrap::Kind::number;
             scrap.whole = plain.find('.', i) >= end;
             const auto result = std::from_chars(plain.data() + i, plain.data() + end, scrap.number);
             if (result.ec != std::errc{} || result.ptr != plain.data() + end)
-                return Trouble{quoted(text) + " has a number that can't be meant", "write it with fewer digits"};
+                return Trouble{in_quotes(text) + " has a number that can't be meant", "write it with fewer digits"};
         } else if (is_letter(plain[i])) {
             end = run_of(plain, i, is_letter);
             scrap.kind = Scrap::Kind::word;
@@ -119,7 +118,7 @@ Read<Scanner> Scanner::over(std::string_view text) {
 Read<double> scan_degrees(Scanner& scan, std::string_view whole_text) {
     const std::string example = "write it as in 54° 14' 20\", or as in 54.2389";
     if (!scan.number_next())
-        return Trouble{quoted(whole_text) + " has no angle where one is wanted", example};
+        return Trouble{in_quotes(whole_text) + " has no angle where one is wanted", example};
     const Scrap degrees = scan.take();
     double sum = degrees.number;
     if (!scan.take_sign("°") && !scan.take_word("deg") && !scan.take_word("degrees"))
@@ -133,13 +132,13 @@ Read<double> scan_degrees(Scanner& scan, std::string_view whole_text) {
         const Scrap part = scan.take();
         const std::string name = sign == "'" ? "minutes" : "seconds";
         if (!scan.take_sign(sign))
-            return Trouble{quoted(whole_text) + ": the " + part.text + " has no " + std::string{sign} + " after it",
+            return Trouble{in_quotes(whole_text) + ": the " + part.text + " has no " + std::string{sign} + " after it",
                            example};
         if (part.number >= 60.0)
-            return Trouble{quoted(whole_text) + ": " + part.text + " " + name + " of arc are too many",
+            return Trouble{in_quotes(whole_text) + ": " + part.text + " " + name + " of arc are too many",
                            "give less than 60"};
         if (!last_is_whole)
-            return Trouble{quoted(whole_text) + " has a decimal point before the " + name, example};
+            return Trouble{in_quotes(whole_text) + " has a decimal point before the " + name, example};
         sum += part.number * size;
         last_is_whole = part.whole;
     }

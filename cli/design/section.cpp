@@ -18,8 +18,10 @@ std::string_view kind_name(const Node& node) {
         return "a text";
     case Node::Kind::list:
         return "a list";
+    case Node::Kind::refused:
+        return "nothing readable";
     case Node::Kind::mapping:
-        return "keys with values";
+        return "a set of keys";
     }
     return {};
 }
@@ -33,12 +35,16 @@ Section::Section(const Entry* holder, std::string_view name, ReadingState& state
         open(value);
         return;
     }
+    if (value.kind == Node::Kind::refused)
+        return;
     const std::string example{keys_of(name).front()};
     if (value.kind == Node::Kind::empty)
         state.error(holder->at, name_, "this section has nothing in it", "indent its keys below it, or leave it out");
     else
         state.error(value.at, name_, fmt::format("{} stands where the section's keys are wanted", kind_name(value)),
-                    fmt::format("start with \"{}:\" on the next line, indented", example));
+                    value.text.find(':') == std::string::npos
+                        ? fmt::format("start with \"{}:\" on the next line, indented", example)
+                        : std::string{"put a space after the colon"});
 }
 
 Section::Section(const Node& mapping, std::string_view name, ReadingState& state)
@@ -53,8 +59,9 @@ void Section::open(const Node& mapping) {
             state_->given.insert(full_name(name_, entry.key));
             continue;
         }
-        std::string shown = quoted(entry.key);
-        state_->error(entry.at, name_, shown + " is not a key of a design" + (name_.empty() ? "" : "'s " + name_),
+        misspelt_.push_back(nearest(entry.key, keys_of(name_)));
+        state_->error(entry.at, name_,
+                      in_quotes(entry.key) + " is not a key of a design" + (name_.empty() ? "" : "'s " + name_),
                       hint_for_unknown(name_, entry.key));
     }
 }
@@ -70,6 +77,19 @@ void Section::error(std::string_view key, std::string message, std::string hint)
     state_->error(at, full_name(name_, key), std::move(message), std::move(hint));
 }
 
+void Section::error_here(std::string message, std::string hint) const {
+    state_->error(at_, name_, std::move(message), std::move(hint));
+}
+
+bool Section::misspelt(std::string_view key) const {
+    return std::find(misspelt_.begin(), misspelt_.end(), key) != misspelt_.end();
+}
+
+void Section::missing(std::string_view key, std::string hint) const {
+    if (!misspelt(key))
+        error(key, "is missing", std::move(hint));
+}
+
 void Section::refuse(std::initializer_list<std::string_view> keys, const std::string& message,
                      const std::string& hint) const {
     for (const std::string_view key : keys)
@@ -79,7 +99,7 @@ void Section::refuse(std::initializer_list<std::string_view> keys, const std::st
 
 const std::string* Section::text(std::string_view key) const {
     const Entry* found = entry(key);
-    if (found == nullptr)
+    if (found == nullptr || found->value.kind == Node::Kind::refused)
         return nullptr;
     if (found->value.kind == Node::Kind::text && found->value.text.find_first_not_of(" \t\n") != std::string::npos)
         return &found->value.text;
@@ -103,7 +123,7 @@ std::optional<std::string> Section::line(std::string_view key, std::size_t most)
         return std::nullopt;
     }
     if (kept.size() > most) {
-        error(key, fmt::format("{} is too long", quoted(kept)), fmt::format("keep it under {} letters", most));
+        error(key, fmt::format("{} is too long", in_quotes(kept)), fmt::format("keep it to {} letters", most));
         return std::nullopt;
     }
     return kept;
@@ -116,7 +136,7 @@ std::optional<double> Section::length(std::string_view key, double least_mm, dou
     const std::string range =
         fmt::format("give {} to {}", length_text(least_mm, state_->units), length_text(most_mm, state_->units));
     const char* fault = *mm < 0.0 ? "is below zero" : (*mm < least_mm ? "is too small" : "is too large");
-    error(key, fmt::format("{} {}", quoted(*text(key)), fault), range);
+    error(key, fmt::format("{} {}", in_quotes(*text(key)), fault), range);
     return std::nullopt;
 }
 
@@ -136,13 +156,15 @@ std::optional<std::size_t> Section::choice_of(std::string_view key, std::span<co
         if (written->size() == words[i].size() && slips_between(*written, words[i]) == 0)
             return i;
     const std::string_view meant = nearest(*written, words);
-    error(key, fmt::format("{} is not one of its values", quoted(*written)),
+    error(key, fmt::format("{} is not one of its values", in_quotes(*written)),
           meant.empty() ? "give " + one_of(words) : fmt::format("did you mean {}? It may be {}", meant, one_of(words)));
     return std::nullopt;
 }
 
 std::optional<PlatePointMm> read_point(const Node& node, const std::string& key, double most_mm, ReadingState& state) {
     const std::string hint = "write it as in [20 mm, -5 mm]: to the right, then up";
+    if (node.kind == Node::Kind::refused)
+        return std::nullopt;
     if (node.kind != Node::Kind::list || node.items.size() != 2) {
         const std::string found = node.kind == Node::Kind::list ? fmt::format("a list of {}", node.items.size())
                                                                 : std::string{kind_name(node)};
@@ -160,7 +182,7 @@ std::optional<PlatePointMm> read_point(const Node& node, const std::string& key,
         if (!mm)
             state.error(item.at, key, mm.trouble().message, mm.trouble().hint);
         else if (std::abs(*mm) > most_mm)
-            state.error(item.at, key, quoted(item.text) + " is too far",
+            state.error(item.at, key, in_quotes(item.text) + " is too far",
                         fmt::format("give at most {} either way", length_text(most_mm, state.units)));
         else
             (i == 0 ? point.right_mm : point.up_mm) = *mm;

@@ -52,7 +52,12 @@ class Section {
 
     /// An error at the key's value, or where the section starts when the key is not there.
     void error(std::string_view key, std::string message, std::string hint) const;
-    void missing(std::string_view key, std::string hint) const { error(key, "is missing", std::move(hint)); }
+    /// An error of the section as a whole.
+    void error_here(std::string message, std::string hint) const;
+    /// An error, unless a misspelt key was reported that was surely meant to be this one.
+    void missing(std::string_view key, std::string hint) const;
+    /// An unknown key of the section was nearest to this one.
+    [[nodiscard]] bool misspelt(std::string_view key) const;
     /// Each of `keys` that is there is an error of the same kind.
     void refuse(std::initializer_list<std::string_view> keys, const std::string& message,
                 const std::string& hint) const;
@@ -102,6 +107,7 @@ class Section {
     const Node* mapping_ = nullptr;
     Position at_; ///< where the section starts, or should
     std::string name_;
+    std::vector<std::string_view> misspelt_; ///< keys that unknown ones were nearest to
     ReadingState* state_;
 };
 

@@ -26,7 +26,7 @@ void read_division(Design& design, const Section& hours) {
     if (!division)
         return;
     if (std::find(k_divisions_min.begin(), k_divisions_min.end(), *division) == k_divisions_min.end())
-        hours.error("divide", quoted(*hours.text("divide")) + " does not divide an hour as dials do",
+        hours.error("divide", in_quotes(*hours.text("divide")) + " does not divide an hour as dials do",
                     "give 60, 30, 15, 10, 5, 2 or 1 min");
     else
         design.hours.divide_min = *division;
@@ -42,6 +42,8 @@ std::optional<NamedDay> read_named_day(const Node& item, ReadingState& state) {
         state.error(item.at, "dates: days", day.trouble().message, day.trouble().hint);
         return std::nullopt;
     }
+    if (item.kind == Node::Kind::refused)
+        return std::nullopt;
     if (item.kind != Node::Kind::mapping) {
         state.error(item.at, "dates: days", fmt::format("{} stands where a day is wanted", kind_name(item)), hint);
         return std::nullopt;
@@ -58,7 +60,7 @@ std::optional<NamedDay> read_named_day(const Node& item, ReadingState& state) {
 
 void read_days(Design& design, const Section& dates) {
     const Entry* entry = dates.entry("days");
-    if (entry == nullptr)
+    if (entry == nullptr || entry->value.kind == Node::Kind::refused)
         return;
     const Node& list = entry->value;
     if (list.kind != Node::Kind::list || list.items.size() > k_most_days) {

@@ -30,10 +30,16 @@ void read_zone(Design& design, const Section& place) {
     if (Zone::find(*name))
         return;
     std::string hint = "write it as in Europe/London";
-    const std::vector<std::string> near = nearest_zone_names(*name, 3);
+    std::vector<std::string> near = nearest_zone_names(*name, 3);
+    // Of the nearest names, those that are near: in whole, or by the city alone.
+    std::erase_if(near, [&](const std::string& zone) {
+        const std::string_view whole = zone;
+        const std::array<std::string_view, 2> spellings = {whole, whole.substr(whole.rfind('/') + 1)};
+        return nearest(*name, spellings).empty();
+    });
     if (!near.empty())
         hint = "did you mean " + one_of(std::vector<std::string_view>{near.begin(), near.end()}) + "?";
-    place.error("zone", quoted(*name) + " is not a time zone", hint);
+    place.error("zone", in_quotes(*name) + " is not a time zone", hint);
 }
 
 void read_lean(Design& design, const Section& dial) {
@@ -42,7 +48,7 @@ void read_lean(Design& design, const Section& dial) {
         return;
     design.dial.lean = *lean_read;
     const double degrees = lean_read->in_degrees();
-    const std::string shown = quoted(*dial.text("lean"));
+    const std::string shown = in_quotes(*dial.text("lean"));
     if (design.dial.kind == DialKind::wall && std::abs(degrees) > k_most_wall_lean_deg)
         dial.error("lean", shown + " is too much for a wall",
                    "give at most 45° either way, or make it \"kind: leaning\"");

@@ -61,7 +61,9 @@ std::optional<PlateShape> shape_of(Design& design, const Section& plate) {
                  fmt::format("the plate has a {}", size.key == "corners" ? "list of corners" : size.key)});
             return size.shape;
         }
-    plate.error("shape", "the plate has no size", "give its diameter; or width and height; or across; or corners");
+    const auto meant = [&](const SizeKey& size) { return plate.misspelt(size.key); };
+    if (std::none_of(k_size_keys.begin(), k_size_keys.end(), meant))
+        plate.error_here("the plate has no size", "give its diameter; or width and height; or across; or corners");
     return std::nullopt;
 }
 
@@ -76,7 +78,8 @@ bool check_polygon(const std::vector<PlatePointMm>& corners, const Section& plat
     }
     if (sides) {
         plate.error("corners",
-                    fmt::format("the side {} crosses the side {}", side_name(sides->first), side_name(sides->second)),
+                    fmt::format("the side {} crosses or touches the side {}", side_name(sides->first),
+                                side_name(sides->second)),
                     "give the corners in the order in which they follow round the edge");
         return false;
     }
@@ -85,7 +88,7 @@ bool check_polygon(const std::vector<PlatePointMm>& corners, const Section& plat
 
 void read_corners(Plate& made, const Section& plate) {
     const Entry* entry = plate.entry("corners");
-    if (entry == nullptr)
+    if (entry == nullptr || entry->value.kind == Node::Kind::refused)
         return;
     const Node& list = entry->value;
     if (list.kind != Node::Kind::list || list.items.size() < 3 || list.items.size() > k_most_corners) {
