@@ -292,16 +292,34 @@ bool is_finite(const Mark& mark) {
            });
 }
 
+namespace {
+
+/// A placing with its sine and cosine taken once.
+struct Placed {
+    explicit Placed(const Placing& placing)
+        : p{placing}, c{cos(placing.turn)}, s{sin(placing.turn)}, hand{placing.mirrored ? -1.0 : 1.0} {}
+    [[nodiscard]] Point operator()(Point q) const {
+        const double x = hand * q.x_mm;
+        return {p.scale_x * (x * c - q.y_mm * s) + p.shift.x_mm, p.scale_y * (x * s + q.y_mm * c) + p.shift.y_mm};
+    }
+    [[nodiscard]] CurveTo operator()(const CurveTo& curve) const {
+        return {(*this)(curve.control_1), (*this)(curve.control_2), (*this)(curve.to)};
+    }
+    const Placing& p;
+    double c, s, hand;
+};
+
+} // namespace
+
 Point Placing::operator()(Point p) const {
-    const double c = cos(turn), s = sin(turn);
-    const double x = mirrored ? -p.x_mm : p.x_mm;
-    return {scale_x * (x * c - p.y_mm * s) + shift.x_mm, scale_y * (x * s + p.y_mm * c) + shift.y_mm};
+    return Placed{*this}(p);
 }
 
 Path Placing::operator()(const Path& path) const {
+    const Placed place{*this};
     const bool arcs_stay = scale_x == scale_y;
     Path placed;
-    placed.start = (*this)(path.start);
+    placed.start = place(path.start);
     placed.closed = path.closed;
     placed.pieces.reserve(path.pieces.size());
     Point at = path.start;
@@ -309,18 +327,16 @@ Path Placing::operator()(const Path& path) const {
         if (const auto* arc = std::get_if<ArcTo>(&piece)) {
             if (arcs_stay) {
                 placed.pieces.emplace_back(
-                    ArcTo{(*this)(arc->to), (*this)(arc->centre), mirrored ? -arc->sweep : arc->sweep});
+                    ArcTo{place(arc->to), place(arc->centre), mirrored ? -arc->sweep : arc->sweep});
             } else {
                 for (const CurveTo& curve : curves_of(at, *arc)) {
-                    placed.pieces.emplace_back(
-                        CurveTo{(*this)(curve.control_1), (*this)(curve.control_2), (*this)(curve.to)});
+                    placed.pieces.emplace_back(place(curve));
                 }
             }
         } else if (const auto* curve = std::get_if<CurveTo>(&piece)) {
-            placed.pieces.emplace_back(
-                CurveTo{(*this)(curve->control_1), (*this)(curve->control_2), (*this)(curve->to)});
+            placed.pieces.emplace_back(place(*curve));
         } else {
-            placed.pieces.emplace_back(LineTo{(*this)(end_of(piece))});
+            placed.pieces.emplace_back(LineTo{place(end_of(piece))});
         }
         at = end_of(piece);
     }

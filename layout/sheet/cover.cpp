@@ -18,7 +18,8 @@ class Flow {
     Flow(const PrintOptions& options, std::string title) : options_{options}, title_{std::move(title)} { begin(); }
 
     /// @param first  stands before the first line; the others are set in under it
-    void paragraph(const std::string& text, const std::string& first = "", bool bold = false, double size_mm = k_text_mm) {
+    void paragraph(const std::string& text, const std::string& first = "", bool bold = false,
+                   double size_mm = k_text_mm) {
         const double inset = first.empty() ? 0.0 : note_width_mm(first, size_mm) + 1.2;
         bool opening = true;
         for (const std::string& line : wrapped(text, width() - inset, size_mm, bold)) {
@@ -55,12 +56,15 @@ class Flow {
     void begin() {
         Sheet sheet;
         sheet.width_mm = options_.paper.short_mm;
-        sheet.height_mm = options_.paper.roll ? std::min(options_.paper.long_mm, 1.4142 * options_.paper.short_mm) : options_.paper.long_mm;
+        sheet.height_mm = options_.paper.roll ? std::min(options_.paper.long_mm, 1.4142 * options_.paper.short_mm)
+                                              : options_.paper.long_mm;
         sheet.paper = options_.paper.name;
-        sheet.title = sheets_.empty() ? "What this packet makes" : fmt::format("What this packet makes, page {}", sheets_.size() + 1);
+        sheet.title = sheets_.empty() ? "What this packet makes"
+                                      : fmt::format("What this packet makes, page {}", sheets_.size() + 1);
         const double m = options_.margin_mm;
         sheet.printable = {m, m, sheet.width_mm - m, sheet.height_mm - m};
-        const SheetWords words{fmt::format("{}, {:.0f} × {:.0f} mm", sheet.paper, sheet.width_mm, sheet.height_mm), title_, "", 1, 1};
+        const SheetWords words{fmt::format("{}, {:.0f} × {:.0f} mm", sheet.paper, sheet.width_mm, sheet.height_mm),
+                               title_, "", 1, 1};
         const Surround surround = surround_of(sheet.width_mm, sheet.height_mm, m, options_.inches, words);
         field_ = opening_of(sheet.width_mm, sheet.height_mm, m, surround);
         furnish(sheet, field_, surround, words);
@@ -82,8 +86,11 @@ void put_picture(Flow& flow, const std::shared_ptr<const Drawing>& drawing, Poin
     const double scale = side_mm / std::max(box.width_mm(), box.height_mm());
     const Point middle = box.middle();
     Placing placing{{}, {}, scale, scale, false};
-    placing.shift = {lower_left.x_mm + side_mm / 2 - scale * middle.x_mm, lower_left.y_mm + side_mm / 2 - scale * middle.y_mm};
-    flow.sheet().windows.push_back({drawing, placing, Box{lower_left.x_mm, lower_left.y_mm, lower_left.x_mm + side_mm, lower_left.y_mm + side_mm}});
+    placing.shift = {lower_left.x_mm + side_mm / 2 - scale * middle.x_mm,
+                     lower_left.y_mm + side_mm / 2 - scale * middle.y_mm};
+    flow.sheet().windows.push_back(
+        {drawing, placing,
+         Box{lower_left.x_mm, lower_left.y_mm, lower_left.x_mm + side_mm, lower_left.y_mm + side_mm}});
 }
 
 /// The picture on the left, the numbers beside it.
@@ -118,11 +125,17 @@ void put_map(Flow& flow, const CoverFace& face) {
     const Tiling& tiling = *face.tiling;
     if (tiling.sheets.size() < 2)
         return;
-    const double scale = std::min(1.0, std::min(62.0 / tiling.map_box.height_mm(), 0.5 * flow.width() / tiling.map_box.width_mm()));
+    const double scale =
+        std::min(1.0, std::min(62.0 / tiling.map_box.height_mm(), 0.5 * flow.width() / tiling.map_box.width_mm()));
     const double height = scale * tiling.map_box.height_mm();
     flow.need(height + 12);
     flow.heading(face.name.empty() ? "How the sheets join" : "How the sheets of the " + face.name + " join");
-    const Placing placing{{}, {flow.left() - scale * tiling.map_box.left_mm, flow.y() - height - scale * tiling.map_box.bottom_mm}, scale, scale, false};
+    const Placing placing{
+        {},
+        {flow.left() - scale * tiling.map_box.left_mm, flow.y() - height - scale * tiling.map_box.bottom_mm},
+        scale,
+        scale,
+        false};
     for (const Mark& mark : tiling.map)
         flow.sheet().furniture.push_back(placing(mark));
     for (Note note : tiling.map_notes) {
@@ -131,14 +144,17 @@ void put_map(Flow& flow, const CoverFace& face) {
         flow.sheet().notes.push_back(note);
     }
     const double column = flow.left() + scale * tiling.map_box.width_mm() + 5;
-    std::string text = fmt::format("{} sheets in {} rows and {} columns. Rows are lettered from the top, columns numbered from the left.", tiling.sheets.size(), tiling.rows, tiling.columns);
+    std::string text = fmt::format(
+        "{} sheets in {} rows and {} columns. Rows are lettered from the top, columns numbered from the left.",
+        tiling.sheets.size(), tiling.rows, tiling.columns);
     if (!tiling.blank.empty()) {
         text += " Nothing falls on ";
         for (std::size_t i = 0; i < tiling.blank.size(); ++i)
             text += (i > 0 ? ", " : "") + tiling.blank[i];
         text += ": left out, and the others keep their names.";
     }
-    text += " Lay the sheets together so that the crosses of neighbours coincide, then measure across the joins before you trust them.";
+    text += " Lay the sheets together so that the crosses of neighbours coincide, then measure across the joins before "
+            "you trust them.";
     double y = flow.y();
     for (const std::string& line : wrapped(text, flow.left() + flow.width() - column, k_text_mm, false)) {
         y -= k_line_mm;
@@ -158,7 +174,8 @@ void put_list(Flow& flow, const std::string& heading, const std::vector<std::str
 
 } // namespace
 
-std::vector<Sheet> cover_sheets(const CoverWords& words, const std::vector<CoverFace>& faces, const PrintOptions& options) {
+std::vector<Sheet> cover_sheets(const CoverWords& words, const std::vector<CoverFace>& faces,
+                                const PrintOptions& options) {
     Flow flow{options, options.title};
     flow.paragraph(words.title, "", true, 6.0);
     flow.space(0.8);

@@ -12,7 +12,7 @@ namespace dialwright::layout {
 /// What the packet's first page says.
 struct CoverWords {
     std::string title, subtitle;
-    std::vector<std::string> steps;    ///< in the order of work; the first is what to measure
+    std::vector<std::string> steps; ///< in the order of work; the first is what to measure
     std::vector<std::string> cautions;
     std::vector<std::string> warnings; ///< what the maker should know of this very design
 };

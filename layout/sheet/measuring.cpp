@@ -25,6 +25,7 @@ constexpr double k_small_mm = 2.6, k_small_line_mm = 3.5;
 constexpr double k_title_mm = 3.4, k_title_line_mm = 4.4;
 constexpr double k_label_mm = 7.0, k_label_room_mm = 20.0;
 constexpr double k_longest_line_mm = 190.0; // longer ones are hard to read
+constexpr double k_below_bar_mm = 1.4;
 constexpr double k_square_mm = 10.0;
 constexpr double k_inch_mm = 25.4;
 
@@ -42,10 +43,17 @@ double bar_for(double side_mm, double beside_mm) {
     return 20.0;
 }
 
+double inches_on(double bar_mm) {
+    return std::max(0.5, std::floor(bar_mm / k_inch_mm + 0.1));
+}
+
 std::string bars_said(const Surround& surround) {
+    const auto said = [&](double bar_mm) {
+        return surround.inches ? fmt::format("{:.1f} mm and {:.3f} in", bar_mm, inches_on(bar_mm))
+                               : fmt::format("{:.1f} mm", bar_mm);
+    };
     const double x = surround.bar_x_mm, y = surround.bar_y_mm;
-    std::string said = x == y ? fmt::format("{:.1f} mm each", x) : fmt::format("{:.1f} mm across, {:.1f} mm up", x, y);
-    return said;
+    return x == y ? said(x) + " each" : said(x) + " across, " + said(y) + " up";
 }
 
 std::string notes_text(const Surround& surround, const SheetWords& words) {
@@ -99,7 +107,7 @@ void put_notes(Sheet& sheet, const Box& opening, const Surround& surround, const
     const double bar_block = k_bar_up_mm + bar_down(surround.inches);
     const double top = opening.bottom_mm - (surround.tiled ? k_names_mm : 1.0);
     const double x = opening.left_mm + (surround.notes_beside_bar ? surround.bar_x_mm * 1.016 + 6.0 : 0.0);
-    double y = top - (surround.notes_beside_bar ? 0.0 : bar_block + 0.6);
+    double y = top - (surround.notes_beside_bar ? 0.0 : bar_block + k_below_bar_mm);
     for (const std::string& line : surround.title_lines) {
         y -= k_title_line_mm;
         sheet.notes.push_back({{x, y + 1.0}, line, k_title_mm, Align::left, true, {}});
@@ -173,7 +181,7 @@ Bar measuring_bar(double length_mm, bool inches) {
                          false,
                          {}});
     if (inches) {
-        const int quarters = std::max(2, static_cast<int>(std::floor(length_mm / k_inch_mm + 0.1)) * 4);
+        const int quarters = static_cast<int>(std::lround(inches_on(length_mm) * 4));
         const double whole_mm = quarters * k_inch_mm / 4;
         const auto down = [quarters](int i) {
             return i == 0 || i == quarters ? -(k_bar_down_inches_mm - 0.4) : i % 4 == 0 ? -1.6 : -1.1;
@@ -205,10 +213,10 @@ Surround surround_of(double width_mm, double height_mm, double margin_mm, bool i
     beside.notes_beside_bar = true;
     const double beside_width = width - surround.bar_x_mm * 1.016 - 6.0 - (surround.tiled ? k_label_room_mm : 0.0);
     set_notes(surround, words, width);
-    surround.bottom_mm = names + bar_block + 0.6 + notes_height(surround);
+    surround.bottom_mm = names + bar_block + k_below_bar_mm + notes_height(surround);
     if (beside_width > 60) {
         set_notes(beside, words, beside_width);
-        beside.bottom_mm = names + std::max(bar_block + 0.6, notes_height(beside));
+        beside.bottom_mm = names + std::max(bar_block + k_below_bar_mm, notes_height(beside));
         if (beside.bottom_mm <= surround.bottom_mm) {
             surround = beside;
         }

@@ -37,8 +37,11 @@ Box turned_box(const Box& box, bool turned) {
     return turned ? Box{-box.top_mm, box.left_mm, -box.bottom_mm, box.right_mm} : box;
 }
 
-std::string paper_words(const Paper& paper, double width_mm, double height_mm) {
-    return fmt::format("{}, {:.4g} × {:.4g} mm", paper.name, width_mm, height_mm);
+std::string paper_words(const PrintOptions& options, double width_mm, double height_mm) {
+    const std::string mm = fmt::format("{:.4g} × {:.4g} mm", width_mm, height_mm);
+    return options.inches
+               ? fmt::format("{}, {:.4g} × {:.4g} in ({})", options.paper.name, width_mm / 25.4, height_mm / 25.4, mm)
+               : options.paper.name + ", " + mm;
 }
 
 void require_work(const Drawing& drawing) {
@@ -64,8 +67,7 @@ std::optional<Plan> plan_on(double width_mm, double height_mm, bool turned, bool
     plan.height_mm = height_mm;
     plan.turned = turned;
     // With the longest label and numbers that a sheet may carry, so that each sheet has the same strips.
-    const SheetWords words{paper_words(options.paper, width_mm, height_mm), options.title, one_sheet ? "" : "MM88", 888,
-                           888};
+    const SheetWords words{paper_words(options, width_mm, height_mm), options.title, one_sheet ? "" : "MM88", 888, 888};
     plan.surround = surround_of(width_mm, height_mm, options.margin_mm, options.inches, words);
     plan.opening = opening_of(width_mm, height_mm, options.margin_mm, plan.surround);
     const double width = plan.opening.width_mm(), height = plan.opening.height_mm();
@@ -125,8 +127,8 @@ std::optional<Plan> one_sheet_plan(const Box& work, const PrintOptions& options)
 }
 
 [[noreturn]] void refuse_room(const PrintOptions& options) {
-    const SheetWords words{paper_words(options.paper, options.paper.short_mm, options.paper.long_mm), options.title,
-                           "MM88", 888, 888};
+    const SheetWords words{paper_words(options, options.paper.short_mm, options.paper.long_mm), options.title, "MM88",
+                           888, 888};
     const Surround surround =
         surround_of(options.paper.short_mm, options.paper.long_mm, options.margin_mm, options.inches, words);
     const Box opening = opening_of(options.paper.short_mm, options.paper.long_mm, options.margin_mm, surround);
@@ -299,7 +301,7 @@ Tiling tile(std::shared_ptr<const Drawing> drawing, const PrintOptions& options)
     Tiling tiling;
     tiling.rows = plan.grid.rows;
     tiling.columns = plan.grid.columns;
-    SheetWords words{paper_words(options.paper, plan.width_mm, plan.height_mm), options.title, "", 0, plan.sheets};
+    SheetWords words{paper_words(options, plan.width_mm, plan.height_mm), options.title, "", 0, plan.sheets};
     for (int row = 0; row < plan.grid.rows; ++row) {
         for (int column = 0; column < plan.grid.columns; ++column) {
             if (!plan.used[plan.grid.index(row, column)]) {
