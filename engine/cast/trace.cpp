@@ -13,14 +13,14 @@
 namespace dialwright {
 namespace {
 
-double distance_from_chord(PlatePoint p, PlatePoint a, PlatePoint b) {
+/// The square of a point's distance from the chord a–b.
+double square_from_chord(PlatePoint p, PlatePoint a, PlatePoint b) {
     const double du = b.u_mm - a.u_mm, dv = b.v_mm - a.v_mm;
     const double pu = p.u_mm - a.u_mm, pv = p.v_mm - a.v_mm;
-    const double length = std::hypot(du, dv);
-    if (length < 1e-12)
-        return std::hypot(pu, pv);
-    const double along = std::clamp((pu * du + pv * dv) / (length * length), 0.0, 1.0);
-    return std::hypot(pu - along * du, pv - along * dv);
+    const double square = du * du + dv * dv;
+    const double along = square > 0 ? std::clamp((pu * du + pv * dv) / square, 0.0, 1.0) : 0.0;
+    const double off_u = pu - along * du, off_v = pv - along * dv;
+    return off_u * off_u + off_v * off_v;
 }
 
 /// The part of a + t d, t in [first, last], inside the box; false if none.
@@ -41,7 +41,8 @@ bool cut_to_box(PlatePoint a, double du, double dv, const PlateBox& box, double&
 template <Surface S> class Walk {
   public:
     Walk(const Caster<S>& caster, const SunPath& path, const PlateBox& window, double tolerance_mm)
-        : caster_{caster}, path_{path}, window_{window}, tolerance_mm_{tolerance_mm} {}
+        : caster_{caster}, path_{path}, window_{window}, tolerance_mm_{tolerance_mm},
+          hills_{!caster.skyline().flat() && path.light == Light::seen} {}
 
     std::vector<PlatePolyline> curve() {
         Step before = step(path_.first);
@@ -57,10 +58,11 @@ template <Surface S> class Walk {
     }
 
     std::vector<PlatePolyline> straight() {
+        const int steps = hills_ ? 4 * path_.steps : path_.steps;
         double first = path_.first, low = first;
         int light = light_at(first);
-        for (int i = 1; i <= path_.steps; ++i) {
-            const double high = i == path_.steps ? path_.last : parameter(i);
+        for (int i = 1; i <= steps; ++i) {
+            const double high = i == steps ? path_.last : path_.first + (path_.last - path_.first) * (double(i) / steps);
             const int next = light_at(high);
             for (int changes = 0; light != next && changes < 4; ++changes) {
                 const auto [before, after] = change_between(low, high, light);
@@ -78,7 +80,7 @@ template <Surface S> class Walk {
 
   private:
     static constexpr double k_dot_mm = 1e-6;
-    static constexpr int k_halvings = 50;
+    static constexpr int k_halvings = 40;
     static constexpr int k_unseen = 0;
 
     struct Step {
@@ -110,6 +112,8 @@ template <Surface S> class Walk {
             for (int i = 0; i < k_halvings; ++i) {
                 const Step middle = step((low.at + high.at) / 2);
                 (middle.state == a.state ? low : high) = middle;
+                if (one_point(low, high))
+                    break;
             }
             if (a.visible())
                 refine(a, low, 0);
@@ -126,6 +130,13 @@ template <Surface S> class Walk {
         }
     }
 
+    /// Whether two steps on either side of the window's border are one point of it.
+    [[nodiscard]] static bool one_point(const Step& a, const Step& b) {
+        constexpr double k_one_mm = 1e-9;
+        return a.cast && b.cast && a.cast->edge == b.cast->edge &&
+               std::abs(a.cast->point.u_mm - b.cast->point.u_mm) + std::abs(a.cast->point.v_mm - b.cast->point.v_mm) < k_one_mm;
+    }
+
     /// Whether a stretch with both ends outside the window or unlit might come in between.
     [[nodiscard]] bool may_enter(const Step& a, const Step& b, int depth) const {
         if (a.cast && b.cast) {
@@ -137,28 +148,39 @@ template <Surface S> class Walk {
             double first = 0.0, last = 1.0;
             return cut_to_box(p, du, dv, wider, first, last);
         }
-        return (a.cast || b.cast) && depth < 5;
+        if (a.cast || b.cast)
+            return depth < 5;
+        return hills_ && depth < 2;
     }
 
-    void refine(const Step& a, const Step& b, int depth) {
+    void refine(const Step& a, const Step& b, int depth) { refine(a, step((a.at + b.at) / 2), b, depth); }
+
+    /// Draws to `b` in one chord, in two by `middle`, or halves further. A chord is tried at its middle and, by the
+    /// chords beside it, where it would lie farthest from a curve that bends both ways.
+    void refine(const Step& a, const Step& middle, const Step& b, int depth) {
         constexpr int k_deepest = 26;
-        const Step middle = step((a.at + b.at) / 2);
-        const auto near_chord = [&](const std::optional<Cast>& c) {
-            return c && distance_from_chord(c->point, a.cast->point, b.cast->point) <= tolerance_mm_;
-        };
-        const bool flat = near_chord(middle.cast) && near_chord(cast(a.at + 0.25 * (b.at - a.at))) &&
-                          near_chord(cast(a.at + 0.75 * (b.at - a.at)));
-        if (middle.state != a.state && depth < k_deepest) {
+        if (depth >= k_deepest) {
+            lines_.back().push_back(b.cast->point);
+            return;
+        }
+        if (middle.state != a.state) {
             join(a, middle, 0);
             join(middle, b, 0);
             return;
         }
-        if (flat || depth >= k_deepest) {
+        const auto near_chord = [this](const Step& s, const Step& from, const Step& to) {
+            return s.cast && square_from_chord(s.cast->point, from.cast->point, to.cast->point) <= tolerance_mm_ * tolerance_mm_;
+        };
+        const Step early = step((a.at + middle.at) / 2), late = step((middle.at + b.at) / 2);
+        if (near_chord(middle, a, b) && near_chord(early, a, b) && near_chord(late, a, b)) {
             lines_.back().push_back(b.cast->point);
-            return;
+        } else if (near_chord(early, a, middle) && near_chord(late, middle, b)) {
+            lines_.back().push_back(middle.cast->point);
+            lines_.back().push_back(b.cast->point);
+        } else {
+            refine(a, early, middle, depth + 1);
+            refine(middle, late, b, depth + 1);
         }
-        refine(a, middle, depth + 1);
-        refine(middle, b, depth + 1);
     }
 
     /// The state of the light alone: the window is not asked.
@@ -209,6 +231,7 @@ template <Surface S> class Walk {
     const SunPath& path_;
     const PlateBox& window_;
     double tolerance_mm_;
+    bool hills_;
     std::vector<PlatePolyline> lines_;
 };
 

@@ -27,7 +27,8 @@ inline constexpr double k_chord_tolerance_mm = 0.004;
 /// @param window  plate frame; finite
 /// @return plate frame, mm, in the order of the path's parameter; empty where nothing is to be drawn
 /// Accuracy: vertices within 1e-6 mm of the shadow, chords within tolerance_mm of the curve, ends within 1e-6 mm of
-/// where the light or the window ends.
+/// where the light or the window ends. Behind a skyline, light or dark that lasts for less than a quarter of a step of
+/// the path (1½ minutes of a date line) may be left out.
 template <Surface S>
 [[nodiscard]] std::vector<PlatePolyline> trace(const Caster<S>& caster, const SunPath& path, const PlateBox& window,
                                                double tolerance_mm = k_chord_tolerance_mm);

@@ -15,6 +15,7 @@ SunPath hour_path_of_nodus(Angle hour_angle, const Season& season) {
 SunPath hour_path_of_style(Angle hour_angle) {
     SunPath path = hour_path_of_nodus(hour_angle, {Angle::degrees(-90), Angle::degrees(90)});
     path.light = Light::plate_only;
+    path.steps = 8; // lit from one pole to the plate's plane
     return path;
 }
 
@@ -36,7 +37,7 @@ SunPath mean_time_path(Angle mean_hour_angle, const MeanYear& year, double first
     };
     path.first = first_day;
     path.last = last_day;
-    path.steps = 120;
+    path.steps = 48;
     return path;
 }
 

@@ -33,13 +33,22 @@ struct SiteDirection {
     return {{cos(altitude) * sin(azimuth), cos(altitude) * cos(azimuth), sin(altitude)}};
 }
 
+/// A latitude's sine and cosine, for many places of the sky at one site.
+struct LatitudeSines {
+    double sine, cosine;
+    explicit LatitudeSines(Angle latitude) : sine{sin(latitude)}, cosine{cos(latitude)} {}
+};
+
 /// From the sky frame to the site frame. No refraction, no parallax.
 /// Source: docs/conventions.md, 2 (spherical triangle pole–zenith–Sun).
-[[nodiscard]] inline SiteDirection to_site(const SkyPlace& sky, Angle latitude) {
+[[nodiscard]] inline SiteDirection to_site(const SkyPlace& sky, const LatitudeSines& latitude) {
     const double sd = sin(sky.declination), cd = cos(sky.declination);
     const double sh = sin(sky.hour_angle), ch = cos(sky.hour_angle);
-    const double sp = sin(latitude), cp = cos(latitude);
+    const double sp = latitude.sine, cp = latitude.cosine;
     return {{-cd * sh, cp * sd - sp * cd * ch, sp * sd + cp * cd * ch}};
+}
+[[nodiscard]] inline SiteDirection to_site(const SkyPlace& sky, Angle latitude) {
+    return to_site(sky, LatitudeSines{latitude});
 }
 
 /// From the site frame to the sky frame; hour angle in [−180°, 180°).

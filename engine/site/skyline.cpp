@@ -14,6 +14,7 @@ Skyline::Skyline(std::vector<Mark> marks) : marks_{std::move(marks)} {
             throw std::invalid_argument("the azimuths of a skyline must rise from mark to mark");
         if (!(marks_[i].altitude >= Angle{} && marks_[i].altitude < Angle::degrees(90)))
             throw std::invalid_argument("a skyline's altitude must be from 0° to less than 90°");
+        highest_sine_ = std::max(highest_sine_, sin(marks_[i].altitude));
     }
     if (marks_.back().azimuth - marks_.front().azimuth >= Angle::degrees(360))
         throw std::invalid_argument("the azimuths of a skyline must lie within one turn");

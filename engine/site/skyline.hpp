@@ -23,6 +23,8 @@ class Skyline {
 
     [[nodiscard]] bool flat() const { return marks_.empty(); }
     [[nodiscard]] Angle altitude_at(Angle azimuth) const;
+    /// True where the Sun stands above the skyline. No refraction.
+    [[nodiscard]] bool sees(const SiteDirection& sun) const { return sun.enu.z() > highest_sine_ || clearance(sun) > 0; }
     /// Sine of the Sun's altitude less that of the skyline beneath it: > 0 where the Sun is seen. No refraction.
     [[nodiscard]] double clearance(const SiteDirection& sun) const {
         return flat() ? sun.enu.z() : sun.enu.z() - sin(altitude_at(sun.azimuth()));
@@ -30,6 +32,7 @@ class Skyline {
 
   private:
     std::vector<Mark> marks_;
+    double highest_sine_ = 0.0;
 };
 
 } // namespace dialwright

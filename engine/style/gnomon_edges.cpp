@@ -1,8 +1,6 @@
 // SPDX-License-Identifier: MIT
 #include "engine/style/gnomon_edges.hpp"
 
-#include <Eigen/Geometry>
-
 #include <cmath>
 
 namespace dialwright {
@@ -11,24 +9,20 @@ constexpr double k_in_plane = 1e-9; // sine
 }
 
 GnomonEdges::GnomonEdges(const PlateFrame& frame, const Style& style, Angle latitude, double thickness_mm)
-    : thickness_mm_{thickness_mm}, right_{cos(style.substyle), -sin(style.substyle)},
-      substyle_hour_angle_{style.substyle_hour_angle}, hour_sense_{1.0} {
-    // The Sun moves along s × north as its hour angle grows, and at the substyle's hour s is n without its part along
-    // the axis. The shadow moves the other way.
-    const Eigen::Vector3d right = right_.u_mm * frame.u + right_.v_mm * frame.v;
-    const Eigen::Vector3d sun_moves = frame.n.cross(north_pole(latitude).enu);
-    hour_sense_ = sun_moves.dot(right) <= 0 ? 1.0 : -1.0;
-}
+    : latitude_{latitude}, thickness_mm_{thickness_mm}, right_{cos(style.substyle), -sin(style.substyle)},
+      to_the_right_{right_.u_mm * frame.u + right_.v_mm * frame.v},
+      above_the_top_{to_site({style.substyle_hour_angle, Angle{}}, latitude).enu} {}
 
-Edge GnomonEdges::casting(Angle hour_angle) const {
+Edge GnomonEdges::casting(const SiteDirection& sun) const {
     if (!(thickness_mm_ > 0))
         return Edge::right;
-    const Angle from_substyle = hour_angle - substyle_hour_angle_;
-    const bool shadow_to_right = sin(from_substyle) * hour_sense_ >= 0;
+    const bool shadow_to_right = sun.enu.dot(to_the_right_) <= 0;
     // Exactly 6 h away both edges' shadows fall on one line across the substyle: it starts on the side to which it runs.
-    const bool above_top = cos(from_substyle) > -k_in_plane;
+    const bool above_top = sun.enu.dot(above_the_top_) > -k_in_plane;
     return shadow_to_right == above_top ? Edge::right : Edge::left;
 }
+
+Edge GnomonEdges::casting(Angle hour_angle) const { return casting(to_site({hour_angle, Angle{}}, latitude_)); }
 
 PlatePoint GnomonEdges::shift(Edge edge) const {
     const double half = edge == Edge::right ? thickness_mm_ / 2 : -thickness_mm_ / 2;
@@ -36,7 +30,8 @@ PlatePoint GnomonEdges::shift(Edge edge) const {
 }
 
 bool GnomonEdges::both_cast(Angle hour_angle) const {
-    return thickness_mm_ > 0 && std::abs(sin(hour_angle - substyle_hour_angle_)) < k_in_plane;
+    const double side = to_site({hour_angle, Angle{}}, latitude_).enu.dot(to_the_right_);
+    return thickness_mm_ > 0 && std::abs(side) < k_in_plane;
 }
 
 } // namespace dialwright

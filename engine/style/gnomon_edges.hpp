@@ -23,6 +23,8 @@ class GnomonEdges {
 
     [[nodiscard]] double thickness_mm() const { return thickness_mm_; }
     /// The edge that bounds the shadow; right throughout where the gnomon has no thickness and the edges are one.
+    [[nodiscard]] Edge casting(const SiteDirection& sun) const;
+    /// The same for an hour: the Sun's declination does not matter.
     [[nodiscard]] Edge casting(Angle hour_angle) const;
     /// How far the casting edge stands from the middle of the gnomon, plate frame.
     [[nodiscard]] PlatePoint shift(Edge edge) const;
@@ -30,10 +32,11 @@ class GnomonEdges {
     [[nodiscard]] bool both_cast(Angle hour_angle) const;
 
   private:
+    Angle latitude_;
     double thickness_mm_;
-    PlatePoint right_; ///< unit, plate frame
-    Angle substyle_hour_angle_;
-    double hour_sense_; ///< +1 where a later Sun throws its shadow to the right
+    PlatePoint right_;              ///< unit, plate frame
+    Eigen::Vector3d to_the_right_;  ///< the same, site frame
+    Eigen::Vector3d above_the_top_; ///< towards the Sun of the substyle's hour at the equinox: square to the gnomon's top
 };
 
 } // namespace dialwright

@@ -30,14 +30,17 @@ class BruteWalk {
   public:
     BruteWalk(const Caster<Plane>& caster, const SunPath& path, const PlateBox& window, int steps) {
         std::optional<Cast> before;
+        bool alone = true; // the last seen shadow has no neighbour of its own edge: a point, as where light only grazes
         for (int i = 0; i <= steps; ++i) {
             const double at = path.first + (path.last - path.first) * (double(i) / steps);
             const auto now = caster.cast(path.at(at), path.light, path.edge);
-            if (now && window.contains(now->point))
-                seen_.push_back(now->point);
+            const bool joined = now && before && now->edge == before->edge;
+            if (before && window.contains(before->point) && !(alone && !joined))
+                seen_.push_back(before->point);
             // Of the walk itself keep what comes near the window, so that a drawn end finds its place in it.
-            if (now && before && now->edge == before->edge && near(window, before->point, now->point))
+            if (joined && near(window, before->point, now->point))
                 walk_.push_back({before->point, now->point});
+            alone = !joined;
             before = now;
         }
     }

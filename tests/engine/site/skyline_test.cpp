@@ -37,6 +37,16 @@ TEST_CASE("A Sun is seen above the skyline and hidden beneath it", "[engine][sit
     CHECK(skyline.clearance({{0, 0, 1}}) > 0); // the zenith has no azimuth
 }
 
+TEST_CASE("What is seen is what stands clear", "[engine][site]") {
+    const Skyline skyline{{mark(20, 10), mark(100, 30), mark(340, 6)}};
+    for (double azimuth = 0; azimuth < 360; azimuth += 1)
+        for (double height = -5; height < 40; height += 0.37) {
+            const SiteDirection sun = direction_at(Angle::degrees(azimuth), Angle::degrees(height));
+            REQUIRE(skyline.sees(sun) == (skyline.clearance(sun) > 0));
+            REQUIRE(Skyline{}.sees(sun) == (height > 0));
+        }
+}
+
 TEST_CASE("A skyline that cannot be is refused", "[engine][site]") {
     using Marks = std::vector<Skyline::Mark>;
     CHECK_THROWS_AS((Skyline{Marks{mark(0, 1)}}), std::invalid_argument);
