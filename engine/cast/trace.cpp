@@ -49,7 +49,7 @@ template <Surface S> class Walk {
         if (before.visible())
             begin(before);
         for (int i = 1; i <= path_.steps; ++i) {
-            const Step after = step(i == path_.steps ? path_.last : parameter(i));
+            const Step after = step(parameter(i, path_.steps));
             join(before, after, 0);
             before = after;
         }
@@ -62,7 +62,7 @@ template <Surface S> class Walk {
         double first = path_.first, low = first;
         int light = light_at(first);
         for (int i = 1; i <= steps; ++i) {
-            const double high = i == steps ? path_.last : path_.first + (path_.last - path_.first) * (double(i) / steps);
+            const double high = parameter(i, steps);
             const int next = light_at(high);
             for (int changes = 0; light != next && changes < 4; ++changes) {
                 const auto [before, after] = change_between(low, high, light);
@@ -90,8 +90,8 @@ template <Surface S> class Walk {
         [[nodiscard]] bool visible() const { return state != k_unseen; }
     };
 
-    [[nodiscard]] double parameter(int i) const {
-        return path_.first + (path_.last - path_.first) * (double(i) / path_.steps);
+    [[nodiscard]] double parameter(int i, int steps) const {
+        return i == steps ? path_.last : path_.first + (path_.last - path_.first) * (double(i) / steps);
     }
     [[nodiscard]] std::optional<Cast> cast(double t) const { return caster_.cast(path_.at(t), path_.light, path_.edge); }
     [[nodiscard]] static int state_of(const std::optional<Cast>& shadow) {

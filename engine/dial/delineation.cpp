@@ -3,6 +3,7 @@
 
 #include <algorithm>
 #include <cmath>
+#include <stdexcept>
 
 namespace dialwright {
 namespace {
@@ -65,33 +66,46 @@ class Delineator {
         line.time_h = minute / 60.0;
         line.step_min = coarsest_step_of(minute);
         line.hour_angle = hour_angle_of(plan_.hours.time, line.time_h, plan_.site, plan_.zone_meridian);
-        if (line.family == Family::clock_hour) {
-            const DayStretch days = stretch_of(plan_.hours.half_year, year_);
-            line.pieces = trace(caster_, mean_time_path(line.hour_angle, year_, days.first, days.last), window_);
-        } else {
-            add_straight_pieces(line);
-        }
+        const bool lit = line.family == Family::clock_hour ? add_clock_pieces(line) : add_straight_pieces(line);
+        const bool whole_hour = minute % 60 == 0;
         if (!line.pieces.empty())
             made_.lines.push_back(std::move(line));
-        else if (minute % 60 == 0 && plan_.hours.first_h)
+        else if (whole_hour && lit)
+            made_.outside_hours.push_back(line.time_h);
+        else if (whole_hour && plan_.hours.first_h)
             made_.unlit_hours.push_back(line.time_h);
     }
 
-    void add_straight_pieces(DialLine& line) {
+    /// @return whether the hour is ever lit
+    bool add_clock_pieces(DialLine& line) {
+        const DayStretch days = stretch_of(plan_.hours.half_year, year_);
+        const SunPath path = mean_time_path(line.hour_angle, year_, days.first, days.last);
+        line.pieces = trace(caster_, path, window_);
+        if (!line.pieces.empty())
+            return true;
+        for (int i = 0; i <= path.steps; ++i)
+            if (caster_.cast(path.at(path.first + (path.last - path.first) * i / path.steps), path.light))
+                return true;
+        return false;
+    }
+
+    /// @return whether the hour is ever lit
+    bool add_straight_pieces(DialLine& line) {
         if (!caster_.ever_lit(line.hour_angle, made_.season))
-            return;
+            return false;
         line.direction = hour_line_direction(made_.frame, made_.style, plan_.site.latitude, line.hour_angle);
         SunPath path = plan_.hours.extent == HourExtent::style ? hour_path_of_style(line.hour_angle)
                                                                : hour_path_of_nodus(line.hour_angle, made_.season);
         if (!caster_.edges().both_cast(line.hour_angle)) {
             line.pieces = trace(caster_, path, window_);
-            return;
+            return true;
         }
         for (const Edge edge : {Edge::left, Edge::right}) { // the two sides of the noon gap
             path.edge = edge;
             for (PlatePolyline& piece : trace(caster_, path, window_))
                 line.pieces.push_back(std::move(piece));
         }
+        return true;
     }
 
     void add_date(const DatePlan::Line& date) {
@@ -133,6 +147,8 @@ Caster<Plane> caster_of(const DialPlan& plan) {
 }
 
 Delineation delineate(const DialPlan& plan, const MeanYear& year, const PlateBox& window) {
+    if (plan.hours.divide_min < 1 || 60 % plan.hours.divide_min != 0)
+        throw std::invalid_argument("an hour must divide into a whole number of parts of whole minutes");
     return Delineator{plan, year, window}.made();
 }
 

@@ -28,14 +28,15 @@ struct Delineation {
     Style style;
     Season season;                     ///< of the mean year
     std::vector<DialLine> lines;       ///< hours by time, then dates in the plan's order
-    std::vector<double> unlit_hours;   ///< whole hours that the plan asks for and that are never lit
+    std::vector<double> unlit_hours;   ///< whole hours that the plan asks for by name and that are never lit
+    std::vector<double> outside_hours; ///< whole hours that are lit, but whose lines lie wholly outside the window
     std::vector<std::string> unlit_dates; ///< date lines of which nothing falls into the window
 };
 
 [[nodiscard]] Caster<Plane> caster_of(const DialPlan& plan);
 
 /// @param window  plate frame, mm
-/// @throws std::invalid_argument  the plan's nodus is not above the plate
+/// @throws std::invalid_argument  the plan's nodus is not above the plate, or its divisions do not divide the hour
 [[nodiscard]] Delineation delineate(const DialPlan& plan, const MeanYear& year, const PlateBox& window);
 
 /// What a dial as planned shows at the Sun's place: the time on its own scale by the line on which the shadow falls,

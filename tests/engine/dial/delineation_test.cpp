@@ -142,6 +142,24 @@ TEST_CASE("A wall facing north has no noon, a wall facing east no afternoon", "[
     CHECK(east.back() == 11);
 }
 
+TEST_CASE("A lit hour whose line misses the plate is not called unlit", "[engine][dial]") {
+    // The 11 o'clock line of an east wall runs h cot 15° = 373 mm from the style's.
+    DialPlan plan = plan_at(54, -2, {Angle::degrees(90), Angle{}});
+    plan.hours.first_h = 9;
+    plan.hours.last_h = 13;
+    const PlateBox small{-100, -100, 150, 100};
+    for (const HourTime time : {HourTime::sun, HourTime::clock}) {
+        plan.hours.time = time;
+        const Delineation dial = delineate(plan, mean_year(), small);
+        CHECK(dial.outside_hours == (time == HourTime::sun ? std::vector<double>{11} : std::vector<double>{11, 12}));
+        CHECK(dial.unlit_hours == (time == HourTime::sun ? std::vector<double>{12, 13} : std::vector<double>{13}));
+    }
+    plan.hours.divide_min = 7;
+    CHECK_THROWS_AS(delineate(plan, mean_year(), small), std::invalid_argument);
+    plan.hours.divide_min = 0;
+    CHECK_THROWS_AS(delineate(plan, mean_year(), small), std::invalid_argument);
+}
+
 TEST_CASE("Dates that the Sun never shows are named", "[engine][dial]") {
     const auto dated = [](const Attitude& attitude) {
         DialPlan plan = plan_at(54, -2, attitude);
