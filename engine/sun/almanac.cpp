@@ -25,7 +25,7 @@ constexpr int k_points = 6;
 /// The weights of six equally spaced nodes at −2, −1, 0, 1, 2, 3 for a place p between 0 and 1.
 std::array<double, k_points> lagrange_weights(double p) {
     const double a = p + 2, b = p + 1, c = p, d = p - 1, e = p - 2, f = p - 3;
-    return {b * c * d * e * f / -120.0, a * c * d * e * f / 24.0, a * b * d * e * f / -12.0,
+    return {b * c * d * e * f / -120.0, a * c * d * e * f / 24.0,  a * b * d * e * f / -12.0,
             a * b * c * e * f / 12.0,   a * b * c * d * f / -24.0, a * b * c * d * e / 120.0};
 }
 
@@ -44,7 +44,9 @@ std::size_t places_in_table(Instant first, Instant last) {
     return static_cast<std::size_t>(duration<double, days::period>(last - first).count() / k_step_days) + k_points;
 }
 
-int year_of(Instant utc) { return static_cast<int>(year_month_day{floor<days>(utc)}.year()); }
+int year_of(Instant utc) {
+    return static_cast<int>(year_month_day{floor<days>(utc)}.year());
+}
 
 } // namespace
 

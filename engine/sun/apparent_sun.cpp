@@ -91,7 +91,8 @@ ApparentSun apparent_sun(Instant utc) {
     eraC2s(of_date.data(), &right_ascension, &declination);
 
     // Greenwich apparent sidereal time, as eraGst00b has it, but from the nutation that is at hand already.
-    const double sidereal = eraGmst00(k_j2000, ut, k_j2000, tt) + eraEe00(k_j2000, tt, mean_obliquity, nutation_in_longitude);
+    const double sidereal =
+        eraGmst00(k_j2000, ut, k_j2000, tt) + eraEe00(k_j2000, tt, mean_obliquity, nutation_in_longitude);
     const Angle hour_angle = Angle::radians(sidereal - right_ascension).positive_turn();
     return {Angle::radians(declination), hour_angle, (hour_angle - mean_greenwich_hour_angle(utc)).signed_turn()};
 }

@@ -14,9 +14,9 @@
 // (over 20 years 0.008 days at each new year: 2″ in declination, 0.2 s in E). That drift is measured at both ends and
 // spread evenly over the year, half to either side, so that the year closes.
 //
-// What remains is a smooth periodic function, known from 15 moments a year: harmonics up to the seventh (the eighth is
-// 0.1″). The Moon sways the Earth by 6″ in longitude with the month; over the years its phases spread evenly over each
-// moment and leave little of it: 0.3″ after twenty years, 2″ after four.
+// What remains is a smooth periodic function, known from 13 moments a year: harmonics up to the sixth (the seventh is
+// 0.3″ in declination, 0.03 s in E). The Moon sways the Earth by 6″ in longitude with the month; over the years its
+// phases spread evenly over each moment and leave little of it: 0.3″ after twenty years, 2″ after four.
 #include "engine/sun/mean_year.hpp"
 
 #include "engine/sun/apparent_sun.hpp"
@@ -61,10 +61,10 @@ Sum mean_at(int first_year, int last_year, double t) {
 
 } // namespace
 
-MeanYear::MeanYear(int first_year, int last_year)
-    : first_year_{first_year}, last_year_{last_year} {
+MeanYear::MeanYear(int first_year, int last_year) : first_year_{first_year}, last_year_{last_year} {
     if (first_year < 1901 || last_year > 2099 || last_year < first_year || (last_year - first_year + 1) % 4 != 0)
-        throw std::invalid_argument("the years of a mean year are a whole number of four-year leap cycles within 1901 to 2099");
+        throw std::invalid_argument(
+            "the years of a mean year are a whole number of four-year leap cycles within 1901 to 2099");
 
     // The years share their new years' moments, so that between the two ends of the mean only two moments are left.
     const ApparentSun opening = apparent_sun(Instant{sys_days{year{first_year} / January / 1}});

@@ -17,7 +17,8 @@ constexpr double k_close_enough_days = 0.01 / 86400.0;
 constexpr int k_most_trials = 60;
 
 /// @tparam SunAt  gives the ApparentSun of an Instant
-template <class SunAt> class DayFinder {
+template <class SunAt>
+class DayFinder {
   public:
     DayFinder(const Site& site, Angle standard_altitude, const SunAt& sun_at)
         : site_{site}, standard_altitude_{standard_altitude}, sun_at_{sun_at} {}
@@ -97,7 +98,8 @@ template <class SunAt> class DayFinder {
     const SunAt& sun_at_;
 };
 
-template <class SunAt> SolarDay find_day(const Site& site, Instant about, Angle standard_altitude, const SunAt& sun_at) {
+template <class SunAt>
+SolarDay find_day(const Site& site, Instant about, Angle standard_altitude, const SunAt& sun_at) {
     return DayFinder<SunAt>{site, standard_altitude, sun_at}.find(about);
 }
 

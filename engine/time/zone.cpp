@@ -3,9 +3,9 @@
 // Two things that the system's tables leave to their reader:
 // - They flag summer time but do not say by how much the clocks are forward. The amount is the difference to the
 //   standard time before it (or after it, at the beginning of the tables).
-// - They end with 2037. Later years repeat the rule of that time: a day of a later year is looked up on the same date
-//   of a year near 2037 in which it falls on the same weekday. Two stretches of a year are looked up apart, January
-//   and February, and March to December: so seven common years serve leap years too.
+// - They end with 2037 (with 2086 for two zones whose summer time heeds Ramadan; these then stand still). Later years
+//   repeat the rule of that time: a day from March on is looked up on the same date of a year near 2037 in which it
+//   falls on the same weekday; January and February, in which no rule changes the clocks, in 2037.
 #include "engine/time/zone.hpp"
 
 #include <date/tz.h>
@@ -24,7 +24,9 @@ using namespace std::chrono;
 
 constexpr year k_last_table_year{2037};
 constexpr Instant k_tables_end = sys_days{(k_last_table_year + years{1}) / January / 1};
-constexpr int k_most_steps_back = 12;
+constexpr auto k_longest_summer_time = years{10}; // in wars it went on for years
+constexpr auto k_endless = years{1000};           // longer is only what lies before or after the tables
+constexpr seconds k_most_summer_time = hours{2};  // double summer time, the most that any zone has kept
 
 /// A stretch of time with one offset.
 struct Stretch {
@@ -36,7 +38,9 @@ struct Stretch {
     days shift{0}; // later than the stretch of the tables that it repeats
 };
 
-date::sys_seconds to_seconds(Instant utc) { return date::sys_seconds{floor<seconds>(utc.time_since_epoch())}; }
+date::sys_seconds to_seconds(Instant utc) {
+    return date::sys_seconds{floor<seconds>(utc.time_since_epoch())};
+}
 
 /// The ends of the tables are given as years beyond what microseconds hold.
 Instant to_instant(date::sys_seconds when) {
@@ -50,10 +54,10 @@ Stretch in_tables(const date::time_zone* zone, Instant utc) {
     return {to_instant(info.begin), to_instant(info.end), info.offset, info.save != minutes{0}, info.abbrev, days{0}};
 }
 
-/// One of the seven common years up to 2037 whose 1 January is this weekday.
-year common_year_from(weekday first_day) {
-    constexpr std::array<int, 7> k_years{2034, 2035, 2030, 2031, 2037, 2027, 2033}; // Sunday first
-    return year{k_years[first_day.c_encoding()]};
+/// The latest year of the tables whose 1 March is this weekday.
+year year_like(weekday first_of_march) {
+    constexpr std::array<int, 7> k_years{2037, 2032, 2033, 2034, 2035, 2030, 2036}; // Sunday first
+    return year{k_years[first_of_march.c_encoding()]};
 }
 
 /// Where a day after 2037 is looked up: from `begin` to `end`, all days are `shift` later than their like in the tables.
@@ -66,19 +70,16 @@ struct Repeat {
 Repeat repeat_of(Instant utc) {
     const year_month_day date{floor<days>(utc)};
     const sys_days new_year = date.year() / January / 1, spring = date.year() / March / 1;
-    if (date.month() < March) {
-        const sys_days like = common_year_from(weekday{new_year}) / January / 1;
-        return {new_year, spring, new_year - like};
-    }
-    // 1 March is the 60th day of a common year: three weekdays after its first.
-    const sys_days like = common_year_from(weekday{spring} - days{3}) / March / 1;
+    if (date.month() < March)
+        return {new_year, spring, new_year - sys_days{k_last_table_year / January / 1}};
+    const sys_days like = year_like(weekday{spring}) / March / 1;
     return {spring, sys_days{(date.year() + years{1}) / January / 1}, spring - like};
 }
 
 Stretch stretch_at(const date::time_zone* zone, Instant utc) {
     Stretch found = in_tables(zone, utc);
     const Instant last_rule = sys_days{k_last_table_year / January / 1};
-    const bool goes_on = found.end > k_tables_end + years{1000} && found.begin >= last_rule && found.begin < k_tables_end;
+    const bool goes_on = found.end - found.begin > k_endless && found.begin >= last_rule && found.begin < k_tables_end;
     if (!goes_on)
         return found;
     if (utc < k_tables_end) {
@@ -116,17 +117,25 @@ seconds standard_of(const date::time_zone* zone, const Stretch& stretch) {
                 return next.offset;
         return stretch.offset;
     }
-    Stretch earlier = before;
-    for (int i = 0; i < k_most_steps_back; ++i) {
-        if (!earlier.flagged && earlier.offset < stretch.offset)
+    // The nearest standard time that this can be the summer time of; a zone that changed sides or left its local mean
+    // time long ago is further away.
+    const auto fits = [&stretch](const Stretch& other) {
+        return !other.flagged && other.offset < stretch.offset && stretch.offset - other.offset <= k_most_summer_time;
+    };
+    // The first and last stretches of the tables reach so far that they end the search.
+    for (Stretch earlier = before; stretch.begin - earlier.end < k_longest_summer_time;
+         earlier = in_tables(zone, earlier.begin - seconds{1})) {
+        if (fits(earlier))
             return earlier.offset;
-        earlier = in_tables(zone, earlier.begin - seconds{1});
+        if (earlier.end - earlier.begin > k_endless)
+            break;
     }
-    Stretch later = in_tables(zone, stretch.end);
-    for (int i = 0; i < k_most_steps_back; ++i) {
-        if (!later.flagged && later.offset < stretch.offset)
+    for (Stretch later = in_tables(zone, stretch.end); later.begin - stretch.end < k_longest_summer_time;
+         later = in_tables(zone, later.end)) {
+        if (fits(later))
             return later.offset;
-        later = in_tables(zone, later.end);
+        if (later.end - later.begin > k_endless)
+            break;
     }
     return stretch.offset - hours{1};
 }
@@ -156,20 +165,25 @@ std::size_t edit_distance(std::string_view a, std::string_view b) {
 }
 
 /// The tables hold, beside the places, the machine's own setting.
-bool is_a_place(const std::string& name) { return name != "localtime" && name != "posixrules"; }
+bool is_a_place(const std::string& name) {
+    return name != "localtime" && name != "posixrules";
+}
 
 } // namespace
 
 std::optional<Zone> Zone::find(std::string_view tz_name) {
     const date::tzdb& database = date::get_tzdb();
-    const auto found = std::lower_bound(database.zones.begin(), database.zones.end(), tz_name,
-                                        [](const date::time_zone& zone, std::string_view name) { return zone.name() < name; });
+    const auto found =
+        std::lower_bound(database.zones.begin(), database.zones.end(), tz_name,
+                         [](const date::time_zone& zone, std::string_view name) { return zone.name() < name; });
     if (found == database.zones.end() || found->name() != tz_name || !is_a_place(found->name()))
         return std::nullopt;
     return Zone{&*found};
 }
 
-const std::string& Zone::name() const { return zone_->name(); }
+const std::string& Zone::name() const {
+    return zone_->name();
+}
 
 ZoneOffset Zone::at(Instant utc) const {
     const Stretch stretch = stretch_at(zone_, utc);
@@ -184,7 +198,8 @@ ClockReading Zone::to_clock(Instant utc) const {
 LocalReading Zone::to_utc(ClockReading reading) const {
     // A day to either side is out of reach of any one change of the clocks.
     const Instant as_utc{reading.time_since_epoch()};
-    const seconds before = stretch_at(zone_, as_utc - days{1}).offset, after = stretch_at(zone_, as_utc + days{1}).offset;
+    const seconds before = stretch_at(zone_, as_utc - days{1}).offset,
+                  after = stretch_at(zone_, as_utc + days{1}).offset;
     const Instant by_before = as_utc - before, by_after = as_utc - after;
     const bool before_holds = to_clock(by_before) == reading, after_holds = to_clock(by_after) == reading;
     if (before_holds && after_holds && before != after)

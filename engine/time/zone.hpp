@@ -44,7 +44,7 @@ struct LocalReading {
 /// The database flags as "summer time" a winter offset where a law calls the summer's time standard (Europe/Dublin,
 /// Africa/Casablanca). Here the smaller of the two offsets is standard time always: it is the one by which the
 /// trade places a dial's zone meridian.
-/// Years beyond the tables of the database follow the last rule that it holds.
+/// Years beyond the tables of the database, which end with 2037, follow the last rule that it holds.
 class Zone {
   public:
     /// Nothing if the database has no zone of this name (exact spelling, such as "Europe/London").

@@ -99,7 +99,8 @@ void compare(year first, year last, int count, double arcseconds) {
         const ApparentSun ours = apparent_sun(utc);
         const Place theirs = place_by_libnova(utc);
         const double declination = (ours.declination - theirs.declination).in_arcseconds();
-        const double hour_angle = (ours.greenwich_hour_angle - theirs.greenwich_hour_angle).signed_turn().in_arcseconds();
+        const double hour_angle =
+            (ours.greenwich_hour_angle - theirs.greenwich_hour_angle).signed_turn().in_arcseconds();
         most_declination = std::fmax(most_declination, std::abs(declination));
         most_hour_angle = std::fmax(most_hour_angle, std::abs(hour_angle));
     }

@@ -23,7 +23,8 @@ namespace {
 double g_sink = 0.0; // keeps the optimizer from leaving the work out
 
 /// Milliseconds of the fastest of some runs: the one least disturbed.
-template <class Work> double fastest_ms(int runs, const Work& work) {
+template <class Work>
+double fastest_ms(int runs, const Work& work) {
     double best = 1e300;
     for (int i = 0; i < runs; ++i) {
         const auto start = steady_clock::now();
@@ -54,22 +55,29 @@ int main(int count, char** arguments) {
     const int runs = quick ? 1 : 15;
     const int places = quick ? 50 : 1000;
 
-    const double place_ms = fastest_ms(runs, [&] {
-        for (int i = 0; i < places; ++i)
-            g_sink += apparent_sun(Instant{sys_days{2026y / 1 / 1}} + hours{8 * i}).declination.in_radians();
-    }) / places;
+    const double place_ms =
+        fastest_ms(runs,
+                   [&] {
+                       for (int i = 0; i < places; ++i)
+                           g_sink +=
+                               apparent_sun(Instant{sys_days{2026y / 1 / 1}} + hours{8 * i}).declination.in_radians();
+                   }) /
+        places;
     const double hours_ms = 366 * 24 * place_ms;
     row("one place of the Sun, from the theory", place_ms, "");
     row("366 x 24 of them", hours_ms, "");
 
-    const double almanac_ms = fastest_ms(runs, [] { g_sink += Almanac::of_year(2028).at(sys_days{2028y / 5 / 1}).declination.in_radians(); });
-    row("a year's almanac", almanac_ms, fmt::format("1/{:.1f} of the above (asked: 1/20 or less)", hours_ms / almanac_ms));
+    const double almanac_ms =
+        fastest_ms(runs, [] { g_sink += Almanac::of_year(2028).at(sys_days{2028y / 5 / 1}).declination.in_radians(); });
+    row("a year's almanac", almanac_ms,
+        fmt::format("1/{:.1f} of the above (asked: 1/20 or less)", hours_ms / almanac_ms));
 
     const double read_ms = fastest_ms(runs, [almanac = Almanac::of_year(2028)] {
         for (int i = 0; i < 366 * 24; ++i)
             g_sink += almanac.at(almanac.first() + hours{i}).declination.in_radians();
     });
-    row("366 x 24 places from it", read_ms, fmt::format("with the almanac 1/{:.1f}", hours_ms / (almanac_ms + read_ms)));
+    row("366 x 24 places from it", read_ms,
+        fmt::format("with the almanac 1/{:.1f}", hours_ms / (almanac_ms + read_ms)));
 
     const double mean_ms = fastest_ms(runs, [] { g_sink += MeanYear{2021, 2040}.obliquity().in_radians(); });
     row("the mean over twenty years", mean_ms, fmt::format("{:.2f} almanacs (asked: 2 or less)", mean_ms / almanac_ms));
@@ -82,10 +90,13 @@ int main(int count, char** arguments) {
     std::vector<std::string> texts;
     for (const Instant instant : instants)
         texts.push_back(write_instant(instant));
-    row(fmt::format("reading {} instants", many), fastest_ms(runs, [&] {
-            for (const std::string& text : texts)
-                g_sink += static_cast<double>(read_instant(text)->time_since_epoch().count());
-        }), "");
+    row(fmt::format("reading {} instants", many),
+        fastest_ms(runs,
+                   [&] {
+                       for (const std::string& text : texts)
+                           g_sink += static_cast<double>(read_instant(text)->time_since_epoch().count());
+                   }),
+        "");
 
     const auto start = steady_clock::now();
     const Zone zone = Zone::find("Europe/London").value();
@@ -93,8 +104,7 @@ int main(int count, char** arguments) {
     row("the first zone looked up", duration<double, std::milli>(steady_clock::now() - start).count(), "");
 
     const Site site{Angle::degrees(54.2), Angle::degrees(-2.5)};
-    row("rise, noon and set of a day", fastest_ms(runs, [&] {
-            g_sink += solar_day(site, 2026y / 6 / 21, zone).noon_altitude.in_radians();
-        }), "");
+    row("rise, noon and set of a day",
+        fastest_ms(runs, [&] { g_sink += solar_day(site, 2026y / 6 / 21, zone).noon_altitude.in_radians(); }), "");
     return g_sink > 0.0 ? 0 : 1;
 }

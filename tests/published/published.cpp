@@ -76,7 +76,9 @@ std::vector<Case> cases_of_file(const std::filesystem::path& path) {
 
 } // namespace
 
-double Expectation::number() const { return to_number(value); }
+double Expectation::number() const {
+    return to_number(value);
+}
 
 const std::string& Case::text(const std::string& name) const {
     const auto found = given.find(name);
@@ -85,7 +87,9 @@ const std::string& Case::text(const std::string& name) const {
     return found->second;
 }
 
-double Case::number(const std::string& name) const { return to_number(text(name)); }
+double Case::number(const std::string& name) const {
+    return to_number(text(name));
+}
 
 std::vector<Case> cases_in(const std::string& folder) {
     const std::filesystem::path path = std::filesystem::path{DIALWRIGHT_SOURCE_DIR} / "tests/published" / folder;

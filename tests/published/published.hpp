@@ -19,7 +19,7 @@ namespace published {
 
 struct Expectation {
     std::string name;
-    std::string value;           ///< as printed
+    std::string value;            ///< as printed
     std::optional<double> within; ///< in the unit that the name ends with
     [[nodiscard]] bool nothing() const { return value == "nothing"; }
     [[nodiscard]] double number() const;

@@ -71,7 +71,8 @@ void check_rise_and_set(const published::Case& c) {
         REQUIRE((expected.name == "rise" || expected.name == "set"));
         REQUIRE(passage.has_value() != expected.nothing());
         if (passage)
-            CHECK_THAT(duration<double>(passage->at - instant(expected.value)).count(), WithinAbs(0.0, expected.within.value()));
+            CHECK_THAT(duration<double>(passage->at - instant(expected.value)).count(),
+                       WithinAbs(0.0, expected.within.value()));
     }
 }
 
@@ -107,9 +108,8 @@ void check_calendar_year(const published::Case& c) {
     const year y{static_cast<int>(c.number("year"))};
     const Instant start = sys_days{y / 1 / 1};
     const Almanac almanac{start - days{40}, start + days{400}};
-    check_year(c, [&](int day) {
-        return almanac.at(start + days{day} + 12h).equation_of_time.in_minutes_of_time() * 60.0;
-    });
+    check_year(
+        c, [&](int day) { return almanac.at(start + days{day} + 12h).equation_of_time.in_minutes_of_time() * 60.0; });
 }
 
 void check_mean_year(const published::Case& c) {

@@ -22,7 +22,9 @@ Site place(double latitude_deg, double longitude_deg) {
     return {Angle::degrees(latitude_deg), Angle::degrees(longitude_deg)};
 }
 
-Instant noon_of(year_month_day date) { return Instant{sys_days{date}} + 12h; }
+Instant noon_of(year_month_day date) {
+    return Instant{sys_days{date}} + 12h;
+}
 
 } // namespace
 
@@ -44,7 +46,8 @@ TEST_CASE("at rise and set the Sun stands at the standard altitude, at noon in t
         for (const auto& passage : {day.rise, day.set})
             if (passage) {
                 // A hundredth of a second is 0.15", less where the Sun climbs aslant.
-                CHECK_THAT((altitude_at(site, passage->at) - k_upper_edge_altitude).in_arcseconds(), WithinAbs(0.0, 0.2));
+                CHECK_THAT((altitude_at(site, passage->at) - k_upper_edge_altitude).in_arcseconds(),
+                           WithinAbs(0.0, 0.2));
             }
         if (day.rise) {
             CHECK(day.rise->at < day.noon);
@@ -126,7 +129,8 @@ TEST_CASE("a table gives the same day", "[engine][solar_day]") {
     const Almanac almanac{sys_days{2025y / 12 / 29}, sys_days{2027y / 1 / 4}};
     for (int d = 0; d < 365; d += 9) {
         const Instant about = noon_of(2026y / 1 / 1) + days{d};
-        const SolarDay direct = solar_day(place(54.2, -2.5), about), table = solar_day(place(54.2, -2.5), about, almanac);
+        const SolarDay direct = solar_day(place(54.2, -2.5), about),
+                       table = solar_day(place(54.2, -2.5), about, almanac);
         CHECK(abs(direct.noon - table.noon) < 20ms);
         CHECK(abs(direct.rise->at - table.rise->at) < 50ms);
         CHECK(abs(direct.set->at - table.set->at) < 50ms);

@@ -80,6 +80,8 @@ TEST_CASE("an offset is split into standard and summer time", "[engine][zone]") 
              Case{"Asia/Kathmandu", "2026-01-15T00:00:00Z", 5h + 45min, 0h, "+0545"},
              Case{"Europe/Istanbul", "2016-07-01T00:00:00Z", 3h, 1h, "EEST"}, // then kept as standard
              Case{"Europe/Istanbul", "2026-07-01T00:00:00Z", 3h, 0h, "+03"},
+             Case{"Pacific/Apia", "2012-02-01T00:00:00Z", 14h, 1h,
+                  "+14"}, // the summer in which it crossed the date line
              Case{"Europe/Moscow", "2012-07-01T00:00:00Z", 4h, 0h, "MSK"},
          }) {
         CAPTURE(c.name, c.at);
@@ -135,7 +137,8 @@ TEST_CASE("every instant is found again from what its clocks show", "[engine][zo
     CAPTURE(seed);
     std::mt19937_64 random{seed};
     std::uniform_int_distribution<std::int64_t> any{-1'500'000'000, 4'000'000'000};
-    for (const char* name : {"Europe/London", "America/New_York", "Australia/Lord_Howe", "Africa/Casablanca", "Asia/Kathmandu"})
+    for (const char* name :
+         {"Europe/London", "America/New_York", "Australia/Lord_Howe", "Africa/Casablanca", "Asia/Kathmandu"})
         for (int i = 0; i < 500; ++i) {
             const Instant utc{seconds{any(random)}};
             CAPTURE(name, write_instant(utc));
@@ -146,7 +149,8 @@ TEST_CASE("every instant is found again from what its clocks show", "[engine][zo
 }
 
 TEST_CASE("summer time is never negative, and standard time is the same all year in steady zones", "[engine][zone]") {
-    for (const char* name : {"Europe/Dublin", "Africa/Casablanca", "Africa/Windhoek", "Europe/Prague", "America/St_Johns"})
+    for (const char* name :
+         {"Europe/Dublin", "Africa/Casablanca", "Africa/Windhoek", "Europe/Prague", "America/St_Johns"})
         for (int y = 1920; y <= 2060; ++y)
             for (unsigned m = 1; m <= 12; ++m) {
                 CAPTURE(name, y, m);
