@@ -11,9 +11,8 @@
 namespace dialwright::cli {
 namespace {
 
-constexpr std::array<const char*, 12> k_months{"January", "February", "March",     "April",   "May",      "June",
-                                               "July",    "August",   "September", "October", "November", "December"};
-/// The signs in the order of the Sun's longitude; U+FE0E asks for the plain form of the letter.
+constexpr std::array<const char*, 12> k_months{"Jan", "Feb", "Mar", "Apr", "May", "Jun", "Jul", "Aug", "Sep", "Oct", "Nov", "Dec"};
+/// The signs in the order of the Sun's longitude.
 constexpr std::array<const char*, 12> k_signs{"♈", "♉", "♊", "♋", "♌", "♍", "♎", "♏", "♐", "♑", "♒", "♓"};
 
 class DateLines {
@@ -21,11 +20,13 @@ class DateLines {
     explicit DateLines(const Design& design, const MeanYear& year)
         : year_{year}, local_noon_ut_h_{12.0 - design.place.site.longitude.in_hours()} {}
 
-    void add(std::string label, Angle declination) {
+    /// @param own_label  false: where a line is there already, its label will do
+    void add(std::string label, Angle declination, bool own_label = true) {
         constexpr Angle k_same = Angle::degrees(0.01);
         for (DatePlan::Line& line : plan.lines)
             if (abs(line.declination - declination) < k_same) {
-                line.label += " · " + label;
+                if (own_label)
+                    line.label += " · " + label;
                 return;
             }
         plan.lines.push_back({std::move(label), declination});
@@ -113,7 +114,7 @@ DatePlan date_plan(const Design& design, const MeanYear& year) {
             const Angle longitude = Angle::degrees(30.0 * first);
             const std::string label = first == second ? k_signs[std::size_t(first)]
                                                       : fmt::format("{} {}", k_signs[std::size_t(first)], k_signs[std::size_t(second)]);
-            lines.add(label, arc_sine(sin(tilt) * sin(longitude)));
+            lines.add(label, arc_sine(sin(tilt) * sin(longitude)), false);
         }
     if (design.dates.months)
         for (unsigned month = 1; month <= 12; ++month)

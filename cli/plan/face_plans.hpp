@@ -20,7 +20,7 @@ struct FacePlan {
 /// @param design  with a zone that the time zone database knows
 [[nodiscard]] std::vector<FacePlan> face_plans(const Design& design, const MeanYear& year);
 
-/// "21 June".
+/// "21 Jun".
 [[nodiscard]] std::string date_text(std::chrono::month_day day);
 
 /// The date lines that a design asks for: label and mean declination. Lines that coincide share one label.

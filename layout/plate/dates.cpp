@@ -127,7 +127,7 @@ class DateDrawer {
         const double sense = dot(whole_run, right) >= 0 ? 1.0 : -1.0; // reads to the reader's right
         LabelPlace place;
         const int chunks = std::max(2, int(std::ceil(2 * half / (1.5 * cap_mm_))));
-        const double off = side * (0.5 + 0.45) * cap_mm_;
+        const double off = side * ((0.5 + 0.45) * cap_mm_ + 0.7 * room.cell_mm());
         double clearance = 1e300;
         std::vector<Point> bases;
         for (int i = 0; i < chunks; ++i) {

@@ -99,12 +99,12 @@ void draw_compass(Bench& bench) {
             best_room = room;
             best = start + along * down;
         }
-    const double radius = std::min(0.8 * best_room, 0.065 * size);
+    const double radius = std::min(0.8 * best_room, 0.08 * size);
     if (radius < 3.0) {
         bench.warnings.push_back("no room for a compass mark");
         return;
     }
-    const LetteredLine letter = bench.lettering.line("N", 0.45 * radius);
+    const LetteredLine letter = bench.lettering.line("N", 0.3 * radius);
     const double reach = radius - letter.ink.height_mm() - 0.12 * radius;
     std::vector<Path> points;
     const auto ray = [&](double degrees, double reach_mm, double waist_mm) {

@@ -41,7 +41,9 @@ class HourDrawer {
   private:
     void add_rays(const DialLine& line) {
         for (const PlatePolyline& piece : line.pieces) {
-            const Polyline whole = bench_.to_work(piece);
+            Polyline whole = bench_.to_work(piece);
+            if (line.direction && dot(whole.back() - whole.front(), clockwise_from_up(*line.direction)) < 0)
+                std::reverse(whole.begin(), whole.end()); // from the centre outward
             Ray ray{&line, int(std::lround(line.time_h * 60)), clipped(whole, bench_.field()), {}};
             const auto in_ring = clipped(whole, {{bench_.rings.numerals}, {bench_.rings.divisions}});
             if (ray.field.empty())

@@ -58,7 +58,11 @@ class Placer {
     [[nodiscard]] double room_score(Point centre, const Outline& allowed) const {
         if (!allowed.contains(centre))
             return -1e300;
-        double score = 0;
+        // Behind the centre, away from the hours, stand the compass mark and the inscriptions.
+        const Point behind = -1.0 * clockwise_from_up(style_.substyle);
+        const double behind_weight = (spec_.compass ? 1.0 : 0.0) + (spec_.lettering.motto.empty() ? 0.0 : 1.5);
+        const auto room_behind = rings_.divisions.exit(centre, behind);
+        double score = room_behind ? behind_weight * std::log(std::max(1e-3, distance(centre, room_behind->at))) : 0.0;
         for (const Angle& hour : hours_) {
             const auto direction = hour_line_direction(caster_.surface().frame(), style_, plan_.site.latitude, hour);
             const auto exit = direction ? rings_.divisions.exit(centre, clockwise_from_up(*direction)) : std::nullopt;
@@ -69,8 +73,7 @@ class Placer {
     }
 
     [[nodiscard]] Point best_centre() const {
-        const double wanted = spec_.borders.inner_mm + 2 * spec_.cutting.least_gap_mm +
-                              (spec_.lettering.motto.empty() ? 0.0 : 2.5 * spec_.lettering.motto_height_mm);
+        const double wanted = spec_.borders.inner_mm + 2 * spec_.cutting.least_gap_mm;
         Outline allowed = rings_.divisions;
         for (const double part : {1.0, 0.5, 0.25})
             if (const auto inner = rings_.divisions.inset(part * wanted)) {

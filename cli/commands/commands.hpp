@@ -1,0 +1,16 @@
+// SPDX-License-Identifier: MIT
+#pragma once
+
+#include <CLI/CLI.hpp>
+
+#include <functional>
+
+namespace dialwright::cli {
+
+/// Each adds its command to the program. What it runs gives the program's exit status into `status`.
+void add_make(CLI::App& app, int& status);
+void add_numbers(CLI::App& app, int& status);
+void add_shadow(CLI::App& app, int& status);
+void add_check(CLI::App& app, int& status);
+
+} // namespace dialwright::cli

@@ -1,0 +1,162 @@
+// SPDX-License-Identifier: MIT
+#include "cli/packet/packet.hpp"
+
+#include "cli/report/numbers.hpp"
+#include "cli/report/say.hpp"
+#include "layout/export/pdf.hpp"
+#include "layout/export/svg.hpp"
+#include "layout/sheet/cover.hpp"
+
+#include <fmt/format.h>
+
+namespace dialwright::cli {
+namespace {
+
+using layout::Drawing;
+using layout::Sheet;
+
+const char* time_text(HourTime time) {
+    switch (time) {
+    case HourTime::sun:
+        return "the Sun's own, at this place";
+    case HourTime::zone:
+        return "by the Sun, corrected for longitude to the zone";
+    case HourTime::clock:
+        break;
+    }
+    return "the zone's clock, by yearly curves (summer time not added)";
+}
+
+std::string hours_text(const layout::Face& face) {
+    double first = 24, last = 0;
+    for (const layout::DrawnLine& line : face.lines)
+        if (line.family != Family::date) {
+            first = std::min(first, line.time_h);
+            last = std::max(last, line.time_h);
+        }
+    return first > last ? "none" : say_clock(first).substr(0, 5) + " to " + say_clock(last).substr(0, 5);
+}
+
+std::vector<std::pair<std::string, std::string>> key_numbers(const Commission& commission, std::size_t i) {
+    const Design& design = commission.design;
+    const bool inches = design.units == Units::inches;
+    const layout::Face& face = commission.faces[i];
+    const Style& style = face.delineation.style;
+    std::vector<std::pair<std::string, std::string>> rows;
+    rows.emplace_back("Place", say_latitude(design.place.site.latitude) + ", " + say_longitude(design.place.site.longitude));
+    rows.emplace_back("Zone", design.place.zone);
+    rows.emplace_back("Plate", say_attitude(commission.plans[i].dial.attitude));
+    rows.emplace_back("Size", fmt::format("{} × {}", say_length(design.plate.width_mm, inches), say_length(design.plate.height_mm, inches)));
+    if (!design.plate.material.empty())
+        rows.emplace_back("Material", design.plate.material);
+    rows.emplace_back("Style height", degrees_minutes(style.height));
+    if (style.height < Angle::degrees(89.99))
+        rows.emplace_back("Substyle", degrees_minutes(style.substyle) + " clockwise from " + (design.dial.kind == DialKind::level ? "north" : "up"));
+    rows.emplace_back("Nodus", say_length(face.placement.nodus_height_mm, inches) + " above the plate");
+    if (commission.plans[i].dial.gnomon_thickness_mm > 0)
+        rows.emplace_back("Gnomon", say_length(commission.plans[i].dial.gnomon_thickness_mm, inches) + " thick");
+    rows.emplace_back("Shows", time_text(design.hours.time));
+    rows.emplace_back("Hours", hours_text(face));
+    rows.emplace_back("Date lines", fmt::format("mean of {} to {}", design.years.first, design.years.last));
+    return rows;
+}
+
+/// Common practice, no source, where no other is named.
+std::vector<std::string> cautions(const Design& design) {
+    std::vector<std::string> list{
+        "Never look at the Sun to align a dial, not even for a moment and not through dark glass: work from the shadow.",
+        "The gnomon's tip and edges can wound, at face height and at child height above all: round them, or guard them.",
+        "Dust of stone and metal harms the lungs, silica from slate and sandstone gravely: cut wet or with extraction, and wear a fitted mask."};
+    if (design.dial.kind == DialKind::wall || design.dial.kind == DialKind::leaning)
+        list.push_back("A slab on a wall needs lifting gear and a fixing into sound masonry that a mason or engineer answers for. A listed building or a public place needs consent first: ask the authority.");
+    else
+        list.push_back("A slab of stone is heavier than it looks: lift with help or gear, and fix it so that nobody can pull it over. A public place needs consent first.");
+    list.push_back("Fumes of lasers, acids and soldering need extraction; metal in the Sun grows hot enough to burn. Local codes and licensed trades come before this sheet.");
+    return list;
+}
+
+std::vector<std::string> steps(const Design& design, bool has_tiles) {
+    std::vector<std::string> list{
+        "Measure the two bars on every sheet with a steel rule. If one is off, stop, and print again at 100 %.",
+    };
+    if (has_tiles)
+        list.push_back("Join the sheets by their crosses, flat and straight, and measure across the joins.");
+    list.push_back("Check the plate: the outline is cut, what is black is engraved, holes are drilled; ochre marks are scored lightly, pale ones only help to set out.");
+    if (design.dial.kind == DialKind::level)
+        list.push_back("Fix the plate level, with its north to true north (not the compass needle's).");
+    if (design.dial.kind == DialKind::equatorial)
+        list.push_back("Fix the plate in the plane of the equator, with its pin towards the pole, and the noon line in the meridian.");
+    if (design.dial.kind == DialKind::wall || design.dial.kind == DialKind::leaning)
+        list.push_back("Check which way the wall faces and how it leans before you cut: the lines are right for this attitude alone.");
+    list.push_back("Set the style at its height over the substyle, and prove it before the fixing sets.");
+    return list;
+}
+
+std::shared_ptr<const Drawing> shared(const Drawing& drawing) { return {std::shared_ptr<void>{}, &drawing}; }
+
+std::string face_suffix(const Commission& commission, std::size_t i) {
+    return commission.plans[i].name.empty() ? "" : "-" + commission.plans[i].name;
+}
+
+layout::SheetBook book_of(const Commission& commission, const std::vector<std::string>& warnings) {
+    const Design& design = commission.design;
+    layout::PrintOptions options;
+    options.paper = layout::paper_named(design.print.paper).value();
+    options.margin_mm = design.print.margin_mm;
+    options.overlap_mm = design.print.overlap_mm;
+    options.inches = design.units == Units::inches;
+
+    std::vector<layout::Tiling> tilings;
+    std::vector<layout::CoverFace> covers;
+    std::vector<Sheet> own_sizes;
+    for (std::size_t i = 0; i < commission.faces.size(); ++i) {
+        const auto drawing = shared(commission.faces[i].drawing);
+        const std::string& name = commission.plans[i].spec.name;
+        options.title = name.empty() ? design.title : design.title + ", " + name;
+        tilings.push_back(layout::tile(drawing, options));
+        if (design.print.own_size)
+            own_sizes.push_back(layout::own_size_sheet(drawing, options));
+        covers.push_back({name, drawing, key_numbers(commission, i), nullptr});
+    }
+    bool has_tiles = false;
+    for (std::size_t i = 0; i < tilings.size(); ++i) {
+        covers[i].tiling = &tilings[i];
+        has_tiles = has_tiles || tilings[i].sheets.size() > 1;
+    }
+    options.title = design.title;
+    layout::SheetBook book;
+    book.title = design.title;
+    book.subject = "Full-scale templates of a sundial";
+    const std::string where = design.place.name.empty() ? say_latitude(design.place.site.latitude) : design.place.name;
+    book.sheets = layout::cover_sheets({design.title, "Full-scale templates for a sundial at " + where, steps(design, has_tiles), cautions(design), warnings}, covers, options);
+    for (layout::Tiling& tiling : tilings)
+        for (Sheet& sheet : tiling.sheets)
+            book.sheets.push_back(std::move(sheet));
+    for (Sheet& sheet : own_sizes)
+        book.sheets.push_back(std::move(sheet));
+    return book;
+}
+
+} // namespace
+
+Packet make_packet(const Commission& commission) {
+    Packet packet;
+    for (std::size_t i = 0; i < commission.faces.size(); ++i)
+        for (const std::string& warning : commission.faces[i].warnings)
+            packet.warnings.push_back(commission.plans[i].spec.name.empty() ? warning : commission.plans[i].spec.name + ": " + warning);
+
+    const layout::SheetBook book = book_of(commission, packet.warnings);
+    packet.sheets = book.sheets.size();
+    packet.items.push_back({{"sheets.pdf", layout::pdf_of(book)}, "full-scale sheets: print this, and read its first page"});
+    for (std::size_t i = 0; i < commission.faces.size(); ++i) {
+        const Drawing& drawing = commission.faces[i].drawing;
+        packet.items.push_back({{"plate" + face_suffix(commission, i) + ".svg", layout::svg_of(drawing, layout::bounds_of(drawing))},
+                                "the plate for a machine, full scale, layers by process"});
+    }
+    packet.items.push_back({{"hour-lines.csv", hour_lines_csv(commission)}, "angles and ends of the hour lines"});
+    packet.items.push_back({{"numbers.txt", numbers_text(commission)}, "all numbers, to read"});
+    packet.items.push_back({{"numbers.json", numbers_json(commission)}, "all numbers, for programs"});
+    return packet;
+}
+
+} // namespace dialwright::cli

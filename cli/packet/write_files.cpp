@@ -1,0 +1,75 @@
+// SPDX-License-Identifier: MIT
+#include "cli/packet/write_files.hpp"
+
+#include <cerrno>
+#include <cstring>
+#include <fcntl.h>
+#include <fmt/format.h>
+#include <unistd.h>
+
+namespace dialwright::cli {
+namespace {
+
+[[noreturn]] void fail(const std::filesystem::path& path, int error) {
+    throw WriteError(fmt::format("cannot write {}: {}", path.string(), std::strerror(error)));
+}
+
+/// Writes and pushes to the disk; closes whatever happens.
+void write_whole(const std::filesystem::path& path, const std::string& bytes) {
+    const int file = ::open(path.c_str(), O_WRONLY | O_CREAT | O_TRUNC | O_CLOEXEC, 0666);
+    if (file < 0)
+        fail(path, errno);
+    std::size_t done = 0;
+    int error = 0;
+    while (done < bytes.size() && error == 0) {
+        const ssize_t wrote = ::write(file, bytes.data() + done, bytes.size() - done);
+        if (wrote > 0)
+            done += std::size_t(wrote);
+        else if (wrote < 0 && errno != EINTR)
+            error = errno;
+    }
+    // A full disk may show only here, or on close.
+    if (error == 0 && ::fdatasync(file) != 0 && errno != EINVAL && errno != EROFS)
+        error = errno;
+    if (::close(file) != 0 && error == 0)
+        error = errno;
+    if (error != 0)
+        fail(path, error);
+}
+
+} // namespace
+
+void write_files(const std::filesystem::path& folder, const std::vector<OutputFile>& files) {
+    namespace fs = std::filesystem;
+    std::error_code trouble;
+    const bool made_folder = fs::create_directories(folder, trouble);
+    if (trouble)
+        fail(folder, trouble.value());
+    std::vector<fs::path> waiting;
+    const auto put_back = [&] {
+        std::error_code ignored;
+        for (const fs::path& path : waiting)
+            fs::remove(path, ignored);
+        if (made_folder)
+            fs::remove(folder, ignored); // only if it is empty
+    };
+    try {
+        for (const OutputFile& file : files) {
+            const fs::path target = folder / file.name;
+            if (fs::is_directory(target, trouble))
+                fail(target, EISDIR);
+            waiting.push_back(folder / fmt::format(".{}.{}.part", file.name, ::getpid()));
+            write_whole(waiting.back(), file.bytes);
+        }
+        for (std::size_t i = 0; i < files.size(); ++i)
+            fs::rename(waiting[i], folder / files[i].name);
+    } catch (const WriteError&) {
+        put_back();
+        throw;
+    } catch (const fs::filesystem_error& error) {
+        put_back();
+        fail(folder, error.code().value());
+    }
+}
+
+} // namespace dialwright::cli

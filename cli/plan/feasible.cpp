@@ -1,0 +1,104 @@
+// SPDX-License-Identifier: MIT
+#include "cli/plan/feasible.hpp"
+
+#include "cli/report/say.hpp"
+#include "layout/plate/numerals.hpp"
+
+#include <algorithm>
+#include <fmt/format.h>
+#include <optional>
+
+namespace dialwright::cli {
+namespace {
+
+struct LitHours {
+    std::vector<double> hours; ///< quarter hours of the dial's own time
+};
+
+LitHours lit_hours(DialPlan plan, const MeanYear& year) {
+    plan.nodus_height_mm = 1.0;
+    const auto caster = caster_of(plan);
+    const Season season{-year.obliquity(), year.obliquity()};
+    LitHours lit;
+    for (int quarter = 0; quarter < 96; ++quarter)
+        if (caster.ever_lit(hour_angle_of(plan.hours.time, quarter / 4.0, plan.site, plan.zone_meridian), season))
+            lit.hours.push_back(quarter / 4.0);
+    return lit;
+}
+
+std::string span_text(const LitHours& lit) {
+    std::string text;
+    for (std::size_t i = 0; i < lit.hours.size();) {
+        std::size_t k = i;
+        while (k + 1 < lit.hours.size() && lit.hours[k + 1] - lit.hours[k] < 0.3)
+            ++k;
+        text += fmt::format("{}{} to {}", text.empty() ? "" : " and ", layout::time_label(lit.hours[i]), layout::time_label(lit.hours[k]));
+        i = k + 1;
+    }
+    return text;
+}
+
+} // namespace
+
+DesignError error_at(const Design& design, const std::string& key, std::string message, std::string hint) {
+    DesignError error{design.file, 1, 1, key, std::move(message), std::move(hint)};
+    // A key that the file leaves out is told at its section.
+    for (std::string name = key; !name.empty(); name = name.substr(0, name.rfind(": ") == std::string::npos ? 0 : name.rfind(": ")))
+        if (const auto at = design.where.find(name); at != design.where.end()) {
+            error.line = at->second.line;
+            error.column = at->second.column;
+            break;
+        }
+    return error;
+}
+
+std::vector<DesignError> what_cannot_be(const Design& design, const MeanYear& year, const std::vector<FacePlan>& plans) {
+    std::vector<DesignError> errors;
+    for (const FacePlan& plan : plans) {
+        const LitHours lit = lit_hours(plan.dial, year);
+        if (lit.hours.empty()) {
+            errors.push_back(error_at(design, design.dial.kind == DialKind::level || design.dial.kind == DialKind::equatorial ? "dial: kind" : "dial: facing",
+                                      fmt::format("the Sun never lights a plate that is {} at {}", say_attitude(plan.dial.attitude), say_latitude(plan.dial.site.latitude)),
+                                      "check which way the plate faces and how it leans; the Sun passes on the other side"));
+            continue;
+        }
+        const auto outside = [&](std::optional<double> hour) { return hour && std::none_of(lit.hours.begin(), lit.hours.end(), [&](double h) { return std::abs(h - *hour) < 0.2501; }); };
+        const auto lit_between = [&](double first, double last) {
+            return std::any_of(lit.hours.begin(), lit.hours.end(), [&](double h) { return h >= first && h <= last; });
+        };
+        const std::string face = plan.name.empty() ? "this plate" : "the " + plan.name + " face";
+        if ((design.hours.first_h || design.hours.last_h) && !lit_between(design.hours.first_h.value_or(0), design.hours.last_h.value_or(24)))
+            errors.push_back(error_at(design, design.hours.first_h ? "hours: from" : "hours: to",
+                                      fmt::format("{} is never lit between {} and {}", face, layout::time_label(design.hours.first_h.value_or(0)), layout::time_label(design.hours.last_h.value_or(24))),
+                                      fmt::format("it is lit from {}", span_text(lit))));
+        else if (plans.size() == 1 && outside(design.hours.first_h) && design.hours.first_h != design.hours.last_h)
+            errors.push_back(error_at(design, "hours: from", fmt::format("{} is never lit at {}", face, layout::time_label(*design.hours.first_h)),
+                                      fmt::format("it is lit from {}; leave the key out for all hours that are ever lit", span_text(lit))));
+        else if (plans.size() == 1 && outside(design.hours.last_h))
+            errors.push_back(error_at(design, "hours: to", fmt::format("{} is never lit at {}", face, layout::time_label(*design.hours.last_h)),
+                                      fmt::format("it is lit from {}; leave the key out for all hours that are ever lit", span_text(lit))));
+    }
+    return errors;
+}
+
+std::vector<DesignError> what_misses_the_plate(const Design& design, const std::vector<FacePlan>& plans, const std::vector<layout::Face>& faces) {
+    std::vector<DesignError> errors;
+    for (std::size_t i = 0; i < faces.size(); ++i) {
+        bool hours = false, dates = false;
+        for (const layout::DrawnLine& line : faces[i].lines)
+            (line.family == Family::date ? dates : hours) = true;
+        if (!hours)
+            errors.push_back(error_at(design, design.plate.centre ? "plate: centre" : "plate", "no hour line falls on the plate", "move the centre nearer to the plate, or leave \"centre\" out"));
+        const bool asked = !plans[i].dial.dates.lines.empty();
+        const bool one_can_fall = std::any_of(plans[i].dial.dates.lines.begin(), plans[i].dial.dates.lines.end(), [&](const DatePlan::Line& line) {
+            const bool equatorial = design.dial.kind == DialKind::equatorial; // an equinox line lies at infinity there
+            return !equatorial || std::abs(line.declination.in_degrees()) > 0.5;
+        });
+        if (asked && one_can_fall && !dates && design.gnomon.nodus_height_mm)
+            errors.push_back(error_at(design, "gnomon: nodus height", fmt::format("a nodus {} above the plate throws every date line off it", say_length(*design.gnomon.nodus_height_mm, false)),
+                                      "give a lower nodus, or leave the key out and the highest that works is taken"));
+    }
+    return errors;
+}
+
+} // namespace dialwright::cli

@@ -1,0 +1,118 @@
+// SPDX-License-Identifier: MIT
+#include "cli/report/numbers.hpp"
+#include "cli/report/say.hpp"
+
+#include <cmath>
+#include <fmt/format.h>
+#include <nlohmann/json.hpp>
+
+namespace dialwright::cli {
+namespace {
+
+using Json = nlohmann::ordered_json;
+
+/// To the millionth, never "-0"; null where there is no number.
+Json number(double value) {
+    if (!std::isfinite(value))
+        return nullptr;
+    return std::round(value * 1e6) / 1e6 + 0.0;
+}
+Json point(PlatePoint p) { return Json::array({number(p.u_mm), number(p.v_mm)}); }
+
+Json points(const std::vector<PlatePoint>& line) {
+    Json list = Json::array();
+    for (const PlatePoint& p : line)
+        list.push_back(point(p));
+    return list;
+}
+
+Json style_json(const Style& style) {
+    return {{"height_deg", number(style.height.in_degrees())},
+            {"substyle_deg", number(style.substyle.in_degrees())},
+            {"substyle_hour_angle_deg", number(style.substyle_hour_angle.in_degrees())},
+            {"centre_mm", style.centre ? point(*style.centre) : Json(nullptr)}};
+}
+
+void add_face(Json& out, const FacePlan& plan, const layout::Face& face) {
+    const Attitude& attitude = plan.dial.attitude;
+    out["plate"] = {{"normal_azimuth_deg", number(attitude.normal_azimuth.in_degrees())},
+                    {"normal_altitude_deg", number(attitude.normal_altitude.in_degrees())},
+                    {"middle_mm", point({-face.placement.foot.x_mm, -face.placement.foot.y_mm})}};
+    out["nodus"] = {{"height_mm", number(face.placement.nodus_height_mm)}};
+    out["gnomon"] = {{"thickness_mm", number(plan.dial.gnomon_thickness_mm)}};
+    out["style"] = style_json(face.delineation.style);
+    out["hour_lines"] = Json::array();
+    out["date_lines"] = Json::array();
+    for (const layout::DrawnLine& line : face.lines) {
+        if (line.family == Family::date) {
+            out["date_lines"].push_back({{"label", line.label},
+                                         {"declination_deg", number(line.declination.value_or(Angle{}).in_degrees())},
+                                         {"points_mm", points(line.points)}});
+        } else {
+            out["hour_lines"].push_back({{"label", line.label},
+                                         {"time_h", number(line.time_h)},
+                                         {"hour_angle_deg", number(line.hour_angle.in_degrees())},
+                                         {"angle_deg", line.direction ? number(line.direction->in_degrees()) : Json(nullptr)},
+                                         {"points_mm", points(line.points)}});
+        }
+    }
+}
+
+Json equation_json(const MeanYear& year) {
+    Json list = Json::array();
+    static constexpr unsigned k_days[] = {31, 29, 31, 30, 31, 30, 31, 31, 30, 31, 30, 31};
+    for (unsigned month = 1; month <= 12; ++month)
+        for (unsigned day = 1; day <= k_days[month - 1]; ++day) {
+            const auto mean = year.at(year.day_of(std::chrono::month{month} / std::chrono::day{day}));
+            list.push_back({{"date", fmt::format("{:02}-{:02}", month, day)},
+                            {"minutes", number(mean.equation_of_time.in_minutes_of_time())},
+                            {"declination_deg", number(mean.declination.in_degrees())}});
+        }
+    return list;
+}
+
+const char* time_name(HourTime time) { return time == HourTime::sun ? "sun" : time == HourTime::zone ? "zone" : "clock"; }
+
+} // namespace
+
+std::string numbers_json(const Commission& commission) {
+    const Design& design = commission.design;
+    Json out;
+    out["format"] = 1;
+    out["title"] = design.title;
+    out["site"] = {{"latitude_deg", number(design.place.site.latitude.in_degrees())},
+                   {"longitude_deg", number(design.place.site.longitude.in_degrees())},
+                   {"zone", design.place.zone},
+                   {"zone_meridian_deg", number(commission.plans.front().dial.zone_meridian.in_degrees())}};
+    out["time"] = time_name(design.hours.time);
+    out["years"] = {design.years.first, design.years.last};
+    if (commission.faces.size() == 1) {
+        add_face(out, commission.plans.front(), commission.faces.front());
+    } else {
+        out["faces"] = Json::array();
+        for (std::size_t i = 0; i < commission.faces.size(); ++i) {
+            Json face;
+            face["face"] = commission.plans[i].name;
+            add_face(face, commission.plans[i], commission.faces[i]);
+            out["faces"].push_back(std::move(face));
+        }
+    }
+    out["equation_of_time"] = equation_json(commission.year);
+    return out.dump(-1, ' ', false, Json::error_handler_t::replace) + "\n";
+}
+
+std::string hour_lines_csv(const Commission& commission) {
+    std::string text = "face,label,time_h,hour_angle_deg,angle_deg,inner_u_mm,inner_v_mm,outer_u_mm,outer_v_mm,points\n";
+    for (std::size_t i = 0; i < commission.faces.size(); ++i)
+        for (const layout::DrawnLine& line : commission.faces[i].lines) {
+            if (line.family == Family::date)
+                continue;
+            const PlatePoint a = line.points.front(), b = line.points.back();
+            text += fmt::format("{},{},{},{},{},{},{},{},{},{}\n", commission.plans[i].name, line.label, fixed(line.time_h, 6),
+                                fixed(line.hour_angle.in_degrees(), 6), line.direction ? fixed(line.direction->in_degrees(), 6) : "",
+                                fixed(a.u_mm, 4), fixed(a.v_mm, 4), fixed(b.u_mm, 4), fixed(b.v_mm, 4), line.points.size());
+        }
+    return text;
+}
+
+} // namespace dialwright::cli

@@ -1,0 +1,88 @@
+// SPDX-License-Identifier: MIT
+#include "cli/report/say.hpp"
+
+#include <cmath>
+#include <fmt/format.h>
+#include <numeric>
+
+namespace dialwright::cli {
+namespace {
+
+std::string unsigned_degrees_minutes(Angle angle) {
+    const double tenths = std::round(std::abs(angle.in_degrees()) * 600.0);
+    return fmt::format("{:.0f}° {:04.1f}'", std::floor(tenths / 600.0), std::fmod(tenths, 600.0) / 10.0);
+}
+
+std::string inch_text(double mm) {
+    const long sixty_fourths = std::lround(std::abs(mm) / 25.4 * 64);
+    const long whole = sixty_fourths / 64, left = sixty_fourths % 64;
+    std::string text = mm < 0 && sixty_fourths > 0 ? "-" : "";
+    if (whole > 0 || left == 0)
+        text += fmt::format("{}", whole);
+    if (left > 0) {
+        const long common = std::gcd(left, 64L);
+        text += fmt::format("{}{}/{}", whole > 0 ? " " : "", left / common, 64 / common);
+    }
+    return text + " in";
+}
+
+} // namespace
+
+std::string degrees_minutes(Angle angle) {
+    const std::string text = unsigned_degrees_minutes(angle);
+    return angle < Angle{} && text != "0° 00.0'" ? "-" + text : text;
+}
+
+std::string both_ways(Angle angle) { return fmt::format("{}° ({})", fixed(angle.in_degrees(), 4), degrees_minutes(angle)); }
+
+std::string say_latitude(Angle latitude) { return unsigned_degrees_minutes(latitude) + (latitude < Angle{} ? " S" : " N"); }
+std::string say_longitude(Angle longitude) { return unsigned_degrees_minutes(longitude) + (longitude < Angle{} ? " W" : " E"); }
+
+std::string say_bearing(Angle azimuth) {
+    static constexpr const char* k_quarters[] = {"north", "east", "south", "west"};
+    const double tenths = std::fmod(std::round(azimuth.positive_turn().in_degrees() * 10), 3600.0);
+    if (std::fmod(tenths, 900.0) == 0)
+        return k_quarters[std::size_t(tenths / 900)];
+    const double degrees = tenths / 10;
+    const bool north = degrees < 90 || degrees > 270;
+    const double from_meridian = north ? (degrees < 90 ? degrees : 360 - degrees) : std::abs(degrees - 180);
+    return fmt::format("{} {:.1f}° {}", north ? "N" : "S", from_meridian, degrees < 180 ? "E" : "W");
+}
+
+std::string say_attitude(const Attitude& attitude) {
+    const double altitude = attitude.normal_altitude.in_degrees();
+    if (std::abs(altitude) > 89.9999)
+        return altitude > 0 ? "level, face up" : "level, face down";
+    const std::string facing = "facing " + say_bearing(attitude.normal_azimuth);
+    if (std::abs(altitude) < 0.005)
+        return "upright, " + facing;
+    return fmt::format("leaning {} {} from upright, {}", altitude > 0 ? "back" : "forward", degrees_minutes(abs(attitude.normal_altitude)), facing);
+}
+
+std::string say_equation(Angle equation) {
+    const double seconds = std::round(equation.in_minutes_of_time() * 60);
+    const double size = std::abs(seconds);
+    if (size == 0)
+        return "0 m 00 s";
+    return fmt::format("{}{:.0f} m {:02.0f} s, dial {}", seconds < 0 ? "-" : "+", std::floor(size / 60), std::fmod(size, 60.0),
+                       seconds < 0 ? "slow" : "fast");
+}
+
+std::string say_length(double mm, bool inches) {
+    const std::string metric = fixed(mm, 1) + " mm";
+    return inches ? fmt::format("{} ({})", metric, inch_text(mm)) : metric;
+}
+
+std::string say_clock(double hours) {
+    const long seconds = ((std::lround(hours * 3600) % 86400) + 86400) % 86400;
+    return fmt::format("{:02}:{:02}:{:02}", seconds / 3600, seconds / 60 % 60, seconds % 60);
+}
+
+std::string fixed(double value, int decimals) {
+    std::string text = fmt::format("{:.{}f}", value, decimals);
+    if (text.starts_with('-') && text.find_first_not_of("-0.") == std::string::npos)
+        text.erase(0, 1);
+    return text;
+}
+
+} // namespace dialwright::cli
