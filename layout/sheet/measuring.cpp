@@ -23,7 +23,7 @@ constexpr double k_gap_mm = 0.6;   // of the opening from the printable box wher
 constexpr double k_names_mm = 4.4; // a strip of neighbours' names
 constexpr double k_small_mm = 2.6, k_small_line_mm = 3.5;
 constexpr double k_title_mm = 3.4, k_title_line_mm = 4.4;
-constexpr double k_label_mm = 7.0, k_label_room_mm = 20.0;
+constexpr double k_label_mm = 7.0, k_label_room_mm = 17.0;
 constexpr double k_longest_line_mm = 190.0; // longer ones are hard to read
 constexpr double k_below_bar_mm = 1.4;
 constexpr double k_square_mm = 10.0;
