@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "layout/lettering/sheet_font.hpp"
 
+#include "layout/lettering/font_files.hpp"
 #include "layout/lettering/lettering.hpp"
 
 #include <fontconfig/fontconfig.h>
@@ -27,10 +28,10 @@ Found nearest_font(const char* family, bool bold) {
     FcPatternAddString(wanted.get(), FC_FAMILY, reinterpret_cast<const FcChar8*>(family));
     FcPatternAddInteger(wanted.get(), FC_WEIGHT, bold ? FC_WEIGHT_BOLD : FC_WEIGHT_REGULAR);
     FcPatternAddString(wanted.get(), FC_FONTFORMAT, reinterpret_cast<const FcChar8*>("TrueType"));
-    FcConfigSubstitute(nullptr, wanted.get(), FcMatchPattern);
+    FcConfigSubstitute(font_list(), wanted.get(), FcMatchPattern);
     FcDefaultSubstitute(wanted.get());
     FcResult result = FcResultMatch;
-    const Pattern match{FcFontMatch(nullptr, wanted.get(), &result), &FcPatternDestroy};
+    const Pattern match{FcFontMatch(font_list(), wanted.get(), &result), &FcPatternDestroy};
     FcChar8* name = nullptr;
     FcChar8* file = nullptr;
     if (!match || FcPatternGetString(match.get(), FC_FAMILY, 0, &name) != FcResultMatch ||
