@@ -29,6 +29,37 @@ double degrees(Read<Angle> (*reader)(std::string_view), std::string_view text) {
     return read->in_degrees();
 }
 
+double latitude_deg(std::string_view text) {
+    return degrees(latitude, text);
+}
+double longitude_deg(std::string_view text) {
+    return degrees(longitude, text);
+}
+double bearing_deg(std::string_view text) {
+    return degrees(bearing, text);
+}
+double lean_deg(std::string_view text) {
+    return degrees(lean, text);
+}
+double hours_of(std::string_view text) {
+    const Read<double> read = hour_of_day(text);
+    INFO(text << ": " << read.trouble().message);
+    REQUIRE(read);
+    return *read;
+}
+
+struct Reading {
+    const char* text;
+    double value;
+};
+/// To 1e-10: what the arithmetic of tens, twelfths and sixtieths leaves. "010" is ten, not eight.
+void check_all(double (*reader)(std::string_view), std::initializer_list<Reading> readings) {
+    for (const Reading& reading : readings) {
+        INFO(reading.text);
+        CHECK_THAT(reader(reading.text), WithinAbs(reading.value, 1e-10));
+    }
+}
+
 template <class T>
 void check_refused(Read<T> (*reader)(std::string_view), std::initializer_list<const char*> texts) {
     for (const char* text : texts) {
@@ -49,25 +80,25 @@ std::mt19937 seeded() {
 } // namespace
 
 TEST_CASE("lengths as people write them", "[cli]") {
-    CHECK_THAT(mm("360 mm"), WithinAbs(360.0, 0.0));
-    CHECK_THAT(mm("360mm"), WithinAbs(360.0, 0.0));
-    CHECK_THAT(mm("36 cm"), WithinAbs(360.0, 1e-12));
-    CHECK_THAT(mm("0.36 m"), WithinAbs(360.0, 1e-12));
-    CHECK_THAT(mm(".36 m"), WithinAbs(360.0, 1e-12));
-    CHECK_THAT(mm("010 mm"), WithinAbs(10.0, 0.0)); // ten, not eight
-    CHECK_THAT(mm("14.2 in"), WithinAbs(360.68, 1e-10));
-    CHECK_THAT(mm("14 1/2 in"), WithinAbs(368.3, 1e-10));
-    CHECK_THAT(mm("1/16 in"), WithinAbs(1.5875, 1e-12));
-    CHECK_THAT(mm("14½\""), WithinAbs(368.3, 1e-10));
-    CHECK_THAT(mm("14″"), WithinAbs(355.6, 1e-10));
-    CHECK_THAT(mm("1 ft"), WithinAbs(304.8, 1e-10));
-    CHECK_THAT(mm("1 ft 2 1/2 in"), WithinAbs(368.3, 1e-10));
-    CHECK_THAT(mm("1' 2\""), WithinAbs(355.6, 1e-10));
-    CHECK_THAT(mm("12 IN."), WithinAbs(304.8, 1e-10));
-    CHECK_THAT(mm("-5 mm"), WithinAbs(-5.0, 0.0));
-    CHECK_THAT(mm("−5 mm"), WithinAbs(-5.0, 0.0));
-    CHECK_THAT(mm("+5 mm"), WithinAbs(5.0, 0.0));
-    CHECK_THAT(mm("360\u00A0mm"), WithinAbs(360.0, 0.0));
+    check_all(mm, {{"360 mm", 360.0},
+                   {"360mm", 360.0},
+                   {"36 cm", 360.0},
+                   {"0.36 m", 360.0},
+                   {".36 m", 360.0},
+                   {"010 mm", 10.0},
+                   {"14.2 in", 360.68},
+                   {"14 1/2 in", 368.3},
+                   {"1/16 in", 1.5875},
+                   {"14½\"", 368.3},
+                   {"14″", 355.6},
+                   {"1 ft", 304.8},
+                   {"1 ft 2 1/2 in", 368.3},
+                   {"1' 2\"", 355.6},
+                   {"12 IN.", 304.8},
+                   {"-5 mm", -5.0},
+                   {"−5 mm", -5.0},
+                   {"+5 mm", 5.0},
+                   {"360\u00A0mm", 360.0}});
     check_refused(length_mm,
                   {"",       "360",     "mm",           "360 kg",   "360°",      "14,2 in", "1e3 mm",  ".inf mm",
                    "nan mm", "0x10 mm", "360 mm mm",    "360 mm 2", "1 in 1 ft", "1/0 in",  "1 1/ in", "1.5 1/2 in",
@@ -80,23 +111,21 @@ TEST_CASE("a length without a unit says how to write it", "[cli]") {
 }
 
 TEST_CASE("latitudes and longitudes as people write them", "[cli]") {
-    CHECK_THAT(degrees(latitude, "54° 14' N"), WithinAbs(54.0 + 14.0 / 60.0, 1e-12));
-    CHECK_THAT(degrees(latitude, "54°14'20.5\"N"), WithinAbs(54.0 + 14.0 / 60.0 + 20.5 / 3600.0, 1e-12));
-    CHECK_THAT(degrees(latitude, "54°14′20.5″ N"), WithinAbs(54.0 + 14.0 / 60.0 + 20.5 / 3600.0, 1e-12));
-    CHECK_THAT(degrees(latitude, "54° 14' 20.5'' north"), WithinAbs(54.0 + 14.0 / 60.0 + 20.5 / 3600.0, 1e-12));
-    CHECK_THAT(degrees(latitude, "54º 14’ N"), WithinAbs(54.0 + 14.0 / 60.0, 1e-12));
-    CHECK_THAT(degrees(latitude, "N 54° 14.5'"), WithinAbs(54.0 + 14.5 / 60.0, 1e-12));
-    CHECK_THAT(degrees(latitude, "54° 30\" N"), WithinAbs(54.0 + 30.0 / 3600.0, 1e-12));
-    CHECK_THAT(degrees(latitude, "54.2340"), WithinAbs(54.234, 1e-12));
-    CHECK_THAT(degrees(latitude, "-33.9"), WithinAbs(-33.9, 1e-12));
-    CHECK_THAT(degrees(latitude, "−33.9°"), WithinAbs(-33.9, 1e-12));
-    CHECK_THAT(degrees(latitude, "33° 52' S"), WithinAbs(-(33.0 + 52.0 / 60.0), 1e-12));
-    CHECK_THAT(degrees(latitude, "0° 30' S"), WithinAbs(-0.5, 1e-12));
-    CHECK_THAT(degrees(latitude, "-0° 30'"), WithinAbs(-0.5, 1e-12));
-    CHECK_THAT(degrees(latitude, "90 N"), WithinAbs(90.0, 1e-12));
-    CHECK_THAT(degrees(longitude, "1° 52' W"), WithinAbs(-(1.0 + 52.0 / 60.0), 1e-12));
-    CHECK_THAT(degrees(longitude, "180° E"), WithinAbs(180.0, 1e-12));
-    CHECK_THAT(degrees(longitude, "180 west"), WithinAbs(-180.0, 1e-12));
+    check_all(latitude_deg, {{"54° 14' N", 54.0 + 14.0 / 60.0},
+                             {"54°14'20.5\"N", 54.0 + 14.0 / 60.0 + 20.5 / 3600.0},
+                             {"54°14′20.5″ N", 54.0 + 14.0 / 60.0 + 20.5 / 3600.0},
+                             {"54° 14' 20.5'' north", 54.0 + 14.0 / 60.0 + 20.5 / 3600.0},
+                             {"54º 14’ N", 54.0 + 14.0 / 60.0},
+                             {"N 54° 14.5'", 54.0 + 14.5 / 60.0},
+                             {"54° 30\" N", 54.0 + 30.0 / 3600.0},
+                             {"54.2340", 54.234},
+                             {"-33.9", -33.9},
+                             {"−33.9°", -33.9},
+                             {"33° 52' S", -(33.0 + 52.0 / 60.0)},
+                             {"0° 30' S", -0.5},
+                             {"-0° 30'", -0.5},
+                             {"90 N", 90.0}});
+    check_all(longitude_deg, {{"1° 52' W", -(1.0 + 52.0 / 60.0)}, {"180° E", 180.0}, {"180 west", -180.0}});
     check_refused(latitude, {"",
                              "95°",
                              "90° 0' 1\" N",
@@ -123,34 +152,31 @@ TEST_CASE("latitudes and longitudes as people write them", "[cli]") {
 }
 
 TEST_CASE("directions as people write them", "[cli]") {
-    CHECK_THAT(degrees(bearing, "S 23° E"), WithinAbs(157.0, 1e-12));
-    CHECK_THAT(degrees(bearing, "s23e"), WithinAbs(157.0, 1e-12));
-    CHECK_THAT(degrees(bearing, "south 23° 30' east"), WithinAbs(156.5, 1e-12));
-    CHECK_THAT(degrees(bearing, "S 23° W"), WithinAbs(203.0, 1e-12));
-    CHECK_THAT(degrees(bearing, "N 60° W"), WithinAbs(300.0, 1e-12));
-    CHECK_THAT(degrees(bearing, "N 60° E"), WithinAbs(60.0, 1e-12));
-    CHECK_THAT(degrees(bearing, "N 0° W"), WithinAbs(0.0, 1e-12));
-    CHECK_THAT(degrees(bearing, "S 90° W"), WithinAbs(270.0, 1e-12));
-    CHECK_THAT(degrees(bearing, "south"), WithinAbs(180.0, 1e-12));
-    CHECK_THAT(degrees(bearing, "North"), WithinAbs(0.0, 1e-12));
-    CHECK_THAT(degrees(bearing, "E"), WithinAbs(90.0, 1e-12));
-    CHECK_THAT(degrees(bearing, "south-east"), WithinAbs(135.0, 1e-12));
-    CHECK_THAT(degrees(bearing, "southwest"), WithinAbs(225.0, 1e-12));
-    CHECK_THAT(degrees(bearing, "SE"), WithinAbs(135.0, 1e-12));
-    CHECK_THAT(degrees(bearing, "south-south-east"), WithinAbs(157.5, 1e-12));
-    CHECK_THAT(degrees(bearing, "wnw"), WithinAbs(292.5, 1e-12));
-    CHECK_THAT(degrees(bearing, "157°"), WithinAbs(157.0, 1e-12));
-    CHECK_THAT(degrees(bearing, "157"), WithinAbs(157.0, 1e-12));
-    CHECK_THAT(degrees(bearing, "360"), WithinAbs(0.0, 1e-12));
+    check_all(bearing_deg, {{"S 23° E", 157.0},
+                            {"s23e", 157.0},
+                            {"south 23° 30' east", 156.5},
+                            {"S 23° W", 203.0},
+                            {"N 60° W", 300.0},
+                            {"N 60° E", 60.0},
+                            {"N 0° W", 0.0},
+                            {"S 90° W", 270.0},
+                            {"south", 180.0},
+                            {"North", 0.0},
+                            {"E", 90.0},
+                            {"south-east", 135.0},
+                            {"southwest", 225.0},
+                            {"SE", 135.0},
+                            {"south-south-east", 157.5},
+                            {"wnw", 292.5},
+                            {"157°", 157.0},
+                            {"157", 157.0},
+                            {"360", 0.0}});
     check_refused(bearing, {"", "370", "-23", "S 91° E", "E 23° S", "S 23°", "S 23° N", "23° E", "up", "SES", "S E N",
                             "south-by-east", "S 23° E E", "157° S"});
 }
 
 TEST_CASE("leans and plain angles", "[cli]") {
-    CHECK_THAT(degrees(lean, "5° back"), WithinAbs(5.0, 1e-12));
-    CHECK_THAT(degrees(lean, "3° 30' forward"), WithinAbs(-3.5, 1e-12));
-    CHECK_THAT(degrees(lean, "0"), WithinAbs(0.0, 0.0));
-    CHECK_THAT(degrees(lean, "upright"), WithinAbs(0.0, 0.0));
+    check_all(lean_deg, {{"5° back", 5.0}, {"3° 30' forward", -3.5}, {"0", 0.0}, {"upright", 0.0}});
     check_refused(lean, {"", "5°", "-5° back", "5° left", "91° back", "back", "upright 5°", "5° back 3"});
     CHECK_THAT(degrees(plain_angle, "5° 30'"), WithinAbs(5.5, 1e-12));
     CHECK_THAT(degrees(plain_angle, "-5.5"), WithinAbs(-5.5, 1e-12));
@@ -173,15 +199,15 @@ TEST_CASE("days as people write them", "[cli]") {
 }
 
 TEST_CASE("hours, minutes, years, counts, yes and no", "[cli]") {
-    CHECK_THAT(*hour_of_day("5"), WithinAbs(5.0, 0.0));
-    CHECK_THAT(*hour_of_day("5:30"), WithinAbs(5.5, 1e-12));
-    CHECK_THAT(*hour_of_day("17:00"), WithinAbs(17.0, 0.0));
-    CHECK_THAT(*hour_of_day("5 am"), WithinAbs(5.0, 0.0));
-    CHECK_THAT(*hour_of_day("5:30pm"), WithinAbs(17.5, 1e-12));
-    CHECK_THAT(*hour_of_day("12 pm"), WithinAbs(12.0, 0.0));
-    CHECK_THAT(*hour_of_day("12:30 AM"), WithinAbs(0.5, 1e-12));
-    CHECK_THAT(*hour_of_day("noon"), WithinAbs(12.0, 0.0));
-    CHECK_THAT(*hour_of_day("24:00"), WithinAbs(24.0, 0.0));
+    check_all(hours_of, {{"5", 5.0},
+                         {"5:30", 5.5},
+                         {"17:00", 17.0},
+                         {"5 am", 5.0},
+                         {"5:30pm", 17.5},
+                         {"12 pm", 12.0},
+                         {"12:30 AM", 0.5},
+                         {"noon", 12.0},
+                         {"24:00", 24.0}});
     check_refused(hour_of_day,
                   {"", "25", "24:01", "5.5", "5:60", "5:3", "-1", "13 pm", "0 am", "5:", "5 o'clock", "5 am pm"});
     CHECK(*minutes("15 min") == 15);
