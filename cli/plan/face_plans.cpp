@@ -85,6 +85,7 @@ FacePlan plan_of(const Design& design, const MeanYear& year, bool upper_face) {
     spec.numerals = design.hours.numerals;
     spec.stand = design.hours.stand;
     spec.numeral_count = design.hours.count;
+    spec.divide_min = design.hours.divide_min;
     spec.noon_mark = design.hours.noon_mark;
     spec.date_labels = design.dates.labels;
     spec.compass = design.dial.kind == DialKind::level;

@@ -30,6 +30,10 @@ struct Bench {
     /// Widths in their order of weight.
     [[nodiscard]] double width_of_step(int step_min) const;
     [[nodiscard]] double date_width() const { return 0.6 * spec.cutting.line_width_mm; }
+    /// How far into the field the marks of half and quarter hours reach from its border.
+    [[nodiscard]] double half_hour_reach_mm() const;
+    [[nodiscard]] double quarter_hour_reach_mm() const;
+    [[nodiscard]] double division_band_mm() const;
     [[nodiscard]] Region field() const { return {{rings.divisions}, keep_out}; }
 
     void engrave(const Polyline& line, double width_mm, std::string name);
@@ -46,7 +50,8 @@ void draw_hours(Bench& bench);
 void draw_dates(Bench& bench);
 void draw_gnomon_seat(Bench& bench, double foot_mm);
 void draw_compass(Bench& bench);
-void draw_inscriptions(Bench& bench);
+void draw_motto(Bench& bench);
+void draw_place_line(Bench& bench);
 
 /// The gnomon's foot along the substyle: what the design says, else from the centre to beneath the nodus.
 [[nodiscard]] double gnomon_foot_mm(const Bench& bench);

@@ -46,7 +46,7 @@ struct LabelPlace {
 class DateDrawer {
   public:
     explicit DateDrawer(Bench& bench)
-        : bench_{bench}, cap_mm_{bench.spec.lettering.label_height_mm}, room_{bench.clear}, room_without_hours_{bench.clear} {}
+        : bench_{bench}, cap_mm_{bench.spec.lettering.label_height_mm}, room_{room_of(bench)}, room_without_hours_{room_} {}
 
     void draw() {
         std::vector<const DialLine*> dates;
@@ -67,6 +67,15 @@ class DateDrawer {
     }
 
   private:
+    /// The field without the strip along its border into which the marks of half hours reach.
+    static ClearMap room_of(const Bench& bench) {
+        const auto inside = bench.rings.divisions.inset(bench.half_hour_reach_mm());
+        ClearMap room{inside.value_or(bench.rings.divisions), bench.clear.cell_mm()};
+        for (const Outline& outline : bench.keep_out)
+            room.block(TurnedBox{outline.box().middle(), outline.box().width_mm() / 2, outline.box().height_mm() / 2, Angle{}});
+        return room;
+    }
+
     void block_lines() {
         for (const DialLine& line : bench_.delineation.lines) {
             const bool hour_line = line.family != Family::date;

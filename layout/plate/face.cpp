@@ -30,8 +30,9 @@ Bench& drawn(Bench& bench, double foot_mm) {
     draw_gnomon_seat(bench, foot_mm);
     draw_dates(bench); // labels first ask for room; hour lines then stop for them
     draw_hours(bench);
+    draw_motto(bench);
     draw_compass(bench);
-    draw_inscriptions(bench);
+    draw_place_line(bench);
     return bench;
 }
 
@@ -41,6 +42,12 @@ void report_unlit(const Delineation& delineation, std::vector<std::string>& warn
         for (const double hour : delineation.unlit_hours)
             hours += (hours.empty() ? "" : ", ") + time_label(hour);
         warnings.push_back(fmt::format("never lit on this face, so left out: {}", hours));
+    }
+    if (!delineation.outside_hours.empty()) {
+        std::string hours;
+        for (const double hour : delineation.outside_hours)
+            hours += (hours.empty() ? "" : ", ") + time_label(hour);
+        warnings.push_back(fmt::format("lit, but their lines miss this plate: {}", hours));
     }
     for (const std::string& date : delineation.unlit_dates)
         warnings.push_back(fmt::format("date line \"{}\" does not fall on this face, so it is left out", date));
@@ -71,6 +78,10 @@ double Bench::width_of_step(int step_min) const {
     const double tool = spec.cutting.line_width_mm;
     return step_min >= 60 ? tool : step_min >= 30 ? 0.8 * tool : step_min >= 15 ? 0.65 * tool : 0.5 * tool;
 }
+
+double Bench::division_band_mm() const { return (1 - k_numeral_share) * spec.borders.chapter_ring_mm; }
+double Bench::half_hour_reach_mm() const { return spec.divide_min <= 30 ? 1.4 * division_band_mm() : 0.0; }
+double Bench::quarter_hour_reach_mm() const { return spec.divide_min <= 15 ? 0.5 * division_band_mm() : 0.0; }
 
 void Bench::engrave(const Polyline& line, double width_mm, std::string name) {
     marks.push_back({Layer::engrave, {polyline(line)}, width_mm, false, std::move(name)});

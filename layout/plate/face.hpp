@@ -21,6 +21,7 @@ struct FaceSpec {
     Numerals numerals = Numerals::roman;
     NumeralStand stand = NumeralStand::along_border;
     int numeral_count = 12;
+    int divide_min = 60;
     bool noon_mark = true;
     bool date_labels = true;
     bool compass = false;  ///< level plates

@@ -52,7 +52,10 @@ double gnomon_foot_mm(const Bench& bench) {
         return *bench.spec.gnomon.foot_mm;
     if (!bench.centre || !substyle_direction(bench))
         return 0.0;
-    return distance(*bench.centre, bench.foot);
+    // Long enough that its shadow is easily read from the ring, and never short of the nodus.
+    const auto border = bench.rings.divisions.exit(*bench.centre, *substyle_direction(bench));
+    const double half_way = border ? 0.5 * distance(*bench.centre, border->at) : 0.0;
+    return std::max(distance(*bench.centre, bench.foot), std::round(half_way * 2) / 2);
 }
 
 void draw_gnomon_seat(Bench& bench, double foot_mm) {
@@ -123,7 +126,7 @@ void draw_compass(Bench& bench) {
     const Point middle = best + (reach + 0.12 * radius + letter.ink.height_mm() / 2) * Point{0, 1};
     const Point at = middle - (letter.ink.left_mm + letter.ink.width_mm() / 2) * right - letter.ink.height_mm() / 2 * bench.up;
     bench.add_filled(set_straight(letter, at, turn_of(right)), "compass mark N");
-    bench.clear.block(TurnedBox{best, radius, radius, Angle{}});
+    bench.clear.block(TurnedBox{best, 1.2 * radius, 1.2 * radius, Angle{}});
 }
 
 } // namespace dialwright::layout

@@ -110,9 +110,6 @@ class HourDrawer {
             return;
         const int step = ray.line->step_min;
         const double width = bench_.width_of_step(step);
-        const double band = bench_.rings.numerals.distance_mm(bench_.rings.divisions.is_round()
-                                                                  ? bench_.rings.divisions.centre() + Point{bench_.rings.divisions.radius_mm(), 0}
-                                                                  : bench_.rings.divisions.corners().front());
         if (step >= 60) {
             for (std::size_t i = 0; i + 1 < ray.field.size(); ++i)
                 bench_.add_line(*ray.line, ray.field[i], label_of(*ray.line), width);
@@ -123,7 +120,7 @@ class HourDrawer {
         }
         if (ray.tick.empty())
             return; // divisions live in the ring
-        const double into_field = step == 30 ? 1.4 * band : step == 15 ? 0.5 * band : 0.0;
+        const double into_field = step == 30 ? bench_.half_hour_reach_mm() : step == 15 ? bench_.quarter_hour_reach_mm() : 0.0;
         const double across = step >= 10 ? 1.0 : step == 5 ? 0.7 : 0.45;
         Polyline mark{between(ray.tick.back(), ray.tick.front(), across), ray.tick.back()};
         if (into_field > 0)
@@ -230,10 +227,7 @@ class HourDrawer {
     }
 
     void draw_numerals() {
-        const double band = bench_.rings.outer.distance_mm(bench_.rings.numerals.is_round()
-                                                               ? bench_.rings.numerals.centre() + Point{bench_.rings.numerals.radius_mm(), 0}
-                                                               : bench_.rings.numerals.corners().front());
-        if (band <= 0 || bench_.spec.lettering.numeral_height_mm <= 0)
+        if (bench_.spec.borders.chapter_ring_mm <= 0 || bench_.spec.lettering.numeral_height_mm <= 0)
             return;
         const auto middle = bench_.rings.outer.inset(bench_.spec.borders.chapter_ring_mm * 0.32);
         if (!middle)
@@ -258,7 +252,7 @@ class HourDrawer {
         const double half_width = line.ink.width_mm() / 2;
         const bool along_border = bench_.spec.stand == NumeralStand::along_border;
         const Point at = along_border ? kept_on_side(middle, n, half_width + 0.2 * height) : n.at;
-        return {at, half_width + 0.12 * height, height / 2, numeral_turn(n, heads_out())};
+        return {at, half_width + 0.22 * height, height / 2, numeral_turn(n, heads_out())};
     }
 
     [[nodiscard]] bool all_apart(const std::vector<Numeral>& all, const Outline& middle, double height) const {

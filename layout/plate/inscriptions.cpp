@@ -1,9 +1,9 @@
 // SPDX-License-Identifier: MIT
 //
 // The motto and the place line. On a round plate they follow the border where the field is free there (heads inward at
-// the reader's side, outward at the far side); elsewhere they stand straight, on the plate's own middle line if that is
-// free, else where there is most room. A text that finds no room is set smaller, down to half its height; then it is left out and
-// the maker is told.
+// the reader's side, outward at the far side); elsewhere they stand straight on the plate's middle line. A text that
+// finds no room is set smaller; one that finds none at 0.6 of its height may stand beside the middle line, and one that
+// finds none at half its height is left out, and the maker is told.
 #include "layout/plate/bench.hpp"
 
 #include <algorithm>
@@ -21,14 +21,19 @@ class Inscriber {
         if (text.empty() || height_mm <= 0)
             return;
         bench_.clear.measure();
-        for (double height = height_mm; height >= 0.499 * height_mm; height *= 0.93) {
-            const LetteredLine line = bench_.lettering.line(text, height, 0.08 * height);
-            if (on_border(line, height, name) || straight(line, height, name)) {
-                if (height < 0.999 * height_mm)
-                    bench_.warnings.push_back(fmt::format("the {} is {:.1f} mm high instead of {:.1f} mm, to find room", name, height, height_mm));
-                return;
+        const auto heights = [&](double least, bool anywhere) {
+            for (double height = height_mm; height >= least * height_mm; height *= 0.93) {
+                const LetteredLine line = bench_.lettering.line(text, height, 0.08 * height);
+                if (on_border(line, height, name) || straight(line, height, name, anywhere)) {
+                    if (height < 0.999 * height_mm)
+                        bench_.warnings.push_back(fmt::format("the {} is {:.1f} mm high instead of {:.1f} mm, to find room", name, height, height_mm));
+                    return true;
+                }
             }
-        }
+            return false;
+        };
+        if (heights(0.6, false) || heights(0.499, true))
+            return;
         bench_.warnings.push_back(fmt::format("no room on the plate for the {} \"{}\": left out; a shorter or smaller one may fit", name, text));
     }
 
@@ -79,8 +84,8 @@ class Inscriber {
             bench_.clear.block(arc_chunk(centre, outer, inner, middle, half_turn, 2.0 * i / chunks - 1));
     }
 
-    /// Straight, upright for the reader.
-    bool straight(const LetteredLine& line, double height, const std::string& name) {
+    /// Straight, upright for the reader, on the plate's middle line or anywhere.
+    bool straight(const LetteredLine& line, double height, const std::string& name, bool anywhere) {
         const Box field = bench_.rings.divisions.box();
         const double wanted = 0.5 * height;
         TurnedBox best{{}, line.ink.width_mm() / 2, height / 2, turn_of(right_)};
@@ -88,7 +93,7 @@ class Inscriber {
         const double reach = (field.width_mm() + field.height_mm()) / 2;
         const Point middle = field.middle();
         for (int row = -40; row <= 40; ++row)
-            for (int column = -24; column <= 24; ++column) {
+            for (int column = anywhere ? -24 : 0; column <= (anywhere ? 24 : 0); ++column) {
                 TurnedBox box = best;
                 box.middle = middle + (reach / 2 * column / 24.0) * right_ + (reach / 2 * row / 40.0) * bench_.up;
                 if (bench_.clear.clearance_mm(box.middle) < wanted + height / 2)
@@ -117,11 +122,10 @@ class Inscriber {
 
 } // namespace
 
-void draw_inscriptions(Bench& bench) {
-    Inscriber inscriber{bench};
-    const LetteringChoice& lettering = bench.spec.lettering;
-    inscriber.inscribe(lettering.motto, lettering.motto_height_mm, "motto");
-    inscriber.inscribe(lettering.place_line, lettering.label_height_mm, "place line");
+void draw_motto(Bench& bench) { Inscriber{bench}.inscribe(bench.spec.lettering.motto, bench.spec.lettering.motto_height_mm, "motto"); }
+
+void draw_place_line(Bench& bench) {
+    Inscriber{bench}.inscribe(bench.spec.lettering.place_line, bench.spec.lettering.label_height_mm, "place line");
 }
 
 } // namespace dialwright::layout

@@ -60,7 +60,7 @@ class Placer {
             return -1e300;
         // Behind the centre, away from the hours, stand the compass mark and the inscriptions.
         const Point behind = -1.0 * clockwise_from_up(style_.substyle);
-        const double behind_weight = (spec_.compass ? 1.0 : 0.0) + (spec_.lettering.motto.empty() ? 0.0 : 1.5);
+        const double behind_weight = (spec_.compass ? 1.0 : 0.0) + (spec_.lettering.motto.empty() ? 0.0 : 0.6);
         const auto room_behind = rings_.divisions.exit(centre, behind);
         double score = room_behind ? behind_weight * std::log(std::max(1e-3, distance(centre, room_behind->at))) : 0.0;
         for (const Angle& hour : hours_) {
@@ -110,7 +110,7 @@ class Placer {
     }
 
     [[nodiscard]] double height_for(Point centre) const {
-        constexpr double k_fill = 0.92;          // of the hour line's length
+        constexpr double k_fill = 0.82;          // of the hour line's length: clear of the half hours' marks
         constexpr double k_least_spread = 0.13;  // nearest date line's part of the farthest's distance from the centre
         const double fallback = to_half_mm(0.15 * size_mm());
         const auto hour = main_hour();
