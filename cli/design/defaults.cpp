@@ -78,15 +78,17 @@ void fill_borders_and_letters(Design& design, Filler& filler, double s) {
 
 void fill_gnomon_and_cutting(Design& design, Filler& filler, double s) {
     Gnomon& gnomon = design.gnomon;
-    filler.fill_tidy(gnomon.thickness_mm, "gnomon: thickness", std::clamp(0.015 * s, 1.5, 12.0),
-                     "1/65 of the plate: stiff, and its shadow has clean edges");
+    filler.fill(gnomon.thickness_mm, "gnomon: thickness", 0.0,
+                "a thin edge; name the metal's thickness and the lines part for both of its edges");
     filler.note_unless_given("gnomon: holes", "0", "how it is fixed is the maker's choice");
     if (gnomon.holes > 0)
-        filler.fill_tidy(gnomon.hole_diameter_mm, "gnomon: hole diameter", std::clamp(gnomon.thickness_mm, 2.0, 5.0),
-                         "by the gnomon's thickness");
+        filler.fill_tidy(gnomon.hole_diameter_mm, "gnomon: hole diameter", std::clamp(0.014 * s, 2.0, 6.0),
+                         "1/70 of the plate");
     Cutting& cutting = design.cutting;
-    filler.fill(cutting.line_width_mm, "cutting: line width", filler.inches() ? 25.4 / 64.0 : 0.4,
-                "what a graver or a small cutter leaves");
+    const double line = std::clamp(0.0016 * s, 0.3, 3.0), sixty_fourth = 25.4 / 64.0;
+    filler.fill(cutting.line_width_mm, "cutting: line width",
+                filler.inches() ? std::max(1.0, std::round(line / sixty_fourth)) * sixty_fourth : std::round(line * 10.0) / 10.0,
+                "1/600 of the plate: reads from where the plate is read");
     filler.fill(cutting.least_gap_mm, "cutting: least gap", 2.0 * cutting.line_width_mm, "twice the line width");
 }
 
@@ -95,7 +97,14 @@ void note_hours_and_dates(Design& design, Filler& filler) {
     filler.note_unless_given("hours: divide", "15 min", "quarters, where they leave the least gap");
     filler.note_unless_given("hours: numerals", "roman", "with IV; \"roman iiii\" gives IIII");
     filler.note_unless_given("hours: count", "12", "as clocks show it");
-    filler.note_unless_given("hours: stand", "along border", "heads outward along the chapter ring");
+    if (filler.wants("hours: stand")) {
+        const bool sides = design.plate.shape == PlateShape::rectangle || design.plate.shape == PlateShape::polygon;
+        design.hours.stand = sides ? NumeralStand::upright : NumeralStand::along_border;
+        filler.note("hours: stand", sides ? "upright" : "along border",
+                    sides ? "read without turning the head" : "they follow the ring");
+    }
+    if (design.hours.time == HourTime::clock)
+        filler.note_unless_given("hours: curves", "whole", "the whole year on one plate");
     filler.note_unless_given("hours: noon mark", "yes", "where the day is halved");
     filler.note_unless_given("dates: solstices", "yes", "the ends of the shadow's walk");
     filler.note_unless_given("dates: equinoxes", "yes", "the straight line between them");

@@ -58,6 +58,7 @@ constexpr auto k_keys = std::to_array<KnownKey>({
     {"hours", "divide"},
     {"hours", "numerals"},
     {"hours", "count"},
+    {"hours", "curves"},
     {"hours", "stand"},
     {"hours", "noon mark"},
 

@@ -112,6 +112,8 @@ DesignReading read_design(std::string_view text, std::string file_name) {
             Agreement{design, *document.root, state}.check();
         }
     }
+    for (const auto& [key, at] : state.given)
+        design.where[key] = {at.line, at.column};
     if (state.errors.empty())
         return {std::move(design), {}};
     std::stable_sort(state.errors.begin(), state.errors.end(), [](const DesignError& a, const DesignError& b) {

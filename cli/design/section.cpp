@@ -56,7 +56,8 @@ void Section::open(const Node& mapping) {
     mapping_ = &mapping;
     for (const Entry& entry : mapping.entries) {
         if (is_known(name_, entry.key)) {
-            state_->given.insert(full_name(name_, entry.key));
+            const bool is_section = entry.value.kind == Node::Kind::mapping;
+            state_->given.emplace(full_name(name_, entry.key), is_section ? entry.at : entry.value.at);
             continue;
         }
         misspelt_.push_back(nearest(entry.key, keys_of(name_)));

@@ -8,7 +8,7 @@
 #include <cassert>
 #include <functional>
 #include <optional>
-#include <set>
+#include <map>
 #include <span>
 #include <string>
 #include <string_view>
@@ -22,7 +22,7 @@ struct ReadingState {
     std::string file;
     Units units = Units::millimetres;
     std::vector<DesignError> errors;
-    std::set<std::string, std::less<>> given;
+    std::map<std::string, Position, std::less<>> given; ///< and where
 
     void error(Position at, std::string key, std::string message, std::string hint) {
         errors.push_back({file, at.line, at.column, std::move(key), std::move(message), std::move(hint)});

@@ -17,6 +17,9 @@ constexpr std::array<Choice<Numerals>, 3> k_numerals = {
     {{"roman", Numerals::roman}, {"roman iiii", Numerals::roman_iiii}, {"arabic", Numerals::arabic}}};
 constexpr std::array<Choice<NumeralStand>, 2> k_stands = {
     {{"along border", NumeralStand::along_border}, {"upright", NumeralStand::upright}}};
+constexpr std::array<Choice<HalfYear>, 3> k_curves = {{{"whole", HalfYear::whole},
+                                                        {"december to june", HalfYear::december_to_june},
+                                                        {"june to december", HalfYear::june_to_december}}};
 constexpr std::array k_divisions_min = {60, 30, 15, 10, 5, 2, 1};
 constexpr std::size_t k_most_days = 100;
 constexpr std::size_t k_longest_label = 80;
@@ -104,6 +107,9 @@ void read_hours(Design& design, const Section& top) {
             hours.error("count", fmt::format("hours are not counted to {}", *count), "give 12 or 24");
     }
     made.stand = hours.choice<NumeralStand>("stand", k_stands).value_or(made.stand);
+    made.curves = hours.choice<HalfYear>("curves", k_curves).value_or(made.curves);
+    if (hours.has("curves") && hours.has("time") && made.time != HourTime::clock)
+        hours.error("curves", "only clock time has curves", "leave the key out, or give \"time: clock\"");
     hours.read_into(made.noon_mark, "noon mark", yes_or_no);
 }
 

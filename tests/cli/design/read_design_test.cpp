@@ -72,7 +72,9 @@ TEST_CASE("the shortest design and what is assumed of it", "[cli]") {
     CHECK_THAT(design.borders.inner_mm, WithinAbs(18.0, 0.0));
     CHECK_THAT(design.lettering.numeral_height_mm, WithinAbs(16.0, 0.0));
     CHECK_THAT(design.lettering.label_height_mm, WithinAbs(5.0, 0.0));
-    CHECK_THAT(design.cutting.least_gap_mm, WithinAbs(0.8, 1e-12));
+    CHECK_THAT(design.cutting.line_width_mm, WithinAbs(0.6, 1e-12));
+    CHECK_THAT(design.cutting.least_gap_mm, WithinAbs(1.2, 1e-12));
+    CHECK_THAT(design.gnomon.thickness_mm, WithinAbs(0.0, 0.0));
     CHECK(design.print.paper == "A4");
     CHECK(design.years.last == 2046);
     REQUIRE(assumed(design, "borders: margin") != nullptr);
