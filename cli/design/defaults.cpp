@@ -98,7 +98,8 @@ void note_hours_and_dates(Design& design, Filler& filler) {
     filler.note_unless_given("hours: numerals", "roman", "with IV; \"roman iiii\" gives IIII");
     filler.note_unless_given("hours: count", "12", "as clocks show it");
     if (filler.wants("hours: stand")) {
-        const bool sides = design.plate.shape == PlateShape::rectangle || design.plate.shape == PlateShape::polygon;
+        const bool sides = (design.plate.shape == PlateShape::rectangle || design.plate.shape == PlateShape::polygon) &&
+                           design.hours.numerals == Numerals::arabic;
         design.hours.stand = sides ? NumeralStand::upright : NumeralStand::along_border;
         filler.note("hours: stand", sides ? "upright" : "along border",
                     sides ? "read without turning the head" : "they follow the ring");

@@ -58,6 +58,15 @@ Attitude attitude_of(const Design& design, bool upper_face) {
     return equatorial_attitude(design.place.site.latitude, upper_face);
 }
 
+/// The plate as who looks at its other face sees it: left and right change places.
+Plate seen_from_behind(Plate plate) {
+    for (PlatePointMm& corner : plate.corners)
+        corner.right_mm = -corner.right_mm;
+    if (plate.centre)
+        plate.centre->right_mm = -plate.centre->right_mm;
+    return plate;
+}
+
 FacePlan plan_of(const Design& design, const MeanYear& year, bool upper_face) {
     FacePlan face;
     const bool equatorial = design.dial.kind == DialKind::equatorial;
@@ -74,10 +83,15 @@ FacePlan plan_of(const Design& design, const MeanYear& year, bool upper_face) {
     dial.gnomon_thickness_mm = equatorial ? 0.0 : design.gnomon.thickness_mm;
     dial.hours = {design.hours.time, design.hours.first_h, design.hours.last_h, design.hours.divide_min, design.hours.curves, HourExtent::style};
     dial.dates = date_plan(design, year);
+    if (equatorial) // the Sun stands on this face's side of the equator, or never lights it
+        std::erase_if(dial.dates.lines, [&](const DatePlan::Line& line) {
+            const bool north = (dial.attitude.normal_altitude > Angle{}) == (dial.site.latitude >= Angle{});
+            return (north ? line.declination : -line.declination) < Angle::degrees(0.1);
+        });
 
     layout::FaceSpec& spec = face.spec;
     spec.name = equatorial ? face.name + " face" : "";
-    spec.plate = design.plate;
+    spec.plate = equatorial && !upper_face ? seen_from_behind(design.plate) : design.plate;
     spec.borders = design.borders;
     spec.gnomon = design.gnomon;
     spec.lettering = design.lettering;
@@ -85,7 +99,7 @@ FacePlan plan_of(const Design& design, const MeanYear& year, bool upper_face) {
     spec.numerals = design.hours.numerals;
     spec.stand = design.hours.stand;
     spec.numeral_count = design.hours.count;
-    spec.divide_min = design.hours.divide_min;
+    spec.divide_min = design.hours.time == HourTime::clock ? 0 : design.hours.divide_min;
     spec.noon_mark = design.hours.noon_mark;
     spec.date_labels = design.dates.labels;
     spec.compass = design.dial.kind == DialKind::level;

@@ -31,8 +31,8 @@ Bench& drawn(Bench& bench, double foot_mm) {
     draw_dates(bench); // labels first ask for room; hour lines then stop for them
     draw_hours(bench);
     draw_motto(bench);
-    draw_compass(bench);
     draw_place_line(bench);
+    draw_compass(bench);
     return bench;
 }
 
@@ -58,8 +58,9 @@ void report_unlit(const Delineation& delineation, std::vector<std::string>& warn
 Rings Rings::of(const FaceSpec& spec) {
     const Outline edge = Outline::of(spec.plate);
     const Outline outer = inner_border(edge, spec.borders.margin_mm, "outer border");
-    const Outline numerals = inner_border(outer, k_numeral_share * spec.borders.chapter_ring_mm, "chapter ring");
-    const Outline divisions = inner_border(numerals, (1 - k_numeral_share) * spec.borders.chapter_ring_mm, "chapter ring");
+    const double band = spec.divide_min > 0 ? spec.borders.chapter_ring_mm * (1 - k_numeral_share) : 0.0;
+    const Outline numerals = inner_border(outer, spec.borders.chapter_ring_mm - band, "chapter ring");
+    const Outline divisions = inner_border(numerals, band, "chapter ring");
     return {edge, outer, numerals, divisions};
 }
 
@@ -79,7 +80,7 @@ double Bench::width_of_step(int step_min) const {
     return step_min >= 60 ? tool : step_min >= 30 ? 0.8 * tool : step_min >= 15 ? 0.65 * tool : 0.5 * tool;
 }
 
-double Bench::division_band_mm() const { return (1 - k_numeral_share) * spec.borders.chapter_ring_mm; }
+double Bench::division_band_mm() const { return spec.divide_min > 0 ? (1 - k_numeral_share) * spec.borders.chapter_ring_mm : 0.0; }
 double Bench::half_hour_reach_mm() const { return spec.divide_min <= 30 ? 1.4 * division_band_mm() : 0.0; }
 double Bench::quarter_hour_reach_mm() const { return spec.divide_min <= 15 ? 0.5 * division_band_mm() : 0.0; }
 

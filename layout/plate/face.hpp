@@ -21,7 +21,7 @@ struct FaceSpec {
     Numerals numerals = Numerals::roman;
     NumeralStand stand = NumeralStand::along_border;
     int numeral_count = 12;
-    int divide_min = 60;
+    int divide_min = 60;      ///< 0: the ring has no band of divisions
     bool noon_mark = true;
     bool date_labels = true;
     bool compass = false;  ///< level plates

@@ -36,7 +36,8 @@ void draw_borders(Bench& bench) {
         border(bench.rings.outer, 1.5 * w, "outer border");
     if (bench.spec.borders.chapter_ring_mm > 0) {
         border(bench.rings.numerals, w, "border of the numerals");
-        border(bench.rings.divisions, 0.65 * w, "border of the divisions");
+        if (bench.division_band_mm() > 0)
+            border(bench.rings.divisions, 0.65 * w, "border of the divisions");
     }
     if (bench.centre && bench.spec.borders.inner_mm > 0) {
         const Outline inner = Outline::round(*bench.centre, bench.spec.borders.inner_mm);

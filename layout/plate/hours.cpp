@@ -31,6 +31,7 @@ class HourDrawer {
                 clock_lines_.push_back(&line);
         }
         choose_steps();
+        part_near_centre();
         for (const Ray& ray : rays_)
             draw_ray(ray);
         draw_clock_lines();
@@ -89,6 +90,33 @@ class HourDrawer {
             before = ray;
         }
         return true;
+    }
+
+    /// Hour lines that run together towards the centre start where they stand clear of their neighbours.
+    void part_near_centre() {
+        if (!bench_.centre)
+            return;
+        std::vector<Ray*> hours;
+        for (Ray& ray : rays_)
+            if (ray.minute % 60 == 0)
+                hours.push_back(&ray);
+        const double wanted = bench_.spec.cutting.least_gap_mm + bench_.width_of_step(60);
+        std::vector<double> start(hours.size(), 0.0);
+        for (std::size_t i = 0; i + 1 < hours.size(); ++i) {
+            const Point a = hours[i]->field.front().front() - *bench_.centre, b = hours[i + 1]->field.front().front() - *bench_.centre;
+            if (hours[i]->minute == hours[i + 1]->minute || dot(a, b) <= 0)
+                continue;
+            const double spread = std::abs(cross(unit(a), unit(b)));
+            const double from = spread > 1e-9 ? wanted / spread : 0.0;
+            start[i] = std::max(start[i], from);
+            start[i + 1] = std::max(start[i + 1], from);
+        }
+        for (std::size_t i = 0; i < hours.size(); ++i) {
+            Polyline& first = hours[i]->field.front();
+            const double begins = distance(*bench_.centre, first.front()), ends = distance(*bench_.centre, first.back());
+            if (start[i] > begins && start[i] < 0.8 * ends)
+                first.front() = between(first.front(), first.back(), (start[i] - begins) / (ends - begins));
+        }
     }
 
     [[nodiscard]] bool drawn(const Ray& ray) const {
@@ -229,7 +257,7 @@ class HourDrawer {
     void draw_numerals() {
         if (bench_.spec.borders.chapter_ring_mm <= 0 || bench_.spec.lettering.numeral_height_mm <= 0)
             return;
-        const auto middle = bench_.rings.outer.inset(bench_.spec.borders.chapter_ring_mm * 0.32);
+        const auto middle = bench_.rings.outer.inset((bench_.spec.borders.chapter_ring_mm - bench_.division_band_mm()) / 2);
         if (!middle)
             return;
         std::vector<Numeral> all = numerals(*middle);
@@ -237,7 +265,9 @@ class HourDrawer {
             return;
         double height = bench_.spec.lettering.numeral_height_mm;
         const double asked = height;
-        while (height > 0.55 * asked && !all_apart(all, *middle, height))
+        while (height > 0.55 * asked && !all_in_band(all, *middle, height))
+            height *= 0.95;
+        while (height > 0.72 * asked && !all_apart(all, *middle, height))
             height *= 0.95;
         if (!all_apart(all, *middle, height))
             drop_crowded(all, *middle, height);
@@ -253,6 +283,18 @@ class HourDrawer {
         const bool along_border = bench_.spec.stand == NumeralStand::along_border;
         const Point at = along_border ? kept_on_side(middle, n, half_width + 0.2 * height) : n.at;
         return {at, half_width + 0.22 * height, height / 2, numeral_turn(n, heads_out())};
+    }
+
+    /// Whether the numerals stand within the band, which upright ones may be too wide for.
+    [[nodiscard]] bool all_in_band(const std::vector<Numeral>& all, const Outline& middle, double height) const {
+        if (bench_.spec.stand == NumeralStand::along_border)
+            return true;
+        return std::all_of(all.begin(), all.end(), [&](const Numeral& n) {
+            const auto corners = box_of(n, middle, height).corners();
+            return std::all_of(corners.begin(), corners.end(), [&](Point p) {
+                return bench_.rings.outer.contains(p) && !bench_.rings.numerals.contains(p);
+            });
+        });
     }
 
     [[nodiscard]] bool all_apart(const std::vector<Numeral>& all, const Outline& middle, double height) const {
@@ -281,14 +323,19 @@ class HourDrawer {
         bench_.warnings.push_back(fmt::format("no room for the numerals {}: their hour lines stand too close together at the border", dropped));
     }
 
-    /// Whether heads point outward: the way in which noon, or else the middle hour, stands upright for the reader.
+    /// Whether heads point outward: the way in which noon, or else most hours, stand upright for the reader.
     [[nodiscard]] bool heads_out() const {
-        const Ray* noon = nullptr;
-        for (const Ray& ray : rays_)
-            if (!ray.tick.empty() && (!noon || std::abs(ray.minute - 720) < std::abs(noon->minute - 720)))
-                noon = &ray;
-        if (noon)
-            return dot(noon->direction(), bench_.up) >= -1e-9;
+        double upward = 0;
+        for (const Ray& ray : rays_) {
+            if (ray.tick.empty())
+                continue;
+            const double up = dot(ray.direction(), bench_.up);
+            if (ray.minute == 720)
+                return up >= -1e-9;
+            upward += up;
+        }
+        if (!rays_.empty())
+            return upward >= 0;
         const DialLine* best = nullptr;
         for (const DialLine* line : clock_lines_)
             if (!best || std::abs(line->time_h - 12) < std::abs(best->time_h - 12))

@@ -1,9 +1,10 @@
 // SPDX-License-Identifier: MIT
 //
-// Two cases. A style that leans well away from the plate has its centre on it: the centre is moved about the field until the
-// hour lines that start there have the most room, and the nodus is set as high as lets the date lines cross the
-// field. A style nearly parallel to the plate has its centre far off or nowhere: then the foot and the height are searched together for the
-// most hours and dates that fall on the field, well apart.
+// Two cases. A style that leans well away from the plate has its centre on it: the centre is moved about the field
+// until the hour lines that start there have the most room, and the nodus is set as high as lets the date lines cross
+// the field. Where hour lines from a centre on the plate would crowd, because the style is nearly parallel to the plate,
+// the centre may lie off it or nowhere: foot and height are searched together for the most hours and dates that fall on
+// the field, well apart.
 #include "layout/plate/face.hpp"
 #include "layout/plate/points.hpp"
 
@@ -13,7 +14,9 @@
 namespace dialwright::layout {
 namespace {
 
-constexpr Angle k_least_style_for_centre = Angle::degrees(7);
+constexpr Angle k_least_style_for_centre = Angle::degrees(3);
+constexpr Angle k_pin = Angle::degrees(89.99); ///< a style this steep is a pin, square on the plate
+constexpr double k_crowded = 0.03;             ///< of the plate's size, between two hours at the border of the field
 
 double to_half_mm(double mm) { return std::round(mm * 2) / 2; }
 
@@ -32,10 +35,11 @@ class Placer {
     }
 
     Placement placed() {
-        const bool centre_on_plate = style_.height >= k_least_style_for_centre && style_.centre;
-        if (!centre_on_plate)
+        if (style_.height < k_least_style_for_centre || !style_.centre)
             return placed_without_centre();
         const Point centre = spec_.plate.centre ? Point{spec_.plate.centre->right_mm, spec_.plate.centre->up_mm} : best_centre();
+        if (!spec_.plate.centre && closest_hours_mm(centre) < k_crowded * size_mm())
+            return placed_without_centre();
         Placement placement;
         placement.nodus_height_mm = plan_.nodus_height_mm > 0 ? plan_.nodus_height_mm : height_for(centre);
         placement.foot = centre - placement.nodus_height_mm * Point{style_.centre->u_mm, style_.centre->v_mm};
@@ -60,7 +64,7 @@ class Placer {
             return -1e300;
         // Behind the centre, away from the hours, stand the compass mark and the inscriptions.
         const Point behind = -1.0 * clockwise_from_up(style_.substyle);
-        const double behind_weight = (spec_.compass ? 1.0 : 0.0) + (spec_.lettering.motto.empty() ? 0.0 : 0.6);
+        const double behind_weight = (spec_.compass ? 1.8 : 0.0) + (spec_.lettering.motto.empty() ? 0.0 : 0.6);
         const auto room_behind = rings_.divisions.exit(centre, behind);
         double score = room_behind ? behind_weight * std::log(std::max(1e-3, distance(centre, room_behind->at))) : 0.0;
         for (const Angle& hour : hours_) {
@@ -72,7 +76,24 @@ class Placer {
         return score;
     }
 
+    /// The least distance between the ends of two hour lines, an hour apart, at the border of the field.
+    [[nodiscard]] double closest_hours_mm(Point centre) const {
+        double least = 1e300;
+        std::optional<Point> before;
+        for (std::size_t i = 0; i < hours_.size(); ++i) {
+            const auto direction = hour_line_direction(caster_.surface().frame(), style_, plan_.site.latitude, hours_[i]);
+            const auto exit = direction ? rings_.divisions.exit(centre, clockwise_from_up(*direction)) : std::nullopt;
+            const bool next = i > 0 && (hours_[i] - hours_[i - 1]).in_hours() < 1.5;
+            if (exit && before && next)
+                least = std::min(least, distance(exit->at, *before));
+            before = exit ? std::optional{exit->at} : std::nullopt;
+        }
+        return least;
+    }
+
     [[nodiscard]] Point best_centre() const {
+        if (style_.height > k_pin)
+            return {}; // both faces of a plate share the pin: its middle
         const double wanted = spec_.borders.inner_mm + 2 * spec_.cutting.least_gap_mm;
         Outline allowed = rings_.divisions;
         for (const double part : {1.0, 0.5, 0.25})
