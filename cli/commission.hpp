@@ -17,8 +17,20 @@ struct Commission {
     std::vector<layout::Face> faces; ///< beside their plans
 };
 
-/// Reads a design file and draws its faces; tells on stderr what is wrong with it.
+/// A commission, or what is wrong with its design: one or the other, never both, never neither.
+struct CommissionTaking {
+    std::optional<Commission> commission;
+    std::vector<DesignError> errors; ///< in the order of the file
+};
+
+/// Checks a design against the sky and draws its faces.
+[[nodiscard]] CommissionTaking take_commission(DesignReading reading);
+
+/// The same from a design file; tells on stderr what is wrong with it.
 /// @return nothing after an error has been told
 [[nodiscard]] std::optional<Commission> take_commission(const std::filesystem::path& file);
+
+/// Each error on a line of stderr.
+void tell(const std::vector<DesignError>& errors);
 
 } // namespace dialwright::cli

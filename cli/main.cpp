@@ -1,9 +1,32 @@
 // SPDX-License-Identifier: MIT
 #include "cli/commands/commands.hpp"
+#include "cli/design/nearest.hpp"
+#include "cli/design/plain_text.hpp"
 #include "cli/exit_status.hpp"
 
+#include <algorithm>
 #include <exception>
 #include <iostream>
+#include <string>
+#include <string_view>
+#include <vector>
+
+namespace {
+
+/// What is wrong with the first word, where it is no command and no option; empty where nothing is.
+std::string no_command(const CLI::App& app, std::string_view word) {
+    using namespace dialwright::cli;
+    std::vector<std::string> names;
+    for (const CLI::App* command : app.get_subcommands([](const CLI::App*) { return true; }))
+        names.push_back(command->get_name());
+    const std::vector<std::string_view> commands{names.begin(), names.end()};
+    if (word.starts_with('-') || std::find(commands.begin(), commands.end(), word) != commands.end())
+        return {};
+    const std::string_view near = nearest(word, commands);
+    return in_quotes(word) + " is not a command: " + (near.empty() ? "give " + one_of(commands) : "did you mean " + std::string{near} + "?");
+}
+
+} // namespace
 
 int main(int count, char** words) {
     using namespace dialwright::cli;
@@ -16,6 +39,10 @@ int main(int count, char** words) {
     add_numbers(app, status);
     add_shadow(app, status);
     add_check(app, status);
+    if (const std::string wrong = count > 1 ? no_command(app, words[1]) : std::string{}; !wrong.empty()) {
+        std::cerr << "dialwright: " << wrong << '\n';
+        return k_error;
+    }
     try {
         app.parse(count, words);
     } catch (const CLI::ParseError& error) {

@@ -1,9 +1,9 @@
 // SPDX-License-Identifier: MIT
 #include "cli/commands/commands.hpp"
+#include "cli/commands/said.hpp"
 #include "cli/exit_status.hpp"
 #include "cli/packet/packet.hpp"
 #include "cli/report/say.hpp"
-#include "layout/sheet/export_error.hpp"
 
 #include <algorithm>
 #include <fmt/format.h>
@@ -35,14 +35,10 @@ int run_check(const std::string& design) {
     const auto commission = take_commission(design);
     if (!commission)
         return k_error;
-    Packet packet;
-    try {
-        packet = make_packet(*commission);
-    } catch (const layout::ExportError& trouble) {
-        std::cerr << design << ": " << trouble.what() << '\n';
+    const auto packet = take_packet(*commission);
+    if (!packet)
         return k_error;
-    }
-    std::cout << fmt::format("{}: can be made, {} sheets\n", commission->design.title, packet.sheets);
+    std::cout << fmt::format("{}: can be made, {} sheets\n", commission->design.title, packet->sheets);
     const auto list = chosen(*commission);
     if (!list.empty()) {
         std::size_t key = 0, value = 0;
@@ -54,9 +50,9 @@ int run_check(const std::string& design) {
         for (const Assumption& a : list)
             std::cout << fmt::format("  {:<{}}  {:<{}}  {}\n", a.key, key, a.value, value, a.why);
     }
-    for (const std::string& warning : packet.warnings)
+    for (const std::string& warning : packet->warnings)
         std::cout << "note: " << warning << '\n';
-    return packet.warnings.empty() ? k_fine : k_with_warnings;
+    return said(packet->warnings.empty() ? k_fine : k_with_warnings);
 }
 
 } // namespace

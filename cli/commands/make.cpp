@@ -1,8 +1,8 @@
 // SPDX-License-Identifier: MIT
 #include "cli/commands/commands.hpp"
+#include "cli/commands/said.hpp"
 #include "cli/exit_status.hpp"
 #include "cli/packet/packet.hpp"
-#include "layout/sheet/export_error.hpp"
 
 #include <fmt/format.h>
 #include <iostream>
@@ -22,15 +22,11 @@ int run_make(const MakeOptions& options) {
         return k_error;
     const std::filesystem::path folder =
         options.folder.empty() ? std::filesystem::path{std::filesystem::path{options.design}.stem().string() + "-packet"} : std::filesystem::path{options.folder};
-    Packet packet;
-    try {
-        packet = make_packet(*commission);
-    } catch (const layout::ExportError& trouble) {
-        std::cerr << options.design << ": " << trouble.what() << '\n';
+    const auto packet = take_packet(*commission);
+    if (!packet)
         return k_error;
-    }
     std::vector<OutputFile> files;
-    for (const Packet::Item& item : packet.items)
+    for (const Packet::Item& item : packet->items)
         files.push_back(item.file);
     try {
         write_files(folder, files);
@@ -38,12 +34,12 @@ int run_make(const MakeOptions& options) {
         std::cerr << trouble.what() << "; nothing was changed there\n";
         return k_error;
     }
-    std::cout << fmt::format("{}: {} sheets\n", commission->design.title, packet.sheets);
-    for (const Packet::Item& item : packet.items)
+    std::cout << fmt::format("{}: {} sheets\n", commission->design.title, packet->sheets);
+    for (const Packet::Item& item : packet->items)
         std::cout << fmt::format("  {:<40} {}\n", (folder / item.file.name).string(), item.purpose);
-    for (const std::string& warning : packet.warnings)
+    for (const std::string& warning : packet->warnings)
         std::cerr << "note: " << warning << '\n';
-    return packet.warnings.empty() ? k_fine : k_with_warnings;
+    return said(packet->warnings.empty() ? k_fine : k_with_warnings);
 }
 
 } // namespace

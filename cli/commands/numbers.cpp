@@ -1,5 +1,6 @@
 // SPDX-License-Identifier: MIT
 #include "cli/commands/commands.hpp"
+#include "cli/commands/said.hpp"
 #include "cli/exit_status.hpp"
 #include "cli/report/numbers.hpp"
 
@@ -19,7 +20,7 @@ int run_numbers(const NumbersOptions& options) {
     if (!commission)
         return k_error;
     std::cout << (options.json ? numbers_json(*commission) : options.csv ? hour_lines_csv(*commission) : numbers_text(*commission));
-    return std::cout.flush() ? k_fine : k_error;
+    return said(k_fine);
 }
 
 } // namespace

@@ -1,13 +1,15 @@
 // SPDX-License-Identifier: MIT
 #include "cli/commands/commands.hpp"
+#include "cli/commands/said.hpp"
+#include "cli/design/plain_text.hpp"
 #include "cli/exit_status.hpp"
 #include "cli/report/shadow.hpp"
 #include "engine/time/instant_text.hpp"
 
+#include <filesystem>
 #include <fmt/format.h>
 #include <fstream>
 #include <iostream>
-#include <iterator>
 #include <memory>
 #include <stdexcept>
 
@@ -23,39 +25,51 @@ struct ShadowOptions {
 };
 
 constexpr const char* k_instant_hint = "write an instant as 2026-06-21T11:00:00Z, or with an offset: 2026-06-21T12:00:00+01:00";
+constexpr std::size_t k_most_told = 100;
 
-/// One instant a line; empty lines are passed over.
-bool read_lines(const std::string& name, std::vector<std::string>& texts) {
+/// Instants as they were asked for, and what they mean.
+struct Asked {
+    std::vector<std::string> texts;
+    std::vector<Instant> instants;
+    std::size_t bad = 0; ///< told on stderr, the first hundred
+
+    /// @param where  the start of the message: "--at" or "times.txt:12:1"
+    void add(std::string text, const std::string& where) {
+        if (const auto instant = read_instant(text)) {
+            instants.push_back(*instant);
+            texts.push_back(std::move(text));
+        } else if (++bad <= k_most_told) {
+            std::cerr << fmt::format("{}: {} is not an instant: {}\n", where, in_quotes(text), k_instant_hint);
+        }
+    }
+};
+
+std::string without_blanks(const std::string& line) {
+    constexpr const char* k_blanks = " \t\r";
+    const std::size_t first = line.find_first_not_of(k_blanks);
+    return first == std::string::npos ? std::string{} : line.substr(first, line.find_last_not_of(k_blanks) - first + 1);
+}
+
+/// One instant a line; empty lines are passed over, and so is the mark that some editors put before the first.
+bool read_lines(const std::string& name, Asked& asked) {
     std::ifstream file;
     if (name != "-") {
+        std::error_code trouble;
         file.open(name);
-        if (!file) {
-            std::cerr << name << ": cannot be read\n";
+        if (!file || std::filesystem::is_directory(name, trouble)) {
+            std::cerr << fmt::format("{}: {}\n", name, file ? "this is a folder: give a file with one instant a line" : "cannot be read");
             return false;
         }
     }
     std::istream& in = name == "-" ? std::cin : file;
-    for (std::string line; std::getline(in, line);) {
-        while (!line.empty() && (line.back() == '\r' || line.back() == ' '))
-            line.pop_back();
-        if (!line.empty())
-            texts.push_back(line);
+    std::string line;
+    for (std::size_t number = 1; std::getline(in, line); ++number) {
+        if (number == 1 && line.starts_with("\xEF\xBB\xBF"))
+            line.erase(0, 3);
+        if (std::string text = without_blanks(line); !text.empty())
+            asked.add(std::move(text), fmt::format("{}:{}:1", name == "-" ? "standard input" : name, number));
     }
     return true;
-}
-
-std::optional<std::vector<Instant>> instants_of(const std::vector<std::string>& texts) {
-    std::vector<Instant> instants;
-    instants.reserve(texts.size());
-    for (std::size_t i = 0; i < texts.size(); ++i) {
-        const auto instant = read_instant(texts[i]);
-        if (!instant) {
-            std::cerr << fmt::format("instant {}: \"{}\" is not one: {}\n", i + 1, texts[i], k_instant_hint);
-            return std::nullopt;
-        }
-        instants.push_back(*instant);
-    }
-    return instants;
 }
 
 std::optional<std::size_t> face_named(const Commission& commission, const std::string& name) {
@@ -66,13 +80,12 @@ std::optional<std::size_t> face_named(const Commission& commission, const std::s
 }
 
 int run_shadow(const ShadowOptions& options) {
-    std::vector<std::string> texts = options.at;
-    if (!options.at_file.empty() && !read_lines(options.at_file, texts))
+    Asked asked;
+    for (const std::string& text : options.at)
+        asked.add(text, "--at");
+    if ((!options.at_file.empty() && !read_lines(options.at_file, asked)) || asked.bad > 0)
         return k_error;
-    const auto instants = instants_of(texts);
-    if (!instants)
-        return k_error;
-    if (instants->empty()) {
+    if (asked.instants.empty()) {
         std::cerr << "no instant is given: use --at or --at-file; " << k_instant_hint << '\n';
         return k_error;
     }
@@ -89,13 +102,13 @@ int run_shadow(const ShadowOptions& options) {
         }
     }
     try {
-        const auto reports = shadow_reports(*commission, *instants, face);
-        std::cout << (options.json ? shadow_json(*commission, reports, texts) : shadow_text(*commission, reports));
+        const auto reports = shadow_reports(*commission, asked.instants, face);
+        std::cout << (options.json ? shadow_json(*commission, reports, asked.texts) : shadow_text(*commission, reports));
     } catch (const std::invalid_argument& trouble) {
         std::cerr << trouble.what() << '\n';
         return k_error;
     }
-    return std::cout.flush() ? k_fine : k_error;
+    return said(k_fine);
 }
 
 } // namespace

@@ -1,8 +1,12 @@
 // SPDX-License-Identifier: MIT
 // What is put on the plate and how it is cut: borders, gnomon, lettering, cutting, print.
+#include "cli/design/nearest.hpp"
 #include "cli/design/sections.hpp"
+#include "layout/sheet/paper.hpp"
 
 #include <fmt/format.h>
+
+#include <vector>
 
 namespace dialwright::cli {
 
@@ -17,6 +21,22 @@ void length_into(double& target, const Section& section, std::string_view key, d
 void line_into(std::string& target, const Section& section, std::string_view key, std::size_t most) {
     if (const auto text = section.line(key, most))
         target = *text;
+}
+
+void read_paper(Design& design, const Section& print) {
+    const std::optional<std::string> name = print.line("paper", 100);
+    if (!name)
+        return;
+    design.print.paper = *name;
+    if (layout::paper_named(*name))
+        return;
+    std::vector<std::string> names = layout::paper_names();
+    std::erase_if(names, [](const std::string& one) { return one.starts_with("roll"); }); // examples, not names
+    const std::vector<std::string_view> candidates{names.begin(), names.end()};
+    const std::string_view near = nearest(*name, candidates);
+    print.error("paper", in_quotes(*name) + " is not a paper that is known here",
+                near.empty() ? "give A4, A3, Letter, Tabloid, or a roll by its width from 100 mm, as in \"roll 610 mm\""
+                             : fmt::format("did you mean {}?", near));
 }
 
 constexpr double k_least_letter_mm = 0.5;
@@ -86,7 +106,7 @@ void read_cutting(Design& design, const Section& top) {
 
 void read_print(Design& design, const Section& top) {
     const Section print{top.entry("print"), "print", top.state()};
-    line_into(design.print.paper, print, "paper", 100);
+    read_paper(design, print);
     length_into(design.print.margin_mm, print, "margin", 0.0, 50.0);
     length_into(design.print.overlap_mm, print, "overlap", 0.0, 100.0);
     print.read_into(design.print.own_size, "own size", yes_or_no);

@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "cli/packet/packet.hpp"
 
+#include "cli/plan/feasible.hpp"
 #include "cli/report/numbers.hpp"
 #include "cli/report/say.hpp"
 #include "layout/export/pdf.hpp"
@@ -98,7 +99,16 @@ std::string face_suffix(const Commission& commission, std::size_t i) {
     return commission.plans[i].name.empty() ? "" : "-" + commission.plans[i].name;
 }
 
-layout::SheetBook book_of(const Commission& commission, const std::vector<std::string>& warnings) {
+/// A PDF's page has a largest size: a larger work goes on tiles alone, and the maker is told.
+void add_own_size(std::vector<Sheet>& sheets, const std::shared_ptr<const Drawing>& drawing, const layout::PrintOptions& options, std::vector<std::string>& warnings) {
+    try {
+        sheets.push_back(layout::own_size_sheet(drawing, options));
+    } catch (const layout::ExportError& trouble) {
+        warnings.push_back(std::string{"no page of the work's own size: "} + trouble.what());
+    }
+}
+
+layout::SheetBook book_of(const Commission& commission, std::vector<std::string>& warnings) {
     const Design& design = commission.design;
     layout::PrintOptions options;
     options.paper = layout::paper_named(design.print.paper).value();
@@ -115,7 +125,7 @@ layout::SheetBook book_of(const Commission& commission, const std::vector<std::s
         options.title = name.empty() ? design.title : design.title + ", " + name;
         tilings.push_back(layout::tile(drawing, options));
         if (design.print.own_size)
-            own_sizes.push_back(layout::own_size_sheet(drawing, options));
+            add_own_size(own_sizes, drawing, options, warnings);
         covers.push_back({name, drawing, key_numbers(commission, i), nullptr});
     }
     bool has_tiles = false;
@@ -138,6 +148,16 @@ layout::SheetBook book_of(const Commission& commission, const std::vector<std::s
 }
 
 } // namespace
+
+std::optional<Packet> take_packet(const Commission& commission) {
+    try {
+        return make_packet(commission);
+    } catch (const layout::ExportError& trouble) {
+        const Design& design = commission.design;
+        tell({error_at(design, first_given(design, {"print: margin", "print: overlap", "print: paper", "print", "plate"}), trouble.what(), "")});
+        return std::nullopt;
+    }
+}
 
 Packet make_packet(const Commission& commission) {
     Packet packet;

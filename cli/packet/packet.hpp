@@ -20,4 +20,8 @@ struct Packet {
 /// @throws layout::ExportError  with a message for the maker
 [[nodiscard]] Packet make_packet(const Commission& commission);
 
+/// The same; tells on stderr, at the design's key, what keeps it from being printed.
+/// @return nothing after an error has been told
+[[nodiscard]] std::optional<Packet> take_packet(const Commission& commission);
+
 } // namespace dialwright::cli

@@ -37,21 +37,44 @@ void write_whole(const std::filesystem::path& path, const std::string& bytes) {
         fail(path, error);
 }
 
+/// Removes those that are empty.
+void remove_folders(const std::vector<std::filesystem::path>& folders) {
+    std::error_code ignored;
+    for (auto folder = folders.rbegin(); folder != folders.rend(); ++folder)
+        std::filesystem::remove(*folder, ignored);
+}
+
+/// Makes a folder and those above it.
+/// @return the folders that were not there before, the uppermost first
+std::vector<std::filesystem::path> make_folders(const std::filesystem::path& folder) {
+    namespace fs = std::filesystem;
+    std::vector<fs::path> made;
+    fs::path so_far;
+    for (const fs::path& part : folder) {
+        so_far /= part;
+        std::error_code trouble;
+        if (fs::create_directory(so_far, trouble)) {
+            made.push_back(so_far);
+        } else if (std::error_code ignored; !fs::is_directory(so_far, ignored)) {
+            remove_folders(made);
+            fail(so_far, trouble && trouble.value() != EEXIST ? trouble.value() : ENOTDIR);
+        }
+    }
+    return made;
+}
+
 } // namespace
 
 void write_files(const std::filesystem::path& folder, const std::vector<OutputFile>& files) {
     namespace fs = std::filesystem;
     std::error_code trouble;
-    const bool made_folder = fs::create_directories(folder, trouble);
-    if (trouble)
-        fail(folder, trouble.value());
+    const std::vector<fs::path> made = make_folders(folder);
     std::vector<fs::path> waiting;
     const auto put_back = [&] {
         std::error_code ignored;
         for (const fs::path& path : waiting)
             fs::remove(path, ignored);
-        if (made_folder)
-            fs::remove(folder, ignored); // only if it is empty
+        remove_folders(made);
     };
     try {
         for (const OutputFile& file : files) {

@@ -2,11 +2,14 @@
 #include "cli/plan/feasible.hpp"
 
 #include "cli/report/say.hpp"
+#include "layout/lettering/lettering.hpp"
 #include "layout/plate/numerals.hpp"
 
 #include <algorithm>
 #include <fmt/format.h>
 #include <optional>
+#include <stdexcept>
+#include <tuple>
 
 namespace dialwright::cli {
 namespace {
@@ -38,6 +41,15 @@ std::string span_text(const LitHours& lit) {
     return text;
 }
 
+std::optional<DesignError> borders_without_field(const Design& design, const layout::FaceSpec& spec) {
+    try {
+        static_cast<void>(layout::Rings::of(spec));
+        return std::nullopt;
+    } catch (const std::invalid_argument& trouble) {
+        return borders_error(design, trouble.what());
+    }
+}
+
 } // namespace
 
 DesignError error_at(const Design& design, const std::string& key, std::string message, std::string hint) {
@@ -50,6 +62,23 @@ DesignError error_at(const Design& design, const std::string& key, std::string m
             break;
         }
     return error;
+}
+
+std::string first_given(const Design& design, std::initializer_list<const char*> keys) {
+    for (const char* key : keys)
+        if (design.where.contains(key))
+            return key;
+    return keys.end()[-1];
+}
+
+DesignError borders_error(const Design& design, std::string message) {
+    return error_at(design, first_given(design, {"borders: chapter ring", "borders: margin", "borders", "plate"}), std::move(message),
+                    "make the borders narrower or the plate larger");
+}
+
+std::vector<DesignError> in_order(std::vector<DesignError> errors) {
+    std::stable_sort(errors.begin(), errors.end(), [](const DesignError& a, const DesignError& b) { return std::tie(a.line, a.column) < std::tie(b.line, b.column); });
+    return errors;
 }
 
 std::vector<DesignError> what_cannot_be(const Design& design, const MeanYear& year, const std::vector<FacePlan>& plans) {
@@ -78,6 +107,36 @@ std::vector<DesignError> what_cannot_be(const Design& design, const MeanYear& ye
             errors.push_back(error_at(design, "hours: to", fmt::format("{} is never lit at {}", face, layout::time_label(*design.hours.last_h)),
                                       fmt::format("it is lit from {}; leave the key out for all hours that are ever lit", span_text(lit))));
     }
+    if (!errors.empty()) {
+        for (DesignError& error : what_cannot_be_lettered(design, ""))
+            errors.push_back(std::move(error));
+        if (auto error = borders_without_field(design, plans.front().spec))
+            errors.push_back(std::move(*error));
+    }
+    return errors;
+}
+
+std::vector<DesignError> what_cannot_be_lettered(const Design& design, const std::string& otherwise) {
+    std::vector<DesignError> errors;
+    try {
+        const layout::Lettering lettering{design.lettering.family};
+        const auto try_text = [&](const std::string& key, const std::string& text) {
+            try {
+                if (!text.empty())
+                    static_cast<void>(lettering.line(text, 1.0));
+            } catch (const layout::LetteringError& trouble) {
+                errors.push_back(error_at(design, key, trouble.what(), ""));
+            }
+        };
+        try_text("lettering: motto", design.lettering.motto);
+        try_text("lettering: place line", design.lettering.place_line);
+        for (const NamedDay& day : design.dates.days)
+            try_text("dates: days", day.label);
+    } catch (const layout::LetteringError& trouble) {
+        errors.push_back(error_at(design, "lettering: font", trouble.what(), ""));
+    }
+    if (errors.empty() && !otherwise.empty())
+        errors.push_back(error_at(design, "lettering: font", otherwise, ""));
     return errors;
 }
 
