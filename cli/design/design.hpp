@@ -13,10 +13,12 @@
 namespace dialwright::cli {
 
 using dialwright::HalfYear;
+using dialwright::HourExtent;
 using dialwright::HourTime;
 using layout::Borders;
 using layout::Cutting;
 using layout::Gnomon;
+using layout::GnomonKind;
 using layout::LetteringChoice;
 using layout::Numerals;
 using layout::NumeralStand;
@@ -31,15 +33,17 @@ struct Place {
     std::string name;
     Site site;
     std::string zone; ///< tz database name
+    std::vector<Skyline::Mark> skyline; ///< empty: the flat horizon
 };
 
 enum class DialKind { level, wall, leaning, equatorial };
+/// Upper or front, lower or back.
 enum class Faces { upper, lower, both };
 struct Dial {
     DialKind kind = DialKind::level;
     Angle facing = Angle::degrees(180); ///< azimuth of the outward normal; wall and leaning
     Angle lean;                         ///< back from upright; negative overhangs; wall and leaning
-    Faces faces = Faces::upper;         ///< equatorial only
+    Faces faces = Faces::upper;         ///< of a slab: of an equatorial plate, a wall or a leaning slab
 };
 
 struct Hours {
@@ -51,6 +55,21 @@ struct Hours {
     HalfYear curves = HalfYear::whole; ///< of clock time
     NumeralStand stand = NumeralStand::along_border;
     bool noon_mark = true;
+    HourExtent reach = HourExtent::style;
+    bool summer_numerals = false; ///< a second row, an hour on, for the zone's summer time
+    bool seen_rise = false;       ///< hours from sunrise or to sunset count from the rising that people see (refraction)
+};
+
+/// Lines drawn on the field beside the hours of the chapter ring.
+struct MoreHours {
+    HourTime time = HourTime::unequal;
+    std::optional<double> first_h, last_h; ///< whole hours; not given: all that are ever lit
+    HalfYear curves = HalfYear::whole;
+};
+struct Also {
+    std::vector<MoreHours> hours; ///< each time at most once, in the order of the file
+    std::vector<Angle> altitudes, azimuths;
+    std::vector<PlaceNoon> noons;
 };
 
 struct NamedDay {
@@ -95,6 +114,7 @@ struct Design {
     Borders borders;
     Gnomon gnomon;
     Hours hours;
+    Also also;
     Dates dates;
     Years years;
     LetteringChoice lettering;

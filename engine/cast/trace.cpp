@@ -93,7 +93,10 @@ template <Surface S> class Walk {
     [[nodiscard]] double parameter(int i, int steps) const {
         return i == steps ? path_.last : path_.first + (path_.last - path_.first) * (double(i) / steps);
     }
-    [[nodiscard]] std::optional<Cast> cast(double t) const { return caster_.cast(path_.at(t), path_.light, path_.edge); }
+    [[nodiscard]] std::optional<Cast> cast(double t) const {
+        const auto sky = path_.at(t);
+        return sky ? caster_.cast(*sky, path_.light, path_.edge) : std::nullopt;
+    }
     [[nodiscard]] static int state_of(const std::optional<Cast>& shadow) {
         return !shadow ? k_unseen : shadow->edge == Edge::left ? 1 : 2;
     }

@@ -18,7 +18,8 @@ int coarsest_step_of(int minutes) {
 /// The minutes of the day that a plan asks for, rising, from its first to its last; all of the day if it names none.
 std::vector<int> minutes_of(const HourPlan& plan) {
     const int first = plan.first_h ? int(std::lround(*plan.first_h * 60)) : 0;
-    const int last = plan.last_h ? int(std::lround(*plan.last_h * 60)) : 24 * 60 - 1;
+    const int end_of_scale = plan.time == HourTime::unequal ? 12 * 60 : 24 * 60;
+    const int last = plan.last_h ? std::min(int(std::lround(*plan.last_h * 60)), end_of_scale) : end_of_scale - 1;
     std::vector<int> minutes;
     for (int minute = 0; minute <= 24 * 60; minute += plan.divide_min)
         if (minute >= first && minute <= last)
@@ -52,50 +53,82 @@ class Delineator {
     }
 
     Delineation made() {
-        for (const int minute : minutes_of(plan_.hours))
-            add_hour(minute);
+        add_hours(plan_.hours, 0);
+        for (std::size_t i = 0; i < plan_.more_hours.size(); ++i)
+            add_hours(plan_.more_hours[i], int(i) + 1);
+        add_noons();
+        for (const Angle& altitude : plan_.altitudes)
+            add_level(Family::altitude, altitude, altitude_path(altitude, plan_.site.latitude, made_.season));
+        for (const Angle& azimuth : plan_.azimuths)
+            add_level(Family::azimuth, azimuth, azimuth_path(azimuth, plan_.site.latitude, made_.season));
         for (const DatePlan::Line& date : plan_.dates.lines)
             add_date(date);
         return std::move(made_);
     }
 
   private:
-    void add_hour(int minute) {
-        DialLine line;
-        line.family = plan_.hours.time == HourTime::clock ? Family::clock_hour : Family::hour;
-        line.time_h = minute / 60.0;
-        line.step_min = coarsest_step_of(minute);
-        line.hour_angle = hour_angle_of(plan_.hours.time, line.time_h, plan_.site, plan_.zone_meridian);
-        const bool lit = line.family == Family::clock_hour ? add_clock_pieces(line) : add_straight_pieces(line);
-        const bool whole_hour = minute % 60 == 0;
-        if (!line.pieces.empty())
-            made_.lines.push_back(std::move(line));
-        else if (whole_hour && lit)
-            made_.outside_hours.push_back(line.time_h);
-        else if (whole_hour && plan_.hours.first_h)
-            made_.unlit_hours.push_back(line.time_h);
+    void add_hours(const HourPlan& hours, int set) {
+        for (const int minute : minutes_of(hours)) {
+            DialLine line;
+            line.family = family_of(hours.time);
+            line.set = set;
+            line.time_h = minute / 60.0;
+            line.step_min = coarsest_step_of(minute);
+            const bool lit = add_pieces(line, hours);
+            const bool whole_hour = minute % 60 == 0;
+            if (!line.pieces.empty())
+                made_.lines.push_back(std::move(line));
+            else if (whole_hour && lit && hours.listed)
+                made_.outside_hours.push_back(line.time_h);
+            else if (whole_hour && hours.first_h && hours.listed)
+                made_.unlit_hours.push_back(line.time_h);
+        }
     }
 
     /// @return whether the hour is ever lit
-    bool add_clock_pieces(DialLine& line) {
-        const DayStretch days = stretch_of(plan_.hours.half_year, year_);
-        const SunPath path = mean_time_path(line.hour_angle, year_, days.first, days.last);
+    bool add_pieces(DialLine& line, const HourPlan& hours) {
+        if (line.family != Family::hour && line.family != Family::clock_hour)
+            return add_curve(line, day_path(hours.time, line.time_h));
+        line.hour_angle = hour_angle_of(hours.time, line.time_h, plan_.site, plan_.zone_meridian);
+        if (line.family == Family::hour)
+            return add_straight_pieces(line, hours.extent);
+        const DayStretch days = stretch_of(hours.half_year, year_);
+        return add_curve(line, mean_time_path(line.hour_angle, year_, days.first, days.last));
+    }
+
+    /// An hour that counts from the Sun's rising or setting.
+    [[nodiscard]] SunPath day_path(HourTime time, double time_h) const {
+        const Angle latitude = plan_.site.latitude, count = Angle::hours(time_h);
+        switch (time) {
+        case HourTime::since_sunrise:
+            return rise_path(count, latitude, made_.season, plan_.horizon);
+        case HourTime::to_sunset:
+            return set_path(count, latitude, made_.season, plan_.horizon);
+        case HourTime::since_sunset:
+            return set_path(Angle::hours(24) - count, latitude, made_.season, plan_.horizon);
+        default:
+            return unequal_hour_path(time_h / 12.0, latitude, made_.season, plan_.horizon);
+        }
+    }
+
+    /// @return whether any Sun of the path lights the plate
+    bool add_curve(DialLine& line, const SunPath& path) {
         line.pieces = trace(caster_, path, window_);
         if (!line.pieces.empty())
             return true;
         for (int i = 0; i <= path.steps; ++i)
-            if (caster_.cast(path.at(path.first + (path.last - path.first) * i / path.steps), path.light))
+            if (const auto sky = path.at(path.first + (path.last - path.first) * i / path.steps); sky && caster_.cast(*sky, path.light))
                 return true;
         return false;
     }
 
     /// @return whether the hour is ever lit
-    bool add_straight_pieces(DialLine& line) {
+    bool add_straight_pieces(DialLine& line, HourExtent extent) {
         if (!caster_.ever_lit(line.hour_angle, made_.season))
             return false;
         line.direction = hour_line_direction(made_.frame, made_.style, plan_.site.latitude, line.hour_angle);
-        SunPath path = plan_.hours.extent == HourExtent::style ? hour_path_of_style(line.hour_angle)
-                                                               : hour_path_of_nodus(line.hour_angle, made_.season);
+        SunPath path = extent == HourExtent::style ? hour_path_of_style(line.hour_angle)
+                                                   : hour_path_of_nodus(line.hour_angle, made_.season);
         if (!caster_.edges().both_cast(line.hour_angle)) {
             line.pieces = trace(caster_, path, window_);
             return true;
@@ -108,16 +141,41 @@ class Delineator {
         return true;
     }
 
+    void add_noons() {
+        for (const PlaceNoon& noon : plan_.noons) {
+            DialLine line;
+            line.family = Family::place_noon;
+            line.label = noon.name;
+            line.hour_angle = (plan_.site.longitude - noon.longitude).signed_turn();
+            line.time_h = time_of(plan_.hours.time, line.hour_angle, plan_.site, plan_.zone_meridian);
+            add_straight_pieces(line, plan_.hours.extent);
+            keep_or_list(std::move(line), noon.name);
+        }
+    }
+
+    void add_level(Family family, Angle level, const SunPath& path) {
+        DialLine line;
+        line.family = family;
+        line.level = level;
+        add_curve(line, path);
+        if (!line.pieces.empty())
+            made_.lines.push_back(std::move(line));
+    }
+
+    void keep_or_list(DialLine&& line, const std::string& name) {
+        if (!line.pieces.empty())
+            made_.lines.push_back(std::move(line));
+        else
+            made_.unlit_dates.push_back(name);
+    }
+
     void add_date(const DatePlan::Line& date) {
         DialLine line;
         line.family = Family::date;
         line.label = date.label;
         line.declination = date.declination;
         line.pieces = trace(caster_, declination_path(date.declination), window_);
-        if (!line.pieces.empty())
-            made_.lines.push_back(std::move(line));
-        else
-            made_.unlit_dates.push_back(date.label);
+        keep_or_list(std::move(line), date.label);
     }
 
     const DialPlan& plan_;
@@ -128,6 +186,29 @@ class Delineator {
 };
 
 } // namespace
+
+Family family_of(HourTime time) {
+    switch (time) {
+    case HourTime::clock:
+        return Family::clock_hour;
+    case HourTime::since_sunrise:
+        return Family::since_sunrise;
+    case HourTime::since_sunset:
+        return Family::since_sunset;
+    case HourTime::to_sunset:
+        return Family::to_sunset;
+    case HourTime::unequal:
+        return Family::unequal_hour;
+    case HourTime::sun:
+    case HourTime::zone:
+        break;
+    }
+    return Family::hour;
+}
+
+bool is_hour(Family family) {
+    return family != Family::date && family != Family::altitude && family != Family::azimuth && family != Family::place_noon;
+}
 
 Angle hour_angle_of(HourTime time, double time_h, const Site& site, Angle zone_meridian) {
     const Angle from_noon = Angle::hours(time_h - 12.0);
@@ -147,14 +228,17 @@ Caster<Plane> caster_of(const DialPlan& plan) {
 }
 
 Delineation delineate(const DialPlan& plan, const MeanYear& year, const PlateBox& window) {
-    if (plan.hours.divide_min < 1 || 60 % plan.hours.divide_min != 0)
-        throw std::invalid_argument("an hour must divide into a whole number of parts of whole minutes");
+    std::vector<HourPlan> sets = plan.more_hours;
+    sets.push_back(plan.hours);
+    for (const HourPlan& hours : sets)
+        if (hours.divide_min < 1 || 60 % hours.divide_min != 0)
+            throw std::invalid_argument("an hour must divide into a whole number of parts of whole minutes");
     return Delineator{plan, year, window}.made();
 }
 
-double reading_of(const DialPlan& plan, const MeanYear& year, const SkyPlace& sun, double day_of_year) {
-    if (plan.hours.time != HourTime::clock)
-        return time_of(plan.hours.time, sun.hour_angle, plan.site, plan.zone_meridian);
+namespace {
+
+double clock_reading(const DialPlan& plan, const MeanYear& year, const SkyPlace& sun, double day_of_year) {
     const double june = year.june_solstice_day(), december = year.december_solstice_day();
     const bool going_north = day_of_year < june || day_of_year >= december;
     // An instant's own Sun may pass the mean year's solstices by some seconds of arc.
@@ -162,6 +246,29 @@ double reading_of(const DialPlan& plan, const MeanYear& year, const SkyPlace& su
     const double day = year.day_of_declination(declination, going_north).value_or(day_of_year);
     const Angle mean_hour_angle = sun.hour_angle - year.at(day).equation_of_time;
     return time_of(HourTime::clock, mean_hour_angle, plan.site, plan.zone_meridian);
+}
+
+} // namespace
+
+std::optional<double> reading_of(const DialPlan& plan, HourTime time, const MeanYear& year, const SkyPlace& sun, double day_of_year) {
+    if (time == HourTime::clock)
+        return clock_reading(plan, year, sun, day_of_year);
+    if (time == HourTime::sun || time == HourTime::zone)
+        return time_of(time, sun.hour_angle, plan.site, plan.zone_meridian);
+    const auto arc = half_day_arc(plan.site.latitude, sun.declination, plan.horizon);
+    if (!arc)
+        return std::nullopt;
+    const Angle hour_angle = sun.hour_angle.signed_turn();
+    switch (time) {
+    case HourTime::since_sunrise:
+        return (hour_angle + *arc).positive_turn().in_hours();
+    case HourTime::to_sunset:
+        return (*arc - hour_angle).positive_turn().in_hours();
+    case HourTime::since_sunset:
+        return (hour_angle - *arc).positive_turn().in_hours();
+    default:
+        return *arc > Angle{} && abs(hour_angle) <= *arc ? std::optional{6 + 6 * (hour_angle / *arc)} : std::nullopt;
+    }
 }
 
 } // namespace dialwright

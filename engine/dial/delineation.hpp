@@ -8,13 +8,18 @@
 
 namespace dialwright {
 
-enum class Family { hour, clock_hour, date };
+/// How a line came about; which of a plan's sets of hours it belongs to stands beside it.
+enum class Family { hour, clock_hour, date, since_sunrise, since_sunset, to_sunset, unequal_hour, altitude, azimuth, place_noon };
+[[nodiscard]] Family family_of(HourTime time);
+[[nodiscard]] bool is_hour(Family family); ///< one that has a time
 
 /// One line of the dial, not yet trimmed to the plate's borders.
 struct DialLine {
     Family family = Family::hour;
-    std::string label;                ///< of a date line
-    double time_h = 0.0;              ///< of an hour line, the dial's own time
+    int set = 0;                      ///< 0: the plan's own hours; 1, 2, …: its more_hours
+    std::string label;                ///< of a date line, of a place
+    double time_h = 0.0;              ///< of an hour line, on its own scale
+    Angle level;                      ///< of an altitude circle or an azimuth line
     int step_min = 60;                ///< the coarsest of 60, 30, 15, 10, 5, 2, 1 minutes that the time is a whole number of
     Angle hour_angle;                 ///< of an hour line; of the mean Sun for the clock's
     std::optional<Angle> direction;   ///< of a straight hour line, from the centre, clockwise from +v
@@ -39,9 +44,11 @@ struct Delineation {
 /// @throws std::invalid_argument  the plan's nodus is not above the plate, or its divisions do not divide the hour
 [[nodiscard]] Delineation delineate(const DialPlan& plan, const MeanYear& year, const PlateBox& window);
 
-/// What a dial as planned shows at the Sun's place: the time on its own scale by the line on which the shadow falls,
-/// in [0, 24). On clock-time curves the curve of the half year that `day_of_year` lies in.
+/// What one of a dial's sets of hours shows at the Sun's place: the time on its own scale by the line on which the shadow
+/// falls, in [0, 24). On clock-time curves the curve of the half year that `day_of_year` lies in.
 /// @param day_of_year  of the mean year
-[[nodiscard]] double reading_of(const DialPlan& plan, const MeanYear& year, const SkyPlace& sun, double day_of_year);
+/// @return nothing for hours that count from a rising or setting on a day that has none
+[[nodiscard]] std::optional<double> reading_of(const DialPlan& plan, HourTime time, const MeanYear& year, const SkyPlace& sun,
+                                               double day_of_year);
 
 } // namespace dialwright

@@ -12,9 +12,13 @@ namespace dialwright {
 
 /// The kinds of time that a dial's hour lines can show.
 enum class HourTime {
-    sun,  ///< the site's own apparent time
-    zone, ///< apparent time of the zone's standard meridian: corrected for longitude
-    clock ///< mean time of the zone's standard meridian: yearly curves
+    sun,           ///< the site's own apparent time
+    zone,          ///< apparent time of the zone's standard meridian: corrected for longitude
+    clock,         ///< mean time of the zone's standard meridian: yearly curves
+    since_sunrise, ///< equal hours since the Sun rose
+    since_sunset,  ///< equal hours since it last set: 24 at sunset
+    to_sunset,     ///< equal hours that are left until it sets
+    unequal        ///< twelfths of the day from sunrise to sunset, 0 to 12
 };
 
 /// Which part of the year a clock-time curve is drawn for.
@@ -32,6 +36,13 @@ struct HourPlan {
     int divide_min = 60;                   ///< a divisor of 60
     HalfYear half_year = HalfYear::whole;
     HourExtent extent = HourExtent::style;
+    bool listed = true; ///< hours that are asked for and never lit are told
+};
+
+/// Noon at another place, shown by an hour line of this dial.
+struct PlaceNoon {
+    std::string name;
+    Angle longitude; ///< east positive
 };
 
 struct DatePlan {
@@ -50,7 +61,11 @@ struct DialPlan {
     double nodus_height_mm = 0.0;
     double gnomon_thickness_mm = 0.0;
     Skyline skyline;
-    HourPlan hours;
+    HourPlan hours;                  ///< those of the chapter ring
+    std::vector<HourPlan> more_hours; ///< drawn on the field beside them
+    Angle horizon;                   ///< the Sun's altitude at rising and setting, for hours that count from them: 0° or −50′
+    std::vector<Angle> altitudes, azimuths;
+    std::vector<PlaceNoon> noons;
     DatePlan dates;
 };
 

@@ -1,7 +1,45 @@
 // SPDX-License-Identifier: MIT
 #include "engine/path/sun_path.hpp"
 
+#include <cmath>
+#include <numbers>
+
 namespace dialwright {
+namespace {
+
+/// A path with the declination as its parameter, at an hour angle that follows from the day arc.
+template <class HourAngle> SunPath day_arc_path(Angle latitude, const Season& season, Angle horizon, HourAngle hour_angle) {
+    SunPath path;
+    path.at = [=](double radians) -> std::optional<SkyPlace> {
+        const Angle declination = Angle::radians(radians);
+        const auto arc = half_day_arc(latitude, declination, horizon);
+        return arc ? std::optional<SkyPlace>{{hour_angle(*arc), declination}} : std::nullopt;
+    };
+    path.first = season.least.in_radians();
+    path.last = season.greatest.in_radians();
+    return path;
+}
+
+/// A path given in the site frame, of which only the season's Suns count.
+template <class Direction> SunPath site_path(Angle latitude, const Season& season, Direction direction) {
+    SunPath path;
+    path.at = [=](double parameter) -> std::optional<SkyPlace> {
+        const SkyPlace sky = to_sky(direction(Angle::radians(parameter)), latitude);
+        const bool in_season = sky.declination >= season.least && sky.declination <= season.greatest;
+        return in_season ? std::optional<SkyPlace>{sky} : std::nullopt;
+    };
+    return path;
+}
+
+} // namespace
+
+std::optional<Angle> half_day_arc(Angle latitude, Angle declination, Angle horizon) {
+    const double across = cos(latitude) * cos(declination);
+    const double along = sin(horizon) - sin(latitude) * sin(declination);
+    if (std::abs(along) > across)
+        return std::nullopt;
+    return across > 0 ? std::optional{arc_cosine(along / across)} : std::nullopt;
+}
 
 SunPath hour_path_of_nodus(Angle hour_angle, const Season& season) {
     SunPath path;
@@ -38,6 +76,38 @@ SunPath mean_time_path(Angle mean_hour_angle, const MeanYear& year, double first
     path.first = first_day;
     path.last = last_day;
     path.steps = 48;
+    return path;
+}
+
+SunPath rise_path(Angle from_rise, Angle latitude, const Season& season, Angle horizon) {
+    SunPath path = day_arc_path(latitude, season, horizon, [from_rise](Angle arc) { return from_rise - arc; });
+    path.great_circle = horizon == Angle{};
+    return path;
+}
+
+SunPath set_path(Angle before_set, Angle latitude, const Season& season, Angle horizon) {
+    SunPath path = day_arc_path(latitude, season, horizon, [before_set](Angle arc) { return arc - before_set; });
+    path.great_circle = horizon == Angle{};
+    return path;
+}
+
+SunPath unequal_hour_path(double part, Angle latitude, const Season& season, Angle horizon) {
+    return day_arc_path(latitude, season, horizon, [part](Angle arc) { return (2 * part - 1) * arc; });
+}
+
+SunPath altitude_path(Angle altitude, Angle latitude, const Season& season) {
+    SunPath path = site_path(latitude, season, [altitude](Angle azimuth) { return direction_at(azimuth, altitude); });
+    path.first = 0;
+    path.last = 2 * std::numbers::pi;
+    path.steps = 240;
+    return path;
+}
+
+SunPath azimuth_path(Angle azimuth, Angle latitude, const Season& season) {
+    SunPath path = site_path(latitude, season, [azimuth](Angle altitude) { return direction_at(azimuth, altitude); });
+    path.first = 0;
+    path.last = std::numbers::pi / 2;
+    path.great_circle = true;
     return path;
 }
 

@@ -19,7 +19,7 @@ enum class Light {
 /// A curve in the sky frame whose shadow is a line on the dial. A new family of lines is a new maker of paths; nothing
 /// else knows how the curve comes about.
 struct SunPath {
-    std::function<SkyPlace(double)> at;
+    std::function<std::optional<SkyPlace>(double)> at; ///< nothing where no Sun of the path stands there
     double first = 0.0, last = 1.0; ///< of the parameter
     bool great_circle = false;      ///< its shadow is straight wherever the surface keeps great circles straight
     Light light = Light::seen;
@@ -31,6 +31,11 @@ struct SunPath {
 struct Season {
     Angle least, greatest;
 };
+
+/// Half of the Sun's day arc: its hour angle at setting.
+/// @param horizon  altitude of the Sun's middle at rising and setting: 0°, or −50′ as people see it
+/// @return nothing where the Sun of this declination does not rise or does not set
+[[nodiscard]] std::optional<Angle> half_day_arc(Angle latitude, Angle declination, Angle horizon);
 
 /// The hour line of one hour angle, as shadows of the nodus alone: the season's Suns.
 [[nodiscard]] SunPath hour_path_of_nodus(Angle hour_angle, const Season& season);
@@ -47,5 +52,17 @@ struct Season {
 /// Sun when the mean Sun stands at `mean_hour_angle`.
 /// @param first_day, last_day  days of the mean year, last > first, at most a year apart; may pass the year's end
 [[nodiscard]] SunPath mean_time_path(Angle mean_hour_angle, const MeanYear& year, double first_day, double last_day);
+
+/// An hour counted from the Sun's rising (`from_rise` > 0°) or up to its setting (`from_set` < 0°, as an hour angle):
+/// the Suns of the season that stand that far from their own rising or setting. With the level horizon a great circle.
+[[nodiscard]] SunPath rise_path(Angle from_rise, Angle latitude, const Season& season, Angle horizon);
+[[nodiscard]] SunPath set_path(Angle before_set, Angle latitude, const Season& season, Angle horizon);
+
+/// An unequal hour: the Suns that have run `part` (0 to 1) of their own day arc.
+[[nodiscard]] SunPath unequal_hour_path(double part, Angle latitude, const Season& season, Angle horizon);
+
+/// The Suns of the season at one altitude, and at one azimuth (from north through east).
+[[nodiscard]] SunPath altitude_path(Angle altitude, Angle latitude, const Season& season);
+[[nodiscard]] SunPath azimuth_path(Angle azimuth, Angle latitude, const Season& season);
 
 } // namespace dialwright

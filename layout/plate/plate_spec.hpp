@@ -28,7 +28,19 @@ struct Borders {
     double inner_mm = 0.0;        ///< radius of the border round the centre at which lines stop
 };
 
+/// What throws the shadow.
+enum class GnomonKind {
+    edge,        ///< a plate of metal whose top edge is the style
+    rod,         ///< a round rod along the style
+    pin,         ///< square on the plate; its tip is the nodus
+    upright_pin, ///< plumb; its tip is the nodus
+    disc         ///< a pierced disc; its hole is the nodus and throws a spot
+};
+/// Pins and discs throw no style's shadow: hour lines then run no farther than the nodus' own shadow does.
+[[nodiscard]] constexpr bool has_style(GnomonKind kind) { return kind == GnomonKind::edge || kind == GnomonKind::rod; }
+
 struct Gnomon {
+    GnomonKind kind = GnomonKind::edge;
     std::optional<double> nodus_height_mm;
     double thickness_mm = 0.0;
     std::optional<double> foot_mm; ///< length of the foot along the substyle, from the centre
