@@ -15,6 +15,9 @@ constexpr std::array<const char*, 12> k_months{"Jan", "Feb", "Mar", "Apr", "May"
 /// The signs in the order of the Sun's longitude.
 constexpr std::array<const char*, 12> k_signs{"♈", "♉", "♊", "♋", "♌", "♍", "♎", "♏", "♐", "♑", "♒", "♓"};
 
+/// Refraction at the horizon, 34′, and the Sun's semidiameter, 16′: the almanacs' convention.
+constexpr Angle k_seen_horizon = Angle::degrees(-50.0 / 60.0);
+
 class DateLines {
   public:
     explicit DateLines(const Design& design, const MeanYear& year)
@@ -45,17 +48,46 @@ class DateLines {
 
 std::string pair_text(const std::string& first, const std::string& second) { return first + " · " + second; }
 
-Attitude attitude_of(const Design& design, bool upper_face) {
-    switch (design.dial.kind) {
-    case DialKind::level:
+/// The other face of the same slab.
+Attitude turned_over(const Attitude& front) {
+    return {(front.normal_azimuth + Angle::degrees(180)).positive_turn(), -front.normal_altitude};
+}
+
+Attitude attitude_of(const Design& design, bool first_face) {
+    if (design.dial.kind == DialKind::level)
         return {};
-    case DialKind::wall:
-    case DialKind::leaning:
-        return {design.dial.facing, design.dial.lean};
-    case DialKind::equatorial:
-        break;
-    }
-    return equatorial_attitude(design.place.site.latitude, upper_face);
+    if (design.dial.kind == DialKind::equatorial)
+        return equatorial_attitude(design.place.site.latitude, first_face);
+    const Attitude front{design.dial.facing, design.dial.lean};
+    return first_face ? front : turned_over(front);
+}
+
+bool has_two_faces(const Design& design) { return design.dial.faces == Faces::both; }
+
+std::string face_name(const Design& design, bool first_face) {
+    if (design.dial.kind == DialKind::level || (design.dial.kind != DialKind::equatorial && design.dial.faces == Faces::upper))
+        return "";
+    if (design.dial.kind == DialKind::equatorial)
+        return first_face ? "upper" : "lower";
+    return first_face ? "front" : "back";
+}
+
+HourPlan hour_plan(const Design& design) {
+    const Hours& hours = design.hours;
+    return {hours.time, hours.first_h, hours.last_h, hours.divide_min, hours.curves, hours.reach, true};
+}
+
+HourPlan hour_plan(const MoreHours& more) {
+    return {more.time, more.first_h, more.last_h, 60, more.curves, HourExtent::nodus, more.first_h.has_value()};
+}
+
+/// How far the zone's summer time is ahead of its standard time, in hours; 0 where it has none.
+double summer_shift_h(const Zone& zone, int year) {
+    using namespace std::chrono;
+    double most = 0;
+    for (unsigned month = 1; month <= 12; ++month)
+        most = std::max(most, duration<double, std::ratio<3600>>(zone.at(sys_days{std::chrono::year{year} / month / 1}).summer_time).count());
+    return most;
 }
 
 /// The plate as who looks at its other face sees it: left and right change places.
@@ -70,7 +102,7 @@ Plate seen_from_behind(Plate plate) {
 FacePlan plan_of(const Design& design, const MeanYear& year, bool upper_face) {
     FacePlan face;
     const bool equatorial = design.dial.kind == DialKind::equatorial;
-    face.name = !equatorial ? "" : upper_face ? "upper" : "lower";
+    face.name = face_name(design, upper_face);
     const auto zone = Zone::find(design.place.zone);
     if (!zone)
         throw std::invalid_argument(fmt::format("no time zone \"{}\"", design.place.zone));
@@ -80,8 +112,16 @@ FacePlan plan_of(const Design& design, const MeanYear& year, bool upper_face) {
     dial.zone_meridian = zone->meridian(design.years.first);
     dial.attitude = attitude_of(design, upper_face);
     dial.nodus_height_mm = design.gnomon.nodus_height_mm.value_or(0.0);
-    dial.gnomon_thickness_mm = equatorial ? 0.0 : design.gnomon.thickness_mm;
-    dial.hours = {design.hours.time, design.hours.first_h, design.hours.last_h, design.hours.divide_min, design.hours.curves, HourExtent::style};
+    dial.gnomon_thickness_mm = equatorial || design.gnomon.kind != layout::GnomonKind::edge ? 0.0 : design.gnomon.thickness_mm;
+    if (!design.place.skyline.empty())
+        dial.skyline = Skyline{design.place.skyline};
+    dial.hours = hour_plan(design);
+    for (const MoreHours& more : design.also.hours)
+        dial.more_hours.push_back(hour_plan(more));
+    dial.horizon = design.hours.seen_rise ? k_seen_horizon : Angle{};
+    dial.altitudes = design.also.altitudes;
+    dial.azimuths = design.also.azimuths;
+    dial.noons = design.also.noons;
     dial.dates = date_plan(design, year);
     if (equatorial) // the Sun stands on this face's side of the equator, or never lights it
         std::erase_if(dial.dates.lines, [&](const DatePlan::Line& line) {
@@ -90,8 +130,8 @@ FacePlan plan_of(const Design& design, const MeanYear& year, bool upper_face) {
         });
 
     layout::FaceSpec& spec = face.spec;
-    spec.name = equatorial ? face.name + " face" : "";
-    spec.plate = equatorial && !upper_face ? seen_from_behind(design.plate) : design.plate;
+    spec.name = face.name.empty() ? "" : face.name + " face";
+    spec.plate = !upper_face ? seen_from_behind(design.plate) : design.plate;
     spec.borders = design.borders;
     spec.gnomon = design.gnomon;
     spec.lettering = design.lettering;
@@ -99,7 +139,9 @@ FacePlan plan_of(const Design& design, const MeanYear& year, bool upper_face) {
     spec.numerals = design.hours.numerals;
     spec.stand = design.hours.stand;
     spec.numeral_count = design.hours.count;
-    spec.divide_min = design.hours.time == HourTime::clock ? 0 : design.hours.divide_min;
+    const bool ring_time = design.hours.time == HourTime::sun || design.hours.time == HourTime::zone;
+    spec.divide_min = ring_time && design.hours.reach == HourExtent::style ? design.hours.divide_min : 0;
+    spec.summer_shift_h = design.hours.summer_numerals ? summer_shift_h(*zone, design.years.first) : 0.0;
     spec.noon_mark = design.hours.noon_mark;
     spec.date_labels = design.dates.labels;
     spec.compass = design.dial.kind == DialKind::level;
@@ -141,10 +183,9 @@ DatePlan date_plan(const Design& design, const MeanYear& year) {
 
 std::vector<FacePlan> face_plans(const Design& design, const MeanYear& year) {
     std::vector<FacePlan> faces;
-    const bool both = design.dial.kind == DialKind::equatorial && design.dial.faces == Faces::both;
-    if (both || design.dial.kind != DialKind::equatorial || design.dial.faces == Faces::upper)
+    if (has_two_faces(design) || design.dial.faces == Faces::upper)
         faces.push_back(plan_of(design, year, true));
-    if (both || (design.dial.kind == DialKind::equatorial && design.dial.faces == Faces::lower))
+    if (has_two_faces(design) || design.dial.faces == Faces::lower)
         faces.push_back(plan_of(design, year, false));
     return faces;
 }

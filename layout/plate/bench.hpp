@@ -29,7 +29,7 @@ struct Bench {
 
     /// Widths in their order of weight.
     [[nodiscard]] double width_of_step(int step_min) const;
-    [[nodiscard]] double date_width() const { return 0.6 * spec.cutting.line_width_mm; }
+    [[nodiscard]] double field_line_width(Family family) const { return (family == Family::date ? 0.6 : 0.5) * spec.cutting.line_width_mm; }
     /// How far into the field the marks of half and quarter hours reach from its border.
     [[nodiscard]] double half_hour_reach_mm() const;
     [[nodiscard]] double quarter_hour_reach_mm() const;
@@ -45,10 +45,22 @@ struct Bench {
 /// The anticlockwise turn at which text runs so that it stands upright for the reader along a line of direction `along`.
 [[nodiscard]] Angle upright_turn(Point along, Point up);
 
+/// Where a whole hour's line points to in the chapter ring.
+struct RingHour {
+    int hour;
+    Point from, direction;
+};
+
 void draw_borders(Bench& bench);
 void draw_hours(Bench& bench);
-void draw_dates(Bench& bench);
-void draw_gnomon_seat(Bench& bench, double foot_mm);
+void draw_numerals(Bench& bench, const std::vector<RingHour>& hours, bool heads_out);
+/// Whether a line belongs to the chapter ring's hours, and is drawn by draw_hours.
+[[nodiscard]] inline bool in_ring(const DialLine& line) {
+    return line.set == 0 && (line.family == Family::hour || line.family == Family::clock_hour);
+}
+
+void draw_field_lines(Bench& bench);
+void draw_gnomon_seat(Bench& bench, double foot_mm, double nodus_height_mm);
 void draw_compass(Bench& bench);
 void draw_motto(Bench& bench);
 void draw_place_line(Bench& bench);

@@ -25,15 +25,40 @@ PlateBox window_of(const Outline& edge, Point foot) {
     return {box.left_mm - foot.x_mm, box.bottom_mm - foot.y_mm, box.right_mm - foot.x_mm, box.top_mm - foot.y_mm};
 }
 
-Bench& drawn(Bench& bench, double foot_mm) {
+Bench& drawn(Bench& bench, double foot_mm, double nodus_height_mm) {
     draw_borders(bench);
-    draw_gnomon_seat(bench, foot_mm);
-    draw_dates(bench); // labels first ask for room; hour lines then stop for them
+    draw_gnomon_seat(bench, foot_mm, nodus_height_mm);
+    draw_field_lines(bench); // labels first ask for room; hour lines then stop for them
     draw_hours(bench);
     draw_motto(bench);
     draw_place_line(bench);
     draw_compass(bench);
     return bench;
+}
+
+std::string name_of_family(Family family) {
+    switch (family) {
+    case Family::date:
+        return "date line ";
+    case Family::altitude:
+        return "altitude circle ";
+    case Family::azimuth:
+        return "azimuth line ";
+    case Family::place_noon:
+        return "noon at ";
+    case Family::since_sunrise:
+        return "hour since sunrise ";
+    case Family::since_sunset:
+        return "hour since sunset ";
+    case Family::to_sunset:
+        return "hour to sunset ";
+    case Family::unequal_hour:
+        return "unequal hour ";
+    case Family::hour:
+    case Family::clock_hour:
+        break;
+    }
+    return "hour line ";
 }
 
 void report_unlit(const Delineation& delineation, std::vector<std::string>& warnings) {
@@ -50,7 +75,7 @@ void report_unlit(const Delineation& delineation, std::vector<std::string>& warn
         warnings.push_back(fmt::format("lit, but their lines miss this plate: {}", hours));
     }
     for (const std::string& date : delineation.unlit_dates)
-        warnings.push_back(fmt::format("date line \"{}\" does not fall on this face, so it is left out", date));
+        warnings.push_back(fmt::format("the line \"{}\" does not fall on this face, so it is left out", date));
 }
 
 } // namespace
@@ -68,7 +93,7 @@ Bench::Bench(const FaceSpec& face_spec, const Delineation& delineated, const Pla
     : spec{face_spec}, delineation{delineated}, foot{placed.foot}, rings{Rings::of(face_spec)},
       up{clockwise_from_up(face_spec.reader_up)}, lettering{face_spec.lettering.family},
       clear{rings.divisions, std::max(0.5, std::max(face_spec.plate.width_mm, face_spec.plate.height_mm) / 320)} {
-    if (delineated.style.centre) {
+    if (delineated.style.centre && has_style(face_spec.gnomon.kind)) {
         const Point at = layout::to_work(*delineated.style.centre, foot);
         if (rings.divisions.contains(at))
             centre = at;
@@ -92,6 +117,9 @@ void Bench::engrave(const Polyline& line, double width_mm, std::string name) {
 void Bench::add_line(const DialLine& line, const Polyline& piece, std::string label, double width_mm) {
     DrawnLine drawn_line;
     drawn_line.family = line.family;
+    drawn_line.set = line.set;
+    drawn_line.step_min = line.step_min;
+    drawn_line.level = line.level;
     drawn_line.label = label;
     drawn_line.time_h = line.time_h;
     drawn_line.hour_angle = line.hour_angle;
@@ -100,7 +128,7 @@ void Bench::add_line(const DialLine& line, const Polyline& piece, std::string la
     for (const Point& p : piece)
         drawn_line.points.push_back(to_plate(p, foot));
     lines.push_back(std::move(drawn_line));
-    engrave(piece, width_mm, (line.family == Family::date ? "date line " : "hour line ") + label);
+    engrave(piece, width_mm, name_of_family(line.family) + label);
 }
 
 void Bench::add_filled(std::vector<Path> paths, std::string name, Layer layer) {
@@ -129,11 +157,11 @@ Face draw_face(DialPlan plan, const MeanYear& year, const FaceSpec& spec) {
 
     Bench bench{spec, face.delineation, face.placement};
     face.gnomon_foot_mm = gnomon_foot_mm(bench);
-    drawn(bench, face.gnomon_foot_mm);
+    drawn(bench, face.gnomon_foot_mm, plan.nodus_height_mm);
 
     const auto by_family_and_time = [](const DrawnLine& a, const DrawnLine& b) {
-        const bool date_a = a.family == Family::date, date_b = b.family == Family::date;
-        return date_a != date_b ? date_b : (!date_a && a.time_h < b.time_h);
+        const auto order = [](const DrawnLine& line) { return line.family == Family::date ? 1000 : is_hour(line.family) ? line.set : 500; };
+        return order(a) != order(b) ? order(a) < order(b) : is_hour(a.family) && a.time_h < b.time_h;
     };
     std::stable_sort(bench.lines.begin(), bench.lines.end(), by_family_and_time);
     face.lines = std::move(bench.lines);

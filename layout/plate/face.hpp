@@ -22,6 +22,7 @@ struct FaceSpec {
     NumeralStand stand = NumeralStand::along_border;
     int numeral_count = 12;
     int divide_min = 60;      ///< 0: the ring has no band of divisions
+    double summer_shift_h = 0; ///< > 0: a second row of numerals, this much on
     bool noon_mark = true;
     bool date_labels = true;
     bool compass = false;  ///< level plates
@@ -48,6 +49,9 @@ struct Rings {
 /// A line as it is drawn: one unbroken piece, trimmed to the borders. Lines in several pieces are several of these.
 struct DrawnLine {
     Family family = Family::hour;
+    int set = 0; ///< as DialLine::set
+    int step_min = 60;
+    Angle level; ///< of an altitude circle or an azimuth line
     std::string label; ///< the numeral of a whole hour, "9:15" between, a date line's label
     double time_h = 0.0;
     Angle hour_angle;

@@ -49,6 +49,8 @@ void draw_borders(Bench& bench) {
 }
 
 double gnomon_foot_mm(const Bench& bench) {
+    if (bench.spec.gnomon.kind != GnomonKind::edge)
+        return 0.0;
     if (bench.spec.gnomon.foot_mm)
         return *bench.spec.gnomon.foot_mm;
     if (!bench.centre || !substyle_direction(bench))
@@ -59,7 +61,36 @@ double gnomon_foot_mm(const Bench& bench) {
     return std::max(distance(*bench.centre, bench.foot), std::round(half_way * 2) / 2);
 }
 
-void draw_gnomon_seat(Bench& bench, double foot_mm) {
+namespace {
+
+/// Where a plumb pin that carries the nodus enters the plate.
+Point foot_of_plumb_pin(const Bench& bench, double nodus_height_mm) {
+    const PlateFrame& frame = bench.delineation.frame;
+    const double down = nodus_height_mm / frame.n.z();
+    return bench.foot - down * Point{frame.u.z(), frame.v.z()};
+}
+
+void draw_edge_seat(Bench& bench, Point along, double foot_mm) {
+    const Gnomon& gnomon = bench.spec.gnomon;
+    const Point start = bench.centre ? *bench.centre : bench.foot - foot_mm / 2 * along;
+    const Polyline substyle{start, start + std::max(foot_mm, 1.0) * along};
+    bench.marks.push_back({Layer::guide, {polyline(substyle)}, 0.15, false, "substyle"});
+    bench.clear.block(substyle);
+    if (foot_mm <= 0)
+        return;
+    if (gnomon.thickness_mm > 0) {
+        const Point side = gnomon.thickness_mm / 2 * left_of(along);
+        const Point end = start + foot_mm * along;
+        bench.marks.push_back({Layer::score, {polyline({start - side, end - side, end + side, start + side}, true)}, 0.15, false, "gnomon's foot"});
+        bench.clear.block(TurnedBox{between(start, end, 0.5), foot_mm / 2, gnomon.thickness_mm / 2, turn_of(along)});
+    }
+    for (int i = 0; i < gnomon.holes; ++i)
+        add_hole(bench, start + foot_mm * (i + 0.5) / gnomon.holes * along, gnomon.hole_diameter_mm, fmt::format("fixing hole {}", i + 1));
+}
+
+} // namespace
+
+void draw_gnomon_seat(Bench& bench, double foot_mm, double nodus_height_mm) {
     const Gnomon& gnomon = bench.spec.gnomon;
     const auto along = substyle_direction(bench);
     const double arm = 3.0;
@@ -67,25 +98,22 @@ void draw_gnomon_seat(Bench& bench, double foot_mm) {
                            {polyline({bench.foot - Point{arm, 0}, bench.foot + Point{arm, 0}}),
                             polyline({bench.foot - Point{0, arm}, bench.foot + Point{0, arm}})},
                            0.15, false, "nodus' foot"});
-    if (!along) { // a pin square on the plate
-        if (gnomon.hole_diameter_mm > 0)
-            add_hole(bench, bench.foot, gnomon.hole_diameter_mm, "hole for the pin");
-        return;
+    const double bore = gnomon.thickness_mm > 0 ? gnomon.thickness_mm : gnomon.hole_diameter_mm;
+    const bool square_style = has_style(gnomon.kind) && !along;
+    if (gnomon.kind == GnomonKind::pin || square_style) {
+        if (bore > 0)
+            add_hole(bench, bench.foot, bore, "hole for the pin");
+    } else if (gnomon.kind == GnomonKind::upright_pin) {
+        if (bore > 0)
+            add_hole(bench, foot_of_plumb_pin(bench, nodus_height_mm), bore, "hole for the plumb pin");
+    } else if (gnomon.kind == GnomonKind::rod) {
+        const Point start = bench.centre.value_or(bench.foot);
+        bench.marks.push_back({Layer::guide, {polyline({start, between(start, bench.foot, 1.0) + 5.0 * *along})}, 0.15, false, "substyle"});
+        if (bench.centre && bore > 0)
+            add_hole(bench, start, bore, "hole for the rod, drilled at the style height along the substyle");
+    } else if (gnomon.kind == GnomonKind::edge) {
+        draw_edge_seat(bench, *along, foot_mm);
     }
-    const Point start = bench.centre ? *bench.centre : bench.foot - foot_mm / 2 * *along;
-    const Polyline substyle{start, start + std::max(foot_mm, 1.0) * *along};
-    bench.marks.push_back({Layer::guide, {polyline(substyle)}, 0.15, false, "substyle"});
-    bench.clear.block(substyle);
-    if (foot_mm <= 0)
-        return;
-    if (gnomon.thickness_mm > 0) {
-        const Point side = gnomon.thickness_mm / 2 * left_of(*along);
-        const Point end = start + foot_mm * *along;
-        bench.marks.push_back({Layer::score, {polyline({start - side, end - side, end + side, start + side}, true)}, 0.15, false, "gnomon's foot"});
-        bench.clear.block(TurnedBox{between(start, end, 0.5), foot_mm / 2, gnomon.thickness_mm / 2, turn_of(*along)});
-    }
-    for (int i = 0; i < gnomon.holes; ++i)
-        add_hole(bench, start + foot_mm * (i + 0.5) / gnomon.holes * *along, gnomon.hole_diameter_mm, fmt::format("fixing hole {}", i + 1));
 }
 
 void draw_compass(Bench& bench) {

@@ -16,7 +16,8 @@ struct Ray {
     int minute;
     std::vector<Polyline> field; ///< from the centre outward
     Polyline tick;               ///< across the band of divisions, from the field outward; empty where the line does not reach it
-    [[nodiscard]] Point direction() const { return unit(tick.back() - tick.front()); }
+    [[nodiscard]] Point direction() const { return unit(field.back().back() - field.back().front()); }
+    [[nodiscard]] Point end() const { return field.back().back(); }
 };
 
 class HourDrawer {
@@ -25,9 +26,11 @@ class HourDrawer {
 
     void draw() {
         for (const DialLine& line : bench_.delineation.lines) {
+            if (!in_ring(line))
+                continue;
             if (line.family == Family::hour)
                 add_rays(line);
-            else if (line.family == Family::clock_hour)
+            else
                 clock_lines_.push_back(&line);
         }
         choose_steps();
@@ -35,7 +38,7 @@ class HourDrawer {
         for (const Ray& ray : rays_)
             draw_ray(ray);
         draw_clock_lines();
-        draw_numerals();
+        draw_numerals(bench_, ring_hours(), heads_out());
         draw_noon_mark();
     }
 
@@ -46,12 +49,12 @@ class HourDrawer {
             if (line.direction && dot(whole.back() - whole.front(), clockwise_from_up(*line.direction)) < 0)
                 std::reverse(whole.begin(), whole.end()); // from the centre outward
             Ray ray{&line, int(std::lround(line.time_h * 60)), clipped(whole, bench_.field()), {}};
-            const auto in_ring = clipped(whole, {{bench_.rings.numerals}, {bench_.rings.divisions}});
+            const auto ticks = clipped(whole, {{bench_.rings.numerals}, {bench_.rings.divisions}});
             if (ray.field.empty())
                 continue;
             // Only the outer end is a tick; a line whose centre is off the plate enters through the ring as well.
-            if (!in_ring.empty() && distance(in_ring.back().front(), ray.field.back().back()) < 1e-6)
-                ray.tick = in_ring.back();
+            if (!ticks.empty() && distance(ticks.back().front(), ray.end()) < 1e-6)
+                ray.tick = ticks.back();
             rays_.push_back(std::move(ray));
         }
     }
@@ -171,39 +174,22 @@ class HourDrawer {
         }
     }
 
-    // Numerals ---------------------------------------------------------------------------------------------------
-
-    struct Numeral {
-        std::string text;
-        Point at;     ///< middle of the capitals
-        Point normal; ///< of the border, outward
-    };
-
-    [[nodiscard]] std::vector<Numeral> numerals(const Outline& middle) const {
-        std::vector<Numeral> made;
-        const auto add = [&](const DialLine& line, Point from, Point direction) {
-            const auto exit = middle.exit(from, direction);
-            if (exit)
-                made.push_back({label_of(line), exit->at, exit->normal});
-        };
+    /// Where the whole hours point to in the chapter ring, one for each hour.
+    [[nodiscard]] std::vector<RingHour> ring_hours() const {
+        std::vector<RingHour> made;
         for (std::size_t i = 0; i < rays_.size(); ++i) {
             const Ray& ray = rays_[i];
-            if (ray.minute % 60 != 0 || ray.tick.empty())
+            if (ray.minute % 60 != 0 || (i > 0 && rays_[i - 1].minute == ray.minute))
                 continue;
-            const bool second_of_pair = i > 0 && rays_[i - 1].minute == ray.minute;
-            if (second_of_pair)
-                continue;
-            Point from = ray.tick.front();
-            if (i + 1 < rays_.size() && rays_[i + 1].minute == ray.minute && !rays_[i + 1].tick.empty())
-                from = between(from, rays_[i + 1].tick.front(), 0.5); // over the middle of the noon gap
-            add(*ray.line, from, ray.direction());
+            Point from = ray.end();
+            if (i + 1 < rays_.size() && rays_[i + 1].minute == ray.minute)
+                from = between(from, rays_[i + 1].end(), 0.5); // over the middle of the noon gap
+            made.push_back({ray.minute / 60, from, ray.direction()});
         }
         for (const DialLine* line : clock_lines_) {
-            if (line->step_min < 60)
-                continue;
             const auto [from, direction] = clock_numeral_ray(*line);
-            if (length(direction) > 0)
-                add(*line, from, direction);
+            if (line->step_min >= 60 && length(direction) > 0)
+                made.push_back({int(std::lround(line->time_h)), from, direction});
         }
         return made;
     }
@@ -221,114 +207,16 @@ class HourDrawer {
         if (count == 0)
             return {{}, {}};
         const Point middle = (1 / count) * sum;
-        const auto& centre = bench_.delineation.style.centre;
-        if (centre)
-            return {middle, middle - layout::to_work(*centre, bench_.foot)};
         const Style& style = bench_.delineation.style;
+        if (style.centre)
+            return {middle, middle - layout::to_work(*style.centre, bench_.foot)};
         return {middle, -1.0 * clockwise_from_up(style.substyle)};
-    }
-
-    [[nodiscard]] Angle numeral_turn(const Numeral& n, bool heads_out) const {
-        if (bench_.spec.stand == NumeralStand::upright)
-            return upright_turn({bench_.up.y_mm, -bench_.up.x_mm}, bench_.up);
-        const Point heads = heads_out ? n.normal : -1.0 * n.normal;
-        return turn_of({heads.y_mm, -heads.x_mm});
-    }
-
-    /// Keeps a numeral that follows a straight side within that side's length.
-    [[nodiscard]] static Point kept_on_side(const Outline& middle, const Numeral& n, double half_width_mm) {
-        if (middle.is_round())
-            return n.at;
-        const Point along = left_of(n.normal);
-        const auto room = [&](double way) {
-            double least = 1e300;
-            for (const Point& corner : middle.corners())
-                if (const double ahead = dot(corner - n.at, along) * way; ahead > -1e-6 && std::abs(dot(corner - n.at, n.normal)) < 1e-3)
-                    least = std::min(least, ahead);
-            return least;
-        };
-        const double ahead = room(1), behind = room(-1);
-        if (ahead + behind < 2 * half_width_mm || ahead > 1e200 || behind > 1e200)
-            return n.at;
-        const double shift = ahead < half_width_mm ? ahead - half_width_mm : behind < half_width_mm ? half_width_mm - behind : 0.0;
-        return n.at + shift * along;
-    }
-
-    void draw_numerals() {
-        if (bench_.spec.borders.chapter_ring_mm <= 0 || bench_.spec.lettering.numeral_height_mm <= 0)
-            return;
-        const auto middle = bench_.rings.outer.inset((bench_.spec.borders.chapter_ring_mm - bench_.division_band_mm()) / 2);
-        if (!middle)
-            return;
-        std::vector<Numeral> all = numerals(*middle);
-        if (all.empty())
-            return;
-        double height = bench_.spec.lettering.numeral_height_mm;
-        const double asked = height;
-        while (height > 0.55 * asked && !all_in_band(all, *middle, height))
-            height *= 0.95;
-        while (height > 0.72 * asked && !all_apart(all, *middle, height))
-            height *= 0.95;
-        if (!all_apart(all, *middle, height))
-            drop_crowded(all, *middle, height);
-        if (height < asked)
-            bench_.warnings.push_back(fmt::format("numerals are {:.1f} mm high instead of {:.1f} mm, so that they stand clear of each other", height, asked));
-        for (const Numeral& n : all)
-            set_numeral(n, *middle, height);
-    }
-
-    [[nodiscard]] TurnedBox box_of(const Numeral& n, const Outline& middle, double height) const {
-        const LetteredLine line = bench_.lettering.line(n.text, height, 0.06 * height);
-        const double half_width = line.ink.width_mm() / 2;
-        const bool along_border = bench_.spec.stand == NumeralStand::along_border;
-        const Point at = along_border ? kept_on_side(middle, n, half_width + 0.2 * height) : n.at;
-        return {at, half_width + 0.22 * height, height / 2, numeral_turn(n, heads_out())};
-    }
-
-    /// Whether the numerals stand within the band, which upright ones may be too wide for.
-    [[nodiscard]] bool all_in_band(const std::vector<Numeral>& all, const Outline& middle, double height) const {
-        if (bench_.spec.stand == NumeralStand::along_border)
-            return true;
-        return std::all_of(all.begin(), all.end(), [&](const Numeral& n) {
-            const auto corners = box_of(n, middle, height).corners();
-            return std::all_of(corners.begin(), corners.end(), [&](Point p) {
-                return bench_.rings.outer.contains(p) && !bench_.rings.numerals.contains(p);
-            });
-        });
-    }
-
-    [[nodiscard]] bool all_apart(const std::vector<Numeral>& all, const Outline& middle, double height) const {
-        std::vector<TurnedBox> boxes;
-        for (const Numeral& n : all)
-            boxes.push_back(box_of(n, middle, height));
-        for (std::size_t i = 0; i < boxes.size(); ++i)
-            for (std::size_t k = i + 1; k < boxes.size(); ++k)
-                if (boxes[i].overlaps(boxes[k]))
-                    return false;
-        return true;
-    }
-
-    void drop_crowded(std::vector<Numeral>& all, const Outline& middle, double height) {
-        std::vector<Numeral> kept;
-        std::string dropped;
-        for (const Numeral& n : all) {
-            const TurnedBox box = box_of(n, middle, height);
-            const bool clash = std::any_of(kept.begin(), kept.end(), [&](const Numeral& k) { return box.overlaps(box_of(k, middle, height)); });
-            if (!clash)
-                kept.push_back(n);
-            else
-                dropped += (dropped.empty() ? "" : ", ") + n.text;
-        }
-        all = std::move(kept);
-        bench_.warnings.push_back(fmt::format("no room for the numerals {}: their hour lines stand too close together at the border", dropped));
     }
 
     /// Whether heads point outward: the way in which noon, or else most hours, stand upright for the reader.
     [[nodiscard]] bool heads_out() const {
         double upward = 0;
         for (const Ray& ray : rays_) {
-            if (ray.tick.empty())
-                continue;
             const double up = dot(ray.direction(), bench_.up);
             if (ray.minute == 720)
                 return up >= -1e-9;
@@ -341,21 +229,6 @@ class HourDrawer {
             if (!best || std::abs(line->time_h - 12) < std::abs(best->time_h - 12))
                 best = line;
         return !best || dot(clock_numeral_ray(*best).second, bench_.up) >= 0;
-    }
-
-    void set_numeral(const Numeral& n, const Outline& middle, double height) {
-        const LetteredLine line = bench_.lettering.line(n.text, height, 0.06 * height);
-        const bool outward = heads_out();
-        const std::string name = "numeral " + n.text;
-        if (middle.is_round() && bench_.spec.stand == NumeralStand::along_border) {
-            const double radius = middle.radius_mm() + (outward ? -height / 2 : height / 2);
-            bench_.add_filled(set_on_circle(line, middle.centre(), radius, turn_of(n.at - middle.centre()), !outward), name);
-            return;
-        }
-        const TurnedBox box = box_of(n, middle, height);
-        const Point along{cos(box.turn), sin(box.turn)};
-        const double ink_middle = (line.ink.left_mm + line.ink.right_mm) / 2;
-        bench_.add_filled(set_straight(line, box.middle - ink_middle * along - height / 2 * left_of(along), box.turn), name);
     }
 
     void draw_noon_mark() {

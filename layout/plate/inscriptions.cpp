@@ -55,7 +55,7 @@ class Inscriber {
                 if (!arc_is_clear(field.centre(), outer, inner, turn_of(towards), half_turn, 0.45 * height))
                     continue;
                 bench_.add_filled(set_on_circle(line, field.centre(), base, turn_of(towards), near_side), name);
-                block_arc(field.centre(), outer, inner, turn_of(towards), half_turn);
+                block_arc(field.centre(), outer + 0.35 * height, inner - 0.35 * height, turn_of(towards), half_turn);
                 return true;
             }
         return false;

@@ -23,6 +23,11 @@ std::string numeral(int hour, Numerals style, int count) {
     return roman(shown, style == Numerals::roman_iiii);
 }
 
+std::string degrees_label(Angle angle) {
+    const double tenths = std::round(angle.in_degrees() * 10);
+    return std::fmod(tenths, 10) == 0 ? fmt::format("{:.0f}°", tenths / 10) : fmt::format("{:.1f}°", tenths / 10);
+}
+
 std::string time_label(double time_h) {
     const int minutes = int(std::lround(time_h * 60));
     return fmt::format("{}:{:02}", minutes / 60, minutes % 60);

@@ -35,7 +35,7 @@ class Placer {
     }
 
     Placement placed() {
-        if (style_.height < k_least_style_for_centre || !style_.centre)
+        if (style_.height < k_least_style_for_centre || !style_.centre || !has_style(spec_.gnomon.kind))
             return placed_without_centre();
         const Point centre = spec_.plate.centre ? Point{spec_.plate.centre->right_mm, spec_.plate.centre->up_mm} : best_centre();
         if (!spec_.plate.centre && closest_hours_mm(centre) < k_crowded * size_mm())

@@ -1,9 +1,10 @@
 // SPDX-License-Identifier: MIT
 //
-// A date line's label runs along the line, beside it. It is put where it stands clear of every hour line, towards the
-// reader's left; where no such place is long enough, on the place that crosses the fewest, and the hour lines then
-// stop for it, as an engraver would have them.
+// All lines but those of the chapter ring's own hours: dates, hours of other kinds, altitudes and azimuths, noons
+// elsewhere. A label runs along its line, beside it. It is put where it stands clear of every other line; where no such
+// place is long enough, on one that only hour lines cross, and these then stop for it, as an engraver would have them.
 #include "layout/plate/bench.hpp"
+#include "layout/plate/numerals.hpp"
 
 #include <algorithm>
 #include <cmath>
@@ -36,6 +37,19 @@ class Rule {
     std::vector<double> at_;
 };
 
+std::string label_of(const DialLine& line) {
+    switch (line.family) {
+    case Family::altitude:
+    case Family::azimuth:
+        return degrees_label(line.level);
+    case Family::date:
+    case Family::place_noon:
+        return line.label;
+    default:
+        return line.step_min >= 60 ? fmt::format("{}", std::lround(line.time_h)) : time_label(line.time_h);
+    }
+}
+
 struct LabelPlace {
     double score = -1e300;
     std::vector<TurnedBox> chunks;
@@ -43,27 +57,29 @@ struct LabelPlace {
     bool found = false;
 };
 
-class DateDrawer {
+class FieldDrawer {
   public:
-    explicit DateDrawer(Bench& bench)
+    explicit FieldDrawer(Bench& bench)
         : bench_{bench}, cap_mm_{bench.spec.lettering.label_height_mm}, room_{room_of(bench)}, room_without_hours_{room_} {}
 
     void draw() {
-        std::vector<const DialLine*> dates;
+        std::vector<const DialLine*> lines;
         for (const DialLine& line : bench_.delineation.lines)
-            if (line.family == Family::date)
-                dates.push_back(&line);
-        if (dates.empty())
+            if (!in_ring(line))
+                lines.push_back(&line);
+        if (lines.empty())
             return;
-        if (bench_.spec.date_labels && cap_mm_ > 0) {
+        if (cap_mm_ > 0) {
             block_lines();
-            for (const DialLine* date : dates)
-                place_label(*date);
+            for (const DialLine* line : lines)
+                if (bench_.spec.date_labels || line->family != Family::date)
+                    place_label(*line);
+            tell_unlabelled();
         }
-        for (const DialLine* date : dates)
-            for (const PlatePolyline& piece : date->pieces)
+        for (const DialLine* line : lines)
+            for (const PlatePolyline& piece : line->pieces)
                 for (const Polyline& part : clipped(bench_.to_work(piece), bench_.field()))
-                    bench_.add_line(*date, part, date->label, bench_.date_width());
+                    bench_.add_line(*line, part, label_of(*line), bench_.field_line_width(line->family));
     }
 
   private:
@@ -78,13 +94,12 @@ class DateDrawer {
 
     void block_lines() {
         for (const DialLine& line : bench_.delineation.lines) {
-            const bool hour_line = line.family != Family::date;
-            if (hour_line && line.step_min < 60)
+            if (in_ring(line) && line.step_min < 60)
                 continue;
             for (const PlatePolyline& piece : line.pieces)
                 for (const Polyline& part : clipped(bench_.to_work(piece), bench_.field())) {
                     room_.block(part);
-                    if (!hour_line)
+                    if (!in_ring(line))
                         room_without_hours_.block(part);
                 }
         }
@@ -92,17 +107,18 @@ class DateDrawer {
         room_without_hours_.measure();
     }
 
-    void place_label(const DialLine& date) {
-        const LetteredLine text = bench_.lettering.line(date.label, cap_mm_, 0.04 * cap_mm_);
-        LabelPlace best = search(date, text, room_);
+    void place_label(const DialLine& line) {
+        const std::string label = label_of(line);
+        const LetteredLine text = bench_.lettering.line(label, cap_mm_, 0.04 * cap_mm_);
+        LabelPlace best = search(line, text, room_);
         const bool in_the_clear = best.found;
         if (!best.found)
-            best = search(date, text, room_without_hours_);
+            best = search(line, text, room_without_hours_);
         if (!best.found) {
-            bench_.warnings.push_back(fmt::format("no room for the label \"{}\" beside its date line: give it a smaller height or a shorter text", date.label));
+            unlabelled_.push_back(label);
             return;
         }
-        set(date, text, best);
+        set(label, text, best);
         for (const TurnedBox& chunk : best.chunks) {
             TurnedBox grown = chunk;
             grown.half_width_mm += 0.35 * cap_mm_;
@@ -114,20 +130,29 @@ class DateDrawer {
         }
     }
 
-    [[nodiscard]] LabelPlace search(const DialLine& date, const LetteredLine& text, const ClearMap& room) const {
+    void tell_unlabelled() {
+        if (unlabelled_.empty())
+            return;
+        std::string all;
+        for (const std::string& label : unlabelled_)
+            all += (all.empty() ? "\"" : ", \"") + label + "\"";
+        bench_.warnings.push_back(fmt::format("no room beside their lines for the labels {}: give the labels a smaller height, or draw fewer lines", all));
+    }
+
+    [[nodiscard]] LabelPlace search(const DialLine& line, const LetteredLine& text, const ClearMap& room) const {
         LabelPlace best;
-        for (const PlatePolyline& piece : date.pieces)
+        for (const PlatePolyline& piece : line.pieces)
             for (const Polyline& part : clipped(bench_.to_work(piece), bench_.field())) {
                 const Rule rule{part};
                 const double half = text.ink.width_mm() / 2 + 0.4 * cap_mm_;
                 for (double s = half; s <= rule.length_mm() - half; s += std::max(1.0, 0.4 * cap_mm_))
                     for (const double side : {1.0, -1.0})
-                        consider(rule, s, side, text, room, best);
+                        consider(line.family, rule, s, side, text, room, best);
             }
         return best;
     }
 
-    void consider(const Rule& rule, double s, double side, const LetteredLine& text, const ClearMap& room, LabelPlace& best) const {
+    void consider(Family family, const Rule& rule, double s, double side, const LetteredLine& text, const ClearMap& room, LabelPlace& best) const {
         const double half = text.ink.width_mm() / 2;
         const Point right{bench_.up.y_mm, -bench_.up.x_mm};
         const Point whole_run = rule.point(s + half) - rule.point(s - half);
@@ -155,14 +180,16 @@ class DateDrawer {
         place.start = base(s - sense * half);
         place.middle = base(s);
         place.end = base(s + sense * half);
-        place.score = std::min(clearance, cap_mm_) - 0.02 * dot(place.middle, right) / std::max(1.0, cap_mm_);
+        // Date lines are labelled towards the reader's left, the others towards the border.
+        const double wish = family == Family::date ? dot(place.middle, right) : bench_.rings.divisions.distance_mm(place.middle);
+        place.score = std::min(clearance, cap_mm_) - 0.02 * wish / std::max(1.0, cap_mm_);
         place.found = true;
         if (place.score > best.score)
             best = place;
     }
 
-    void set(const DialLine& date, const LetteredLine& text, const LabelPlace& place) {
-        const std::string name = "label " + date.label;
+    void set(const std::string& label, const LetteredLine& text, const LabelPlace& place) {
+        const std::string name = "label " + label;
         const Point chord = place.end - place.start;
         const double sagitta = cross(unit(chord), place.middle - place.start); // + bulges to the left: heads outward
         if (std::abs(sagitta) < 0.02 * cap_mm_) {
@@ -182,10 +209,11 @@ class DateDrawer {
     double cap_mm_;
     ClearMap room_, room_without_hours_;
     std::vector<TurnedBox> placed_;
+    std::vector<std::string> unlabelled_;
 };
 
 } // namespace
 
-void draw_dates(Bench& bench) { DateDrawer{bench}.draw(); }
+void draw_field_lines(Bench& bench) { FieldDrawer{bench}.draw(); }
 
 } // namespace dialwright::layout

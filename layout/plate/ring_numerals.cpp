@@ -1,0 +1,171 @@
+// SPDX-License-Identifier: MIT
+//
+// Numerals stand in the middle of their band, where the hour's line points. They shrink together until they stand
+// clear of each other; where that does not do, the crowded ones are left out and the maker is told.
+#include "layout/plate/bench.hpp"
+#include "layout/plate/numerals.hpp"
+
+#include <algorithm>
+#include <cmath>
+#include <fmt/format.h>
+
+namespace dialwright::layout {
+namespace {
+
+/// One row of numerals: the middle line of its band, and the band's borders.
+struct Row {
+    Outline middle, outer, inner;
+    double height_mm = 0.0;
+    double shift_h = 0.0;  ///< added to the hour
+    std::string name;      ///< "numeral ", "summer numeral "
+};
+
+class NumeralDrawer {
+  public:
+    NumeralDrawer(Bench& bench, const Row& row, bool heads_out) : bench_{bench}, row_{row}, heads_out_{heads_out} {}
+
+    void draw(const std::vector<RingHour>& hours) {
+        std::vector<Numeral> all;
+        for (const RingHour& hour : hours)
+            if (const auto exit = row_.middle.exit(hour.from, hour.direction))
+                all.push_back({text_of(hour.hour), exit->at, exit->normal});
+        double height = row_.height_mm;
+        while (height > 0.55 * row_.height_mm && !all_in_band(all, height))
+            height *= 0.95;
+        while (height > 0.72 * row_.height_mm && !all_apart(all, height))
+            height *= 0.95;
+        if (!all_apart(all, height))
+            drop_crowded(all, height);
+        if (height < row_.height_mm)
+            bench_.warnings.push_back(fmt::format("{}s are {:.1f} mm high instead of {:.1f} mm, so that they stand clear", row_.name, height, row_.height_mm));
+        for (const Numeral& n : all)
+            set(n, height);
+    }
+
+  private:
+    struct Numeral {
+        std::string text;
+        Point at;     ///< middle of the capitals
+        Point normal; ///< of the border, outward
+    };
+
+    [[nodiscard]] bool upright() const { return bench_.spec.stand == NumeralStand::upright; }
+
+    [[nodiscard]] std::string text_of(int hour) const {
+        const int shown = int(std::lround(hour + row_.shift_h)) % 24;
+        return numeral(shown == 0 && hour != 0 ? 24 : shown, bench_.spec.numerals, bench_.spec.numeral_count);
+    }
+
+    [[nodiscard]] Angle turn_of_numeral(const Numeral& n) const {
+        if (upright())
+            return turn_of({bench_.up.y_mm, -bench_.up.x_mm});
+        const Point heads = heads_out_ ? n.normal : -1.0 * n.normal;
+        return turn_of({heads.y_mm, -heads.x_mm});
+    }
+
+    /// Keeps a numeral that follows a straight side within that side's length.
+    [[nodiscard]] Point kept_on_side(const Numeral& n, double half_width_mm) const {
+        if (row_.middle.is_round())
+            return n.at;
+        const Point along = left_of(n.normal);
+        const auto room = [&](double way) {
+            double least = 1e300;
+            for (const Point& corner : row_.middle.corners())
+                if (const double ahead = dot(corner - n.at, along) * way; ahead > -1e-6 && std::abs(dot(corner - n.at, n.normal)) < 1e-3)
+                    least = std::min(least, ahead);
+            return least;
+        };
+        const double ahead = room(1), behind = room(-1);
+        if (ahead + behind < 2 * half_width_mm || ahead > 1e200 || behind > 1e200)
+            return n.at;
+        const double shift = ahead < half_width_mm ? ahead - half_width_mm : behind < half_width_mm ? half_width_mm - behind : 0.0;
+        return n.at + shift * along;
+    }
+
+    [[nodiscard]] TurnedBox box_of(const Numeral& n, double height) const {
+        const LetteredLine line = bench_.lettering.line(n.text, height, 0.06 * height);
+        const double half_width = line.ink.width_mm() / 2;
+        const Point at = upright() ? n.at : kept_on_side(n, half_width + 0.2 * height);
+        return {at, half_width + 0.22 * height, height / 2, turn_of_numeral(n)};
+    }
+
+    /// Whether the numerals stand within the band, which upright ones may be too wide for.
+    [[nodiscard]] bool all_in_band(const std::vector<Numeral>& all, double height) const {
+        return !upright() || std::all_of(all.begin(), all.end(), [&](const Numeral& n) {
+            const auto corners = box_of(n, height).corners();
+            return std::all_of(corners.begin(), corners.end(),
+                               [&](Point p) { return row_.outer.contains(p) && !row_.inner.contains(p); });
+        });
+    }
+
+    [[nodiscard]] bool all_apart(const std::vector<Numeral>& all, double height) const {
+        std::vector<TurnedBox> boxes;
+        for (const Numeral& n : all)
+            boxes.push_back(box_of(n, height));
+        for (std::size_t i = 0; i < boxes.size(); ++i)
+            for (std::size_t k = i + 1; k < boxes.size(); ++k)
+                if (boxes[i].overlaps(boxes[k]))
+                    return false;
+        return true;
+    }
+
+    void drop_crowded(std::vector<Numeral>& all, double height) {
+        std::vector<Numeral> kept;
+        std::string dropped;
+        for (const Numeral& n : all) {
+            const TurnedBox box = box_of(n, height);
+            const bool clash = std::any_of(kept.begin(), kept.end(), [&](const Numeral& k) { return box.overlaps(box_of(k, height)); });
+            if (!clash)
+                kept.push_back(n);
+            else
+                dropped += (dropped.empty() ? "" : ", ") + n.text;
+        }
+        all = std::move(kept);
+        bench_.warnings.push_back(fmt::format("no room for the {}s {}: their hour lines stand too close together at the border", row_.name, dropped));
+    }
+
+    void set(const Numeral& n, double height) {
+        const LetteredLine line = bench_.lettering.line(n.text, height, 0.06 * height);
+        const std::string name = row_.name + " " + n.text;
+        if (row_.middle.is_round() && !upright()) {
+            const double radius = row_.middle.radius_mm() + (heads_out_ ? -height / 2 : height / 2);
+            bench_.add_filled(set_on_circle(line, row_.middle.centre(), radius, turn_of(n.at - row_.middle.centre()), !heads_out_), name);
+            return;
+        }
+        const TurnedBox box = box_of(n, height);
+        const Point along{cos(box.turn), sin(box.turn)};
+        const double ink_middle = (line.ink.left_mm + line.ink.right_mm) / 2;
+        bench_.add_filled(set_straight(line, box.middle - ink_middle * along - height / 2 * left_of(along), box.turn), name);
+    }
+
+    Bench& bench_;
+    const Row& row_;
+    bool heads_out_;
+};
+
+/// The numerals' band, in one row, or in two with the smaller one for summer time inside.
+std::vector<Row> rows_of(const Bench& bench) {
+    const double band = bench.spec.borders.chapter_ring_mm - bench.division_band_mm();
+    const double height = std::min(bench.spec.lettering.numeral_height_mm, 0.9 * band);
+    const auto at = [&](double part) { return bench.rings.outer.inset(part * band).value_or(bench.rings.outer); };
+    if (!(bench.spec.summer_shift_h > 0))
+        return {{at(0.5), bench.rings.outer, bench.rings.numerals, height, 0.0, "numeral"}};
+    constexpr double k_border = 0.62;
+    return {{at(k_border / 2), bench.rings.outer, at(k_border), std::min(height, 0.8 * k_border * band), 0.0, "numeral"},
+            {at((1 + k_border) / 2), at(k_border), bench.rings.numerals, std::min(0.6 * height, 0.72 * (1 - k_border) * band),
+             bench.spec.summer_shift_h, "summer numeral"}};
+}
+
+} // namespace
+
+void draw_numerals(Bench& bench, const std::vector<RingHour>& hours, bool heads_out) {
+    if (bench.spec.borders.chapter_ring_mm <= 0 || bench.spec.lettering.numeral_height_mm <= 0)
+        return;
+    const std::vector<Row> rows = rows_of(bench);
+    for (const Row& row : rows)
+        NumeralDrawer{bench, row, heads_out}.draw(hours);
+    if (rows.size() > 1)
+        bench.marks.push_back({Layer::engrave, {rows.front().inner.path()}, bench.width_of_step(15), false, "border of the summer numerals"});
+}
+
+} // namespace dialwright::layout
