@@ -23,9 +23,17 @@ const char* time_text(HourTime time) {
     case HourTime::zone:
         return "by the Sun, corrected for longitude to the zone";
     case HourTime::clock:
+        return "the zone's clock, by yearly curves (summer time not added)";
+    case HourTime::since_sunrise:
+        return "equal hours since the Sun rose";
+    case HourTime::since_sunset:
+        return "equal hours since the last sunset";
+    case HourTime::to_sunset:
+        return "equal hours left until sunset";
+    case HourTime::unequal:
         break;
     }
-    return "the zone's clock, by yearly curves (summer time not added)";
+    return "unequal hours, twelve from sunrise to sunset";
 }
 
 std::string hours_text(const layout::Face& face) {

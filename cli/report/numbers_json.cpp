@@ -33,6 +33,19 @@ Json style_json(const Style& style) {
             {"centre_mm", style.centre ? point(*style.centre) : Json(nullptr)}};
 }
 
+/// A line that is neither one of the ring's hours nor a date: with its time, or with the angle that it stands for.
+Json more_line(const layout::DrawnLine& line) {
+    Json out{{"family", say_family(line.family)}, {"label", line.label}};
+    if (is_hour(line.family))
+        out["time_h"] = number(line.time_h);
+    else if (line.family == Family::place_noon)
+        out["hour_angle_deg"] = number(line.hour_angle.in_degrees());
+    else
+        out["level_deg"] = number(line.level.in_degrees());
+    out["points_mm"] = points(line.points);
+    return out;
+}
+
 void add_face(Json& out, const FacePlan& plan, const layout::Face& face) {
     const Attitude& attitude = plan.dial.attitude;
     out["plate"] = {{"normal_azimuth_deg", number(attitude.normal_azimuth.in_degrees())},
@@ -43,18 +56,21 @@ void add_face(Json& out, const FacePlan& plan, const layout::Face& face) {
     out["style"] = style_json(face.delineation.style);
     out["hour_lines"] = Json::array();
     out["date_lines"] = Json::array();
+    out["more_lines"] = Json::array();
     for (const layout::DrawnLine& line : face.lines) {
-        if (line.family == Family::date) {
+        const bool straight_or_clock = line.family == Family::hour || line.family == Family::clock_hour;
+        if (line.family == Family::date)
             out["date_lines"].push_back({{"label", line.label},
                                          {"declination_deg", number(line.declination.value_or(Angle{}).in_degrees())},
                                          {"points_mm", points(line.points)}});
-        } else {
+        else if (line.set == 0 && is_hour(line.family))
             out["hour_lines"].push_back({{"label", line.label},
                                          {"time_h", number(line.time_h)},
-                                         {"hour_angle_deg", number(line.hour_angle.in_degrees())},
+                                         {"hour_angle_deg", straight_or_clock ? number(line.hour_angle.in_degrees()) : Json(nullptr)},
                                          {"angle_deg", line.direction ? number(line.direction->in_degrees()) : Json(nullptr)},
                                          {"points_mm", points(line.points)}});
-        }
+        else
+            out["more_lines"].push_back(more_line(line));
     }
 }
 
@@ -71,8 +87,6 @@ Json equation_json(const MeanYear& year) {
     return list;
 }
 
-const char* time_name(HourTime time) { return time == HourTime::sun ? "sun" : time == HourTime::zone ? "zone" : "clock"; }
-
 } // namespace
 
 std::string numbers_json(const Commission& commission) {
@@ -84,7 +98,7 @@ std::string numbers_json(const Commission& commission) {
                    {"longitude_deg", number(design.place.site.longitude.in_degrees())},
                    {"zone", design.place.zone},
                    {"zone_meridian_deg", number(commission.plans.front().dial.zone_meridian.in_degrees())}};
-    out["time"] = time_name(design.hours.time);
+    out["time"] = say_time(design.hours.time);
     out["years"] = {design.years.first, design.years.last};
     if (commission.faces.size() == 1) {
         add_face(out, commission.plans.front(), commission.faces.front());
@@ -105,7 +119,7 @@ std::string hour_lines_csv(const Commission& commission) {
     std::string text = "face,label,time_h,hour_angle_deg,angle_deg,inner_u_mm,inner_v_mm,outer_u_mm,outer_v_mm,points\n";
     for (std::size_t i = 0; i < commission.faces.size(); ++i)
         for (const layout::DrawnLine& line : commission.faces[i].lines) {
-            if (line.family == Family::date)
+            if (line.set != 0 || !is_hour(line.family))
                 continue;
             const PlatePoint a = line.points.front(), b = line.points.back();
             text += fmt::format("{},{},{},{},{},{},{},{},{},{}\n", commission.plans[i].name, line.label, fixed(line.time_h, 6),

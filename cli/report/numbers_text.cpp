@@ -55,7 +55,7 @@ void say_lines(Text& text, const layout::Face& face) {
     text.line("  Hour lines: angle on the plate from the centre, clockwise from up; ends in mm from the nodus' foot");
     text.line("  {:<8} {:>7} {:>11} {:>10} {:>12}   {:>8} {:>8}   {:>8} {:>8}", "line", "time", "hour angle", "angle", "", "from u", "v", "to u", "v");
     for (const layout::DrawnLine& line : face.lines) {
-        if (line.family == Family::date)
+        if (line.set != 0 || !is_hour(line.family))
             continue;
         const std::string angle = line.direction ? fixed(line.direction->in_degrees(), 4) + "°" : "curve";
         const std::string minutes = line.direction ? degrees_minutes(*line.direction) : "";
@@ -68,6 +68,21 @@ void say_lines(Text& text, const layout::Face& face) {
         if (line.family == Family::date)
             text.line("  {:<28} {:>24}   {}   {}   {} points", line.label, both_ways(line.declination.value_or(Angle{})), point_text(line.points.front()),
                       point_text(line.points.back()), line.points.size());
+}
+
+void say_more_lines(Text& text, const layout::Face& face) {
+    bool headed = false;
+    for (const layout::DrawnLine& line : face.lines) {
+        if (line.family == Family::date || (line.set == 0 && is_hour(line.family)))
+            continue;
+        if (!headed) {
+            text.gap();
+            text.line("  More lines: ends in mm from the nodus' foot");
+        }
+        headed = true;
+        text.line("  {:<16} {:<12}   {}   {}   {} points", say_family(line.family), line.label, point_text(line.points.front()), point_text(line.points.back()),
+                  line.points.size());
+    }
 }
 
 void list_equation(Text& text, const MeanYear& year) {
@@ -97,6 +112,7 @@ std::string numbers_text(const Commission& commission) {
         }
         say_style(text, commission.faces[i], commission.plans[i], commission.design.units == Units::inches);
         say_lines(text, commission.faces[i]);
+        say_more_lines(text, commission.faces[i]);
     }
     list_equation(text, commission.year);
     return text.taken();

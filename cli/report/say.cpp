@@ -73,6 +73,52 @@ std::string say_length(double mm, bool inches) {
     return inches ? fmt::format("{} ({})", metric, inch_text(mm)) : metric;
 }
 
+const char* say_time(HourTime time) {
+    switch (time) {
+    case HourTime::sun:
+        return "sun";
+    case HourTime::zone:
+        return "zone";
+    case HourTime::clock:
+        return "clock";
+    case HourTime::since_sunrise:
+        return "since sunrise";
+    case HourTime::since_sunset:
+        return "since sunset";
+    case HourTime::to_sunset:
+        return "hours left";
+    case HourTime::unequal:
+        break;
+    }
+    return "unequal";
+}
+
+const char* say_family(Family family) {
+    switch (family) {
+    case Family::hour:
+        return "hour";
+    case Family::clock_hour:
+        return "clock";
+    case Family::date:
+        return "date";
+    case Family::since_sunrise:
+        return "since sunrise";
+    case Family::since_sunset:
+        return "since sunset";
+    case Family::to_sunset:
+        return "hours left";
+    case Family::unequal_hour:
+        return "unequal";
+    case Family::altitude:
+        return "altitude";
+    case Family::azimuth:
+        return "azimuth";
+    case Family::place_noon:
+        break;
+    }
+    return "noon at";
+}
+
 std::string say_clock(double hours) {
     const long seconds = ((std::lround(hours * 3600) % 86400) + 86400) % 86400;
     return fmt::format("{:02}:{:02}:{:02}", seconds / 3600, seconds / 60 % 60, seconds % 60);

@@ -2,6 +2,7 @@
 #pragma once
 
 #include "engine/base/angle.hpp"
+#include "engine/dial/delineation.hpp"
 #include "engine/surface/plate_frame.hpp"
 
 #include <string>
@@ -25,6 +26,9 @@ namespace dialwright::cli {
 [[nodiscard]] std::string say_equation(Angle equation_of_time);
 /// "46.3 mm", or "46.3 mm (1 53/64 in)".
 [[nodiscard]] std::string say_length(double mm, bool inches);
+/// The trade's words for a kind of time and for a family of lines: "since sunrise", "altitude".
+[[nodiscard]] const char* say_time(HourTime time);
+[[nodiscard]] const char* say_family(Family family);
 /// "HH:MM:SS" of hours in the day, to the nearest second, 24 h as 00:00:00.
 [[nodiscard]] std::string say_clock(double hours);
 /// A fixed-point number for a file: no exponent, no "-0".

@@ -34,6 +34,10 @@ std::string clock_of(const Zone& zone, Instant at) {
     return write_instant(local).substr(0, 19) + " " + offset.abbreviation;
 }
 
+std::string reading_json(std::optional<double> hours) { return hours ? '"' + say_clock(*hours) + '"' : "null"; }
+
+std::string reading_text(std::optional<double> hours) { return hours ? say_clock(*hours) : "none"; }
+
 } // namespace
 
 std::vector<ShadowReport> shadow_reports(const Commission& commission, std::span<const Instant> instants, std::optional<std::size_t> face) {
@@ -57,7 +61,11 @@ std::vector<ShadowReport> shadow_reports(const Commission& commission, std::span
                 report.face = k;
                 report.lit = true;
                 report.shadow = cast->point;
-                report.reads_h = reading_of(readers[k].plan->dial, commission.year, report.sky, day_of_year(report.at, commission.year));
+                const DialPlan& dial = readers[k].plan->dial;
+                const double day = day_of_year(report.at, commission.year);
+                report.reads_h = reading_of(dial, dial.hours.time, commission.year, report.sky, day);
+                for (const HourPlan& more : dial.more_hours)
+                    report.also_reads_h.push_back(reading_of(dial, more.time, commission.year, report.sky, day));
             }
         reports.push_back(report);
     }
@@ -80,9 +88,13 @@ std::string shadow_json(const Commission& commission, const std::vector<ShadowRe
                        fixed(r.sky.declination.in_degrees(), 7), fixed(r.sky.hour_angle.in_degrees(), 7),
                        fixed(r.sun.equation_of_time.in_minutes_of_time(), 6), r.lit);
         if (r.shadow)
-            fmt::format_to(put, "\"shadow_mm\":[{},{}],\"reads\":\"{}\"}}", fixed(r.shadow->u_mm, 6), fixed(r.shadow->v_mm, 6), say_clock(*r.reads_h));
+            fmt::format_to(put, "\"shadow_mm\":[{},{}],\"reads\":{}", fixed(r.shadow->u_mm, 6), fixed(r.shadow->v_mm, 6), reading_json(r.reads_h));
         else
-            fmt::format_to(put, "\"shadow_mm\":null,\"reads\":null}}");
+            fmt::format_to(put, "\"shadow_mm\":null,\"reads\":null");
+        const auto& more = commission.plans[r.face].dial.more_hours;
+        for (std::size_t k = 0; k < more.size(); ++k)
+            fmt::format_to(put, "{}\"{}\":{}", k == 0 ? ",\"also\":{" : ",", say_time(more[k].time), r.lit ? reading_json(r.also_reads_h[k]) : "null");
+        fmt::format_to(put, "{}", more.empty() ? "}" : "}}");
     }
     fmt::format_to(put, "\n]\n");
     return fmt::to_string(out);
@@ -100,10 +112,14 @@ std::string shadow_text(const Commission& commission, const std::vector<ShadowRe
         fmt::format_to(put, "{:<26} {:>9} {:>9} {:>9} {:>10}  ", zone ? clock_of(*zone, r.at) : write_instant(r.at), degrees(r.towards_sun.altitude()),
                        degrees(r.towards_sun.azimuth()), degrees(r.sky.declination), degrees(r.sky.hour_angle));
         if (r.shadow)
-            fmt::format_to(put, "{:>9} {:>9}  {:<9}", fixed(r.shadow->u_mm, 2), fixed(r.shadow->v_mm, 2), say_clock(*r.reads_h));
+            fmt::format_to(put, "{:>9} {:>9}  {:<9}", fixed(r.shadow->u_mm, 2), fixed(r.shadow->v_mm, 2), reading_text(r.reads_h));
         else
             fmt::format_to(put, "{:>9} {:>9}  {:<9}", "", "", r.towards_sun.enu.z() > 0 ? "unlit" : "Sun down");
-        fmt::format_to(put, "{}\n", several ? " " + commission.plans[r.face].name : "");
+        fmt::format_to(put, "{}", several ? " " + commission.plans[r.face].name : "");
+        const auto& more = commission.plans[r.face].dial.more_hours;
+        for (std::size_t k = 0; k < more.size() && r.lit; ++k)
+            fmt::format_to(put, "  {} {}", say_time(more[k].time), reading_text(r.also_reads_h[k]));
+        fmt::format_to(put, "\n");
     }
     return fmt::to_string(out);
 }

@@ -212,14 +212,14 @@ TEST_CASE("A dial reads the line on which its shadow falls", "[engine][dial]") {
         const MeanYear::Season season = mean_year().at(day);
         const SkyPlace sun{random.degrees(-75, 75), season.declination};
         CAPTURE(k_seed, i, day);
-        REQUIRE_THAT(reading_of(plan, mean_year(), sun, day), WithinAbs(12 + sun.hour_angle.in_hours(), 1e-9));
+        REQUIRE_THAT(*reading_of(plan, plan.hours.time, mean_year(), sun, day), WithinAbs(12 + sun.hour_angle.in_hours(), 1e-9));
         plan.hours.time = HourTime::zone;
         const double zone_time = 12 + (sun.hour_angle - plan.site.longitude + plan.zone_meridian).in_hours();
-        REQUIRE_THAT(reading_of(plan, mean_year(), sun, day), WithinAbs(zone_time, 1e-9));
+        REQUIRE_THAT(*reading_of(plan, plan.hours.time, mean_year(), sun, day), WithinAbs(zone_time, 1e-9));
         // The clock's curve through this shadow, by trying the curves of a whole minute's neighbourhood: the one whose
         // point at this declination and half of the year is the shadow's own.
         plan.hours.time = HourTime::clock;
-        const double reading = reading_of(plan, mean_year(), sun, day);
+        const double reading = *reading_of(plan, plan.hours.time, mean_year(), sun, day);
         const double expected = zone_time - season.equation_of_time.in_hours();
         REQUIRE_THAT(reading, WithinAbs(expected, 0.1 / 3600));
     }
@@ -239,7 +239,7 @@ TEST_CASE("The clock's reading lies on the traced curve", "[engine][dial]") {
         if (!shadow || !k_window.contains(shadow->point))
             continue;
         ++compared;
-        const Angle mean = hour_angle_of(HourTime::clock, reading_of(plan, mean_year(), sun, day), plan.site, plan.zone_meridian);
+        const Angle mean = hour_angle_of(HourTime::clock, *reading_of(plan, plan.hours.time, mean_year(), sun, day), plan.site, plan.zone_meridian);
         const double june = mean_year().june_solstice_day(), december = mean_year().december_solstice_day();
         const double length = mean_year().length_days();
         const SunPath half = day < june        ? mean_time_path(mean, mean_year(), december - length, june)
@@ -258,13 +258,13 @@ TEST_CASE("An instant's own Sun beyond the mean solstice still reads", "[engine]
     const SkyPlace sun{Angle::hours(1), mean_year().obliquity() + Angle::arcseconds(10)};
     for (const double day : {june - 1, june, june + 1}) {
         const double expected = 13 - mean_year().at(june).equation_of_time.in_hours();
-        CHECK_THAT(reading_of(plan, mean_year(), sun, day), WithinAbs(expected, 1.0 / 3600));
+        CHECK_THAT(*reading_of(plan, plan.hours.time, mean_year(), sun, day), WithinAbs(expected, 1.0 / 3600));
     }
     const double december = mean_year().december_solstice_day();
     const SkyPlace low{Angle::hours(1), -mean_year().obliquity() - Angle::arcseconds(10)};
     const double expected = 13 - mean_year().at(december).equation_of_time.in_hours();
-    CHECK_THAT(reading_of(plan, mean_year(), low, 360), WithinAbs(expected, 1.0 / 3600));
-    CHECK_THAT(reading_of(plan, mean_year(), low, 350), WithinAbs(expected, 1.0 / 3600));
+    CHECK_THAT(*reading_of(plan, plan.hours.time, mean_year(), low, 360), WithinAbs(expected, 1.0 / 3600));
+    CHECK_THAT(*reading_of(plan, plan.hours.time, mean_year(), low, 350), WithinAbs(expected, 1.0 / 3600));
 }
 
 TEST_CASE("Poles and equator delineate without a number that is not one", "[engine][dial]") {
