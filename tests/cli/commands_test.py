@@ -198,7 +198,7 @@ class Check(Bench):
         design = self.design(LEVEL)
         before = contents_of(self.folder)
         run("check", design, cwd=self.folder)
-        self.assertEqual(contents_of(self.folder), before)
+        self.same(before, contents_of(self.folder))
 
 
 class Make(Bench):
@@ -231,9 +231,7 @@ class Make(Bench):
                 self.assertIn(status, (FINE, WITH_WARNINGS), err)
             first, *others = map(contents_of, packets)
             for other in others:
-                self.assertEqual(first.keys(), other.keys())
-                for name in first:
-                    self.assertTrue(first[name] == other[name], f"{design.name}: {name} differs")
+                self.same(first, other)
 
     def test_other_files_in_the_folder_stay(self):
         packet = self.folder / "packet"

@@ -64,3 +64,8 @@ class Bench(unittest.TestCase):
         path = self.folder / name
         path.write_bytes(text if isinstance(text, bytes) else text.encode())
         return path
+
+    def same(self, before, after):
+        """Folders' contents, byte for byte; says which differ (unittest's own comparison of large files takes minutes)."""
+        differ = sorted(name for name in before.keys() | after.keys() if before.get(name) != after.get(name))
+        self.assertEqual(differ, [])
