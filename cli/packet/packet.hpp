@@ -13,7 +13,8 @@ struct Packet {
         std::string purpose; ///< "full-scale sheets: print this", for the maker
     };
     std::vector<Item> items;
-    std::vector<std::string> warnings;
+    std::vector<std::string> warnings; ///< of this very design
+    std::vector<std::string> cautions; ///< of the work
     std::size_t sheets = 0; ///< in the PDF
 };
 

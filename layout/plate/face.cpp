@@ -92,7 +92,7 @@ Rings Rings::of(const FaceSpec& spec) {
 Bench::Bench(const FaceSpec& face_spec, const Delineation& delineated, const Placement& placed)
     : spec{face_spec}, delineation{delineated}, foot{placed.foot}, rings{Rings::of(face_spec)},
       up{clockwise_from_up(face_spec.reader_up)}, lettering{face_spec.lettering.family},
-      clear{rings.divisions, std::max(0.5, std::max(face_spec.plate.width_mm, face_spec.plate.height_mm) / 320)} {
+      clear{rings.divisions, std::max(0.5, std::max(face_spec.plate.width_mm, face_spec.plate.height_mm) / 260)} {
     if (delineated.style.centre && has_style(face_spec.gnomon.kind)) {
         const Point at = layout::to_work(*delineated.style.centre, foot);
         if (rings.divisions.contains(at))

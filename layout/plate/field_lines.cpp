@@ -76,10 +76,10 @@ class FieldDrawer {
                     place_label(*line);
             tell_unlabelled();
         }
+        tell_close_dates(lines);
         for (const DialLine* line : lines)
-            for (const PlatePolyline& piece : line->pieces)
-                for (const Polyline& part : clipped(bench_.to_work(piece), bench_.field()))
-                    bench_.add_line(*line, part, label_of(*line), bench_.field_line_width(line->family));
+            for (const Polyline& part : on_field(*line))
+                bench_.add_line(*line, part, label_of(*line), bench_.field_line_width(line->family));
     }
 
   private:
@@ -96,12 +96,11 @@ class FieldDrawer {
         for (const DialLine& line : bench_.delineation.lines) {
             if (in_ring(line) && line.step_min < 60)
                 continue;
-            for (const PlatePolyline& piece : line.pieces)
-                for (const Polyline& part : clipped(bench_.to_work(piece), bench_.field())) {
-                    room_.block(part);
-                    if (!in_ring(line))
-                        room_without_hours_.block(part);
-                }
+            for (const Polyline& part : on_field(line)) {
+                room_.block(part);
+                if (!in_ring(line))
+                    room_without_hours_.block(part);
+            }
         }
         room_.measure();
         room_without_hours_.measure();
@@ -130,6 +129,42 @@ class FieldDrawer {
         }
     }
 
+    /// Date lines that run closer together than the tool can cut.
+    void tell_close_dates(const std::vector<const DialLine*>& lines) {
+        std::vector<const DialLine*> dates;
+        for (const DialLine* line : lines)
+            if (line->family == Family::date)
+                dates.push_back(line);
+        std::sort(dates.begin(), dates.end(), [](const DialLine* a, const DialLine* b) { return *a->declination < *b->declination; });
+        const double wanted = bench_.spec.cutting.least_gap_mm + bench_.field_line_width(Family::date);
+        for (std::size_t i = 0; i + 1 < dates.size(); ++i)
+            if (const double gap = least_distance(*dates[i], *dates[i + 1]); gap < wanted)
+                bench_.warnings.push_back(fmt::format("the date lines \"{}\" and \"{}\" come within {:.1f} mm of each other, middle to middle: the tool wants {:.1f} mm",
+                                                      dates[i]->label, dates[i + 1]->label, gap, wanted));
+    }
+
+    [[nodiscard]] std::vector<Polyline> on_field(const DialLine& line) const {
+        std::vector<Polyline> parts;
+        for (const PlatePolyline& piece : line.pieces)
+            for (Polyline& part : clipped(bench_.to_work(piece), bench_.field()))
+                parts.push_back(std::move(part));
+        return parts;
+    }
+
+    [[nodiscard]] double least_distance(const DialLine& a, const DialLine& b) const {
+        double least = 1e300;
+        const auto parts_b = on_field(b);
+        for (const Polyline& part_a : on_field(a))
+            for (const Point& p : part_a)
+                for (const Polyline& part_b : parts_b)
+                    for (std::size_t i = 0; i + 1 < part_b.size(); ++i) {
+                        const Point run = part_b[i + 1] - part_b[i];
+                        const double along = dot(run, run) > 0 ? std::clamp(dot(p - part_b[i], run) / dot(run, run), 0.0, 1.0) : 0.0;
+                        least = std::min(least, distance(p, part_b[i] + along * run));
+                    }
+        return least;
+    }
+
     void tell_unlabelled() {
         if (unlabelled_.empty())
             return;
@@ -141,14 +176,13 @@ class FieldDrawer {
 
     [[nodiscard]] LabelPlace search(const DialLine& line, const LetteredLine& text, const ClearMap& room) const {
         LabelPlace best;
-        for (const PlatePolyline& piece : line.pieces)
-            for (const Polyline& part : clipped(bench_.to_work(piece), bench_.field())) {
-                const Rule rule{part};
-                const double half = text.ink.width_mm() / 2 + 0.4 * cap_mm_;
-                for (double s = half; s <= rule.length_mm() - half; s += std::max(1.0, 0.4 * cap_mm_))
-                    for (const double side : {1.0, -1.0})
-                        consider(line.family, rule, s, side, text, room, best);
-            }
+        for (const Polyline& part : on_field(line)) {
+            const Rule rule{part};
+            const double half = text.ink.width_mm() / 2 + 0.4 * cap_mm_;
+            for (double s = half; s <= rule.length_mm() - half; s += std::max(1.0, 0.4 * cap_mm_))
+                for (const double side : {1.0, -1.0})
+                    consider(line.family, rule, s, side, text, room, best);
+        }
         return best;
     }
 

@@ -28,7 +28,7 @@ class NumeralDrawer {
         std::vector<Numeral> all;
         for (const RingHour& hour : hours)
             if (const auto exit = row_.middle.exit(hour.from, hour.direction))
-                all.push_back({text_of(hour.hour), exit->at, exit->normal});
+                all.push_back({hour.hour, text_of(hour.hour), exit->at, exit->normal});
         double height = row_.height_mm;
         while (height > 0.55 * row_.height_mm && !all_in_band(all, height))
             height *= 0.95;
@@ -44,6 +44,7 @@ class NumeralDrawer {
 
   private:
     struct Numeral {
+        int hour;
         std::string text;
         Point at;     ///< middle of the capitals
         Point normal; ///< of the border, outward
@@ -109,7 +110,11 @@ class NumeralDrawer {
         return true;
     }
 
+    /// Noon stays before all, then the quarters of the day and their halves, then the others.
+    [[nodiscard]] static int rank(const Numeral& n) { return n.hour == 12 ? 0 : n.hour % 6 == 0 ? 1 : n.hour % 3 == 0 ? 2 : 3; }
+
     void drop_crowded(std::vector<Numeral>& all, double height) {
+        std::stable_sort(all.begin(), all.end(), [](const Numeral& a, const Numeral& b) { return rank(a) < rank(b); });
         std::vector<Numeral> kept;
         std::string dropped;
         for (const Numeral& n : all) {
