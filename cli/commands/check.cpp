@@ -52,6 +52,8 @@ int run_check(const std::string& design) {
     }
     for (const std::string& warning : packet->warnings)
         std::cout << "note: " << warning << '\n';
+    for (const std::string& caution : packet->cautions)
+        std::cout << "take care: " << caution << '\n';
     return said(packet->warnings.empty() ? k_fine : k_with_warnings);
 }
 

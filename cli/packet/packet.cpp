@@ -116,7 +116,7 @@ void add_own_size(std::vector<Sheet>& sheets, const std::shared_ptr<const Drawin
     }
 }
 
-layout::SheetBook book_of(const Commission& commission, std::vector<std::string>& warnings) {
+layout::SheetBook book_of(const Commission& commission, Packet& packet) {
     const Design& design = commission.design;
     layout::PrintOptions options;
     options.paper = layout::paper_named(design.print.paper).value();
@@ -133,7 +133,7 @@ layout::SheetBook book_of(const Commission& commission, std::vector<std::string>
         options.title = name.empty() ? design.title : design.title + ", " + name;
         tilings.push_back(layout::tile(drawing, options));
         if (design.print.own_size)
-            add_own_size(own_sizes, drawing, options, warnings);
+            add_own_size(own_sizes, drawing, options, packet.warnings);
         covers.push_back({name, drawing, key_numbers(commission, i), nullptr});
     }
     bool has_tiles = false;
@@ -146,7 +146,7 @@ layout::SheetBook book_of(const Commission& commission, std::vector<std::string>
     book.title = design.title;
     book.subject = "Full-scale templates of a sundial";
     const std::string where = design.place.name.empty() ? say_latitude(design.place.site.latitude) : design.place.name;
-    book.sheets = layout::cover_sheets({design.title, "Full-scale templates for a sundial at " + where, steps(design, has_tiles), cautions(design), warnings}, covers, options);
+    book.sheets = layout::cover_sheets({design.title, "Full-scale templates for a sundial at " + where, steps(design, has_tiles), packet.cautions, packet.warnings}, covers, options);
     for (layout::Tiling& tiling : tilings)
         for (Sheet& sheet : tiling.sheets)
             book.sheets.push_back(std::move(sheet));
@@ -173,7 +173,8 @@ Packet make_packet(const Commission& commission) {
         for (const std::string& warning : commission.faces[i].warnings)
             packet.warnings.push_back(commission.plans[i].spec.name.empty() ? warning : commission.plans[i].spec.name + ": " + warning);
 
-    const layout::SheetBook book = book_of(commission, packet.warnings);
+    packet.cautions = cautions(commission.design);
+    const layout::SheetBook book = book_of(commission, packet);
     packet.sheets = book.sheets.size();
     packet.items.push_back({{"sheets.pdf", layout::pdf_of(book)}, "full-scale sheets: print this, and read its first page"});
     for (std::size_t i = 0; i < commission.faces.size(); ++i) {

@@ -16,7 +16,7 @@ namespace {
 
 constexpr Angle k_least_style_for_centre = Angle::degrees(3);
 constexpr Angle k_pin = Angle::degrees(89.99); ///< a style this steep is a pin, square on the plate
-constexpr double k_crowded = 0.03;             ///< of the plate's size, between two hours at the border of the field
+constexpr double k_crowded = 0.05;             ///< of the plate's size, between two hours at the border of the field
 
 double to_half_mm(double mm) { return std::round(mm * 2) / 2; }
 
