@@ -76,11 +76,27 @@ void fill_borders_and_letters(Design& design, Filler& filler, double s) {
     filler.note_unless_given("lettering: place line", "no", "not asked for");
 }
 
+std::string_view thickness_why(GnomonKind kind) {
+    switch (kind) {
+    case GnomonKind::edge:
+        return "a thin edge; name the metal's thickness and the lines part for both of its edges";
+    case GnomonKind::rod:
+        return "a thin rod; name its diameter and the lines part for both of its sides";
+    case GnomonKind::pin:
+    case GnomonKind::upright_pin:
+        return "the pin's tip alone is read";
+    case GnomonKind::disc:
+        return "the disc's hole alone is read";
+    }
+    return {};
+}
+
 void fill_gnomon_and_cutting(Design& design, Filler& filler, double s) {
     Gnomon& gnomon = design.gnomon;
-    filler.fill(gnomon.thickness_mm, "gnomon: thickness", 0.0,
-                "a thin edge; name the metal's thickness and the lines part for both of its edges");
-    filler.note_unless_given("gnomon: holes", "0", "how it is fixed is the maker's choice");
+    filler.note_unless_given("gnomon: kind", "edge", "a plate of metal, whose top edge is the style");
+    filler.fill(gnomon.thickness_mm, "gnomon: thickness", 0.0, thickness_why(gnomon.kind));
+    if (gnomon.kind == GnomonKind::edge)
+        filler.note_unless_given("gnomon: holes", "0", "how it is fixed is the maker's choice");
     if (gnomon.holes > 0)
         filler.fill_tidy(gnomon.hole_diameter_mm, "gnomon: hole diameter", std::clamp(0.014 * s, 2.0, 6.0),
                          "1/70 of the plate");
@@ -90,6 +106,15 @@ void fill_gnomon_and_cutting(Design& design, Filler& filler, double s) {
                 filler.inches() ? std::max(1.0, std::round(line / sixty_fourth)) * sixty_fourth : std::round(line * 10.0) / 10.0,
                 "1/600 of the plate: reads from where the plate is read");
     filler.fill(cutting.least_gap_mm, "cutting: least gap", 2.0 * cutting.line_width_mm, "twice the line width");
+}
+
+void fill_reach(Design& design, Filler& filler) {
+    const bool style = has_style(design.gnomon.kind);
+    design.hours.reach = style ? HourExtent::style : HourExtent::nodus;
+    if (draws_straight_hours(design))
+        filler.note("hours: reach", style ? "style" : "season",
+                    style ? "the style's shadow runs on to the border"
+                          : "its shadow is one point, which stays between the solstices");
 }
 
 void note_hours_and_dates(Design& design, Filler& filler) {
@@ -104,9 +129,13 @@ void note_hours_and_dates(Design& design, Filler& filler) {
         filler.note("hours: stand", sides ? "upright" : "along border",
                     sides ? "read without turning the head" : "they follow the ring");
     }
-    if (design.hours.time == HourTime::clock)
+    if (draws_any(design, {HourTime::clock}))
         filler.note_unless_given("hours: curves", "whole", "the whole year on one plate");
     filler.note_unless_given("hours: noon mark", "yes", "where the day is halved");
+    if (filler.wants("hours: reach"))
+        fill_reach(design, filler);
+    if (counts_from_the_horizon(design))
+        filler.note_unless_given("hours: rise and set", "level horizon", "the Sun's middle on the horizon, no refraction");
     filler.note_unless_given("dates: solstices", "yes", "the ends of the shadow's walk");
     filler.note_unless_given("dates: equinoxes", "yes", "the straight line between them");
     filler.note_unless_given("dates: signs", "no", "not asked for");

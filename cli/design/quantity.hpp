@@ -52,6 +52,9 @@ class Read {
 [[nodiscard]] Read<std::chrono::month_day> day_of_year(std::string_view text);
 /// Hours after midnight, 0 to 24, from "5", "5:30", "17:00", "5 am", "5:30 pm", "noon". 12 am is 0:00, 12 pm is noon.
 [[nodiscard]] Read<double> hour_of_day(std::string_view text);
+/// The same on a dial's own time: hours that count from the Sun's rising or setting have no am, pm or noon, and unequal
+/// ones end with 12.
+[[nodiscard]] Read<double> hour_on(HourTime time, std::string_view text);
 /// Whole minutes from "15 min", "1 h".
 [[nodiscard]] Read<int> minutes(std::string_view text);
 /// "2027 to 2046", "2027-2046": whole leap cycles within 1900 to 2100.

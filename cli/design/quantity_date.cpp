@@ -154,6 +154,39 @@ Read<double> hour_of_day(std::string_view text) {
     return hours;
 }
 
+Read<double> hour_on(HourTime time, std::string_view text) {
+    std::string_view counted;
+    switch (time) {
+    case HourTime::sun:
+    case HourTime::zone:
+    case HourTime::clock:
+        return hour_of_day(text);
+    case HourTime::since_sunrise:
+        counted = "hours since sunrise";
+        break;
+    case HourTime::since_sunset:
+        counted = "hours since sunset";
+        break;
+    case HourTime::to_sunset:
+        counted = "the hours that are left";
+        break;
+    case HourTime::unequal:
+        counted = "unequal hours";
+        break;
+    }
+    const int last = time == HourTime::unequal ? 12 : 24;
+    const std::string hint = fmt::format("count {} from 0 to {}", counted, last);
+    const Read<double> hours = hour_of_day(text);
+    if (!hours)
+        return Trouble{hours.trouble().message, hint};
+    // Only am, pm and noon end in a letter.
+    if (const char end = text[text.find_last_not_of(" \t\n")]; end < '0' || end > '9')
+        return Trouble{in_quotes(text) + " is an hour of the clock", hint};
+    if (*hours > last)
+        return Trouble{fmt::format("{} is over {}", in_quotes(text), last), hint};
+    return hours;
+}
+
 Read<Years> years(std::string_view text) {
     const std::string hint = "write it as in 2027 to 2046";
     Read<Scanner> read = Scanner::over(text);

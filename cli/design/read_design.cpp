@@ -86,6 +86,7 @@ void read_sections(Design& design, const Node& root, ReadingState& state) {
     read_borders(design, top);
     read_gnomon(design, top);
     read_hours(design, top);
+    read_also(design, top);
     read_dates(design, top);
     read_lettering(design, top);
     read_cutting(design, top);

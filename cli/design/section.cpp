@@ -162,6 +162,24 @@ std::optional<std::size_t> Section::choice_of(std::string_view key, std::span<co
     return std::nullopt;
 }
 
+std::span<const Node> list_at(const Section& section, std::string_view key, std::string_view item, std::size_t least,
+                              std::size_t most, const std::string& hint) {
+    const Entry* entry = section.entry(key);
+    if (entry == nullptr || entry->value.kind == Node::Kind::refused)
+        return {};
+    const Node& list = entry->value;
+    if (list.kind == Node::Kind::list && list.items.size() >= least && list.items.size() <= most)
+        return list.items;
+    if (list.kind == Node::Kind::list)
+        section.error(key,
+                      list.items.size() == 1 ? fmt::format("1 {} is given", item)
+                                             : fmt::format("{} {}s are given", list.items.size(), item),
+                      fmt::format("give {} to {}, as in {}", least, most, hint));
+    else
+        section.error(key, fmt::format("{} stands where a list is wanted", kind_name(list)), "write it as in " + hint);
+    return {};
+}
+
 std::optional<PlatePointMm> read_point(const Node& node, const std::string& key, double most_mm, ReadingState& state) {
     const std::string hint = "write it as in [20 mm, -5 mm]: to the right, then up";
     if (node.kind == Node::Kind::refused)

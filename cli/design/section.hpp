@@ -5,6 +5,7 @@
 #include "cli/design/keys.hpp"
 #include "cli/design/quantity.hpp"
 
+#include <algorithm>
 #include <cassert>
 #include <functional>
 #include <optional>
@@ -28,6 +29,10 @@ struct ReadingState {
         errors.push_back({file, at.line, at.column, std::move(key), std::move(message), std::move(hint)});
     }
     [[nodiscard]] bool gives(std::string_view key) const { return given.contains(key); }
+    /// An error of this key was reported, so what its value stands for is not known.
+    [[nodiscard]] bool faulty(std::string_view key) const {
+        return std::any_of(errors.begin(), errors.end(), [&](const DesignError& e) { return e.key == key; });
+    }
 };
 
 /// A word of a design file and what it stands for.
@@ -69,6 +74,11 @@ class Section {
 
     template <class T>
     [[nodiscard]] std::optional<T> read(std::string_view key, Read<T> (*reader)(std::string_view)) const {
+        return read<T>(key, std::function<Read<T>(std::string_view)>{reader});
+    }
+    template <class T>
+    [[nodiscard]] std::optional<T> read(std::string_view key,
+                                        const std::function<Read<T>(std::string_view)>& reader) const {
         const std::string* written = text(key);
         if (written == nullptr)
             return std::nullopt;
@@ -114,6 +124,13 @@ class Section {
 /// "[right, up]", two lengths of at most `most_mm` either way; reports to `state` under `key`.
 [[nodiscard]] std::optional<PlatePointMm> read_point(const Node& node, const std::string& key, double most_mm,
                                                      ReadingState& state);
+
+/// The items of the list that stands at `key`; nothing for a key that is not there, and (reported) for what is no list
+/// or one of less than `least` or more than `most` items.
+/// @param item  what one is called, as in "pair"
+/// @param hint  how to write the list
+[[nodiscard]] std::span<const Node> list_at(const Section& section, std::string_view key, std::string_view item,
+                                            std::size_t least, std::size_t most, const std::string& hint);
 
 /// "a list" and so on, for messages.
 [[nodiscard]] std::string_view kind_name(const Node& node);

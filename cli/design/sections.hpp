@@ -3,6 +3,9 @@
 
 #include "cli/design/section.hpp"
 
+#include <array>
+#include <initializer_list>
+
 namespace dialwright::cli {
 
 // One reader a section of the file: fills its part of the design with what the file gives, reports what is wrong, and
@@ -16,10 +19,20 @@ void read_plate(Design& design, const Section& top);
 void read_borders(Design& design, const Section& top);
 void read_gnomon(Design& design, const Section& top);
 void read_hours(Design& design, const Section& top);
+void read_also(Design& design, const Section& top); ///< after the hours: no time is drawn twice
 void read_dates(Design& design, const Section& top);
 void read_lettering(Design& design, const Section& top);
 void read_cutting(Design& design, const Section& top);
 void read_print(Design& design, const Section& top);
+
+/// The kinds of time, as `hours: time` and the keys of `also` name them.
+inline constexpr std::array<Choice<HourTime>, 7> k_hour_times = {{{"sun", HourTime::sun},
+                                                                  {"zone", HourTime::zone},
+                                                                  {"clock", HourTime::clock},
+                                                                  {"since sunrise", HourTime::since_sunrise},
+                                                                  {"since sunset", HourTime::since_sunset},
+                                                                  {"hours left", HourTime::to_sunset},
+                                                                  {"unequal", HourTime::unequal}}};
 
 /// The largest side of a plate, and the smallest.
 inline constexpr double k_largest_plate_mm = 5000.0;
@@ -27,5 +40,12 @@ inline constexpr double k_smallest_plate_mm = 20.0;
 
 /// The smaller side of the plate's box; 0 while the plate is not known.
 [[nodiscard]] double smaller_side_mm(const Plate& plate);
+
+/// The dial draws hours of one of these times, on its chapter ring or beside it.
+[[nodiscard]] bool draws_any(const Design& design, std::initializer_list<HourTime> times);
+/// The dial draws hour lines that are straight: these can run on with the style's shadow.
+[[nodiscard]] bool draws_straight_hours(const Design& design);
+/// The dial draws hours that count from the Sun's rising or setting.
+[[nodiscard]] bool counts_from_the_horizon(const Design& design);
 
 } // namespace dialwright::cli

@@ -1,18 +1,19 @@
 // SPDX-License-Identifier: MIT
 // Which lines the dial bears: hours and dates.
 #include "cli/design/sections.hpp"
+#include "engine/time/zone.hpp"
 
 #include <fmt/format.h>
 
 #include <algorithm>
 #include <array>
+#include <chrono>
+#include <vector>
 
 namespace dialwright::cli {
 
 namespace {
 
-constexpr std::array<Choice<HourTime>, 3> k_times = {
-    {{"sun", HourTime::sun}, {"zone", HourTime::zone}, {"clock", HourTime::clock}}};
 constexpr std::array<Choice<Numerals>, 3> k_numerals = {
     {{"roman", Numerals::roman}, {"roman iiii", Numerals::roman_iiii}, {"arabic", Numerals::arabic}}};
 constexpr std::array<Choice<NumeralStand>, 2> k_stands = {
@@ -20,6 +21,8 @@ constexpr std::array<Choice<NumeralStand>, 2> k_stands = {
 constexpr std::array<Choice<HalfYear>, 3> k_curves = {{{"whole", HalfYear::whole},
                                                         {"december to june", HalfYear::december_to_june},
                                                         {"june to december", HalfYear::june_to_december}}};
+constexpr std::array<Choice<HourExtent>, 2> k_reaches = {{{"style", HourExtent::style}, {"season", HourExtent::nodus}}};
+constexpr std::array<Choice<bool>, 2> k_rises = {{{"level horizon", false}, {"seen", true}}};
 constexpr std::array k_divisions_min = {60, 30, 15, 10, 5, 2, 1};
 constexpr std::size_t k_most_days = 100;
 constexpr std::size_t k_longest_label = 80;
@@ -33,6 +36,53 @@ void read_division(Design& design, const Section& hours) {
                     "give 60, 30, 15, 10, 5, 2 or 1 min");
     else
         design.hours.divide_min = *division;
+}
+
+void read_first_and_last(Hours& made, const Section& hours) {
+    const auto hour = [&](std::string_view key) {
+        return hours.read<double>(key, [&](std::string_view text) { return hour_on(made.time, text); });
+    };
+    made.first_h = hour("from");
+    made.last_h = hour("to");
+    if (made.first_h && made.last_h && *made.first_h >= *made.last_h)
+        hours.error("to",
+                    fmt::format("the hours end at {}, before they start at {}", hour_text(*made.last_h),
+                                hour_text(*made.first_h)),
+                    "give \"from\" the earlier hour; afternoon hours as in 20:00 or 8 pm");
+}
+
+void read_reach(Design& design, const Section& hours) {
+    const auto reach = hours.choice<HourExtent>("reach", k_reaches);
+    if (!reach)
+        return;
+    design.hours.reach = *reach;
+    if (*reach == HourExtent::style && !has_style(design.gnomon.kind) && !hours.state().faulty("gnomon: kind"))
+        hours.error("reach", "a pin or a disc has no style to throw a whole line",
+                    "give season, or make the gnomon \"kind: edge\" or \"kind: rod\"");
+}
+
+/// The zone's clocks are put forward at some time of the year.
+bool has_summer_time(const Zone& zone, int year) {
+    using namespace std::chrono;
+    const Instant first{sys_days{std::chrono::year{year} / January / 1}};
+    const Instant next{sys_days{std::chrono::year{year + 1} / January / 1}};
+    const std::vector<Instant> changes = zone.changes(first, next);
+    const auto in_summer_time = [&](Instant at) { return zone.at(at).summer_time > seconds{0}; };
+    return in_summer_time(first) || std::any_of(changes.begin(), changes.end(), in_summer_time);
+}
+
+void read_summer_numerals(Design& design, const Section& hours) {
+    hours.read_into(design.hours.summer_numerals, "summer numerals", yes_or_no);
+    if (!design.hours.summer_numerals || hours.state().faulty("hours: time"))
+        return;
+    const int year = design.years.first;
+    const auto zone = Zone::find(design.place.zone);
+    if (design.hours.time != HourTime::zone && design.hours.time != HourTime::clock)
+        hours.error("summer numerals", "only the zone's own time has a summer time",
+                    "leave the key out, or give \"time: zone\" or \"time: clock\"");
+    else if (zone && !has_summer_time(*zone, year))
+        hours.error("summer numerals", fmt::format("{} has no summer time in {}", zone->name(), year),
+                    "leave the key out");
 }
 
 /// An item of "days": a plain date, or a date with its label.
@@ -90,14 +140,8 @@ void read_days(Design& design, const Section& dates) {
 void read_hours(Design& design, const Section& top) {
     const Section hours{top.entry("hours"), "hours", top.state()};
     Hours& made = design.hours;
-    made.time = hours.choice<HourTime>("time", k_times).value_or(made.time);
-    made.first_h = hours.read("from", hour_of_day);
-    made.last_h = hours.read("to", hour_of_day);
-    if (made.first_h && made.last_h && *made.first_h >= *made.last_h)
-        hours.error("to",
-                    fmt::format("the hours end at {}, before they start at {}", hour_text(*made.last_h),
-                                hour_text(*made.first_h)),
-                    "give \"from\" the earlier hour; afternoon hours as in 20:00 or 8 pm");
+    made.time = hours.choice<HourTime>("time", k_hour_times).value_or(made.time);
+    read_first_and_last(made, hours);
     read_division(design, hours);
     made.numerals = hours.choice<Numerals>("numerals", k_numerals).value_or(made.numerals);
     if (const auto count = hours.read("count", whole_number)) {
@@ -108,9 +152,10 @@ void read_hours(Design& design, const Section& top) {
     }
     made.stand = hours.choice<NumeralStand>("stand", k_stands).value_or(made.stand);
     made.curves = hours.choice<HalfYear>("curves", k_curves).value_or(made.curves);
-    if (hours.has("curves") && hours.has("time") && made.time != HourTime::clock)
-        hours.error("curves", "only clock time has curves", "leave the key out, or give \"time: clock\"");
     hours.read_into(made.noon_mark, "noon mark", yes_or_no);
+    read_reach(design, hours);
+    read_summer_numerals(design, hours);
+    made.seen_rise = hours.choice<bool>("rise and set", k_rises).value_or(made.seen_rise);
 }
 
 void read_dates(Design& design, const Section& top) {

@@ -6,6 +6,8 @@
 
 #include <fmt/format.h>
 
+#include <array>
+#include <cmath>
 #include <vector>
 
 namespace dialwright::cli {
@@ -39,25 +41,32 @@ void read_paper(Design& design, const Section& print) {
                              : fmt::format("did you mean {}?", near));
 }
 
-constexpr double k_least_letter_mm = 0.5;
-constexpr double k_largest_letter_mm = 1000.0;
+constexpr std::array<Choice<GnomonKind>, 5> k_gnomons = {{{"edge", GnomonKind::edge},
+                                                         {"rod", GnomonKind::rod},
+                                                         {"pin", GnomonKind::pin},
+                                                         {"upright pin", GnomonKind::upright_pin},
+                                                         {"disc", GnomonKind::disc}}};
 
-} // namespace
-
-void read_borders(Design& design, const Section& top) {
-    const Section borders{top.entry("borders"), "borders", top.state()};
-    Borders& made = design.borders;
-    length_into(made.margin_mm, borders, "margin", 0.0, k_largest_plate_mm / 2);
-    length_into(made.chapter_ring_mm, borders, "chapter ring", 0.0, k_largest_plate_mm / 2);
-    length_into(made.inner_mm, borders, "inner border", 0.0, k_largest_plate_mm / 2);
+/// Which gnomons go with which dials, and which keys with which gnomons.
+void check_gnomon_kind(const Design& design, const Section& gnomon) {
+    const GnomonKind kind = design.gnomon.kind;
+    const Dial& dial = design.dial;
+    const bool stands = dial.kind == DialKind::wall || dial.kind == DialKind::leaning;
+    if (kind == GnomonKind::upright_pin && stands && std::abs(dial.lean.in_degrees()) < 1e-6 &&
+        !gnomon.state().faulty("dial: lean"))
+        gnomon.error("kind", "a plumb pin lies in the plane of an upright wall",
+                     "give pin: it stands square out of the wall");
+    if (dial.kind == DialKind::equatorial && (kind == GnomonKind::upright_pin || kind == GnomonKind::disc))
+        gnomon.error("kind", "the gnomon of an equatorial dial stands square through its plate",
+                     "give edge, rod or pin");
+    if (kind != GnomonKind::edge)
+        gnomon.refuse({"foot", "holes", "hole diameter"}, "only an edge has a foot along the substyle",
+                      "leave it out, or make the gnomon \"kind: edge\"");
 }
 
-void read_gnomon(Design& design, const Section& top) {
-    const Section gnomon{top.entry("gnomon"), "gnomon", top.state()};
+/// Holes that fit in the foot.
+void read_fixing(Design& design, const Section& gnomon) {
     Gnomon& made = design.gnomon;
-    if (const auto mm = gnomon.length("nodus height", 1.0, k_largest_plate_mm))
-        made.nodus_height_mm = *mm;
-    length_into(made.thickness_mm, gnomon, "thickness", 0.0, k_largest_plate_mm);
     if (const auto mm = gnomon.length("foot", 1.0, k_largest_plate_mm))
         made.foot_mm = *mm;
     made.holes = gnomon.count("holes", 0, 20).value_or(0);
@@ -76,6 +85,31 @@ void read_gnomon(Design& design, const Section& top) {
                                  length_text(made.hole_diameter_mm, design.units),
                                  length_text(*made.foot_mm, design.units)),
                      "make fewer or smaller holes");
+}
+
+constexpr double k_least_letter_mm = 0.5;
+constexpr double k_largest_letter_mm = 1000.0;
+
+} // namespace
+
+void read_borders(Design& design, const Section& top) {
+    const Section borders{top.entry("borders"), "borders", top.state()};
+    Borders& made = design.borders;
+    length_into(made.margin_mm, borders, "margin", 0.0, k_largest_plate_mm / 2);
+    length_into(made.chapter_ring_mm, borders, "chapter ring", 0.0, k_largest_plate_mm / 2);
+    length_into(made.inner_mm, borders, "inner border", 0.0, k_largest_plate_mm / 2);
+}
+
+void read_gnomon(Design& design, const Section& top) {
+    const Section gnomon{top.entry("gnomon"), "gnomon", top.state()};
+    Gnomon& made = design.gnomon;
+    made.kind = gnomon.choice<GnomonKind>("kind", k_gnomons).value_or(made.kind);
+    if (const auto mm = gnomon.length("nodus height", 1.0, k_largest_plate_mm))
+        made.nodus_height_mm = *mm;
+    length_into(made.thickness_mm, gnomon, "thickness", 0.0, k_largest_plate_mm);
+    if (made.kind == GnomonKind::edge)
+        read_fixing(design, gnomon);
+    check_gnomon_kind(design, gnomon);
 }
 
 void read_lettering(Design& design, const Section& top) {

@@ -208,6 +208,17 @@ TEST_CASE("hours, minutes, years, counts, yes and no", "[cli]") {
                          {"12:30 AM", 0.5},
                          {"noon", 12.0},
                          {"24:00", 24.0}});
+    const auto on = [](HourTime time) { return [time](std::string_view text) { return bool{hour_on(time, text)}; }; };
+    CHECK(on(HourTime::clock)("8 pm"));
+    CHECK(on(HourTime::zone)("noon"));
+    for (const HourTime time : {HourTime::since_sunrise, HourTime::since_sunset, HourTime::to_sunset, HourTime::unequal}) {
+        CHECK_FALSE(on(time)("8 am"));
+        CHECK_FALSE(on(time)("noon"));
+        CHECK(on(time)(" 0 "));
+        CHECK(on(time)("9:30"));
+        CHECK(on(time)("12"));
+        CHECK(on(time)("12:01") == (time != HourTime::unequal));
+    }
     check_refused(hour_of_day,
                   {"", "25", "24:01", "5.5", "5:60", "5:3", "-1", "13 pm", "0 am", "5:", "5 o'clock", "5 am pm"});
     CHECK(*minutes("15 min") == 15);

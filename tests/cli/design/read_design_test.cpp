@@ -9,6 +9,8 @@
 #include <iterator>
 #include <locale>
 #include <random>
+#include <utility>
+#include <vector>
 
 using namespace dialwright;
 using namespace dialwright::cli;
@@ -93,7 +95,10 @@ TEST_CASE("what is assumed, written out, gives the same design and leaves nothin
     const std::string off = k_short + "units: inch\n";
     const std::string tiny = k_place + "dial: {kind: level}\nplate: {diameter: 20 mm}\n";
     const std::string huge = k_place + "dial: {kind: level}\nplate: {diameter: 5 m}\n";
-    for (const std::string& text : {k_short, wall, both, off, tiny, huge}) {
+    const std::string pin = k_short + "gnomon: {kind: upright pin}\nalso: {clock: yes, unequal: yes}\n";
+    const std::string rod = k_place + "dial: {kind: leaning, facing: west, lean: 80° back, faces: both}\n"
+                                      "plate: {diameter: 1 m}\ngnomon: {kind: rod}\nhours: {time: hours left}\n";
+    for (const std::string& text : {k_short, wall, both, off, tiny, huge, pin, rod}) {
         const Design first = good(text);
         const Design second = good(with_assumptions(text, first));
         CHECK(second.assumed.empty());
@@ -111,6 +116,9 @@ TEST_CASE("what is assumed, written out, gives the same design and leaves nothin
         CHECK_THAT(second.print.overlap_mm, WithinAbs(first.print.overlap_mm, 1e-9));
         CHECK(second.print.paper == first.print.paper);
         CHECK(second.hours.divide_min == first.hours.divide_min);
+        CHECK(second.gnomon.kind == first.gnomon.kind);
+        CHECK(second.hours.reach == first.hours.reach);
+        CHECK(second.hours.seen_rise == first.hours.seen_rise);
     }
 }
 
@@ -176,6 +184,128 @@ TEST_CASE("hours, dates, lettering", "[cli]") {
     CHECK(design.lettering.place_line == "54° 14' N  1° 52' W");
     CHECK(good(k_short + "lettering: {place line: no}\n").lettering.place_line.empty());
     CHECK(good(k_short + "lettering: {place line: On the green}\n").lettering.place_line == "On the green");
+}
+
+TEST_CASE("faces by the words of each kind of dial", "[cli]") {
+    const auto faces = [](const std::string& dial) {
+        return good(k_place + "dial: {" + dial + "}\nplate: {diameter: 300 mm}\n").dial.faces;
+    };
+    for (const std::string kind : {"kind: wall, facing: east", "kind: leaning, facing: east, lean: 80° back"}) {
+        CHECK(faces(kind) == Faces::upper);
+        CHECK(faces(kind + ", faces: front") == Faces::upper);
+        CHECK(faces(kind + ", faces: back") == Faces::lower);
+        CHECK(faces(kind + ", faces: both") == Faces::both);
+    }
+    CHECK(faces("kind: leaning, facing: east, lean: 85° back, faces: front") == Faces::upper);
+    CHECK(faces("kind: equatorial, faces: lower") == Faces::lower);
+}
+
+TEST_CASE("a skyline is kept rising from its first pair, wherever it starts", "[cli]") {
+    const auto skyline = [](const std::string& pairs) {
+        return good("place: {latitude: 54° N, longitude: 2° W, zone: Europe/London, skyline: " + pairs +
+                    "}\ndial: {kind: level}\nplate: {diameter: 300 mm}\n")
+            .place.skyline;
+    };
+    const auto marks = skyline("[[N 60° W, 5°], [north, 0°], [20°, 12° 30'], [S 1° W, 89.9°], [299.9°, 1°]]");
+    const std::vector<std::pair<double, double>> expected = {
+        {300.0, 5.0}, {360.0, 0.0}, {380.0, 12.5}, {541.0, 89.9}, {659.9, 1.0}};
+    REQUIRE(marks.size() == expected.size());
+    for (std::size_t i = 0; i < marks.size(); ++i) {
+        CHECK_THAT(marks[i].azimuth.in_degrees(), WithinAbs(expected[i].first, 1e-9));
+        CHECK_THAT(marks[i].altitude.in_degrees(), WithinAbs(expected[i].second, 1e-9));
+    }
+    CHECK_NOTHROW(Skyline{marks}); // what the reader accepts, the engine does
+    CHECK(good(k_short).place.skyline.empty());
+}
+
+TEST_CASE("gnomons and how far lines run", "[cli]") {
+    const auto reach = [](const std::string& more) { return good(k_short + more).hours.reach; };
+    CHECK(reach("") == HourExtent::style);
+    CHECK(reach("gnomon: {kind: rod}\n") == HourExtent::style);
+    CHECK(reach("gnomon: {kind: pin}\n") == HourExtent::nodus);
+    CHECK(reach("gnomon: {kind: upright pin}\n") == HourExtent::nodus);
+    CHECK(reach("gnomon: {kind: disc}\n") == HourExtent::nodus);
+    CHECK(reach("hours: {reach: season}\n") == HourExtent::nodus);
+    CHECK(reach("gnomon: {kind: disc}\nhours: {reach: season}\n") == HourExtent::nodus);
+    CHECK(good(k_short + "gnomon: {kind: disc}\n").gnomon.kind == GnomonKind::disc);
+    CHECK(assumed(good(k_short), "gnomon: kind")->value == "edge");
+    CHECK(assumed(good(k_short + "gnomon: {kind: pin}\n"), "hours: reach")->value == "season");
+    CHECK(assumed(good(k_short + "gnomon: {kind: pin}\n"), "gnomon: holes") == nullptr);
+    CHECK(assumed(good(k_short + "hours: {time: clock}\n"), "hours: reach") == nullptr);
+    const std::string wall = k_place + "plate: {diameter: 300 mm}\ngnomon: {kind: upright pin}\n";
+    CHECK(good(wall + "dial: {kind: wall, facing: south, lean: 5° back}\n").gnomon.kind == GnomonKind::upright_pin);
+    // A lean that can't be read is one error, not two.
+    CHECK(read_design(wall + "dial: {kind: wall, facing: south, lean: 5°}\n", "x").errors.size() == 1);
+}
+
+TEST_CASE("hours that count from the Sun's rising and setting", "[cli]") {
+    const auto hours = [](const std::string& keys) { return good(k_short + "hours: {" + keys + "}\n").hours; };
+    CHECK(hours("time: since sunrise").time == HourTime::since_sunrise);
+    CHECK(hours("time: since sunset, from: 14, to: 24").time == HourTime::since_sunset);
+    CHECK(hours("time: hours left").time == HourTime::to_sunset);
+    const Hours unequal = hours("time: unequal, from: 0, to: 12, rise and set: seen");
+    CHECK(unequal.time == HourTime::unequal);
+    CHECK_THAT(*unequal.last_h, WithinAbs(12.0, 0.0));
+    CHECK(unequal.seen_rise);
+    CHECK_FALSE(hours("time: unequal, rise and set: level horizon").seen_rise);
+    CHECK(hours("time: clock, summer numerals: yes").summer_numerals);
+    CHECK_FALSE(hours("time: sun, summer numerals: no").summer_numerals);
+    // A zone south of the equator, where summer time runs over the new year.
+    std::string south = k_short;
+    south.replace(south.find("Europe/London"), 13, "Pacific/Auckland");
+    CHECK(good(south + "hours: {time: zone, summer numerals: yes}\n").hours.summer_numerals);
+    const Design assumed_level = good(k_short + "also: {unequal: yes}\n");
+    CHECK(assumed(assumed_level, "hours: rise and set")->value == "level horizon");
+    CHECK(assumed(good(k_short), "hours: rise and set") == nullptr);
+}
+
+TEST_CASE("what is drawn beside the hours of the ring", "[cli]") {
+    const Design design = good(k_short + "hours: {curves: june to december}\n"
+                                         "also:\n  unequal: 1 to 11\n  clock: 9 am-3 pm\n  zone: noon\n  hours left: yes\n"
+                                         "  since sunset: no\n  since sunrise: 3\n"
+                                         "  altitudes: [5° 30', 45]\n  azimuths: [S 30° E, 210°]\n"
+                                         "  noon at:\n    - {name: Port Amber, longitude: 12° 29' E}\n"
+                                         "    - {name: Westholm, longitude: -70.5}\n");
+    const std::vector<MoreHours>& more = design.also.hours;
+    REQUIRE(more.size() == 5);
+    CHECK(more[0].time == HourTime::unequal);
+    CHECK_THAT(*more[0].first_h, WithinAbs(1.0, 0.0));
+    CHECK_THAT(*more[0].last_h, WithinAbs(11.0, 0.0));
+    CHECK(more[1].time == HourTime::clock);
+    CHECK_THAT(*more[1].last_h, WithinAbs(15.0, 0.0));
+    CHECK(more[1].curves == HalfYear::june_to_december);
+    CHECK(more[2].time == HourTime::zone);
+    CHECK_THAT(*more[2].first_h, WithinAbs(12.0, 0.0));
+    CHECK_THAT(*more[2].last_h, WithinAbs(12.0, 0.0));
+    CHECK(more[3].time == HourTime::to_sunset);
+    CHECK_FALSE(more[3].first_h);
+    CHECK(more[4].time == HourTime::since_sunrise);
+    REQUIRE(design.also.altitudes.size() == 2);
+    CHECK_THAT(design.also.altitudes[0].in_degrees(), WithinAbs(5.5, 1e-12));
+    REQUIRE(design.also.azimuths.size() == 2);
+    CHECK_THAT(design.also.azimuths[0].in_degrees(), WithinAbs(150.0, 1e-12));
+    REQUIRE(design.also.noons.size() == 2);
+    CHECK(design.also.noons[1].name == "Westholm");
+    CHECK_THAT(design.also.noons[1].longitude.in_degrees(), WithinAbs(-70.5, 1e-12));
+    for (const Assumption& a : design.assumed)
+        CHECK_FALSE(a.key.starts_with("also"));
+}
+
+TEST_CASE("each so many degrees", "[cli]") {
+    const auto also = [](const std::string& keys) { return good(k_short + "also: {" + keys + "}\n").also; };
+    const std::vector<Angle> tens = also("altitudes: each 10°").altitudes;
+    REQUIRE(tens.size() == 8);
+    CHECK_THAT(tens.front().in_degrees(), WithinAbs(10.0, 1e-12));
+    CHECK_THAT(tens.back().in_degrees(), WithinAbs(80.0, 1e-12));
+    CHECK(also("altitudes: each 40°").altitudes.size() == 2);
+    CHECK(also("altitudes: each 2° 15'").altitudes.size() == 39);
+    const std::vector<Angle> round = also("azimuths: each 15°").azimuths;
+    REQUIRE(round.size() == 24);
+    CHECK_THAT(round.front().in_degrees(), WithinAbs(0.0, 0.0));
+    CHECK_THAT(round.back().in_degrees(), WithinAbs(345.0, 1e-12));
+    CHECK(also("azimuths: each 9°").azimuths.size() == 40);
+    CHECK(also("azimuths: each 22.5°").azimuths.size() == 16);
+    CHECK(also("azimuths: each 180°").azimuths.size() == 2);
 }
 
 TEST_CASE("line ends and a byte order mark make no difference", "[cli]") {
