@@ -25,7 +25,7 @@ const char* time_text(HourTime time) {
     case HourTime::clock:
         break;
     }
-    return "the zone's clock, by yearly curves (summer time not added)";
+    return "the zone's clock, without summer time";
 }
 
 std::string hours_text(const layout::Face& face) {
