@@ -1,0 +1,270 @@
+# SPDX-License-Identifier: MIT
+"""Every example design's packet, read back with MuPDF, qpdf, poppler and Python's XML reader.
+
+The lines on paper and in the SVG are those of numbers.json within 0.005 mm. Where a plate stands on its page is found from
+the plate's outline and from how tiles are laid (their openings and overlaps), not from the lines that are tested.
+"""
+import math
+import pathlib
+import re
+import subprocess
+import unittest
+import xml.etree.ElementTree as tree
+
+import fitz
+import numpy as np
+
+from program import DESIGNS, FINE, WITH_WARNINGS, Bench, faces_of, run, strict_json
+
+MM = 25.4 / 72
+CLOSE_MM = 0.005
+
+
+def curve(a, b, c, d, count=24):
+    t = np.linspace(0, 1, count + 1)[1:, None]
+    return (1 - t) ** 3 * a + 3 * t * (1 - t) ** 2 * b + 3 * t * t * (1 - t) * c + t**3 * d
+
+
+def arc(p, r, large, sweep, q, count=180):
+    """By the centre form of SVG 1.1, appendix F.6.5."""
+    x, y = (p - q) / 2
+    d2 = x * x + y * y
+    r = max(r, math.sqrt(d2))
+    k = math.sqrt(max(0.0, (r * r - d2) / d2)) * (-1 if large == sweep else 1)
+    middle = np.array([k * y, -k * x]) + (p + q) / 2
+    start, end = (math.atan2(*(point - middle)[::-1]) for point in (p, q))
+    turn = (end - start) % (2 * math.pi) if sweep else -((start - end) % (2 * math.pi))
+    angles = start + turn * np.linspace(0, 1, count + 1)[1:]
+    return middle + r * np.stack([np.cos(angles), np.sin(angles)], axis=1)
+
+
+def svg_runs(d):
+    """The runs of a path's data as arrays of points, y still downward."""
+    runs = []
+    for letter, numbers in re.findall(r"([MLACZ])([^MLACZ]*)", d):
+        v = np.array([float(n) for n in numbers.split()])
+        if letter == "M":
+            runs.append([v])
+            continue
+        at = runs[-1][-1]
+        if letter == "L":
+            runs[-1].append(v)
+        elif letter == "C":
+            runs[-1].extend(curve(at, v[:2], v[2:4], v[4:]))
+        elif letter == "A":
+            runs[-1].extend(arc(at, v[0], v[3], v[4], v[5:]))
+        else:
+            runs[-1].append(runs[-1][0])
+    return [np.array(run) for run in runs]
+
+
+class Svg:
+    """Marks of a plate's SVG, y up."""
+
+    def __init__(self, path):
+        root = tree.parse(path).getroot()
+        self.width, self.height = (float(v) for v in root.get("viewBox").split()[2:])
+        assert root.get("width") == f"{self.width:.4f}".rstrip("0").rstrip(".") + "mm"
+        self.strokes, self.fills, self.edge = [], [], None  # [(layer, width, runs)]
+        for group in root:
+            for mark in group:
+                runs = [np.array([0, self.height]) + run * [1, -1] for run in svg_runs(mark.get("d"))]
+                if mark.get("fill") == "none":
+                    self.strokes.append((group.get("id"), float(mark.get("stroke-width")), runs))
+                else:
+                    self.fills.append((group.get("id"), mark.get("d"), runs))
+                if group.get("id") == "cut" and (self.edge is None or np.ptp(runs[0], axis=0).prod() > np.ptp(self.edge, axis=0).prod()):
+                    self.edge = runs[0]
+
+
+def pdf_runs(path):
+    """For each page, its stroked runs in millimetres from the lower left corner."""
+    traced = tree.fromstring(subprocess.run(["mutool", "trace", path], check=True, capture_output=True).stdout)
+    for page in traced.iter("page"):
+        box = [float(v) for v in page.get("mediabox").split()]
+        pages = []
+        for stroke in page.iter("stroke_path"):
+            m = [float(v) for v in stroke.get("transform").split()]
+            runs = []
+            for step in stroke:
+                v = {key: float(value) for key, value in step.attrib.items()}
+                if step.tag == "moveto":
+                    runs.append([np.array([v["x"], v["y"]])])
+                elif step.tag == "lineto":
+                    runs[-1].append(np.array([v["x"], v["y"]]))
+                elif step.tag == "curveto":
+                    runs[-1].extend(curve(runs[-1][-1], *(np.array([v[f"x{i}"], v[f"y{i}"]]) for i in (1, 2, 3))))
+                else:
+                    runs[-1].append(runs[-1][0])
+            for run in runs:
+                points = np.array(run)
+                placed = np.stack([m[0] * points[:, 0] + m[2] * points[:, 1] + m[4], m[1] * points[:, 0] + m[3] * points[:, 1] + m[5]], axis=1)
+                pages.append((placed * [1, -1] + [0, box[3]]) * MM)
+        yield np.array(box[2:]) * MM, pages
+
+
+def segments_of(runs):
+    return np.concatenate([np.hstack([run[:-1], run[1:]]) for run in runs if len(run) > 1])
+
+
+def farthest(points, segments):
+    """The largest distance of any point from its nearest segment."""
+    a, d = segments[:, :2], segments[:, 2:] - segments[:, :2]
+    size = np.maximum((d**2).sum(axis=1), 1e-18)
+    worst = 0.0
+    for part in np.array_split(points, max(1, len(points) * len(segments) // 2_000_000)):
+        e = part[:, None, :] - a
+        t = np.clip((e * d).sum(axis=2) / size, 0, 1)
+        worst = max(worst, np.sqrt((((e - t[..., None] * d) ** 2).sum(axis=2)).min(axis=1)).max(initial=0.0))
+    return worst
+
+
+def along(line):
+    """A line's points, and more between them: one each 3 mm."""
+    points = [line[:1]]
+    for a, b in zip(line, line[1:]):
+        count = max(1, math.ceil(math.dist(a, b) / 3))
+        points.append(a + (b - a) * np.linspace(0, 1, count + 1)[1:, None])
+    return np.concatenate(points)
+
+
+def turned(points, degrees):
+    c, s = {0: (1, 0), 90: (0, 1), 180: (-1, 0)}[degrees]
+    return points @ np.array([[c, s], [-s, c]])
+
+
+def setting(design, key, checked):
+    """A print setting in mm: from the design, else as `check` says that it was taken."""
+    found = re.search(rf"(?m)^\s+{key}: ([\d./ ]+) (mm|in)", design.read_text()) or re.search(rf"print: {key}\s+([\d./ ]+) (mm|in)", checked)
+    value = sum(float(part.split("/")[0]) / float(part.split("/")[1]) if "/" in part else float(part) for part in found[1].split())
+    return value * (25.4 if found[2] == "in" else 1)
+
+
+class Packets(Bench):
+    def each(self):
+        for design in DESIGNS:
+            folder = self.folder / design.stem
+            status, out, err = run("make", design, "--to", folder)
+            self.assertIn(status, (FINE, WITH_WARNINGS), err)
+            yield design, folder, int(re.search(r": (\d+) sheets", out)[1]), strict_json((folder / "numbers.json").read_text())
+
+    @staticmethod
+    def svg_of(folder, name):
+        return Svg(folder / f"plate{'-' + name if name else ''}.svg")
+
+    def lines_on(self, svg, numbers, face, level):
+        """The drawn lines in the SVG's frame, from the plate's middle and the way that its reader faces."""
+        middle = (svg.edge.min(axis=0) + svg.edge.max(axis=0)) / 2
+        turn = 180 if level and numbers["site"]["latitude_deg"] < 0 else 0
+        return [middle + turned(np.array(line["points_mm"]) - face["plate"]["middle_mm"], turn) for line in face["hour_lines"] + face["date_lines"]]
+
+    def test_lines_in_svg_own_size_page_and_tiles(self):
+        for design, folder, sheets, numbers in self.each():
+            level = "kind: level" in design.read_text()
+            checked = run("check", design)[1]
+            pages = list(pdf_runs(folder / "sheets.pdf"))
+            outline = subprocess.run(["mutool", "show", folder / "sheets.pdf", "outline"], check=True, capture_output=True, text=True).stdout
+            titles = re.findall(r'(?m)^\S\s+"(.*?)"\s', outline)
+            self.assertEqual(len(titles), sheets)
+            faces = faces_of(numbers)
+            own_size = len(pages) - len(faces)
+            tile = next(i for i, title in enumerate(titles) if title.startswith("Sheet ")) if any(t.startswith("Sheet ") for t in titles) else own_size
+            for number, (name, face) in enumerate(faces):
+                svg = self.svg_of(folder, name)
+                lines = self.lines_on(svg, numbers, face, level)
+                points = np.concatenate([along(line) for line in lines])
+                with self.subTest(design.name, face=name, on="SVG"):
+                    drawn = [run for layer, _, runs in svg.strokes if layer == "engrave" for run in runs]
+                    self.assertLess(farthest(points, segments_of(drawn)), CLOSE_MM)
+                    for line in lines:  # and each as one run, from end to end
+                        self.assertTrue(any(max(math.dist(run[0], line[0]), math.dist(run[-1], line[-1])) < CLOSE_MM for run in drawn))
+                with self.subTest(design.name, face=name, on="own size"):
+                    size, runs = pages[own_size + number]
+                    edge = max(runs, key=lambda run: np.ptp(run, axis=0).prod() if np.abs(np.ptp(run, axis=0) - np.ptp(svg.edge, axis=0)).max() < 0.02 else 0)
+                    self.assertLess(np.abs(np.ptp(edge, axis=0) - np.ptp(svg.edge, axis=0)).max(), 0.02)
+                    shift = (edge.min(axis=0) + edge.max(axis=0)) / 2 - (svg.edge.min(axis=0) + svg.edge.max(axis=0)) / 2
+                    self.assertLess(farthest(points + shift, segments_of(runs)), CLOSE_MM)
+                tile = self.on_tiles(design, name, svg, points, pages, titles, tile, setting(design, "overlap", checked))
+
+    def on_tiles(self, design, name, svg, points, pages, titles, first, overlap):
+        """Rows from the top and columns from the left, each a step from the last; the whole about the work's middle."""
+        cells = []
+        for title in titles[first:]:
+            found = re.fullmatch(r"Sheet ([A-Z])(\d+)", title)
+            cell = found and (ord(found[1]) - ord("A"), int(found[2]) - 1)
+            if not cell or (cells and cell <= cells[-1]):
+                break
+            cells.append(cell)
+        last = first + len(cells)
+        if not cells:
+            return first
+        openings = [self.opening(runs) for _, runs in pages[first:last]]
+        left, bottom, width, height = openings[0]
+        rows, columns = (1 + max(cell[k] for cell in cells) for k in (0, 1))
+        whole = np.array([width + (columns - 1) * (width - overlap), height + (rows - 1) * (height - overlap)])
+        middle = np.array([svg.width, svg.height]) / 2
+        seen = {}
+        for turn in (0, 90):
+            worst, count = 0.0, 0
+            for (row, column), (_, runs) in zip(cells, pages[first:last]):
+                corner = np.array([column * (width - overlap), whole[1] - height - row * (height - overlap)])
+                placed = turned(points - middle, turn) + whole / 2 - corner + [left, bottom]
+                inside = ((placed > [left + 0.5, bottom + 0.5]) & (placed < [left + width - 0.5, bottom + height - 0.5])).all(axis=1)
+                count += inside.sum()
+                if inside.any():
+                    worst = max(worst, farthest(placed[inside], segments_of(runs)))
+            seen[turn] = (worst, count)
+        with self.subTest(design.name, face=name, on=f"tiles {titles[first]} to {titles[last - 1]}"):
+            worst, count = min(seen.values())
+            self.assertLess(worst, CLOSE_MM)
+            self.assertGreaterEqual(count, 0.9 * len(points))
+        return last
+
+    def opening(self, runs):
+        """The frame of a tile: the largest upright rectangle of five points."""
+        frames = [run for run in runs if len(run) in (5, 6) and np.allclose(run[0], run[4]) and all(min(abs(d)) < 1e-6 for d in np.diff(run[:5], axis=0))]
+        frame = max(frames, key=lambda run: np.ptp(run, axis=0).prod())
+        return (*frame.min(axis=0), *np.ptp(frame, axis=0))
+
+    def test_bars_pages_and_words(self):
+        for design, folder, sheets, numbers in self.each():
+            pdf = folder / "sheets.pdf"
+            with self.subTest(design.name):
+                done = subprocess.run(["qpdf", "--check", pdf], capture_output=True, text=True)
+                self.assertEqual(done.returncode, 0, done.stdout + done.stderr)
+                self.assertNotIn("WARNING", done.stdout + done.stderr)
+                document = fitz.open(pdf)
+                self.assertEqual(len(document), sheets)
+                preferences = document.xref_get_key(document.pdf_catalog(), "ViewerPreferences")[1]
+                self.assertRegex(preferences if "<<" in preferences else document.xref_object(int(preferences.split()[0])), r"/PrintScaling\s*/None")
+                fonts = subprocess.run(["pdffonts", pdf], capture_output=True, text=True).stdout.splitlines()[2:]
+                self.assertTrue(fonts)
+                for font in fonts:  # embedded, cut down, and with a way back to the words
+                    self.assertEqual(font.split()[-5:-2], ["yes", "yes", "yes"], font)
+            margin = setting(design, "margin", run("check", design)[1])
+            for number, (page, (size, runs)) in enumerate(zip(document, pdf_runs(pdf)), 1):
+                with self.subTest(design.name, page=number):
+                    words = " ".join(subprocess.run(["pdftotext", "-f", str(number), "-l", str(number), "-raw", pdf, "-"], capture_output=True, text=True).stdout.split())
+                    paper = re.search(r"Paper: (.*?), (?:[\d.]+ × [\d.]+ in \()?([\d.]+) × ([\d.]+) mm", words)
+                    self.assertIsNotNone(paper, words)
+                    # As said, in whole millimetres or tenths.
+                    self.assertLess(np.abs(np.sort(size) - np.sort([float(paper[2]), float(paper[3])])).max(), 0.51)
+                    self.assertIn(numbers["title"], words)
+                    self.assertIn("100 %", words)
+                    self.assertIn("fit to page", words)
+                    bars = [float(mm) for mm in re.findall(r"([\d.]+) mm(?: and [\d.]+ in)? from the middle", words)] or [100.0, 100.0]
+                    pieces = segments_of(runs)
+                    for axis, bar in zip((0, 1), bars):
+                        length = np.abs(pieces[:, 2 + axis] - pieces[:, axis])
+                        straight = np.abs(pieces[:, 3 - axis] - pieces[:, 1 - axis]) < 1e-4
+                        self.assertTrue((np.abs(length[straight] - bar) < 0.005).any(), f"no bar of {bar} mm along {'xy'[axis]}")
+                    picture = page.get_pixmap(matrix=fitz.Matrix(101.6 / 72, 101.6 / 72), colorspace=fitz.csGRAY)  # 4 dots a mm
+                    dots = np.frombuffer(picture.samples, dtype=np.uint8).reshape(picture.height, picture.stride)[:, :picture.width]
+                    inside = int(margin * 4) - 1
+                    dots = dots.copy()
+                    dots[inside:-inside, inside:-inside] = 255
+                    self.assertEqual(dots.min(), 255, "something is drawn beyond the printable area")
+
+
+if __name__ == "__main__":
+    unittest.main()
