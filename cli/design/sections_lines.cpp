@@ -44,7 +44,7 @@ void read_first_and_last(Hours& made, const Section& hours) {
     };
     made.first_h = hour("from");
     made.last_h = hour("to");
-    if (made.first_h && made.last_h && *made.first_h >= *made.last_h)
+    if (made.first_h && made.last_h && *made.first_h > *made.last_h)
         hours.error("to",
                     fmt::format("the hours end at {}, before they start at {}", hour_text(*made.last_h),
                                 hour_text(*made.first_h)),

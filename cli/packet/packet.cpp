@@ -39,7 +39,7 @@ const char* time_text(HourTime time) {
 std::string hours_text(const layout::Face& face) {
     double first = 24, last = 0;
     for (const layout::DrawnLine& line : face.lines)
-        if (line.family != Family::date) {
+        if (line.set == 0 && is_hour(line.family)) {
             first = std::min(first, line.time_h);
             last = std::max(last, line.time_h);
         }

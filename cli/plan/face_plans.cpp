@@ -74,7 +74,8 @@ std::string face_name(const Design& design, bool first_face) {
 
 HourPlan hour_plan(const Design& design) {
     const Hours& hours = design.hours;
-    return {hours.time, hours.first_h, hours.last_h, hours.divide_min, hours.curves, hours.reach, true};
+    const bool ring_time = hours.time == HourTime::sun || hours.time == HourTime::zone;
+    return {hours.time, hours.first_h, hours.last_h, ring_time ? hours.divide_min : 60, hours.curves, hours.reach, true};
 }
 
 HourPlan hour_plan(const MoreHours& more) {

@@ -14,12 +14,16 @@
 namespace dialwright::cli {
 namespace {
 
+bool counts_from_horizon(HourTime time) { return time != HourTime::sun && time != HourTime::zone && time != HourTime::clock; }
+
 struct LitHours {
     std::vector<double> hours; ///< quarter hours of the dial's own time
 };
 
 LitHours lit_hours(DialPlan plan, const MeanYear& year) {
     plan.nodus_height_mm = 1.0;
+    if (counts_from_horizon(plan.hours.time))
+        plan.hours.time = HourTime::sun;
     const auto caster = caster_of(plan);
     const Season season{-year.obliquity(), year.obliquity()};
     LitHours lit;
@@ -48,6 +52,47 @@ std::optional<DesignError> borders_without_field(const Design& design, const lay
     } catch (const std::invalid_argument& trouble) {
         return borders_error(design, trouble.what());
     }
+}
+
+/// Hours that the design asks for and that are never lit.
+void add_unlit_hours(std::vector<DesignError>& errors, const Design& design, const FacePlan& plan, const LitHours& lit, bool several_faces) {
+    const auto outside = [&](std::optional<double> hour) {
+        return hour && std::none_of(lit.hours.begin(), lit.hours.end(), [&](double h) { return std::abs(h - *hour) < 0.2501; });
+    };
+    const auto lit_between = [&](double first, double last) {
+        return std::any_of(lit.hours.begin(), lit.hours.end(), [&](double h) { return h >= first && h <= last; });
+    };
+    const std::string face = plan.name.empty() ? "this plate" : "the " + plan.name + " face";
+    const std::string lit_span = fmt::format("it is lit from {}", span_text(lit));
+    const auto& first = design.hours.first_h;
+    const auto& last = design.hours.last_h;
+    const auto never_at = [&](const char* key, double hour) {
+        errors.push_back(error_at(design, key, fmt::format("{} is never lit at {}", face, layout::time_label(hour)),
+                                  lit_span + "; leave the key out for all hours that are ever lit"));
+    };
+    if ((first || last) && !lit_between(first.value_or(0), last.value_or(24)))
+        errors.push_back(error_at(design, first ? "hours: from" : "hours: to",
+                                  fmt::format("{} is never lit between {} and {}", face, layout::time_label(first.value_or(0)), layout::time_label(last.value_or(24))),
+                                  lit_span));
+    else if (!several_faces && outside(first))
+        never_at("hours: from", *first);
+    else if (!several_faces && outside(last))
+        never_at("hours: to", *last);
+}
+
+/// Hours that count from the Sun's rising or setting, at a place where it does neither on any day.
+void add_missing_families(std::vector<DesignError>& errors, const Design& design, const DialPlan& dial, const MeanYear& year) {
+    for (int part = -50; part <= 50; ++part)
+        if (half_day_arc(dial.site.latitude, year.obliquity() * (part / 50.0), dial.horizon))
+            return;
+    const auto tell = [&](const std::string& key, HourTime time) {
+        if (counts_from_horizon(time))
+            errors.push_back(error_at(design, key, fmt::format("hours {} need a sunrise and a sunset, and at {} no day of the year has both", say_time(time), say_latitude(dial.site.latitude)),
+                                      "give sun, zone or clock"));
+    };
+    tell("hours: time", dial.hours.time);
+    for (const HourPlan& more : dial.more_hours)
+        tell(std::string{"also: "} + say_time(more.time), more.time);
 }
 
 } // namespace
@@ -91,21 +136,9 @@ std::vector<DesignError> what_cannot_be(const Design& design, const MeanYear& ye
                                       "check which way the plate faces and how it leans; the Sun passes on the other side"));
             continue;
         }
-        const auto outside = [&](std::optional<double> hour) { return hour && std::none_of(lit.hours.begin(), lit.hours.end(), [&](double h) { return std::abs(h - *hour) < 0.2501; }); };
-        const auto lit_between = [&](double first, double last) {
-            return std::any_of(lit.hours.begin(), lit.hours.end(), [&](double h) { return h >= first && h <= last; });
-        };
-        const std::string face = plan.name.empty() ? "this plate" : "the " + plan.name + " face";
-        if ((design.hours.first_h || design.hours.last_h) && !lit_between(design.hours.first_h.value_or(0), design.hours.last_h.value_or(24)))
-            errors.push_back(error_at(design, design.hours.first_h ? "hours: from" : "hours: to",
-                                      fmt::format("{} is never lit between {} and {}", face, layout::time_label(design.hours.first_h.value_or(0)), layout::time_label(design.hours.last_h.value_or(24))),
-                                      fmt::format("it is lit from {}", span_text(lit))));
-        else if (plans.size() == 1 && outside(design.hours.first_h) && design.hours.first_h != design.hours.last_h)
-            errors.push_back(error_at(design, "hours: from", fmt::format("{} is never lit at {}", face, layout::time_label(*design.hours.first_h)),
-                                      fmt::format("it is lit from {}; leave the key out for all hours that are ever lit", span_text(lit))));
-        else if (plans.size() == 1 && outside(design.hours.last_h))
-            errors.push_back(error_at(design, "hours: to", fmt::format("{} is never lit at {}", face, layout::time_label(*design.hours.last_h)),
-                                      fmt::format("it is lit from {}; leave the key out for all hours that are ever lit", span_text(lit))));
+        if (!counts_from_horizon(plan.dial.hours.time))
+            add_unlit_hours(errors, design, plan, lit, plans.size() > 1);
+        add_missing_families(errors, design, plan.dial, year);
     }
     if (!errors.empty()) {
         for (DesignError& error : what_cannot_be_lettered(design, ""))

@@ -82,6 +82,9 @@ template <Surface S> class Walk {
     static constexpr double k_dot_mm = 1e-6;
     static constexpr int k_halvings = 40;
     static constexpr int k_unseen = 0;
+    /// Casts for one path, some ten times what the hardest lines need. A path that runs in the horizon or in the plate's
+    /// own plane flickers between light and dark with every rounding; it is left at this.
+    static constexpr int k_most_casts = 40'000;
 
     struct Step {
         double at;
@@ -100,7 +103,8 @@ template <Surface S> class Walk {
     [[nodiscard]] static int state_of(const std::optional<Cast>& shadow) {
         return !shadow ? k_unseen : shadow->edge == Edge::left ? 1 : 2;
     }
-    [[nodiscard]] Step step(double t) const {
+    [[nodiscard]] Step step(double t) {
+        --casts_left_;
         auto shadow = cast(t);
         const bool inside = shadow && window_.contains(shadow->point);
         return {t, shadow, inside ? state_of(shadow) : k_unseen};
@@ -110,6 +114,8 @@ template <Surface S> class Walk {
 
     /// Draws from `a` to `b`; what is visible at `a` has been begun.
     void join(const Step& a, const Step& b, int depth) {
+        if (casts_left_ < 0)
+            return;
         if (a.state != b.state) {
             Step low = a, high = b;
             for (int i = 0; i < k_halvings; ++i) {
@@ -162,7 +168,7 @@ template <Surface S> class Walk {
     /// chords beside it, where it would lie farthest from a curve that bends both ways.
     void refine(const Step& a, const Step& middle, const Step& b, int depth) {
         constexpr int k_deepest = 26;
-        if (depth >= k_deepest) {
+        if (depth >= k_deepest || casts_left_ < 0) {
             lines_.back().push_back(b.cast->point);
             return;
         }
@@ -235,6 +241,7 @@ template <Surface S> class Walk {
     const PlateBox& window_;
     double tolerance_mm_;
     bool hills_;
+    int casts_left_ = k_most_casts;
     std::vector<PlatePolyline> lines_;
 };
 

@@ -21,9 +21,12 @@ std::vector<int> minutes_of(const HourPlan& plan) {
     const int end_of_scale = plan.time == HourTime::unequal ? 12 * 60 : 24 * 60;
     const int last = plan.last_h ? std::min(int(std::lround(*plan.last_h * 60)), end_of_scale) : end_of_scale - 1;
     std::vector<int> minutes;
-    for (int minute = 0; minute <= 24 * 60; minute += plan.divide_min)
-        if (minute >= first && minute <= last)
+    const bool from_horizon = family_of(plan.time) != Family::hour && family_of(plan.time) != Family::clock_hour;
+    for (int minute = 0; minute <= 24 * 60; minute += plan.divide_min) {
+        const bool horizon_itself = from_horizon && (minute == 0 || minute == end_of_scale);
+        if (minute >= first && minute <= last && !horizon_itself)
             minutes.push_back(minute);
+    }
     return minutes;
 }
 

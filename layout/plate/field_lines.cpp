@@ -2,13 +2,15 @@
 //
 // All lines but those of the chapter ring's own hours: dates, hours of other kinds, altitudes and azimuths, noons
 // elsewhere. A label runs along its line, beside it. It is put where it stands clear of every other line; where no such
-// place is long enough, on one that only hour lines cross, and these then stop for it, as an engraver would have them.
+// place is long enough, on one that only the ring's hour lines cross, or else on any; the lines then stop for it, as an
+// engraver would have them.
 #include "layout/plate/bench.hpp"
 #include "layout/plate/numerals.hpp"
 
 #include <algorithm>
 #include <cmath>
 #include <fmt/format.h>
+#include <map>
 
 namespace dialwright::layout {
 namespace {
@@ -60,7 +62,7 @@ struct LabelPlace {
 class FieldDrawer {
   public:
     explicit FieldDrawer(Bench& bench)
-        : bench_{bench}, cap_mm_{bench.spec.lettering.label_height_mm}, room_{room_of(bench)}, room_without_hours_{room_} {}
+        : bench_{bench}, cap_mm_{bench.spec.lettering.label_height_mm}, room_{room_of(bench)}, room_without_hours_{room_}, bare_room_{room_} {}
 
     void draw() {
         std::vector<const DialLine*> lines;
@@ -69,6 +71,7 @@ class FieldDrawer {
                 lines.push_back(&line);
         if (lines.empty())
             return;
+        find_parts();
         if (cap_mm_ > 0) {
             block_lines();
             for (const DialLine* line : lines)
@@ -77,9 +80,13 @@ class FieldDrawer {
             tell_unlabelled();
         }
         tell_close_dates(lines);
+        for (const DialLine& line : bench_.delineation.lines)
+            if (in_ring(line) && line.step_min >= 60)
+                for (const Polyline& part : on_field(line))
+                    straight_.push_back({&line, part});
         for (const DialLine* line : lines)
-            for (const Polyline& part : on_field(*line))
-                bench_.add_line(*line, part, label_of(*line), bench_.field_line_width(line->family));
+            draw(*line);
+        tell_shared();
     }
 
   private:
@@ -104,6 +111,7 @@ class FieldDrawer {
         }
         room_.measure();
         room_without_hours_.measure();
+        bare_room_.measure();
     }
 
     void place_label(const DialLine& line) {
@@ -113,6 +121,8 @@ class FieldDrawer {
         const bool in_the_clear = best.found;
         if (!best.found)
             best = search(line, text, room_without_hours_);
+        if (!best.found)
+            best = search(line, text, bare_room_);
         if (!best.found) {
             unlabelled_.push_back(label);
             return;
@@ -129,6 +139,49 @@ class FieldDrawer {
         }
     }
 
+    struct StraightPart {
+        const DialLine* line;
+        Polyline part;
+    };
+
+    /// A straight line that another family has drawn already is not cut twice.
+    void draw(const DialLine& line) {
+        for (const Polyline& part : on_field(line)) {
+            if (part.size() == 2) {
+                const auto same = std::find_if(straight_.begin(), straight_.end(), [&](const StraightPart& s) { return covers(s.part, part); });
+                if (same != straight_.end()) {
+                    shared_.push_back(fmt::format("\"{}\" and \"{}\"", label_of(line), label_of(*same->line)));
+                    continue;
+                }
+                straight_.push_back({&line, part});
+            }
+            for (const Polyline& piece : clipped(part, {{}, bench_.keep_out}))
+                bench_.add_line(line, piece, label_of(line), bench_.field_line_width(line.family));
+        }
+    }
+
+    /// Whether `part` lies along `whole`, within a hair, for all its length.
+    [[nodiscard]] static bool covers(const Polyline& whole, const Polyline& part) {
+        constexpr double k_hair_mm = 0.02;
+        if (whole.size() != 2 || distance(whole.front(), whole.back()) < k_hair_mm)
+            return false;
+        const Point along = unit(whole.back() - whole.front());
+        const double reach = distance(whole.front(), whole.back()) + 1.0;
+        return std::all_of(part.begin(), part.end(), [&](Point p) {
+            const double at = dot(p - whole.front(), along);
+            return std::abs(cross(along, p - whole.front())) < k_hair_mm && at > -1.0 && at < reach;
+        });
+    }
+
+    void tell_shared() {
+        if (shared_.empty())
+            return;
+        std::string all;
+        for (const std::string& pair : shared_)
+            all += (all.empty() ? "" : "; ") + pair;
+        bench_.warnings.push_back(fmt::format("one line serves for {}: it is cut once", all));
+    }
+
     /// Date lines that run closer together than the tool can cut.
     void tell_close_dates(const std::vector<const DialLine*>& lines) {
         std::vector<const DialLine*> dates;
@@ -143,17 +196,22 @@ class FieldDrawer {
                                                       dates[i]->label, dates[i + 1]->label, gap, wanted));
     }
 
-    [[nodiscard]] std::vector<Polyline> on_field(const DialLine& line) const {
-        std::vector<Polyline> parts;
-        for (const PlatePolyline& piece : line.pieces)
-            for (Polyline& part : clipped(bench_.to_work(piece), bench_.field()))
-                parts.push_back(std::move(part));
-        return parts;
+    /// A line's parts on the field, as they are before labels stand in their way.
+    [[nodiscard]] const std::vector<Polyline>& on_field(const DialLine& line) const { return parts_.at(&line); }
+
+    void find_parts() {
+        const Region field = bench_.field();
+        for (const DialLine& line : bench_.delineation.lines) {
+            std::vector<Polyline>& parts = parts_[&line];
+            for (const PlatePolyline& piece : line.pieces)
+                for (Polyline& part : clipped(bench_.to_work(piece), field))
+                    parts.push_back(std::move(part));
+        }
     }
 
     [[nodiscard]] double least_distance(const DialLine& a, const DialLine& b) const {
         double least = 1e300;
-        const auto parts_b = on_field(b);
+        const auto& parts_b = on_field(b);
         for (const Polyline& part_a : on_field(a))
             for (const Point& p : part_a)
                 for (const Polyline& part_b : parts_b)
@@ -241,9 +299,12 @@ class FieldDrawer {
 
     Bench& bench_;
     double cap_mm_;
-    ClearMap room_, room_without_hours_;
+    ClearMap room_, room_without_hours_, bare_room_;
     std::vector<TurnedBox> placed_;
     std::vector<std::string> unlabelled_;
+    std::map<const DialLine*, std::vector<Polyline>> parts_;
+    std::vector<StraightPart> straight_;
+    std::vector<std::string> shared_;
 };
 
 } // namespace

@@ -199,20 +199,32 @@ bool Region::contains(Point p) const {
 }
 
 std::vector<Polyline> clipped(const Polyline& line, const Region& region) {
+    Box reach;
+    for (const Point& p : line)
+        reach.add(p);
+    std::vector<const Outline*> outlines; // those that the line can meet
+    Region near;
+    near.inside = region.inside;
+    for (const Outline& outline : region.outside)
+        if (outline.box().meets(reach))
+            near.outside.push_back(outline);
+    for (const auto* list : {&near.inside, &near.outside})
+        for (const Outline& outline : *list)
+            outlines.push_back(&outline);
+
     std::vector<Polyline> kept;
     std::vector<double> t;
     bool drawing = false;
     for (std::size_t i = 0; i + 1 < line.size(); ++i) {
         const Point a = line[i], b = line[i + 1];
         t.assign({0.0, 1.0});
-        for (const auto* outlines : {&region.inside, &region.outside})
-            for (const Outline& outline : *outlines)
-                outline.crossings(a, b, t);
+        for (const Outline* outline : outlines)
+            outline->crossings(a, b, t);
         std::sort(t.begin(), t.end());
         for (std::size_t k = 0; k + 1 < t.size(); ++k) {
             if (t[k + 1] - t[k] < 1e-12)
                 continue;
-            if (!region.contains(between(a, b, (t[k] + t[k + 1]) / 2))) {
+            if (!near.contains(between(a, b, (t[k] + t[k + 1]) / 2))) {
                 drawing = false;
                 continue;
             }

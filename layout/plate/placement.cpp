@@ -175,7 +175,7 @@ class Placer {
         return all;
     }
 
-    /// Hours and dates that fall on the field, each counted by how far it stands from the hour before.
+    /// Hours and dates that fall on the field, each counted by how far it stands from the hour and the date before.
     [[nodiscard]] double field_score(const std::vector<UnitShadows>& shadows, Point foot, double height_mm) const {
         const double wanted_gap = 0.06 * size_mm();
         double score = 0;
@@ -187,7 +187,10 @@ class Placer {
                 double gap = wanted_gap;
                 if (i > 0 && k < shadows[i - 1].points.size())
                     gap = height_mm * std::hypot(p.u_mm - shadows[i - 1].points[k].u_mm, p.v_mm - shadows[i - 1].points[k].v_mm);
-                score += std::min(1.0, gap / wanted_gap);
+                double spread = wanted_gap; // from the date before on the same hour
+                if (k > 0)
+                    spread = height_mm * std::hypot(p.u_mm - shadows[i].points[k - 1].u_mm, p.v_mm - shadows[i].points[k - 1].v_mm);
+                score += std::min(1.0, gap / wanted_gap) * std::min(1.0, spread / wanted_gap);
             }
         return score;
     }
