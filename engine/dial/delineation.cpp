@@ -113,7 +113,7 @@ class Delineator {
 
     /// @return whether any Sun of the path lights the plate
     bool add_curve(DialLine& line, const SunPath& path) {
-        line.pieces = trace(caster_, path, window_);
+        line.pieces = pieces_of(path);
         if (!line.pieces.empty())
             return true;
         for (int i = 0; i <= path.steps; ++i)
@@ -127,18 +127,37 @@ class Delineator {
         if (!caster_.ever_lit(line.hour_angle, made_.season))
             return false;
         line.direction = hour_line_direction(made_.frame, made_.style, plan_.site.latitude, line.hour_angle);
-        SunPath path = extent == HourExtent::style ? hour_path_of_style(line.hour_angle)
-                                                   : hour_path_of_nodus(line.hour_angle, made_.season);
-        if (!caster_.edges().both_cast(line.hour_angle)) {
-            line.pieces = trace(caster_, path, window_);
-            return true;
-        }
-        for (const Edge edge : {Edge::left, Edge::right}) { // the two sides of the noon gap
+        const SunPath path = extent == HourExtent::style ? hour_path_of_style(line.hour_angle)
+                                                         : hour_path_of_nodus(line.hour_angle, made_.season);
+        line.pieces = pieces_of(path);
+        return true;
+    }
+
+    /// One set of pieces; where every Sun of the path stands in the gnomon's own plane one for each of its edges: the
+    /// two sides of the noon gap.
+    [[nodiscard]] std::vector<PlatePolyline> pieces_of(SunPath path) const {
+        if (!in_gnomon_plane(path))
+            return trace(caster_, path, window_);
+        std::vector<PlatePolyline> pieces;
+        for (const Edge edge : {Edge::left, Edge::right}) {
             path.edge = edge;
             for (PlatePolyline& piece : trace(caster_, path, window_))
-                line.pieces.push_back(std::move(piece));
+                pieces.push_back(std::move(piece));
         }
-        return true;
+        return pieces;
+    }
+
+    [[nodiscard]] bool in_gnomon_plane(const SunPath& path) const {
+        if (!(plan_.gnomon_thickness_mm > 0))
+            return false;
+        int there = 0;
+        for (const double part : {0.1, 0.37, 0.64, 0.91})
+            if (const auto sky = path.at(path.first + part * (path.last - path.first))) {
+                ++there;
+                if (!caster_.edges().both_cast(sky->hour_angle))
+                    return false;
+            }
+        return there > 0;
     }
 
     void add_noons() {
