@@ -127,8 +127,10 @@ class Delineator {
         if (!caster_.ever_lit(line.hour_angle, made_.season))
             return false;
         line.direction = hour_line_direction(made_.frame, made_.style, plan_.site.latitude, line.hour_angle);
-        const SunPath path = extent == HourExtent::style ? hour_path_of_style(line.hour_angle)
-                                                         : hour_path_of_nodus(line.hour_angle, made_.season);
+        SunPath path = extent == HourExtent::style ? hour_path_of_style(line.hour_angle)
+                                                   : hour_path_of_nodus(line.hour_angle, made_.season);
+        if (!caster_.edges().both_cast(line.hour_angle)) // one edge casts the hour, up to the pole, where its Sun tells no more
+            path.edge = caster_.edges().casting(line.hour_angle);
         line.pieces = pieces_of(path);
         return true;
     }
@@ -136,7 +138,7 @@ class Delineator {
     /// One set of pieces; where every Sun of the path stands in the gnomon's own plane one for each of its edges: the
     /// two sides of the noon gap.
     [[nodiscard]] std::vector<PlatePolyline> pieces_of(SunPath path) const {
-        if (!in_gnomon_plane(path))
+        if (path.edge || !in_gnomon_plane(path))
             return trace(caster_, path, window_);
         std::vector<PlatePolyline> pieces;
         for (const Edge edge : {Edge::left, Edge::right}) {
@@ -151,8 +153,8 @@ class Delineator {
         if (!(plan_.gnomon_thickness_mm > 0))
             return false;
         int there = 0;
-        for (const double part : {0.1, 0.37, 0.64, 0.91})
-            if (const auto sky = path.at(path.first + part * (path.last - path.first))) {
+        for (int i = 0; i <= path.steps; ++i) // most paths leave it at the first
+            if (const auto sky = path.at(path.first + (path.last - path.first) * i / path.steps)) {
                 ++there;
                 if (!caster_.edges().both_cast(sky->hour_angle))
                     return false;
