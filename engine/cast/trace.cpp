@@ -231,8 +231,9 @@ template <Surface S> class Walk {
 
     void drop_dots() {
         std::erase_if(lines_, [](const PlatePolyline& line) {
-            return line.size() < 2 || (line.size() == 2 && std::hypot(line[0].u_mm - line[1].u_mm,
-                                                                      line[0].v_mm - line[1].v_mm) < k_dot_mm);
+            return std::all_of(line.begin(), line.end(), [&line](PlatePoint p) {
+                return std::hypot(p.u_mm - line[0].u_mm, p.v_mm - line[0].v_mm) < k_dot_mm;
+            });
         });
     }
 

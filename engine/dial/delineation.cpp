@@ -116,7 +116,7 @@ class Delineator {
 
     /// @return whether any Sun of the path lights the plate
     bool add_curve(DialLine& line, const SunPath& path) {
-        line.pieces = trace(caster_, path, window_);
+        line.pieces = pieces_of(path);
         if (!line.pieces.empty())
             return true;
         for (int i = 0; i <= path.steps; ++i)
@@ -132,16 +132,37 @@ class Delineator {
         line.direction = hour_line_direction(made_.frame, made_.style, plan_.site.latitude, line.hour_angle);
         SunPath path = extent == HourExtent::style ? hour_path_of_style(line.hour_angle)
                                                    : hour_path_of_nodus(line.hour_angle, made_.season);
-        if (!caster_.edges().both_cast(line.hour_angle)) {
-            line.pieces = trace(caster_, path, window_);
-            return true;
-        }
-        for (const Edge edge : {Edge::left, Edge::right}) { // the two sides of the noon gap
+        if (!caster_.edges().both_cast(line.hour_angle)) // one edge casts the hour, up to the pole, where its Sun tells no more
+            path.edge = caster_.edges().casting(line.hour_angle);
+        line.pieces = pieces_of(path);
+        return true;
+    }
+
+    /// One set of pieces; where every Sun of the path stands in the gnomon's own plane one for each of its edges: the
+    /// two sides of the noon gap.
+    [[nodiscard]] std::vector<PlatePolyline> pieces_of(SunPath path) const {
+        if (path.edge || !in_gnomon_plane(path))
+            return trace(caster_, path, window_);
+        std::vector<PlatePolyline> pieces;
+        for (const Edge edge : {Edge::left, Edge::right}) {
             path.edge = edge;
             for (PlatePolyline& piece : trace(caster_, path, window_))
-                line.pieces.push_back(std::move(piece));
+                pieces.push_back(std::move(piece));
         }
-        return true;
+        return pieces;
+    }
+
+    [[nodiscard]] bool in_gnomon_plane(const SunPath& path) const {
+        if (!(plan_.gnomon_thickness_mm > 0))
+            return false;
+        int there = 0;
+        for (int i = 0; i <= path.steps; ++i) // most paths leave it at the first
+            if (const auto sky = path.at(path.first + (path.last - path.first) * i / path.steps)) {
+                ++there;
+                if (!caster_.edges().both_cast(sky->hour_angle))
+                    return false;
+            }
+        return there > 0;
     }
 
     void add_noons() {

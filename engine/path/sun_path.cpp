@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "engine/path/sun_path.hpp"
 
+#include <algorithm>
 #include <cmath>
 #include <numbers>
 
@@ -15,8 +16,11 @@ template <class HourAngle> SunPath day_arc_path(Angle latitude, const Season& se
         const auto arc = half_day_arc(latitude, declination, horizon);
         return arc ? std::optional<SkyPlace>{{hour_angle(*arc), declination}} : std::nullopt;
     };
-    path.first = season.least.in_radians();
-    path.last = season.greatest.in_radians();
+    // Only where the Sun rises and sets: near a pole that is a narrow part of the season, between two steps of the whole.
+    const Angle widest = Angle::degrees(90) - abs(latitude);
+    const Angle middle = latitude >= Angle{} ? horizon : -horizon;
+    path.first = std::clamp(middle - widest, season.least, season.greatest).in_radians();
+    path.last = std::clamp(middle + widest, season.least, season.greatest).in_radians();
     return path;
 }
 
@@ -105,7 +109,7 @@ SunPath altitude_path(Angle altitude, Angle latitude, const Season& season) {
 
 SunPath azimuth_path(Angle azimuth, Angle latitude, const Season& season) {
     SunPath path = site_path(latitude, season, [azimuth](Angle altitude) { return direction_at(azimuth, altitude); });
-    path.first = 0;
+    path.first = 1e-9; // not the horizon itself, where the Sun is not seen: in the far north it may leave the season close by
     path.last = std::numbers::pi / 2;
     path.great_circle = true;
     return path;

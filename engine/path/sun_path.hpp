@@ -41,8 +41,9 @@ struct Season {
 [[nodiscard]] SunPath hour_path_of_nodus(Angle hour_angle, const Season& season);
 
 /// The hour line of one hour angle, as the shadow of the whole style, in both directions beyond the nodus' own: every
-/// Sun of the hour's half circle, pole to pole, whether or not it comes there. The shadow of a point of the style that stands k times as far
-/// from the centre is k times as far from it too, so that this is the one half-line from the centre.
+/// Sun of the hour's half circle, pole to pole, whether or not it comes there. The shadow of a point of the style that
+/// stands k times as far from the centre is k times as far from it too, so that this is the one half-line from the
+/// centre.
 [[nodiscard]] SunPath hour_path_of_style(Angle hour_angle);
 
 /// The date line of one declination, through the whole turn of hour angles, from midnight to midnight.
@@ -53,8 +54,8 @@ struct Season {
 /// @param first_day, last_day  days of the mean year, last > first, at most a year apart; may pass the year's end
 [[nodiscard]] SunPath mean_time_path(Angle mean_hour_angle, const MeanYear& year, double first_day, double last_day);
 
-/// An hour counted from the Sun's rising (`from_rise` > 0°) or up to its setting (`from_set` < 0°, as an hour angle):
-/// the Suns of the season that stand that far from their own rising or setting. With the level horizon a great circle.
+/// An hour counted from the Sun's rising, or up to its setting: the Suns of the season that stand that far after their
+/// own rising, or before their own setting (1 h = 15°). With the level horizon a great circle.
 [[nodiscard]] SunPath rise_path(Angle from_rise, Angle latitude, const Season& season, Angle horizon);
 [[nodiscard]] SunPath set_path(Angle before_set, Angle latitude, const Season& season, Angle horizon);
 

@@ -23,14 +23,18 @@ class Skyline {
 
     [[nodiscard]] bool flat() const { return marks_.empty(); }
     [[nodiscard]] Angle altitude_at(Angle azimuth) const;
-    /// True where the Sun stands above the skyline. No refraction.
-    [[nodiscard]] bool sees(const SiteDirection& sun) const { return sun.enu.z() > highest_sine_ || clearance(sun) > 0; }
+    /// True where the Sun stands above the skyline. No refraction. A Sun on the skyline itself, as at every moment of the
+    /// hour 0 from sunrise, is not seen, however its sines round.
+    [[nodiscard]] bool sees(const SiteDirection& sun) const {
+        return sun.enu.z() > highest_sine_ + k_on_skyline || clearance(sun) > k_on_skyline;
+    }
     /// Sine of the Sun's altitude less that of the skyline beneath it: > 0 where the Sun is seen. No refraction.
     [[nodiscard]] double clearance(const SiteDirection& sun) const {
         return flat() ? sun.enu.z() : sun.enu.z() - sin(altitude_at(sun.azimuth()));
     }
 
   private:
+    static constexpr double k_on_skyline = 1e-12; // sine
     std::vector<Mark> marks_;
     double highest_sine_ = 0.0;
 };

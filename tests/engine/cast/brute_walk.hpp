@@ -33,7 +33,8 @@ class BruteWalk {
         bool alone = true; // the last seen shadow has no neighbour of its own edge: a point, as where light only grazes
         for (int i = 0; i <= steps; ++i) {
             const double at = path.first + (path.last - path.first) * (double(i) / steps);
-            const auto now = caster.cast(path.at(at), path.light, path.edge);
+            const auto sky = path.at(at);
+            const auto now = sky ? caster.cast(*sky, path.light, path.edge) : std::nullopt;
             const bool joined = now && before && now->edge == before->edge;
             if (before && window.contains(before->point) && !(alone && !joined))
                 seen_.push_back(before->point);

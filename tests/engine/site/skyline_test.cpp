@@ -42,7 +42,7 @@ TEST_CASE("What is seen is what stands clear", "[engine][site]") {
     for (double azimuth = 0; azimuth < 360; azimuth += 1)
         for (double height = -5; height < 40; height += 0.37) {
             const SiteDirection sun = direction_at(Angle::degrees(azimuth), Angle::degrees(height));
-            REQUIRE(skyline.sees(sun) == (skyline.clearance(sun) > 0));
+            REQUIRE(skyline.sees(sun) == (skyline.clearance(sun) > 1e-12));
             REQUIRE(Skyline{}.sees(sun) == (height > 0));
         }
 }
