@@ -95,6 +95,16 @@ void add_missing_families(std::vector<DesignError>& errors, const Design& design
         tell(std::string{"also: "} + say_time(more.time), more.time);
 }
 
+/// At what the maker chose that most likely threw the lines off.
+DesignError no_hours_error(const Design& design) {
+    constexpr const char* k_message = "no hour line falls on the plate";
+    if (design.plate.centre)
+        return error_at(design, "plate: centre", k_message, "move the centre nearer to the plate, or leave \"centre\" out");
+    if (design.gnomon.nodus_height_mm)
+        return error_at(design, "gnomon: nodus height", k_message, "give a lower nodus, or leave the key out and one that works is taken");
+    return error_at(design, "plate", k_message, "make the plate larger, or choose other hours");
+}
+
 } // namespace
 
 DesignError error_at(const Design& design, const std::string& key, std::string message, std::string hint) {
@@ -180,7 +190,7 @@ std::vector<DesignError> what_misses_the_plate(const Design& design, const std::
         for (const layout::DrawnLine& line : faces[i].lines)
             (line.family == Family::date ? dates : hours) = true;
         if (!hours)
-            errors.push_back(error_at(design, design.plate.centre ? "plate: centre" : "plate", "no hour line falls on the plate", "move the centre nearer to the plate, or leave \"centre\" out"));
+            errors.push_back(no_hours_error(design));
         const bool asked = !plans[i].dial.dates.lines.empty();
         const bool one_can_fall = std::any_of(plans[i].dial.dates.lines.begin(), plans[i].dial.dates.lines.end(), [&](const DatePlan::Line& line) {
             const bool equatorial = design.dial.kind == DialKind::equatorial; // an equinox line lies at infinity there

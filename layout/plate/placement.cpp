@@ -26,9 +26,12 @@ class Placer {
         : plan_{plan}, spec_{spec}, rings_{Rings::of(spec)}, season_{-year.obliquity(), year.obliquity()},
           caster_{caster_of(unit_plan(plan))},
           style_{style_of(caster_.surface().frame(), 1.0, plan.site.latitude)} {
+        // Hours that count from the Sun's rising or setting spread over the same shadows as the Sun's own hours do.
+        const Family family = family_of(plan.hours.time);
+        const bool own_hours = family == Family::hour || family == Family::clock_hour;
         for (int hour = 0; hour < 24; ++hour) {
-            const bool asked = (!plan.hours.first_h || hour >= *plan.hours.first_h) && (!plan.hours.last_h || hour <= *plan.hours.last_h);
-            const Angle angle = hour_angle_of(plan.hours.time, hour, plan.site, plan.zone_meridian);
+            const bool asked = !own_hours || ((!plan.hours.first_h || hour >= *plan.hours.first_h) && (!plan.hours.last_h || hour <= *plan.hours.last_h));
+            const Angle angle = hour_angle_of(own_hours ? plan.hours.time : HourTime::sun, hour, plan.site, plan.zone_meridian);
             if (asked && caster_.ever_lit(angle, season_))
                 hours_.push_back(angle);
         }
@@ -190,7 +193,7 @@ class Placer {
                 double spread = wanted_gap; // from the date before on the same hour
                 if (k > 0)
                     spread = height_mm * std::hypot(p.u_mm - shadows[i].points[k - 1].u_mm, p.v_mm - shadows[i].points[k - 1].v_mm);
-                score += std::min(1.0, gap / wanted_gap) * std::min(1.0, spread / wanted_gap);
+                score += std::min(1.0, gap / wanted_gap) * std::min(1.0, spread / wanted_gap) + 0.1 * (gap + spread) / size_mm();
             }
         return score;
     }

@@ -119,6 +119,14 @@ def farthest(points, segments):
     return worst
 
 
+def nearest(points, segments):
+    """The least distance of any point from any segment."""
+    a, d = segments[:, :2], segments[:, 2:] - segments[:, :2]
+    e = points[:, None, :] - a
+    t = np.clip((e * d).sum(axis=2) / np.maximum((d**2).sum(axis=1), 1e-18), 0, 1)
+    return np.sqrt(((e - t[..., None] * d) ** 2).sum(axis=2)).min()
+
+
 def along(line):
     """A line's points, and more between them: one each 3 mm."""
     points = [line[:1]]
@@ -225,6 +233,26 @@ class Packets(Bench):
         frames = [run for run in runs if len(run) in (5, 6) and np.allclose(run[0], run[4]) and all(min(abs(d)) < 1e-6 for d in np.diff(run[:5], axis=0))]
         frame = max(frames, key=lambda run: np.ptp(run, axis=0).prod())
         return (*frame.min(axis=0), *np.ptp(frame, axis=0))
+
+    def test_no_lettering_touches_a_line_or_other_lettering(self):
+        for design, folder, _, numbers in self.each():
+            for name, face in faces_of(numbers):
+                with self.subTest(design.name, face=name):
+                    svg = self.svg_of(folder, name)
+                    # What is filled and has curves is lettering; the noon mark and the like are straight.
+                    texts = [np.concatenate(runs) for layer, d, runs in svg.fills if layer == "engrave" and "C" in d]
+                    self.assertGreater(len(texts), 5)
+                    lines = [(width, segments_of(runs)) for layer, width, runs in svg.strokes if layer == "engrave"]
+                    for i, text in enumerate(texts):
+                        low, high = text.min(axis=0), text.max(axis=0)
+                        for width, pieces in lines:
+                            a, b = np.minimum(pieces[:, :2], pieces[:, 2:]), np.maximum(pieces[:, :2], pieces[:, 2:])
+                            near = pieces[((a <= high + 1) & (b >= low - 1)).all(axis=1)]
+                            if len(near):
+                                self.assertGreater(nearest(text, near), width / 2, f"lettering at {text.mean(axis=0).round(1)} mm touches a line")
+                        for other in texts[i + 1:]:
+                            if ((other.min(axis=0) <= high) & (other.max(axis=0) >= low)).all():
+                                self.assertGreater(np.sqrt(((text[:, None] - other) ** 2).sum(axis=2)).min(), 0.1, f"two letterings meet at {text.mean(axis=0).round(1)} mm")
 
     def test_bars_pages_and_words(self):
         for design, folder, sheets, numbers in self.each():
