@@ -74,6 +74,14 @@ void add_face(Json& out, const FacePlan& plan, const layout::Face& face) {
     }
 }
 
+/// [azimuth, altitude] of each mark; empty for the flat horizon.
+Json skyline_json(const Design& design) {
+    Json list = Json::array();
+    for (const Skyline::Mark& mark : design.place.skyline)
+        list.push_back(Json::array({number(mark.azimuth.in_degrees()), number(mark.altitude.in_degrees())}));
+    return list;
+}
+
 Json equation_json(const MeanYear& year) {
     Json list = Json::array();
     static constexpr unsigned k_days[] = {31, 29, 31, 30, 31, 30, 31, 31, 30, 31, 30, 31};
@@ -97,7 +105,9 @@ std::string numbers_json(const Commission& commission) {
     out["site"] = {{"latitude_deg", number(design.place.site.latitude.in_degrees())},
                    {"longitude_deg", number(design.place.site.longitude.in_degrees())},
                    {"zone", design.place.zone},
-                   {"zone_meridian_deg", number(commission.plans.front().dial.zone_meridian.in_degrees())}};
+                   {"zone_meridian_deg", number(commission.plans.front().dial.zone_meridian.in_degrees())},
+                   {"skyline_deg", skyline_json(design)}};
+    out["horizon_deg"] = number(commission.plans.front().dial.horizon.in_degrees());
     out["time"] = say_time(design.hours.time);
     out["years"] = {design.years.first, design.years.last};
     if (commission.faces.size() == 1) {

@@ -20,6 +20,12 @@ Outline inner_border(const Outline& from, double by_mm, const char* what) {
     return *made;
 }
 
+/// Of the map of free room: fine enough for the labels, no finer than the plate's size is worth.
+double cell_for(const FaceSpec& spec) {
+    const double size = std::max(spec.plate.width_mm, spec.plate.height_mm);
+    return std::max(0.5, std::min(size / 260, 0.4 * std::max(1.0, spec.lettering.label_height_mm)));
+}
+
 PlateBox window_of(const Outline& edge, Point foot) {
     const Box box = edge.box();
     return {box.left_mm - foot.x_mm, box.bottom_mm - foot.y_mm, box.right_mm - foot.x_mm, box.top_mm - foot.y_mm};
@@ -92,7 +98,7 @@ Rings Rings::of(const FaceSpec& spec) {
 Bench::Bench(const FaceSpec& face_spec, const Delineation& delineated, const Placement& placed)
     : spec{face_spec}, delineation{delineated}, foot{placed.foot}, rings{Rings::of(face_spec)},
       up{clockwise_from_up(face_spec.reader_up)}, lettering{face_spec.lettering.family},
-      clear{rings.divisions, std::max(0.5, std::max(face_spec.plate.width_mm, face_spec.plate.height_mm) / 260)} {
+      clear{rings.divisions, cell_for(face_spec)} {
     if (delineated.style.centre && has_style(face_spec.gnomon.kind)) {
         const Point at = layout::to_work(*delineated.style.centre, foot);
         if (rings.divisions.contains(at))

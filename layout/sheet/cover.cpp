@@ -111,7 +111,7 @@ void put_face(Flow& flow, const CoverFace& face) {
     label_width = std::min(label_width + 2.5, 0.45 * room);
     double y = top;
     for (const auto& [label, value] : face.numbers) {
-        const auto lines = wrapped(value, room - label_width, k_text_mm, false);
+        const auto lines = wrapped(value, room - label_width, k_text_mm, true);
         flow.note({column, y - row}, label, k_text_mm);
         for (const std::string& line : lines) {
             y -= row;
