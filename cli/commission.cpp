@@ -5,6 +5,7 @@
 #include "layout/lettering/lettering.hpp"
 
 #include <fmt/format.h>
+#include <future>
 #include <iostream>
 #include <stdexcept>
 
@@ -25,10 +26,15 @@ CommissionTaking take_commission(DesignReading reading) {
     if (!reading.design)
         return {std::nullopt, std::move(reading.errors)};
     Design& design = *reading.design;
-    MeanYear year{design.years.first, design.years.last};
+    // The Sun's mean year and the machine's list of fonts take the longest to have: at the same time.
+    auto sun = std::async(std::launch::async, [years = design.years] { return MeanYear{years.first, years.last}; });
+    auto unlettered = what_cannot_be_lettered(design, "");
+    MeanYear year = sun.get();
     std::vector<FacePlan> plans = face_plans(design, year);
     if (auto errors = what_cannot_be(design, year, plans); !errors.empty())
         return {std::nullopt, in_order(std::move(errors))};
+    if (!unlettered.empty())
+        return {std::nullopt, in_order(std::move(unlettered))};
     std::vector<layout::Face> faces;
     for (FacePlan& plan : plans) {
         try {

@@ -8,17 +8,22 @@
 
 namespace dialwright::layout {
 
-std::vector<Point> TurnedBox::corners() const {
+std::array<Point, 4> TurnedBox::corners() const {
     const Point x = {half_width_mm * cos(turn), half_width_mm * sin(turn)};
     const Point y = {-half_height_mm * sin(turn), half_height_mm * cos(turn)};
     return {middle - x - y, middle + x - y, middle + x + y, middle - x + y};
 }
 
 bool TurnedBox::overlaps(const TurnedBox& other) const {
+    // Nearly all boxes are far apart: told without roots and turns.
+    const Point apart = other.middle - middle;
+    const double reach = half_width_mm + half_height_mm + other.half_width_mm + other.half_height_mm;
+    if (dot(apart, apart) > reach * reach)
+        return false;
     const auto mine = corners(), theirs = other.corners();
     const auto apart_along = [&](Angle axis_turn) {
         const Point axis{cos(axis_turn), sin(axis_turn)};
-        const auto span = [&](const std::vector<Point>& points) {
+        const auto span = [&](const std::array<Point, 4>& points) {
             double low = 1e300, high = -1e300;
             for (const Point& p : points) {
                 low = std::min(low, dot(axis, p));

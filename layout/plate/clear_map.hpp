@@ -3,6 +3,7 @@
 
 #include "layout/plate/outline.hpp"
 
+#include <array>
 #include <vector>
 
 namespace dialwright::layout {
@@ -13,7 +14,7 @@ struct TurnedBox {
     double half_width_mm = 0.0, half_height_mm = 0.0;
     Angle turn; ///< anticlockwise
 
-    [[nodiscard]] std::vector<Point> corners() const;
+    [[nodiscard]] std::array<Point, 4> corners() const; ///< anticlockwise
     [[nodiscard]] bool overlaps(const TurnedBox& other) const;
 };
 

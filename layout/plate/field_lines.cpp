@@ -134,8 +134,10 @@ class FieldDrawer {
             grown.half_height_mm += 0.35 * cap_mm_;
             placed_.push_back(grown);
             bench_.clear.block(chunk);
-            if (!in_the_clear)
-                bench_.keep_out.push_back(Outline::polygon(grown.corners()));
+            if (in_the_clear)
+                continue;
+            const auto corners = grown.corners();
+            bench_.keep_out.push_back(Outline::polygon({corners.begin(), corners.end()}));
         }
     }
 
