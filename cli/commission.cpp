@@ -46,7 +46,7 @@ CommissionTaking take_commission(DesignReading reading) {
         }
         plan.dial.nodus_height_mm = faces.back().placement.nodus_height_mm;
     }
-    if (auto errors = what_misses_the_plate(design, plans, faces); !errors.empty())
+    if (auto errors = what_misses_the_plate(design, year, plans, faces); !errors.empty())
         return {std::nullopt, in_order(std::move(errors))};
     return {Commission{std::move(design), std::move(year), std::move(plans), std::move(faces)}, {}};
 }

@@ -94,6 +94,8 @@ std::string_view thickness_why(GnomonKind kind) {
 void fill_gnomon_and_cutting(Design& design, Filler& filler, double s) {
     Gnomon& gnomon = design.gnomon;
     filler.note_unless_given("gnomon: kind", "edge", "a plate of metal, whose top edge is the style");
+    static constexpr const char* k_nodi[] = {"notch", "ball", "tip", "hole"};
+    filler.note_unless_given("gnomon: nodus", k_nodi[static_cast<std::size_t>(gnomon.nodus)], "as such a gnomon commonly has it");
     filler.fill(gnomon.thickness_mm, "gnomon: thickness", 0.0, thickness_why(gnomon.kind));
     if (gnomon.kind == GnomonKind::edge)
         filler.note_unless_given("gnomon: holes", "0", "how it is fixed is the maker's choice");

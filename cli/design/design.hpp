@@ -20,6 +20,7 @@ using layout::Cutting;
 using layout::Gnomon;
 using layout::GnomonKind;
 using layout::LetteringChoice;
+using layout::NodusKind;
 using layout::Numerals;
 using layout::NumeralStand;
 using layout::Plate;

@@ -47,6 +47,7 @@ constexpr auto k_keys = std::to_array<KnownKey>({
 
     {"", "gnomon"},
     {"gnomon", "kind"},
+    {"gnomon", "nodus"},
     {"gnomon", "nodus height"},
     {"gnomon", "thickness"},
     {"gnomon", "foot"},

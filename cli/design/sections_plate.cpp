@@ -12,7 +12,8 @@ namespace dialwright::cli {
 
 namespace {
 
-constexpr std::array<Choice<PlateShape>, 4> k_shapes = {{{"round", PlateShape::round},
+constexpr std::array<Choice<PlateShape>, 5> k_shapes = {{{"round", PlateShape::round},
+                                                         {"oval", PlateShape::oval},
                                                          {"rectangle", PlateShape::rectangle},
                                                          {"octagon", PlateShape::octagon},
                                                          {"polygon", PlateShape::polygon}}};
@@ -42,6 +43,8 @@ std::string_view size_hint(PlateShape shape) {
         return "a round plate has a diameter, as in \"diameter: 360 mm\"";
     case PlateShape::rectangle:
         return "a rectangle has a width and a height, as in \"width: 400 mm\" and \"height: 300 mm\"";
+    case PlateShape::oval:
+        return "an oval has a width and a height, as in \"width: 400 mm\" and \"height: 300 mm\"";
     case PlateShape::octagon:
         return "an octagon is measured across its flats, as in \"across: 300 mm\"";
     case PlateShape::polygon:
@@ -131,10 +134,13 @@ void read_corners(Plate& made, const Section& plate) {
     made.height_mm = height;
 }
 
+/// Which shape's keys a plate is measured by: an oval has the sides of its rectangle.
+PlateShape measured_as(PlateShape shape) { return shape == PlateShape::oval ? PlateShape::rectangle : shape; }
+
 void read_size(Plate& made, const Section& plate) {
     const auto side = [&](std::string_view key) { return plate.length(key, k_smallest_plate_mm, k_largest_plate_mm); };
     for (const SizeKey& size : k_size_keys) {
-        if (size.shape != made.shape)
+        if (size.shape != measured_as(made.shape))
             plate.refuse({size.key}, fmt::format("\"{}\" does not go with the shape {}", size.key, name_of(made.shape)),
                          std::string{size_hint(made.shape)});
         else if (!plate.has(size.key))
@@ -142,7 +148,7 @@ void read_size(Plate& made, const Section& plate) {
     }
     if (made.shape == PlateShape::polygon) {
         read_corners(made, plate);
-    } else if (made.shape == PlateShape::rectangle) {
+    } else if (made.shape == PlateShape::rectangle || made.shape == PlateShape::oval) {
         made.width_mm = side("width").value_or(0.0);
         made.height_mm = side("height").value_or(0.0);
     } else {

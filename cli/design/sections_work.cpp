@@ -47,6 +47,36 @@ constexpr std::array<Choice<GnomonKind>, 5> k_gnomons = {{{"edge", GnomonKind::e
                                                          {"upright pin", GnomonKind::upright_pin},
                                                          {"disc", GnomonKind::disc}}};
 
+constexpr std::array<Choice<NodusKind>, 4> k_nodi = {
+    {{"notch", NodusKind::notch}, {"ball", NodusKind::ball}, {"tip", NodusKind::tip}, {"hole", NodusKind::hole}}};
+
+/// Which nodus a gnomon can bear; its first is the one that is taken where none is named.
+std::vector<NodusKind> nodi_of(GnomonKind kind) {
+    switch (kind) {
+    case GnomonKind::edge:
+        return {NodusKind::notch, NodusKind::ball, NodusKind::tip};
+    case GnomonKind::rod:
+        return {NodusKind::ball, NodusKind::notch, NodusKind::tip};
+    case GnomonKind::pin:
+    case GnomonKind::upright_pin:
+        return {NodusKind::tip, NodusKind::ball};
+    case GnomonKind::disc:
+        break;
+    }
+    return {NodusKind::hole};
+}
+
+void read_nodus(Design& design, const Section& gnomon) {
+    const std::vector<NodusKind> allowed = nodi_of(design.gnomon.kind);
+    design.gnomon.nodus = gnomon.choice<NodusKind>("nodus", k_nodi).value_or(allowed.front());
+    if (std::find(allowed.begin(), allowed.end(), design.gnomon.nodus) != allowed.end())
+        return;
+    std::string words;
+    for (const NodusKind one : allowed)
+        words += std::string{words.empty() ? "" : " or "} + std::string{k_nodi[static_cast<std::size_t>(one)].first};
+    gnomon.error("nodus", "this gnomon has no such nodus", fmt::format("give {}", words));
+}
+
 /// Which gnomons go with which dials, and which keys with which gnomons.
 void check_gnomon_kind(const Design& design, const Section& gnomon) {
     const GnomonKind kind = design.gnomon.kind;
@@ -104,6 +134,7 @@ void read_gnomon(Design& design, const Section& top) {
     const Section gnomon{top.entry("gnomon"), "gnomon", top.state()};
     Gnomon& made = design.gnomon;
     made.kind = gnomon.choice<GnomonKind>("kind", k_gnomons).value_or(made.kind);
+    read_nodus(design, gnomon);
     if (const auto mm = gnomon.length("nodus height", 1.0, k_largest_plate_mm))
         made.nodus_height_mm = *mm;
     length_into(made.thickness_mm, gnomon, "thickness", 0.0, k_largest_plate_mm);

@@ -61,7 +61,8 @@ std::vector<std::pair<std::string, std::string>> key_numbers(const Commission& c
     rows.emplace_back("Style height", degrees_minutes(style.height));
     if (style.height < Angle::degrees(89.99))
         rows.emplace_back("Substyle", degrees_minutes(style.substyle) + " clockwise from " + (design.dial.kind == DialKind::level ? "north" : "up"));
-    rows.emplace_back("Nodus", say_length(face.placement.nodus_height_mm, inches) + " above the plate");
+    static constexpr const char* k_nodi[] = {"notch", "ball", "tip", "hole"};
+    rows.emplace_back("Nodus", std::string{k_nodi[static_cast<std::size_t>(design.gnomon.nodus)]} + ", " + say_length(face.placement.nodus_height_mm, inches) + " above the plate");
     if (commission.plans[i].dial.gnomon_thickness_mm > 0)
         rows.emplace_back("Gnomon", say_length(commission.plans[i].dial.gnomon_thickness_mm, inches) + " thick");
     rows.emplace_back("Shows", time_text(design.hours.time));

@@ -183,7 +183,7 @@ std::vector<DesignError> what_cannot_be_lettered(const Design& design, const std
     return errors;
 }
 
-std::vector<DesignError> what_misses_the_plate(const Design& design, const std::vector<FacePlan>& plans, const std::vector<layout::Face>& faces) {
+std::vector<DesignError> what_misses_the_plate(const Design& design, const MeanYear& year, const std::vector<FacePlan>& plans, const std::vector<layout::Face>& faces) {
     std::vector<DesignError> errors;
     for (std::size_t i = 0; i < faces.size(); ++i) {
         bool hours = false, dates = false;
@@ -196,9 +196,14 @@ std::vector<DesignError> what_misses_the_plate(const Design& design, const std::
             const bool equatorial = design.dial.kind == DialKind::equatorial; // an equinox line lies at infinity there
             return !equatorial || std::abs(line.declination.in_degrees()) > 0.5;
         });
-        if (asked && one_can_fall && !dates && design.gnomon.nodus_height_mm)
-            errors.push_back(error_at(design, "gnomon: nodus height", fmt::format("a nodus {} above the plate throws every date line off it", say_length(*design.gnomon.nodus_height_mm, false)),
-                                      "give a lower nodus, or leave the key out and the highest that works is taken"));
+        if (asked && one_can_fall && !dates && design.gnomon.nodus_height_mm) {
+            DialPlan free = plans[i].dial;
+            free.nodus_height_mm = 0.0;
+            const double works = layout::place_on_plate(free, year, plans[i].spec).nodus_height_mm;
+            errors.push_back(error_at(design, "gnomon: nodus height",
+                                      fmt::format("a nodus {} above the plate throws every date line off it", say_length(*design.gnomon.nodus_height_mm, false)),
+                                      fmt::format("about {} would do; leave the key out, and it is taken", say_length(works, false))));
+        }
     }
     return errors;
 }

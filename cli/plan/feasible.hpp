@@ -29,6 +29,6 @@ namespace dialwright::cli {
 [[nodiscard]] std::vector<DesignError> what_cannot_be_lettered(const Design& design, const std::string& otherwise);
 
 /// What fell off the plate: no hour line on it; a given nodus that throws every date line off it.
-[[nodiscard]] std::vector<DesignError> what_misses_the_plate(const Design& design, const std::vector<FacePlan>& plans, const std::vector<layout::Face>& faces);
+[[nodiscard]] std::vector<DesignError> what_misses_the_plate(const Design& design, const MeanYear& year, const std::vector<FacePlan>& plans, const std::vector<layout::Face>& faces);
 
 } // namespace dialwright::cli

@@ -255,13 +255,16 @@ class FieldDrawer {
         const double sense = dot(whole_run, right) >= 0 ? 1.0 : -1.0; // reads to the reader's right
         LabelPlace place;
         const int chunks = std::max(2, int(std::ceil(2 * half / (1.5 * cap_mm_))));
-        const double off = side * ((0.5 + 0.45) * cap_mm_ + 0.7 * room.cell_mm());
+        // The base line's distance from the line; the ink reaches from below it (a p, a Q) to above the capitals.
+        const double gap = 0.45 * cap_mm_ + 0.7 * room.cell_mm();
+        const double base_off = side > 0 ? gap - text.ink.bottom_mm : -gap - text.ink.top_mm;
+        const double ink_middle = (text.ink.top_mm + text.ink.bottom_mm) / 2;
         double clearance = 1e300;
         std::vector<Point> bases;
         for (int i = 0; i < chunks; ++i) {
             const double from = s + sense * half * (2.0 * i / chunks - 1), to = s + sense * half * (2.0 * (i + 1) / chunks - 1);
             const Point a = rule.point(from), b = rule.point(to), along = unit(b - a);
-            const TurnedBox box{between(a, b, 0.5) + off * left_of(along), distance(a, b) / 2, cap_mm_ / 2, turn_of(along)};
+            const TurnedBox box{between(a, b, 0.5) + (base_off + ink_middle) * left_of(along), distance(a, b) / 2, text.ink.height_mm() / 2, turn_of(along)};
             clearance = std::min(clearance, room.clearance_mm(box));
             if (clearance < 0.3 * cap_mm_ || std::any_of(placed_.begin(), placed_.end(), [&](const TurnedBox& p) { return p.overlaps(box); }))
                 return;
@@ -269,7 +272,7 @@ class FieldDrawer {
         }
         const auto base = [&](double t) {
             const Point along = unit(rule.point(t + 0.01 * sense * half) - rule.point(t - 0.01 * sense * half));
-            return rule.point(t) + (off - cap_mm_ / 2) * left_of(along);
+            return rule.point(t) + base_off * left_of(along);
         };
         place.start = base(s - sense * half);
         place.middle = base(s);

@@ -136,8 +136,8 @@ void draw_compass(Bench& bench) {
         bench.warnings.push_back("no room for a compass mark");
         return;
     }
-    const LetteredLine letter = bench.lettering.line("N", 0.3 * radius);
-    const double reach = radius - letter.ink.height_mm() - 0.12 * radius;
+    const double letter_mm = 0.3 * radius;
+    const double reach = radius - 1.12 * letter_mm - 0.08 * radius;
     std::vector<Path> points;
     const auto ray = [&](double degrees, double reach_mm, double waist_mm) {
         const Point tip = best + reach_mm * clockwise_from_up(Angle::degrees(degrees));
@@ -150,11 +150,19 @@ void draw_compass(Bench& bench) {
     for (const double degrees : {0.0, 90.0, 180.0, 270.0})
         ray(degrees, degrees == 0 ? reach : 0.78 * reach, 0.2 * reach);
     bench.add_filled(std::move(points), "compass mark");
-    // The N stands beyond the north point, upright for the reader.
+    // The letters stand beyond the points, upright for the reader; the smaller ones only where they can be cut.
     const Point right{bench.up.y_mm, -bench.up.x_mm};
-    const Point middle = best + (reach + 0.12 * radius + letter.ink.height_mm() / 2) * Point{0, 1};
-    const Point at = middle - (letter.ink.left_mm + letter.ink.width_mm() / 2) * right - letter.ink.height_mm() / 2 * bench.up;
-    bench.add_filled(set_straight(letter, at, turn_of(right)), "compass mark N");
+    const auto letter = [&](const char* name, double degrees, double height, double from) {
+        const LetteredLine text = bench.lettering.line(name, height);
+        const Point middle = best + (from + 0.12 * radius + height / 2) * clockwise_from_up(Angle::degrees(degrees));
+        const Point at = middle - (text.ink.left_mm + text.ink.width_mm() / 2) * right - height / 2 * bench.up;
+        bench.add_filled(set_straight(text, at, turn_of(right)), std::string{"compass mark "} + name);
+    };
+    letter("N", 0, letter_mm, reach);
+    constexpr double k_least_letter_mm = 2.0;
+    if (0.6 * letter_mm >= k_least_letter_mm)
+        for (const auto& [name, degrees] : {std::pair{"E", 90.0}, {"S", 180.0}, {"W", 270.0}})
+            letter(name, degrees, 0.6 * letter_mm, 0.78 * reach);
     bench.clear.block(TurnedBox{best, 1.2 * radius, 1.2 * radius, Angle{}});
 }
 

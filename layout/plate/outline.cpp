@@ -19,6 +19,19 @@ double doubled_area(const std::vector<Point>& corners) {
     return sum;
 }
 
+/// An ellipse as so many sides that none leaves it by more than 2 µm.
+std::vector<Point> oval(double half_width_mm, double half_height_mm) {
+    constexpr double k_sagitta_mm = 0.002;
+    const double largest = std::max(half_width_mm, half_height_mm);
+    const int quarter = std::max(32, int(std::ceil(std::numbers::pi / 4 / std::acos(1 - k_sagitta_mm / largest))));
+    std::vector<Point> corners;
+    for (int i = 0; i < 4 * quarter; ++i) {
+        const double turn = i * std::numbers::pi / (2 * quarter);
+        corners.push_back({half_width_mm * std::cos(turn), half_height_mm * std::sin(turn)});
+    }
+    return corners;
+}
+
 std::vector<Point> octagon(double across_mm) {
     const double radius = across_mm / 2 / std::cos(std::numbers::pi / 8);
     std::vector<Point> corners;
@@ -54,6 +67,8 @@ Outline Outline::of(const Plate& plate) {
     switch (plate.shape) {
     case PlateShape::round:
         return round({}, w);
+    case PlateShape::oval:
+        return polygon(oval(w, h));
     case PlateShape::rectangle:
         return polygon({{-w, -h}, {w, -h}, {w, h}, {-w, h}});
     case PlateShape::octagon:

@@ -9,7 +9,7 @@ namespace dialwright::layout {
 
 /// What the maker says of the plate, apart from what the Sun draws on it. Lengths are millimetres.
 
-enum class PlateShape { round, rectangle, octagon, polygon };
+enum class PlateShape { round, oval, rectangle, octagon, polygon };
 struct PlatePointMm {
     double right_mm = 0.0, up_mm = 0.0;
 };
@@ -39,8 +39,12 @@ enum class GnomonKind {
 /// Pins and discs throw no style's shadow: hour lines then run no farther than the nodus' own shadow does.
 [[nodiscard]] constexpr bool has_style(GnomonKind kind) { return kind == GnomonKind::edge || kind == GnomonKind::rod; }
 
+/// What on the gnomon throws the point that the date lines are read by.
+enum class NodusKind { notch, ball, tip, hole };
+
 struct Gnomon {
     GnomonKind kind = GnomonKind::edge;
+    NodusKind nodus = NodusKind::notch;
     std::optional<double> nodus_height_mm;
     double thickness_mm = 0.0;
     std::optional<double> foot_mm; ///< length of the foot along the substyle, from the centre

@@ -156,8 +156,8 @@ std::vector<Row> rows_of(const Bench& bench) {
     if (!(bench.spec.summer_shift_h > 0))
         return {{at(0.5), bench.rings.outer, bench.rings.numerals, height, 0.0, "numeral"}};
     constexpr double k_border = 0.62;
-    return {{at(k_border / 2), bench.rings.outer, at(k_border), std::min(height, 0.8 * k_border * band), 0.0, "numeral"},
-            {at((1 + k_border) / 2), at(k_border), bench.rings.numerals, std::min(0.6 * height, 0.72 * (1 - k_border) * band),
+    return {{at(k_border / 2), bench.rings.outer, at(k_border), std::min(height, 0.66 * k_border * band), 0.0, "numeral"},
+            {at((1 + k_border) / 2), at(k_border), bench.rings.numerals, std::min(0.6 * height, 0.58 * (1 - k_border) * band),
              bench.spec.summer_shift_h, "summer numeral"}};
 }
 
