@@ -107,7 +107,7 @@ class Maker {
         Strut strut;
         strut.along_mm = x;
         strut.meets = {x, rod_.nodus.y_mm + (x - rod_.nodus.x_mm) * along_.y_mm / along_.x_mm};
-        if (x < start_.x_mm || x > tip_.x_mm - strut_diameter_)
+        if (x < (socket_ ? start_ : low_).x_mm || x > tip_.x_mm - strut_diameter_)
             refuse(fmt::format("a strut {:.1f} mm along the substyle stands clear of the rod, which ends over {:.1f} mm", x, tip_.x_mm));
         strut.above_mm = strut.meets.y_mm - plan_.diameter_mm / 2 / along_.x_mm;
         if (strut.above_mm < strut_diameter_)
