@@ -81,7 +81,7 @@ class Maker {
             front_top_ = {0, front};
             // The arc in the corner takes this much of both sides.
             const double tangent = std::tan((std::numbers::pi / 2 - plan_.style_height.in_radians()) / 2);
-            front_radius_ = std::min(plan_.rounding_mm, 0.8 * (front - base) / std::max(tangent, 1e-9));
+            front_radius_ = std::min(plan_.rounding_mm, 0.49 * (front - base) / std::max(tangent, 1e-9));
             style_start_ = front_top_ + front_radius_ * tangent * along_;
         }
         if (start_mm_ >= 0.8 * joint_.foot_mm)
@@ -183,6 +183,8 @@ class Maker {
             const Point down{0, -joint_.plate_thickness_mm};
             drawing.marks.push_back({Layer::guide, {polyline({Point{-8, 0} + down, face_end + down})}, k_thin_mm, false, "plate's back"});
         }
+        if (joint_.base_mm() > 0)
+            drawing.marks.push_back({Layer::guide, {rectangle({0, 0, joint_.foot_mm, joint_.base_mm()})}, k_thin_mm, false, "flange"});
         drawing.marks.push_back(dimension({nodus_.x_mm, 0}, nodus_, "dimension: nodus height " + say(nodus_.y_mm)));
         drawing.marks.push_back(cross_mark(Layer::guide, nodus_, 2.0, "nodus"));
         if (plan_.style_height > Angle::degrees(0.01)) {

@@ -79,7 +79,7 @@ Gauge gauge_of(const GaugePlan& plan) {
     Drawing drawing{"gauge", {}};
     drawing.marks.push_back({Layer::guide, {polyline({{-5, 0}, {shape.right_mm + 5, 0}})}, k_thin_mm, false, "face, along the base"});
     drawing.marks.push_back(cross_mark(Layer::guide, {}, 2.0, "centre"));
-    const double r = std::min(0.45 * edge, 60.0);
+    const double r = std::min(0.3 * edge, 40.0);
     drawing.marks.push_back({Layer::guide, {Path{shape.corner + Point{r, 0}, {ArcTo{shape.corner + r * Point{cos(plan.angle), sin(plan.angle)}, shape.corner, plan.angle}}, false}},
                              k_thin_mm, false, "angle " + degrees_minutes(plan.angle)});
     add_lettering(drawing, plan, shape);

@@ -79,11 +79,17 @@ class Maker {
         rod_.exposed_mm = plan_.exposed_mm > 0 ? plan_.exposed_mm : to_nodus + past;
         if (rod_.exposed_mm < to_nodus + plan_.bead_mm / 2 - 1e-9)
             refuse(fmt::format("the rod stands out {:.1f} mm, and its nodus is {:.1f} mm from the face along it", rod_.exposed_mm, to_nodus));
-        rod_.socket_mm = plan_.socket_mm > 0 ? plan_.socket_mm : std::min(through, 5 * plan_.diameter_mm);
-        if (!(rod_.socket_mm > 0))
-            refuse("the rod stands in the plate: give the plate's thickness");
+        // Deeper than this, and short of right through, the drill's edge breaks out behind.
+        const double blind = (plan_.plate_thickness_mm - 1.0 - plan_.diameter_mm / 2 * along_.x_mm) / along_.y_mm;
+        const double wanted = 5 * plan_.diameter_mm;
+        const double found = blind >= wanted || plan_.plate_thickness_mm == 0 ? wanted : through <= 1.2 * wanted ? through : blind;
+        rod_.socket_mm = plan_.socket_mm > 0 ? plan_.socket_mm : found;
         if (plan_.plate_thickness_mm > 0 && rod_.socket_mm > through + 1e-9)
             refuse(fmt::format("a socket {:.1f} mm deep leaves the plate, which the rod has crossed after {:.1f} mm", rod_.socket_mm, through));
+        through_ = plan_.plate_thickness_mm > 0 && rod_.socket_mm > through - 1e-6;
+        if (plan_.plate_thickness_mm > 0 && !through_ && rod_.socket_mm > blind + 1e-9)
+            refuse(fmt::format("a socket {:.1f} mm deep breaks out behind the plate: at most {:.1f} mm, or {:.1f} mm to go right through", rod_.socket_mm,
+                               std::max(blind, 0.0), through));
         const Point foot = rod_.nodus - to_nodus * along_;
         low_ = foot - rod_.socket_mm * along_;
         tip_ = foot + rod_.exposed_mm * along_;
@@ -176,6 +182,8 @@ class Maker {
         part.notes.push_back("The rod's axis is the style: hour lines are read by the middle of its shadow.");
         if (socket_ && plan_.style_height < Angle::degrees(80))
             part.notes.push_back("Clamp the jig with its centre line on the substyle and its bore's mark on the centre, and stop the drill at the socket's depth.");
+        if (through_ && plan_.style_height < Angle::degrees(89))
+            part.notes.push_back("The rod comes out behind the plate on the slant: file it flush, or leave it standing and pin it.");
         if (socket_ && plan_.style_height < k_skids)
             part.cautions.push_back("So flat a drill skids before it bites: spot-face the mouth with an end mill, or start with a short stiff drill in the jig; "
                                     "clamp plate and jig.");
@@ -189,7 +197,7 @@ class Maker {
     const RodPlan& plan_;
     RodGnomon rod_;
     Point along_, low_, tip_, start_;
-    bool socket_ = true;
+    bool socket_ = true, through_ = false;
     double strut_diameter_ = 0.0;
 };
 

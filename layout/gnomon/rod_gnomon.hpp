@@ -14,7 +14,7 @@ struct RodPlan {
     double diameter_mm = 0.0, plate_thickness_mm = 0.0;
     double exposed_mm = 0.0; ///< from the face (or the lower end) to the tip along the axis; found: the tip is the nodus
     double bead_mm = 0.0;    ///< diameter of a bead that shows the nodus; 0: the tip does
-    double socket_mm = 0.0;  ///< along the axis; found: through a plate that the rod crosses in five diameters, else five diameters
+    double socket_mm = 0.0;  ///< along the axis; found: five diameters, or right through where those would break out behind
     double strut_at_mm = 0.0; ///< along the substyle, of a strut beside the socket; 0: none
     double strut_diameter_mm = 0.0, strut_embedment_mm = 0.0;
     double jig_width_mm = 0.0, jig_guide_mm = 0.0; ///< of the drilling jig: across, and the drill's way through it

@@ -105,6 +105,8 @@ TEST_CASE("a rod that can't be made is refused in plain words", "[gnomon]") {
     plan = plan_of(40);
     plan.socket_mm = 60;
     CHECK_THROWS_WITH(rod_gnomon(plan), Contains("leaves the plate"));
+    plan.socket_mm = 37; // of 38.9 through
+    CHECK_THROWS_WITH(rod_gnomon(plan), Contains("breaks out behind the plate"));
     plan = plan_of(4);
     CHECK_THROWS_WITH(rod_gnomon(plan), Contains("use an edge gnomon"));
     plan = plan_of(40);
