@@ -13,7 +13,7 @@ namespace {
 
 constexpr double k_upright_mm = 1e-6;
 
-std::string letter(std::size_t i) { return i < 26 ? std::string(1, static_cast<char>('A' + i)) : fmt::format("{}", i + 1); }
+std::string letter(std::size_t i) { return i < 26 ? fmt::format("{}", static_cast<char>('A' + i)) : fmt::format("{}", i + 1); }
 
 double distance_to_side(Point p, Point a, Point b) {
     const double part = std::clamp(dot(p - a, b - a) / dot(b - a, b - a), 0.0, 1.0);
@@ -21,6 +21,12 @@ double distance_to_side(Point p, Point a, Point b) {
 }
 
 } // namespace
+
+std::string say_place(const BorderPlace& place, bool inches) {
+    const std::string along = say_length(place.along_mm, inches);
+    return place.way.empty() ? fmt::format("{} {} from the {}", place.side, along, place.from)
+                             : fmt::format("{} {} {} of the {}, straight across", place.side, along, place.way, place.from);
+}
 
 Datum::Datum(Outline border, std::string what) : border_{std::move(border)}, what_{std::move(what)} {
     if (border_.is_round()) {
@@ -45,13 +51,13 @@ void Datum::name_corners() {
                          same(corners_[2].x_mm, corners_[3].x_mm) && same(corners_[3].y_mm, corners_[0].y_mm);
     static constexpr const char* k_names[] = {"lower left corner", "upper left corner", "upper right corner", "lower right corner"};
     for (std::size_t i = 0; i < corners_.size(); ++i)
-        marks_.push_back({upright_rectangle_ ? std::string{k_names[i]} : "corner " + letter(i), corners_[i]});
+        marks_.push_back({upright_rectangle_ ? std::string{k_names[i]} : fmt::format("corner {}", letter(i)), corners_[i]});
 }
 
 BorderPlace Datum::place_of(Point p) const {
     if (border_.is_round()) {
         const bool right = p.x_mm >= border_.centre().x_mm;
-        return {fmt::format("{}, {} of the top mark", what_, right ? "right" : "left"), "top mark", distance(p, marks_[1].at)};
+        return {what_, "top mark", right ? "right" : "left", distance(p, marks_[1].at)};
     }
     std::size_t nearest = 0;
     double least = 1e300;
@@ -62,11 +68,11 @@ BorderPlace Datum::place_of(Point p) const {
         }
     const std::size_t next = (nearest + 1) % corners_.size();
     if (!upright_rectangle_)
-        return {"side " + letter(nearest) + letter(next), marks_[nearest].name, distance(p, corners_[nearest])};
+        return {fmt::format("side {}{}", letter(nearest), letter(next)), marks_[nearest].name, "", distance(p, corners_[nearest])};
     // Level sides from the left, upright ones from below.
     static constexpr const char* k_sides[] = {"left", "top", "right", "bottom"};
     const std::size_t from = nearest >= 2 ? next : nearest;
-    return {fmt::format("{} {}", k_sides[nearest], what_), marks_[from].name, distance(p, corners_[from])};
+    return {fmt::format("{} {}", k_sides[nearest], what_), marks_[from].name, "", distance(p, corners_[from])};
 }
 
 std::vector<Datum::NamedPoint> Datum::pair_of_marks() const {

@@ -10,10 +10,14 @@ namespace dialwright::layout {
 
 /// Where a point of a border is, for a rule laid along it.
 struct BorderPlace {
-    std::string side;       ///< "top edge", "side BC", "edge, left of the top mark"
+    std::string side;       ///< "top edge", "side BC", "edge" of a round plate
     std::string from;       ///< "upper left corner", "corner B", "top mark"
+    std::string way;        ///< on a round border "left" or "right" of the mark
     double along_mm = 0.0;  ///< along the side; on a round border straight across (the chord that dividers take)
 };
+
+/// "top edge 214.3 mm from the upper left corner"; "edge 96.0 mm left of the top mark, straight across".
+[[nodiscard]] std::string say_place(const BorderPlace& place, bool inches);
 
 /// A border with the names that a mason measures by: on an upright rectangle its sides and corners, on another polygon
 /// letters clockwise from the corner at the lower left, on a round border its top mark. Points are as the reader sees the plate.

@@ -55,8 +55,8 @@ struct SeenLine {
 class Setter {
   public:
     Setter(const Face& face, const FaceSpec& spec, const SettingOutOptions& options)
-        : face_{face}, options_{options}, turn_{spec.reader_up, {}, 1.0, 1.0, false}, datum_{datum_of(spec, options.border, turn_)} {
-        lay_pole(spec);
+        : face_{face}, options_{options}, spec_up_{spec.reader_up}, turn_{spec.reader_up, {}, 1.0, 1.0, false}, datum_{datum_of(spec, options.border, turn_)} {
+        lay_poles(spec);
         gather_lines();
         lay_zero_line();
     }
@@ -77,14 +77,37 @@ class Setter {
   private:
     [[nodiscard]] Point seen(PlatePoint p) const { return turn_(to_work(p, face_.placement.foot)); }
 
-    void lay_pole(const FaceSpec& spec) {
-        const auto& centre = face_.delineation.style.centre;
-        radial_ = centre && has_style(spec.gnomon.kind) && datum_.border().contains(seen(*centre));
-        pole_ = radial_ ? seen(*centre) : seen({});
+    /// The centre; and where the gnomon is thick, the centres of the two half-dials, half its thickness to either side.
+    void lay_poles(const FaceSpec& spec) {
+        const Style& style = face_.delineation.style;
+        radial_ = style.centre && has_style(spec.gnomon.kind) && datum_.border().contains(seen(*style.centre));
+        const Point pole = radial_ ? seen(*style.centre) : seen({});
+        poles_ = {{radial_ ? "dial's centre" : "nodus' foot", pole}};
+        if (radial_ && spec.gnomon.kind == GnomonKind::edge && spec.gnomon.thickness_mm > 0 && style.height < Angle::degrees(89.99)) {
+            const Point side = spec.gnomon.thickness_mm / 2 * left_of(clockwise_from_up(style.substyle - spec_up_));
+            const bool level = std::abs(side.x_mm) > 0.2 * std::abs(side.y_mm);
+            const bool first = level ? side.x_mm < 0 : side.y_mm > 0;
+            poles_.push_back({level ? "left centre" : "upper centre", first ? pole + side : pole - side});
+            poles_.push_back({level ? "right centre" : "lower centre", first ? pole - side : pole + side});
+        }
         out_.inches = options_.inches;
         out_.datum = datum_.name_of_origin();
-        out_.pole = radial_ ? "dial's centre" : "nodus' foot";
-        out_.pole_at = pole_ - datum_.origin();
+        for (const Datum::NamedPoint& at : poles_)
+            out_.poles.push_back({at.name, at.at - datum_.origin()});
+    }
+
+    /// The centre of its own half-dial that a straight line runs from: of those on the line, the nearest to it.
+    [[nodiscard]] std::size_t pole_of(const SeenLine& line) const {
+        std::size_t own = 0;
+        double nearest = 1e300;
+        const Point along = unit(line.points.back() - line.points.front());
+        for (std::size_t i = 1; line.straight() && i < poles_.size(); ++i)
+            if (std::abs(cross(along, poles_[i].at - line.points.front())) < 1e-6)
+                if (const double off = distance(poles_[i].at, line.points.front()); off < nearest) {
+                    nearest = off;
+                    own = i;
+                }
+        return own;
     }
 
     void gather_lines() {
@@ -94,7 +117,7 @@ class Setter {
             SeenLine made{&line, name_of_family(line.family) + line.label, {}};
             for (const PlatePoint& p : line.points)
                 made.points.push_back(seen(p));
-            if (made.straight() && distance(made.points.front(), pole_) > distance(made.points.back(), pole_))
+            if (made.straight() && distance(made.points.front(), poles_[0].at) > distance(made.points.back(), poles_[0].at))
                 std::reverse(made.points.begin(), made.points.end());
             lines_.push_back(std::move(made));
         }
@@ -104,12 +127,12 @@ class Setter {
     void lay_zero_line() {
         double up = 0, nearest = 1e300;
         for (const SeenLine& line : lines_) {
-            up += line.points.back().y_mm - pole_.y_mm;
+            up += line.points.back().y_mm - poles_[0].at.y_mm;
             if (line.whole_hour())
-                nearest = std::min(nearest, distance(line.points.back(), pole_));
+                nearest = std::min(nearest, distance(line.points.back(), poles_[0].at));
         }
         zero_ = {0, up >= 0 ? 1.0 : -1.0};
-        out_.zero_line = fmt::format("straight {} from the {}", up >= 0 ? "up" : "down", out_.pole);
+        out_.zero_line = up >= 0 ? "straight up" : "straight down";
         out_.chord_radius_mm = options_.chord_radius_mm > 0 ? options_.chord_radius_mm : round_radius(nearest);
     }
 
@@ -122,9 +145,9 @@ class Setter {
         return found;
     }
 
-    [[nodiscard]] SettingOutPoint point(std::string line, std::string what, Point at) const {
-        SettingOutPoint made{std::move(line), std::move(what), at - datum_.origin(), {}, distance(at, pole_), {}, 0.0, 0.0};
-        const Point ray = at - pole_;
+    [[nodiscard]] SettingOutPoint point(std::string line, std::string what, Point at, std::size_t pole) const {
+        const Point ray = at - poles_[pole].at;
+        SettingOutPoint made{std::move(line), std::move(what), at - datum_.origin(), {}, poles_[pole].name, length(ray), {}, 0.0, 0.0};
         if (made.radius_mm > 1e-9)
             made.angle = (-arc_tangent(cross(zero_, ray), dot(zero_, ray))).signed_turn();
         made.chord_mm = 2 * out_.chord_radius_mm * std::abs(sin(made.angle / 2));
@@ -137,8 +160,8 @@ class Setter {
         const Point a = line.points.front(), b = line.points.back();
         if (!radial_)
             add_border_point(line, b, a);
-        out_.points.push_back(point(line.name, "inner end", a));
-        out_.points.push_back(point(line.name, "outer end", b));
+        out_.points.push_back(point(line.name, "inner end", a, pole_of(line)));
+        out_.points.push_back(point(line.name, "outer end", b, pole_of(line)));
         add_border_point(line, a, b);
     }
 
@@ -147,22 +170,22 @@ class Setter {
         const auto exit = datum_.border().exit(a, b - a);
         if (!exit || dot(exit->at - b, b - a) < 0)
             return; // the drawn end lies beyond the measured border already
-        SettingOutPoint made = point(line.name, "meets the border", exit->at);
+        SettingOutPoint made = point(line.name, "", exit->at, pole_of(line));
         made.border = datum_.place_of(exit->at);
         made.what = "meets the " + made.border->side;
         out_.points.push_back(std::move(made));
     }
 
     void add_curve(const SeenLine& line) {
-        out_.points.push_back(point(line.name, "first end", line.points.front()));
+        out_.points.push_back(point(line.name, "first end", line.points.front(), 0));
         for (const SeenLine& hour : lines_)
             if (hour.whole_hour() && hour.straight())
                 for (std::size_t i = 0; i + 1 < line.points.size(); ++i)
                     if (const auto at = crossing(line.points[i], line.points[i + 1], hour.points.front(), hour.points.back())) {
-                        out_.points.push_back(point(line.name, "on " + hour.name, *at));
+                        out_.points.push_back(point(line.name, "on " + hour.name, *at, pole_of(hour)));
                         break; // a curve crosses a ray from the centre once
                     }
-        out_.points.push_back(point(line.name, "last end", line.points.back()));
+        out_.points.push_back(point(line.name, "last end", line.points.back(), 0));
     }
 
     void add_holes(const std::vector<Mark>& marks) {
@@ -170,7 +193,7 @@ class Setter {
             if (mark.layer != Layer::drill || mark.paths.size() != 1 || mark.paths.front().pieces.size() != 1 || !mark.paths.front().closed)
                 continue;
             if (const auto* arc = std::get_if<ArcTo>(&mark.paths.front().pieces.front())) {
-                SettingOutPoint made = point(mark.name, "drill", arc->centre);
+                SettingOutPoint made = point(mark.name, "drill", arc->centre, 0);
                 made.diameter_mm = 2 * distance(arc->centre, mark.paths.front().start);
                 out_.holes.push_back(std::move(made));
             }
@@ -184,7 +207,7 @@ class Setter {
         for (const SettingOutPoint& p : out_.points)
             if (p.border && p.what.starts_with("meets the "))
                 if (const auto* seen_line = line_named(p.line); seen_line && seen_line->whole_hour())
-                    out_.checks.push_back(fmt::format("the {} line {} {} from the {}", seen_line->line->label, p.what, say(p.border->along_mm), p.border->from));
+                    out_.checks.push_back(fmt::format("the {} line meets the {}", seen_line->line->label, say_place(*p.border, options_.inches)));
         for (const SeenLine& line : lines_)
             if (line.whole_hour() && line.straight())
                 out_.checks.push_back(fmt::format("the outer end of the {} line is {} from the {} and {} from the {}", line.line->label,
@@ -199,10 +222,12 @@ class Setter {
 
     const Face& face_;
     const SettingOutOptions& options_;
+    Angle spec_up_;
     Placing turn_;
     Datum datum_;
     bool radial_ = false;
-    Point pole_, zero_;
+    std::vector<Datum::NamedPoint> poles_;
+    Point zero_;
     std::vector<SeenLine> lines_;
     SettingOut out_;
 };

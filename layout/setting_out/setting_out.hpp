@@ -23,8 +23,9 @@ struct SettingOutPoint {
     std::string what; ///< "inner end", "outer end", "meets the edge", "on hour line XI"
     Point at;         ///< mm right and up of the datum
     std::optional<BorderPlace> border; ///< where it lies on the measured border
+    std::string pole;       ///< that radius and angle are measured from; the own centre of an hour line
     double radius_mm = 0.0; ///< from the pole
-    Angle angle;            ///< about the pole, from its zero line, clockwise positive, in [−180°, 180°)
+    Angle angle;            ///< about the pole, from the zero line through it, clockwise positive, in [−180°, 180°)
     double chord_mm = 0.0;  ///< on the chord circle, from where the zero line meets it to where the radius does
     double diameter_mm = 0.0; ///< of a hole
 };
@@ -32,9 +33,10 @@ struct SettingOutPoint {
 struct SettingOut {
     bool inches = false;
     std::string datum;     ///< "lower left corner": where x and y begin
-    std::string pole;      ///< "dial's centre", or "nodus' foot" where the centre is off the plate
-    std::string zero_line; ///< "straight down from the dial's centre"
-    Point pole_at;         ///< from the datum
+    std::string zero_line; ///< "straight down": which way angles are measured from, at each pole
+    /// "dial's centre", and where the gnomon's thickness parts two half-dials their "left centre" and "right centre";
+    /// "nodus' foot" where the centre is off the plate. From the datum.
+    std::vector<Datum::NamedPoint> poles;
     double chord_radius_mm = 0.0;
     std::vector<SettingOutPoint> points; ///< line by line, as the face has them
     std::vector<SettingOutPoint> holes;
@@ -54,7 +56,7 @@ struct SettingOutTable {
 [[nodiscard]] SettingOutTable table_of_lines(const SettingOut& out);
 [[nodiscard]] SettingOutTable table_of_holes(const SettingOut& out);
 
-/// All points as CSV (RFC 4180 quoting, LF), the datum and the pole first. The same numbers as the tables, the angle in
+/// All points as CSV (RFC 4180 quoting, LF), the datum and the poles first. The same numbers as the tables, the angle in
 /// decimal degrees as well.
 [[nodiscard]] std::string csv_of(const SettingOut& out);
 

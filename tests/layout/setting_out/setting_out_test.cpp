@@ -41,8 +41,9 @@ TEST_CASE("hour lines meet an oblong plate's edge where another reckoning has th
     const Made made = made_faces::wall_oblong(0);
     const SettingOut out = set_out(made.face, made.spec, {});
     CHECK(out.datum == "lower left corner");
-    CHECK(out.pole == "dial's centre");
-    CHECK(out.zero_line == "straight down from the dial's centre");
+    REQUIRE(out.poles.size() == 1);
+    CHECK(out.poles[0].name == "dial's centre");
+    CHECK(out.zero_line == "straight down");
     int checked = 0;
     const Point corner{-250, -310};
     for (const DrawnLine& line : made.face.lines) {
@@ -75,13 +76,45 @@ TEST_CASE("radius, angle and chord lead to the same point as x and y", "[setting
         for (const SettingOutPoint& p : out.points) {
             const double a = p.angle.in_radians(), zero = down ? -1.0 : 1.0;
             // Clockwise from straight up or straight down.
-            const Point by_angle{out.pole_at.x_mm + zero * p.radius_mm * std::sin(a), out.pole_at.y_mm + zero * p.radius_mm * std::cos(a)};
+            const auto pole = std::find_if(out.poles.begin(), out.poles.end(), [&](const Datum::NamedPoint& named) { return named.name == p.pole; });
+            REQUIRE(pole != out.poles.end());
+            const Point by_angle{pole->at.x_mm + zero * p.radius_mm * std::sin(a), pole->at.y_mm + zero * p.radius_mm * std::cos(a)};
             CHECK(distance(by_angle, p.at) < 1e-9);
             // The chord joins two points of its circle.
             const double r = out.chord_radius_mm;
             const Point on_zero{0, zero * r}, on_ray{zero * r * std::sin(a), zero * r * std::cos(a)};
             CHECK_THAT(p.chord_mm, WithinAbs(distance(on_zero, on_ray), 1e-9));
         }
+    }
+}
+
+TEST_CASE("each hour line has one angle all along, from the centre of its own half-dial", "[setting out]") {
+    // Source: the classical forms (Waugh, Sundials: Their Theory and Construction, 1973; from memory). Level: tan X = sin φ tan H.
+    // Upright: cot X = (cos d cot H + sin d sin φ)/cos φ, d west of south positive.
+    const double rad = std::numbers::pi / 180, phi = 52.25 * rad, d = -23 * rad;
+    const auto level = made_faces::level_round(), wall = made_faces::wall_oblong();
+    for (const Made* made : {&level, &wall}) {
+        const SettingOut out = set_out(made->face, made->spec, {});
+        REQUIRE(out.poles.size() == 3);
+        CHECK_THAT(distance(out.poles[1].at, out.poles[2].at), WithinAbs(6, 1e-9));
+        CHECK(out.poles[1].at.x_mm < out.poles[2].at.x_mm);
+        int checked = 0;
+        for (const DrawnLine& line : made->face.lines) {
+            if (line.family != Family::hour || line.step_min < 60 || line.time_h >= 12)
+                continue;
+            const double h = (line.time_h - 12) * 15 * rad;
+            const double wanted = made == &level ? std::atan2(std::sin(phi) * std::sin(h), std::cos(h)) / rad
+                                                 : -std::atan2(std::cos(phi) * std::sin(h), std::cos(d) * std::cos(h) + std::sin(d) * std::sin(phi) * std::sin(h)) / rad;
+            for (const char* what : {"inner end", "outer end", "meets"}) {
+                const auto* p = find(out, "hour line " + line.label, what);
+                if (!p || (made == &level && line.time_h < 6))
+                    continue; // IV and V stand twice on a level dial
+                INFO(line.label << " " << what);
+                CHECK_THAT(p->angle.in_degrees(), WithinAbs(wanted, 1e-6));
+                ++checked;
+            }
+        }
+        CHECK(checked > 14);
     }
 }
 
@@ -95,7 +128,8 @@ TEST_CASE("on a round plate lines are measured by chords from the top mark", "[s
             REQUIRE(p.border);
             CHECK_THAT(length(p.at), WithinAbs(210, 1e-6));
             CHECK_THAT(p.border->along_mm, WithinAbs(std::hypot(p.at.x_mm, p.at.y_mm - 210), 1e-6));
-            CHECK(p.border->side == (p.at.x_mm >= 0 ? "edge, right of the top mark" : "edge, left of the top mark"));
+            CHECK(p.border->side == "edge");
+            CHECK(p.border->way == (p.at.x_mm >= 0 ? "right" : "left"));
             ++checked;
         }
     CHECK(checked > 20);
@@ -176,7 +210,7 @@ TEST_CASE("setting out is written in millimetres to a tenth or in sixty-fourths"
     const Made made = made_faces::wall_oblong();
     SettingOutOptions options;
     const std::string metric = csv_of(set_out(made.face, made.spec, options));
-    CHECK(metric.starts_with("line,point,x_mm,y_mm,border,from,along_mm,radius_mm,angle_deg,angle,chord_mm,diameter_mm\ndatum,lower left corner,0.0,0.0,"));
+    CHECK(metric.starts_with("line,point,x_mm,y_mm,border,from,along_mm,pole,radius_mm,angle_deg,angle,chord_mm,diameter_mm\ndatum,lower left corner,0.0,0.0,"));
     const auto lines = std::count(metric.begin(), metric.end(), '\n');
     options.inches = true;
     const SettingOut out = set_out(made.face, made.spec, options);
