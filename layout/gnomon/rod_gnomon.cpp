@@ -33,7 +33,7 @@ class Maker {
             drawing.marks.push_back({Layer::cut, {strut_outline(rod_.struts[i])}, k_cut_mm, false, fmt::format("strut {}", i + 1)});
         drawing.marks.push_back({Layer::cut, {bar_outline(low_, tip_, plan_.diameter_mm, !socket_, true)}, k_cut_mm, false, "rod"});
         if (plan_.bead_mm > 0)
-            drawing.marks.push_back({Layer::cut, {circle(rod_.nodus, plan_.bead_mm / 2)}, k_cut_mm, false, "bead"});
+            drawing.marks.push_back({Layer::guide, {circle(rod_.nodus, plan_.bead_mm / 2)}, k_thin_mm, false, "bead"});
         rod_.part.drawings.push_back(std::move(drawing));
         if (socket_)
             rod_.part.drawings.push_back(drilling_jig(plan_.style_height, plan_.diameter_mm, plan_.jig_width_mm, plan_.jig_guide_mm));
