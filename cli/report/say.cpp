@@ -3,35 +3,13 @@
 
 #include <cmath>
 #include <fmt/format.h>
-#include <numeric>
 
 namespace dialwright::cli {
 namespace {
 
-std::string unsigned_degrees_minutes(Angle angle) {
-    const double tenths = std::round(std::abs(angle.in_degrees()) * 600.0);
-    return fmt::format("{:.0f}° {:04.1f}'", std::floor(tenths / 600.0), std::fmod(tenths, 600.0) / 10.0);
-}
-
-std::string inch_text(double mm) {
-    const long sixty_fourths = std::lround(std::abs(mm) / 25.4 * 64);
-    const long whole = sixty_fourths / 64, left = sixty_fourths % 64;
-    std::string text = mm < 0 && sixty_fourths > 0 ? "-" : "";
-    if (whole > 0 || left == 0)
-        text += fmt::format("{}", whole);
-    if (left > 0) {
-        const long common = std::gcd(left, 64L);
-        text += fmt::format("{}{}/{}", whole > 0 ? " " : "", left / common, 64 / common);
-    }
-    return text + " in";
-}
+std::string unsigned_degrees_minutes(Angle angle) { return degrees_minutes(abs(angle)); }
 
 } // namespace
-
-std::string degrees_minutes(Angle angle) {
-    const std::string text = unsigned_degrees_minutes(angle);
-    return angle < Angle{} && text != "0° 00.0'" ? "-" + text : text;
-}
 
 std::string both_ways(Angle angle) { return fmt::format("{}° ({})", fixed(angle.in_degrees(), 4), degrees_minutes(angle)); }
 
@@ -66,11 +44,6 @@ std::string say_equation(Angle equation) {
         return "0 m 00 s";
     return fmt::format("{}{:.0f} m {:02.0f} s, dial {}", seconds < 0 ? "-" : "+", std::floor(size / 60), std::fmod(size, 60.0),
                        seconds < 0 ? "slow" : "fast");
-}
-
-std::string say_length(double mm, bool inches) {
-    const std::string metric = fixed(mm, 1) + " mm";
-    return inches ? fmt::format("{} ({})", metric, inch_text(mm)) : metric;
 }
 
 const char* say_time(HourTime time) {
@@ -122,13 +95,6 @@ const char* say_family(Family family) {
 std::string say_clock(double hours) {
     const long seconds = ((std::lround(hours * 3600) % 86400) + 86400) % 86400;
     return fmt::format("{:02}:{:02}:{:02}", seconds / 3600, seconds / 60 % 60, seconds % 60);
-}
-
-std::string fixed(double value, int decimals) {
-    std::string text = fmt::format("{:.{}f}", value, decimals);
-    if (text.starts_with('-') && text.find_first_not_of("-0.") == std::string::npos)
-        text.erase(0, 1);
-    return text;
 }
 
 } // namespace dialwright::cli

@@ -4,6 +4,7 @@
 #include "engine/base/angle.hpp"
 #include "engine/dial/delineation.hpp"
 #include "engine/surface/plate_frame.hpp"
+#include "layout/text/figures.hpp"
 
 #include <string>
 
@@ -11,8 +12,9 @@ namespace dialwright::cli {
 
 /// Numbers as people of the trade read them.
 
-/// "12° 27.3'"; with the sign before it where it is negative.
-[[nodiscard]] std::string degrees_minutes(Angle angle);
+using layout::degrees_minutes;
+using layout::fixed;
+using layout::say_length;
 /// "54.4500° (54° 27.0')".
 [[nodiscard]] std::string both_ways(Angle angle);
 /// "54° 27.0' N".
@@ -24,14 +26,10 @@ namespace dialwright::cli {
 [[nodiscard]] std::string say_attitude(const Attitude& attitude);
 /// "+3 m 39 s, dial fast".
 [[nodiscard]] std::string say_equation(Angle equation_of_time);
-/// "46.3 mm", or "46.3 mm (1 53/64 in)".
-[[nodiscard]] std::string say_length(double mm, bool inches);
 /// The trade's words for a kind of time and for a family of lines: "since sunrise", "altitude".
 [[nodiscard]] const char* say_time(HourTime time);
 [[nodiscard]] const char* say_family(Family family);
 /// "HH:MM:SS" of hours in the day, to the nearest second, 24 h as 00:00:00.
 [[nodiscard]] std::string say_clock(double hours);
-/// A fixed-point number for a file: no exponent, no "-0".
-[[nodiscard]] std::string fixed(double value, int decimals);
 
 } // namespace dialwright::cli

@@ -42,6 +42,25 @@ Bench& drawn(Bench& bench, double foot_mm, double nodus_height_mm) {
     return bench;
 }
 
+void report_unlit(const Delineation& delineation, std::vector<std::string>& warnings) {
+    if (!delineation.unlit_hours.empty()) {
+        std::string hours;
+        for (const double hour : delineation.unlit_hours)
+            hours += (hours.empty() ? "" : ", ") + time_label(hour);
+        warnings.push_back(fmt::format("never lit on this face, so left out: {}", hours));
+    }
+    if (!delineation.outside_hours.empty()) {
+        std::string hours;
+        for (const double hour : delineation.outside_hours)
+            hours += (hours.empty() ? "" : ", ") + time_label(hour);
+        warnings.push_back(fmt::format("lit, but their lines miss this plate: {}", hours));
+    }
+    for (const std::string& date : delineation.unlit_dates)
+        warnings.push_back(fmt::format("the line \"{}\" does not fall on this face, so it is left out", date));
+}
+
+} // namespace
+
 std::string name_of_family(Family family) {
     switch (family) {
     case Family::date:
@@ -66,25 +85,6 @@ std::string name_of_family(Family family) {
     }
     return "hour line ";
 }
-
-void report_unlit(const Delineation& delineation, std::vector<std::string>& warnings) {
-    if (!delineation.unlit_hours.empty()) {
-        std::string hours;
-        for (const double hour : delineation.unlit_hours)
-            hours += (hours.empty() ? "" : ", ") + time_label(hour);
-        warnings.push_back(fmt::format("never lit on this face, so left out: {}", hours));
-    }
-    if (!delineation.outside_hours.empty()) {
-        std::string hours;
-        for (const double hour : delineation.outside_hours)
-            hours += (hours.empty() ? "" : ", ") + time_label(hour);
-        warnings.push_back(fmt::format("lit, but their lines miss this plate: {}", hours));
-    }
-    for (const std::string& date : delineation.unlit_dates)
-        warnings.push_back(fmt::format("the line \"{}\" does not fall on this face, so it is left out", date));
-}
-
-} // namespace
 
 Rings Rings::of(const FaceSpec& spec) {
     const Outline edge = Outline::of(spec.plate);

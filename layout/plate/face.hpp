@@ -60,6 +60,9 @@ struct DrawnLine {
     std::vector<PlatePoint> points; ///< plate frame, mm, before the page is turned
 };
 
+/// What the name of a line of the family begins with: "hour line ", "date line ".
+[[nodiscard]] std::string name_of_family(Family family);
+
 /// One face, ready for paper.
 struct Face {
     std::string name;

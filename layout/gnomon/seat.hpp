@@ -1,0 +1,36 @@
+// SPDX-License-Identifier: MIT
+#pragma once
+
+#include "layout/plate/face.hpp"
+
+#include <optional>
+
+namespace dialwright::layout {
+
+/// Where a gnomon stands on its plate. The seat frame has its origin at `start`, x along the substyle, y to its left.
+struct GnomonSeat {
+    Point start; ///< of the gnomon's foot: the centre where it is on the field. Work frame, before the page is turned
+    Point along; ///< unit, along the substyle towards the nodus' foot
+    double foot_mm = 0.0;
+    double nodus_along_mm = 0.0, nodus_height_mm = 0.0;
+    double behind_mm = 0.0; ///< from the start back along the substyle to the plate's edge
+    Angle style_height;
+    bool centre_on_plate = false;
+};
+
+/// The seat of an edge or a rod, at the very place where the face's drawing has it. Where the centre is off the plate and
+/// no foot's length is given, the foot lies evenly beneath the nodus, one and a half times as long as that is high.
+/// @return nothing where the style stands square on the plate, or the gnomon has no style
+[[nodiscard]] std::optional<GnomonSeat> seat_of(const Face& face, const FaceSpec& spec);
+
+/// Marks of the seat frame on the face's drawing, turned for the reader as that is.
+[[nodiscard]] std::vector<Mark> on_plate(const std::vector<Mark>& marks, const GnomonSeat& seat, Angle reader_up);
+
+/// How long a style must be from the centre so that, at every whole hour on the plate, its shadow reaches from the
+/// centre to the field's border on every day on which the hour is lit. A shadow is never shorter than the style times the
+/// cosine of the obliquity, so this is at most 1.09 times the longest hour line.
+/// @param plan  as the face was drawn from
+/// @return 0 where the centre is off the plate
+[[nodiscard]] double least_style_mm(DialPlan plan, const Face& face, const FaceSpec& spec);
+
+} // namespace dialwright::layout

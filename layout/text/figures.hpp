@@ -1,0 +1,21 @@
+// SPDX-License-Identifier: MIT
+#pragma once
+
+#include "engine/base/angle.hpp"
+
+#include <string>
+
+namespace dialwright::layout {
+
+/// Numbers as people of the trade read them.
+
+/// A fixed-point number for a file: no exponent, no "-0".
+[[nodiscard]] std::string fixed(double value, int decimals);
+/// "12° 27.3'"; with the sign before it where it is negative.
+[[nodiscard]] std::string degrees_minutes(Angle angle);
+/// The length to the nearest 1/64 inch, as a rule shows it: "1 53/64", "-3/8", "0".
+[[nodiscard]] std::string sixty_fourths(double mm);
+/// "46.3 mm", or "46.3 mm (1 53/64 in)".
+[[nodiscard]] std::string say_length(double mm, bool inches);
+
+} // namespace dialwright::layout
