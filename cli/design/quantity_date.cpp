@@ -19,7 +19,7 @@ constexpr std::array<std::string_view, 12> k_months = {"January",   "February", 
                                                        "September", "October",  "November", "December"};
 constexpr const char* k_day_hint = "write it as in 14 June";
 constexpr const char* k_hour_hint = "write it as in 5:30 or 5 pm";
-constexpr int k_first_year = 1900, k_last_year = 2100;
+constexpr int k_first_year = 1901, k_last_year = 2099;
 
 bool same_letters(std::string_view lower, std::string_view name) {
     return lower.size() <= name.size() && std::equal(lower.begin(), lower.end(), name.begin(), [](char a, char b) {

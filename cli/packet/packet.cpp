@@ -9,6 +9,7 @@
 #include "layout/sheet/cover.hpp"
 
 #include <fmt/format.h>
+#include <future>
 
 namespace dialwright::cli {
 namespace {
@@ -177,7 +178,8 @@ Packet make_packet(const Commission& commission) {
     packet.cautions = cautions(commission.design);
     const layout::SheetBook book = book_of(commission, packet);
     packet.sheets = book.sheets.size();
-    packet.items.push_back({{"sheets.pdf", layout::pdf_of(book)}, "full-scale sheets: print this, and read its first page"});
+    auto pdf = std::async(std::launch::async, [&book] { return layout::pdf_of(book); }); // the longest: beside all others
+    packet.items.push_back({{"sheets.pdf", {}}, "full-scale sheets: print this, and read its first page"});
     for (std::size_t i = 0; i < commission.faces.size(); ++i) {
         const Drawing& drawing = commission.faces[i].drawing;
         packet.items.push_back({{"plate" + face_suffix(commission, i) + ".svg", layout::svg_of(drawing, layout::bounds_of(drawing))},
@@ -186,6 +188,7 @@ Packet make_packet(const Commission& commission) {
     packet.items.push_back({{"hour-lines.csv", hour_lines_csv(commission)}, "angles and ends of the hour lines"});
     packet.items.push_back({{"numbers.txt", numbers_text(commission)}, "all numbers, to read"});
     packet.items.push_back({{"numbers.json", numbers_json(commission)}, "all numbers, for programs"});
+    packet.items.front().file.bytes = pdf.get();
     return packet;
 }
 

@@ -11,12 +11,39 @@ namespace {
 
 using Json = nlohmann::ordered_json;
 
-/// To the millionth, never "-0"; null where there is no number.
+/// Null where there is no number.
 Json number(double value) {
     if (!std::isfinite(value))
         return nullptr;
-    return std::round(value * 1e6) / 1e6 + 0.0;
+    return value;
 }
+/// Numbers to the millionth, without exponents, "-0" or noise in the last digits; all else as the library writes it.
+void write(const Json& json, std::string& text) {
+    const auto write_list = [&](char open, char close, const auto& write_item) {
+        text += open;
+        for (auto item = json.begin(); item != json.end(); ++item) {
+            if (item != json.begin())
+                text += ',';
+            write_item(item);
+        }
+        text += close;
+    };
+    if (json.is_object()) {
+        write_list('{', '}', [&](const auto& item) {
+            text += Json(item.key()).dump() + ':';
+            write(item.value(), text);
+        });
+    } else if (json.is_array()) {
+        write_list('[', ']', [&](const auto& item) { write(*item, text); });
+    } else if (json.is_number_float()) {
+        std::string number = fixed(json.get<double>(), 6);
+        number.erase(number.find_last_not_of('0') + 1);
+        text += number.ends_with('.') ? number + '0' : number;
+    } else {
+        text += json.dump(-1, ' ', false, Json::error_handler_t::replace);
+    }
+}
+
 Json point(PlatePoint p) { return Json::array({number(p.u_mm), number(p.v_mm)}); }
 
 Json points(const std::vector<PlatePoint>& line) {
@@ -122,7 +149,9 @@ std::string numbers_json(const Commission& commission) {
         }
     }
     out["equation_of_time"] = equation_json(commission.year);
-    return out.dump(-1, ' ', false, Json::error_handler_t::replace) + "\n";
+    std::string text;
+    write(out, text);
+    return text + "\n";
 }
 
 std::string hour_lines_csv(const Commission& commission) {

@@ -62,7 +62,7 @@ struct LabelPlace {
 class FieldDrawer {
   public:
     explicit FieldDrawer(Bench& bench)
-        : bench_{bench}, cap_mm_{bench.spec.lettering.label_height_mm}, room_{room_of(bench)}, room_without_hours_{room_}, bare_room_{room_} {}
+        : bench_{bench}, cap_mm_{bench.spec.lettering.label_height_mm}, room_{room_of(bench)}, room_without_hours_{room_} {}
 
     void draw() {
         std::vector<const DialLine*> lines;
@@ -111,7 +111,15 @@ class FieldDrawer {
         }
         room_.measure();
         room_without_hours_.measure();
-        bare_room_.measure();
+    }
+
+    /// The field without any line; seldom wanted.
+    [[nodiscard]] const ClearMap& bare_room() {
+        if (!bare_room_) {
+            bare_room_ = room_of(bench_);
+            bare_room_->measure();
+        }
+        return *bare_room_;
     }
 
     void place_label(const DialLine& line) {
@@ -122,7 +130,7 @@ class FieldDrawer {
         if (!best.found)
             best = search(line, text, room_without_hours_);
         if (!best.found)
-            best = search(line, text, bare_room_);
+            best = search(line, text, bare_room());
         if (!best.found) {
             unlabelled_.push_back(label);
             return;
@@ -304,7 +312,8 @@ class FieldDrawer {
 
     Bench& bench_;
     double cap_mm_;
-    ClearMap room_, room_without_hours_, bare_room_;
+    ClearMap room_, room_without_hours_;
+    std::optional<ClearMap> bare_room_;
     std::vector<TurnedBox> placed_;
     std::vector<std::string> unlabelled_;
     std::map<const DialLine*, std::vector<Polyline>> parts_;

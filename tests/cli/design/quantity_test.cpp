@@ -228,7 +228,7 @@ TEST_CASE("hours, minutes, years, counts, yes and no", "[cli]") {
     CHECK(years("2027 to 2046")->first == 2027);
     CHECK(years("2027-2030")->last == 2030);
     CHECK(years("2027 – 2046")->last == 2046);
-    CHECK(years("1900 to 2099")->last == 2099);
+    CHECK(years("1904 to 2099")->last == 2099);
     check_refused(years, {"", "2027", "2027 to 2045", "2046 to 2027", "1899 to 1902", "2098 to 2101", "2027 to",
                           "to 2027", "2027.5 to 2031", "99999999999 to 2", "2027 to 2046 to 2050"});
     CHECK(*yes_or_no("yes"));
