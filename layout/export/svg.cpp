@@ -1,7 +1,8 @@
 // SPDX-License-Identifier: MIT
 #include "layout/export/svg.hpp"
 
-#include "layout/drawing/layers.hpp"
+#include "layout/drawing/machine_order.hpp"
+#include "layout/export/plain_number.hpp"
 #include "layout/sheet/export_error.hpp"
 
 #include <fmt/format.h>
@@ -13,30 +14,12 @@
 namespace dialwright::layout {
 namespace {
 
-/// The order that a machine works in, and that a reader sees from below upwards: guides first and under everything,
-/// what only marks the surface before what cuts it through.
-constexpr Layer k_order[] = {Layer::guide, Layer::fill, Layer::score, Layer::engrave, Layer::drill, Layer::cut};
-
-/// Writes one file's numbers: four decimals with idle zeros left off, never an exponent and never "-0".
+/// Writes one file: numbers with four decimals, y downwards from the frame's upper side.
 class SvgText {
   public:
-    explicit SvgText(const Box& frame) : frame_{frame} {}
+    SvgText(const Box& frame, const SvgOptions& options) : frame_{frame}, options_{options} {}
 
-    void number(double value) {
-        if (!std::isfinite(value) || std::abs(value) > 1e7) {
-            throw ExportError("A line of the drawing runs off to infinity, so no SVG was made.");
-        }
-        char digits[32];
-        char* end = fmt::format_to_n(digits, sizeof digits, "{:.4f}", value).out;
-        while (end[-1] == '0') {
-            --end;
-        }
-        if (end[-1] == '.') {
-            --end;
-        }
-        const std::string_view written{digits, static_cast<std::size_t>(end - digits)};
-        text_ += written == "-0" ? std::string_view{"0"} : written;
-    }
+    void number(double value) { add_number(text_, value, 4); }
     void point(Point p) {
         number(p.x_mm - frame_.left_mm);
         text_ += ' ';
@@ -53,6 +36,7 @@ class SvgText {
   private:
     void arc(Point start, const ArcTo& arc);
     Box frame_;
+    const SvgOptions& options_;
     std::string text_;
 };
 
@@ -103,7 +87,7 @@ void SvgText::mark(const Mark& mark) {
     if (mark.paths.empty()) {
         return;
     }
-    const Tone tone = tone_of(mark.layer);
+    const Tone tone = options_.layers[mark.layer].tone;
     const auto byte = [](double part) { return static_cast<int>(std::lround(part * 255)); };
     const std::string colour = fmt::format("#{:02x}{:02x}{:02x}", byte(tone.red), byte(tone.green), byte(tone.blue));
     text_ += "    <path d=\"";
@@ -115,17 +99,22 @@ void SvgText::mark(const Mark& mark) {
         return;
     }
     text_ += "\" fill=\"none\" stroke=\"" + colour + "\" stroke-width=\"";
-    number(mark.width_mm);
+    number(options_.hairline_mm.value_or(mark.width_mm));
     text_ += "\" stroke-linecap=\"butt\" stroke-linejoin=\"round\"/>\n";
 }
 
 } // namespace
 
-std::string svg_of(const Drawing& drawing, const Box& frame) {
+std::string svg_of(const Drawing& drawing, const Box& frame, const SvgOptions& options) {
+    options.layers.check();
+    if (options.hairline_mm && !(*options.hairline_mm > 0)) {
+        throw ExportError("A line of no width is not seen: the hairline of an SVG must be above 0 mm.");
+    }
     if (frame.empty() || frame.width_mm() <= 0 || frame.height_mm() <= 0) {
         throw ExportError("There is nothing to draw: the SVG's frame is empty.");
     }
-    SvgText svg{frame};
+    const Drawing ready = ready_for_machine(drawing, options.with_guides).drawing;
+    SvgText svg{frame, options};
     svg << "<?xml version=\"1.0\" encoding=\"UTF-8\"?>\n<svg xmlns=\"http://www.w3.org/2000/svg\" width=\"";
     svg.number(frame.width_mm());
     svg << "mm\" height=\"";
@@ -135,13 +124,13 @@ std::string svg_of(const Drawing& drawing, const Box& frame) {
     svg << " ";
     svg.number(frame.height_mm());
     svg << "\">\n";
-    for (const Layer layer : k_order) {
+    for (const Layer layer : k_machine_order) {
         const auto on_layer = [layer](const Mark& mark) { return mark.layer == layer; };
-        if (std::none_of(drawing.marks.begin(), drawing.marks.end(), on_layer)) {
+        if (std::none_of(ready.marks.begin(), ready.marks.end(), on_layer)) {
             continue;
         }
-        svg << "  <g id=\"" << name_of(layer) << "\">\n";
-        for (const Mark& mark : drawing.marks) {
+        svg << "  <g id=\"" << options.layers[layer].name << "\">\n";
+        for (const Mark& mark : ready.marks) {
             if (on_layer(mark)) {
                 svg.mark(mark);
             }

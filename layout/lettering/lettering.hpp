@@ -19,7 +19,8 @@ struct LetteringError : std::runtime_error {
 /// One letter of a line with the marks on it, or letters that the font joins in one; as outlines, its pen origin at
 /// (0, 0), base line along x. It is turned as one piece when it is set on a circle.
 struct Glyph {
-    std::vector<Path> outlines; ///< closed, lines and cubic curves; non-zero winding, outer contours anticlockwise
+    /// Closed, lines and cubic curves; non-zero winding, outer contours anticlockwise. Of StrokeLettering: open strokes.
+    std::vector<Path> outlines;
     double pen_x_mm = 0.0;      ///< where its origin stands on the base line
     double advance_mm = 0.0;    ///< without the tracking
 };

@@ -27,10 +27,10 @@ class RandomDesign {
     explicit RandomDesign(unsigned seed) : random_{seed} {}
 
     std::string text() {
-        std::string text = place(); // one after the other: the plate's size bounds what follows
+        std::string text = place() + skyline(); // one after the other: the plate's size bounds what follows
         text += dial();
         text += plate();
-        for (const auto section : {&RandomDesign::borders, &RandomDesign::gnomon, &RandomDesign::hours, &RandomDesign::dates, &RandomDesign::lettering,
+        for (const auto section : {&RandomDesign::borders, &RandomDesign::gnomon, &RandomDesign::hours, &RandomDesign::also, &RandomDesign::dates, &RandomDesign::lettering,
                                    &RandomDesign::cutting, &RandomDesign::print, &RandomDesign::years})
             text += (this->*section)();
         return text;
@@ -53,6 +53,9 @@ class RandomDesign {
         return fmt::format("place:\n  name: {}\n  latitude: {}\n  longitude: {:.4f}\n  zone: {}\n", one_of(std::array{"Nether Beck", "Ærøholm", "Κάτω Λιμήν"}), latitude,
                            number(-180, 180), one_of(std::array{"Europe/London", "Asia/Kathmandu", "Pacific/Kiritimati", "America/St_Johns", "UTC", "Antarctica/Troll", "Australia/Lord_Howe"}));
     }
+    std::string skyline() {
+        return chance(0.15) ? "  skyline: [[80°, 6°], [120°, 25°], [200°, 3°], [290°, 12°]]\n" : "";
+    }
     std::string facing() {
         return chance(0.4) ? one_of(std::array{"north", "south", "east", "west", "SE", "NNW", "S 23° E", "S 89.99° W", "S 0.01° W"})
                            : fmt::format("{:.3f}°", number(0, 360));
@@ -64,7 +67,8 @@ class RandomDesign {
         case 1:
             return fmt::format("dial:\n  kind: equatorial\n  faces: {}\n", one_of(std::array{"upper", "lower", "both"}));
         case 2:
-            return fmt::format("dial:\n  kind: wall\n  facing: {}\n", facing()) + some(0.5, fmt::format("lean: {:.3f}° {}", number(0, 45), one_of(std::array{"back", "forward"})));
+            return fmt::format("dial:\n  kind: wall\n  facing: {}\n", facing()) + some(0.5, fmt::format("lean: {:.3f}° {}", number(0, 45), one_of(std::array{"back", "forward"}))) +
+                   some(0.25, "faces: " + one_of(std::array{"front", "back", "both"}));
         default:
             return fmt::format("dial:\n  kind: leaning\n  facing: {}\n  lean: {}\n", facing(),
                                chance(0.5) ? fmt::format("{:.3f}° back", number(0.1, 89.9)) : fmt::format("{:.3f}° forward", number(0.1, 80)));
@@ -79,6 +83,7 @@ class RandomDesign {
             text += fmt::format("  diameter: {:.3f} mm\n", smaller_mm_);
             break;
         case 1:
+            text += some(0.4, "shape: oval");
             text += chance(0.5) ? fmt::format("  width: {:.3f} mm\n  height: {:.3f} mm\n", smaller_mm_, other_mm)
                                 : fmt::format("  width: {:.3f} mm\n  height: {:.3f} mm\n", other_mm, smaller_mm_);
             break;
@@ -101,21 +106,36 @@ class RandomDesign {
                some(0.3, "inner border: " + (chance(0.3) ? "0 mm" : mm(1, 0.3 * smaller_mm_)));
     }
     std::string gnomon() {
-        return "gnomon:\n  holes: " + std::to_string(whole(0, 4)) + "\n" + some(0.3, "nodus height: " + mm(1, std::max(1.1, smaller_mm_ / 2))) +
-               some(0.4, "thickness: " + mm(0.5, 0.1 * smaller_mm_)) + some(0.2, "foot: " + mm(20, smaller_mm_ + 21));
+        const std::string kind = one_of(std::array{"edge", "edge", "edge", "rod", "pin", "disc"});
+        std::string text = "gnomon:\n  kind: " + kind + "\n";
+        if (kind == "edge")
+            text += "  holes: " + std::to_string(whole(0, 4)) + "\n" + some(0.2, "foot: " + mm(20, smaller_mm_ + 21));
+        has_style_ = kind == "edge" || kind == "rod";
+        return text + some(0.3, "nodus height: " + mm(1, std::max(1.1, smaller_mm_ / 2))) + some(0.4, "thickness: " + mm(0.5, 0.1 * smaller_mm_));
     }
     std::string hours() {
-        const std::string time = one_of(std::array{"sun", "zone", "clock"});
-        std::string text = "hours:\n  time: " + time + "\n";
+        time_ = one_of(std::array{"sun", "zone", "sun", "zone", "clock", "since sunrise", "since sunset", "hours left", "unequal"});
+        std::string text = "hours:\n  time: " + time_ + "\n";
         text += some(0.15, fmt::format("from: {}:00", whole(0, 23)));
         text += some(0.15, fmt::format("to: {}:30", whole(0, 23)));
         text += some(0.7, "divide: " + one_of(std::array{"60 min", "30 min", "15 min", "10 min", "5 min", "2 min", "1 min"}));
         text += some(0.6, "numerals: " + one_of(std::array{"roman", "roman iiii", "arabic"}));
         text += some(0.3, "count: 24");
         text += some(0.4, "stand: " + one_of(std::array{"along border", "upright"}));
-        if (time == "clock")
+        if (time_ == "clock")
             text += some(0.4, "curves: " + one_of(std::array{"whole", "december to june", "june to december"}));
+        if (has_style_ && (time_ == "sun" || time_ == "zone"))
+            text += some(0.25, "reach: season");
         return text + some(0.3, "noon mark: no");
+    }
+    std::string also() {
+        if (chance(0.6))
+            return "";
+        std::string text = "also:\n  altitudes: [10°, 30°, 50°]\n";
+        for (const char* time : {"sun", "clock", "since sunrise", "since sunset", "hours left", "unequal"})
+            if (time_ != time)
+                text += some(0.3, std::string{time} + ": yes");
+        return text + some(0.4, "azimuths: each 30°") + some(0.4, "noon at: [{name: Far Haven, longitude: 30° E}, {name: Old Quay, longitude: 77° 30' W}]");
     }
     std::string dates() {
         return "dates:\n  solstices: " + one_of(std::array{"yes", "no"}) + "\n" + some(0.2, "equinoxes: no") + some(0.3, "signs: yes") + some(0.3, "months: yes") +
@@ -135,11 +155,53 @@ class RandomDesign {
 
     std::mt19937 random_;
     double smaller_mm_ = 0;
+    bool has_style_ = true;
+    std::string time_;
 };
 
 unsigned asked(const char* name, unsigned otherwise) {
     const char* text = std::getenv(name);
     return text == nullptr ? otherwise : unsigned(std::strtoul(text, nullptr, 10));
+}
+
+/// Whether the Sun comes to where it would stand to throw this point's shadow: by either edge of the gnomon.
+bool sun_comes_there(const FacePlan& plan, const layout::Face& face, PlatePoint p, const MeanYear& year) {
+    constexpr Angle k_slack = Angle::arcseconds(2);
+    const PlateFrame& frame = face.delineation.frame;
+    const GnomonEdges edges{frame, face.delineation.style, plan.dial.site.latitude, plan.dial.gnomon_thickness_mm};
+    for (const Edge edge : {Edge::left, Edge::right}) {
+        const PlatePoint nodus = edges.shift(edge);
+        const Eigen::Vector3d towards = (nodus.u_mm - p.u_mm) * frame.u + (nodus.v_mm - p.v_mm) * frame.v + face.placement.nodus_height_mm * frame.n;
+        const SiteDirection sun{towards.normalized()};
+        const SkyPlace sky = to_sky(sun, plan.dial.site.latitude);
+        const bool in_season = abs(sky.declination) <= std::max(abs(year.at(year.june_solstice_day()).declination), year.obliquity()) + k_slack;
+        if (in_season && plan.dial.skyline.clearance(sun) > -k_slack.in_radians())
+            return true;
+    }
+    return false;
+}
+
+/// No line outside its plate's ring, and no point of a nodus' line that the Sun cannot reach.
+void check_lines(const Commission& commission) {
+    for (std::size_t i = 0; i < commission.faces.size(); ++i) {
+        const layout::Face& face = commission.faces[i];
+        const FacePlan& plan = commission.plans[i];
+        const layout::Outline field = layout::Rings::of(plan.spec).numerals;
+        for (const layout::DrawnLine& line : face.lines) {
+            const bool of_style = (line.family == Family::hour && line.set == 0 && plan.dial.hours.extent == HourExtent::style) ||
+                                  (line.family == Family::place_noon && plan.dial.hours.extent == HourExtent::style);
+            INFO("line " << line.label);
+            REQUIRE(line.points.size() >= 2);
+            for (const PlatePoint& p : line.points) {
+                REQUIRE(std::isfinite(p.u_mm));
+                REQUIRE(std::isfinite(p.v_mm));
+                const layout::Point at = layout::to_work(p, face.placement.foot);
+                REQUIRE((field.contains(at) || field.distance_mm(at) < 1e-5));
+                if (!of_style)
+                    REQUIRE(sun_comes_there(plan, face, p, commission.year));
+            }
+        }
+    }
 }
 
 /// "packet", or the first error.
@@ -153,6 +215,7 @@ std::string outcome(const std::string& text) {
     }
     if (!taking.commission)
         return to_text(taking.errors.front());
+    check_lines(*taking.commission);
     try {
         const Packet packet = make_packet(*taking.commission);
         REQUIRE(packet.items.size() >= 5);

@@ -67,7 +67,7 @@ TEST_CASE("An SVG read back shows the drawing where it is, the same hand up", "[
     const ReadSvg read = read_svg("each.svg", svg_of(drawing, frame));
     CHECK(read.width_mm == 120);
     CHECK(read.height_mm == 110);
-    CHECK(read.layers == std::vector<std::string>{"guide", "fill", "engrave", "cut"});
+    CHECK(read.layers == std::vector<std::string>{"engrave", "fill", "cut"});
     for (const Mark& mark : drawing.marks) {
         for (const Path& path : mark.paths) {
             for (const Point p : flattened(path, 0.01)) {
