@@ -166,7 +166,8 @@ unsigned asked(const char* name, unsigned otherwise) {
 
 /// Whether the Sun comes to where it would stand to throw this point's shadow: by either edge of the gnomon.
 bool sun_comes_there(const FacePlan& plan, const layout::Face& face, PlatePoint p, const MeanYear& year) {
-    constexpr Angle k_slack = Angle::arcseconds(2);
+    // A border cuts a chord, which lies up to 0.004 mm beside the shadow; seen from the nodus that is at most this.
+    const Angle slack = Angle::radians(0.005 / face.placement.nodus_height_mm) + Angle::arcseconds(2);
     const PlateFrame& frame = face.delineation.frame;
     const GnomonEdges edges{frame, face.delineation.style, plan.dial.site.latitude, plan.dial.gnomon_thickness_mm};
     for (const Edge edge : {Edge::left, Edge::right}) {
@@ -174,8 +175,8 @@ bool sun_comes_there(const FacePlan& plan, const layout::Face& face, PlatePoint 
         const Eigen::Vector3d towards = (nodus.u_mm - p.u_mm) * frame.u + (nodus.v_mm - p.v_mm) * frame.v + face.placement.nodus_height_mm * frame.n;
         const SiteDirection sun{towards.normalized()};
         const SkyPlace sky = to_sky(sun, plan.dial.site.latitude);
-        const bool in_season = abs(sky.declination) <= std::max(abs(year.at(year.june_solstice_day()).declination), year.obliquity()) + k_slack;
-        if (in_season && plan.dial.skyline.clearance(sun) > -k_slack.in_radians())
+        const bool in_season = abs(sky.declination) <= std::max(abs(year.at(year.june_solstice_day()).declination), year.obliquity()) + slack;
+        if (in_season && plan.dial.skyline.clearance(sun) > -slack.in_radians())
             return true;
     }
     return false;
