@@ -44,15 +44,17 @@ long bucket_of(const Stretch& s) {
     return std::lround(slope * 500); // 2 mrad: what 0.1 µm turns the shortest of lines by
 }
 
-/// The buckets beside it, where slopes go round: 0 and π are one.
+/// The bucket and those beside it. Slopes go round, 0 and π are one, so near either end the other end is beside it too.
 std::vector<long> near(long bucket) {
     constexpr long k_half_turn = 1571;
-    if (bucket >= 1'000'000)
-        return {bucket - 1, bucket, bucket + 1};
-    std::set<long> found;
-    for (long b = bucket - 1; b <= bucket + 1; ++b)
-        found.insert({b, b + k_half_turn, b - k_half_turn, b + k_half_turn - 1, b - k_half_turn + 1});
-    return {found.begin(), found.end()};
+    std::vector<long> found{bucket - 1, bucket, bucket + 1};
+    if (bucket <= 2)
+        found.insert(found.end(), {k_half_turn - 2, k_half_turn - 1, k_half_turn, k_half_turn + 1});
+    else if (bucket < 1'000'000 && bucket >= k_half_turn - 2)
+        found.insert(found.end(), {-1, 0, 1, 2});
+    std::sort(found.begin(), found.end());
+    found.erase(std::unique(found.begin(), found.end()), found.end());
+    return found;
 }
 
 /// What of a line another covers.

@@ -135,17 +135,17 @@ TEST_CASE("Curves become chords at the right distance", "[layout]") {
 }
 
 TEST_CASE("A kerf that a part does not bear is said, with the part's name", "[layout]") {
-    const auto names = [](const char* what) { return Catch::Contains("\"gnomon\"") && Catch::Contains(what); };
-    CHECK_THROWS_WITH(with_kerf(cut_out({rectangle({0, 0, 50, 2})}), 2.5), names("wider than"));
-    CHECK_THROWS_WITH(with_kerf(cut_out({rectangle({0, 0, 50, 50}), circle({20, 20}, 1)}), 2.5), names("closes a hole"));
+    const Catch::Matchers::StdString::ContainsMatcher part = Catch::Contains("\"gnomon\"");
+    CHECK_THROWS_WITH(with_kerf(cut_out({rectangle({0, 0, 50, 2})}), 2.5), part && Catch::Contains("wider than"));
+    CHECK_THROWS_WITH(with_kerf(cut_out({rectangle({0, 0, 50, 50}), circle({20, 20}, 1)}), 2.5), part && Catch::Contains("closes a hole"));
     // A mouth of 1 mm into a chamber; a hole of two chambers with 1 mm between.
     const Path mouth = polyline({{0, 0}, {50, 0}, {50, 50}, {25.5, 50}, {25.5, 40}, {40, 40}, {40, 10}, {10, 10}, {10, 40},
                                  {24.5, 40}, {24.5, 50}, {0, 50}}, true);
-    CHECK_THROWS_WITH(with_kerf(cut_out({mouth}), 2), names("gap"));
+    CHECK_THROWS_WITH(with_kerf(cut_out({mouth}), 2), part && Catch::Contains("gap"));
     CHECK_NOTHROW(with_kerf(cut_out({mouth}), 0.5));
     const Path two = polyline({{5, 5}, {20, 5}, {20, 12}, {25, 12}, {25, 5}, {40, 5}, {40, 20}, {25, 20}, {25, 13}, {20, 13},
                                {20, 20}, {5, 20}}, true);
-    CHECK_THROWS_WITH(with_kerf(cut_out({rectangle({0, 0, 50, 50}), two}), 1.5), names("narrowest"));
+    CHECK_THROWS_WITH(with_kerf(cut_out({rectangle({0, 0, 50, 50}), two}), 1.5), part && Catch::Contains("narrowest"));
     CHECK_THROWS_AS(with_kerf(cut_out({mouth}), -0.1), std::invalid_argument);
     CHECK_THROWS_AS(with_kerf(cut_out({mouth}), std::numeric_limits<double>::quiet_NaN()), std::invalid_argument);
 }

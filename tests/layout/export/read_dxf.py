@@ -6,7 +6,7 @@
     layer NAME COLOUR
     kind NAME                   (each kind of entity, sorted, once)
     entity KIND LAYER CLOSED    (in the file's order; its lines follow)
-    line LAYER X0 Y0 X1 Y1      (arcs, by ezdxf's own reading, in 100 chords)
+    line LAYER X0 Y0 X1 Y1      (arcs, by ezdxf's own reading, in 400 chords)
     circle LAYER X Y RADIUS
     arc LAYER X Y RADIUS START END   (degrees; of polylines too)
 and asserts what holds for every line of the file: fixed-point numbers, no "-0".
@@ -43,7 +43,7 @@ def chords(arc):
     a, b = arc.dxf.start_angle, arc.dxf.end_angle
     if b <= a:
         b += 360
-    angles = [math.radians(a + (b - a) * i / 100) for i in range(101)]
+    angles = [math.radians(a + (b - a) * i / 400) for i in range(401)]
     c, r = arc.dxf.center, arc.dxf.radius
     return [(c[0] + r * math.cos(v), c[1] + r * math.sin(v)) for v in angles]
 
@@ -55,7 +55,7 @@ def show(entity):
     elif kind == "CIRCLE":
         c, r = entity.dxf.center, entity.dxf.radius
         print(f"circle {layer} {c[0]:.6f} {c[1]:.6f} {r:.6f}")
-        points = [(c[0] + r * math.cos(i * math.pi / 180), c[1] + r * math.sin(i * math.pi / 180)) for i in range(361)]
+        points = [(c[0] + r * math.cos(i * math.pi / 360), c[1] + r * math.sin(i * math.pi / 360)) for i in range(721)]
     elif kind == "ARC":
         c = entity.dxf.center
         print(f"arc {layer} {c[0]:.6f} {c[1]:.6f} {entity.dxf.radius:.6f} {entity.dxf.start_angle:.9f} {entity.dxf.end_angle:.9f}")

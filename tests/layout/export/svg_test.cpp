@@ -69,6 +69,9 @@ TEST_CASE("An SVG read back shows the drawing where it is, the same hand up", "[
     CHECK(read.height_mm == 110);
     CHECK(read.layers == std::vector<std::string>{"engrave", "fill", "cut"});
     for (const Mark& mark : drawing.marks) {
+        if (mark.layer == Layer::guide) {
+            continue; // for the eye, not for the machine
+        }
         for (const Path& path : mark.paths) {
             for (const Point p : flattened(path, 0.01)) {
                 CHECK(distance_to(read.lines, {p.x_mm - frame.left_mm, p.y_mm - frame.bottom_mm}) < 0.005);
@@ -95,6 +98,19 @@ TEST_CASE("An SVG holds nothing that a cutter's program stumbles over", "[layout
     CHECK(read.tags == std::set<std::string>{"g", "g@id", "path", "path@d", "path@fill", "path@stroke",
                                              "path@stroke-linecap", "path@stroke-linejoin", "path@stroke-width", "svg",
                                              "svg@height", "svg@viewBox", "svg@width"});
+}
+
+TEST_CASE("An SVG takes the machine's hairline, names and colours, and guides if asked", "[layout]") {
+    SvgOptions options;
+    options.hairline_mm = 0.01;
+    options.with_guides = true;
+    options.layers[Layer::cut] = {"through", {1, 0, 0}, 1};
+    const std::string svg = svg_of(one_of_each(), {0, 0, 100, 80}, options);
+    CHECK(read_svg("options.svg", svg).layers == std::vector<std::string>{"guide", "engrave", "fill", "through"});
+    CHECK(svg.find("stroke=\"#ff0000\" stroke-width=\"0.01\"") != std::string::npos);
+    CHECK(svg.find("stroke-width=\"0.3\"") == std::string::npos);
+    options.hairline_mm = 0;
+    CHECK_THROWS_AS(svg_of(one_of_each(), {0, 0, 100, 80}, options), ExportError);
 }
 
 TEST_CASE("The same drawing gives the same SVG", "[layout]") {
