@@ -23,7 +23,8 @@ std::string no_command(const CLI::App& app, std::string_view word) {
     if (word.starts_with('-') || std::find(commands.begin(), commands.end(), word) != commands.end())
         return {};
     const std::string_view near = nearest(word, commands);
-    return in_quotes(word) + " is not a command: " + (near.empty() ? "give " + one_of(commands) : "did you mean " + std::string{near} + "?");
+    return in_quotes(word) + " is not a command: " +
+           (near.empty() ? "give " + one_of(commands) : "did you mean " + std::string{near} + "?");
 }
 
 } // namespace

@@ -21,11 +21,14 @@ std::vector<Assumption> chosen(const Commission& commission) {
         const layout::Placement& placement = commission.faces[i].placement;
         const std::string face = commission.plans[i].name.empty() ? "" : " (" + commission.plans[i].name + ")";
         if (!placement.why_height.empty())
-            list.push_back({"gnomon: nodus height" + face, say_length(placement.nodus_height_mm, inches), placement.why_height});
+            list.push_back(
+                {"gnomon: nodus height" + face, say_length(placement.nodus_height_mm, inches), placement.why_height});
         if (!placement.why_place.empty()) {
             const auto& centre = commission.faces[i].delineation.style.centre;
             const layout::Point at = layout::to_work(centre.value_or(PlatePoint{}), placement.foot);
-            list.push_back({"plate: centre" + face, fmt::format("[{}, {}]", say_length(at.x_mm, false), say_length(at.y_mm, false)), placement.why_place});
+            list.push_back({"plate: centre" + face,
+                            fmt::format("[{}, {}]", say_length(at.x_mm, false), say_length(at.y_mm, false)),
+                            placement.why_place});
         }
     }
     return list;
@@ -61,7 +64,8 @@ int run_check(const std::string& design) {
 
 void add_check(CLI::App& app, int& status) {
     auto design = std::make_shared<std::string>();
-    CLI::App* command = app.add_subcommand("check", "Read a design, say what was assumed and what to be careful of; write nothing");
+    CLI::App* command =
+        app.add_subcommand("check", "Read a design, say what was assumed and what to be careful of; write nothing");
     command->add_option("DESIGN", *design, "the design file")->required();
     command->callback([design, &status] { status = run_check(*design); });
 }

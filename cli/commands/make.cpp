@@ -21,7 +21,9 @@ int run_make(const MakeOptions& options) {
     if (!commission)
         return k_error;
     const std::filesystem::path folder =
-        options.folder.empty() ? std::filesystem::path{std::filesystem::path{options.design}.stem().string() + "-packet"} : std::filesystem::path{options.folder};
+        options.folder.empty()
+            ? std::filesystem::path{std::filesystem::path{options.design}.stem().string() + "-packet"}
+            : std::filesystem::path{options.folder};
     const auto packet = take_packet(*commission);
     if (!packet)
         return k_error;
@@ -46,7 +48,8 @@ int run_make(const MakeOptions& options) {
 
 void add_make(CLI::App& app, int& status) {
     auto options = std::make_shared<MakeOptions>();
-    CLI::App* command = app.add_subcommand("make", "Write the packet: full-scale sheets, the plate for a machine, and all numbers");
+    CLI::App* command =
+        app.add_subcommand("make", "Write the packet: full-scale sheets, the plate for a machine, and all numbers");
     command->add_option("DESIGN", options->design, "the design file")->required();
     command->add_option("--to", options->folder, "folder for the packet [the design's name with -packet, here]");
     command->callback([options, &status] { status = run_make(*options); });

@@ -1,8 +1,8 @@
 // SPDX-License-Identifier: MIT
+#include "cli/report/numbers.hpp"
 #include "cli/commands/commands.hpp"
 #include "cli/commands/said.hpp"
 #include "cli/exit_status.hpp"
-#include "cli/report/numbers.hpp"
 
 #include <iostream>
 #include <memory>
@@ -19,7 +19,9 @@ int run_numbers(const NumbersOptions& options) {
     const auto commission = take_commission(options.design);
     if (!commission)
         return k_error;
-    std::cout << (options.json ? numbers_json(*commission) : options.csv ? hour_lines_csv(*commission) : numbers_text(*commission));
+    std::cout << (options.json  ? numbers_json(*commission)
+                  : options.csv ? hour_lines_csv(*commission)
+                                : numbers_text(*commission));
     return said(k_fine);
 }
 
@@ -27,7 +29,8 @@ int run_numbers(const NumbersOptions& options) {
 
 void add_numbers(CLI::App& app, int& status) {
     auto options = std::make_shared<NumbersOptions>();
-    CLI::App* command = app.add_subcommand("numbers", "Print what was computed: style, hour lines, date lines, equation of time");
+    CLI::App* command =
+        app.add_subcommand("numbers", "Print what was computed: style, hour lines, date lines, equation of time");
     command->add_option("DESIGN", options->design, "the design file")->required();
     CLI::Option* json = command->add_flag("--json", options->json, "for programs (docs/output-formats.md)");
     command->add_flag("--csv", options->csv, "the hour lines as a table")->excludes(json);

@@ -1,9 +1,9 @@
 // SPDX-License-Identifier: MIT
+#include "cli/report/shadow.hpp"
 #include "cli/commands/commands.hpp"
 #include "cli/commands/said.hpp"
 #include "cli/design/plain_text.hpp"
 #include "cli/exit_status.hpp"
-#include "cli/report/shadow.hpp"
 #include "engine/time/instant_text.hpp"
 
 #include <filesystem>
@@ -24,7 +24,8 @@ struct ShadowOptions {
     bool json = false;
 };
 
-constexpr const char* k_instant_hint = "write an instant as 2026-06-21T11:00:00Z, or with an offset: 2026-06-21T12:00:00+01:00";
+constexpr const char* k_instant_hint =
+    "write an instant as 2026-06-21T11:00:00Z, or with an offset: 2026-06-21T12:00:00+01:00";
 constexpr std::size_t k_most_told = 100;
 
 /// Instants as they were asked for, and what they mean.
@@ -57,7 +58,8 @@ bool read_lines(const std::string& name, Asked& asked) {
         std::error_code trouble;
         file.open(name);
         if (!file || std::filesystem::is_directory(name, trouble)) {
-            std::cerr << fmt::format("{}: {}\n", name, file ? "this is a folder: give a file with one instant a line" : "cannot be read");
+            std::cerr << fmt::format("{}: {}\n", name,
+                                     file ? "this is a folder: give a file with one instant a line" : "cannot be read");
             return false;
         }
     }
@@ -103,7 +105,8 @@ int run_shadow(const ShadowOptions& options) {
     }
     try {
         const auto reports = shadow_reports(*commission, asked.instants, face);
-        std::cout << (options.json ? shadow_json(*commission, reports, asked.texts) : shadow_text(*commission, reports));
+        std::cout << (options.json ? shadow_json(*commission, reports, asked.texts)
+                                   : shadow_text(*commission, reports));
     } catch (const std::invalid_argument& trouble) {
         std::cerr << trouble.what() << '\n';
         return k_error;
@@ -115,9 +118,11 @@ int run_shadow(const ShadowOptions& options) {
 
 void add_shadow(CLI::App& app, int& status) {
     auto options = std::make_shared<ShadowOptions>();
-    CLI::App* command = app.add_subcommand("shadow", "Say where the nodus' shadow falls at an instant, and what the dial reads");
+    CLI::App* command =
+        app.add_subcommand("shadow", "Say where the nodus' shadow falls at an instant, and what the dial reads");
     command->add_option("DESIGN", options->design, "the design file")->required();
-    command->add_option("--at", options->at, "an instant, ISO 8601 with Z or an offset; may be given several times")->allow_extra_args(false);
+    command->add_option("--at", options->at, "an instant, ISO 8601 with Z or an offset; may be given several times")
+        ->allow_extra_args(false);
     command->add_option("--at-file", options->at_file, "a file with one instant a line; - for standard input");
     command->add_option("--face", options->face, "upper or lower, of a dial with two faces [the one that is lit]");
     command->add_flag("--json", options->json, "for programs (docs/output-formats.md)");

@@ -95,7 +95,8 @@ void fill_gnomon_and_cutting(Design& design, Filler& filler, double s) {
     Gnomon& gnomon = design.gnomon;
     filler.note_unless_given("gnomon: kind", "edge", "a plate of metal, whose top edge is the style");
     static constexpr const char* k_nodi[] = {"notch", "ball", "tip", "hole"};
-    filler.note_unless_given("gnomon: nodus", k_nodi[static_cast<std::size_t>(gnomon.nodus)], "as such a gnomon commonly has it");
+    filler.note_unless_given("gnomon: nodus", k_nodi[static_cast<std::size_t>(gnomon.nodus)],
+                             "as such a gnomon commonly has it");
     filler.fill(gnomon.thickness_mm, "gnomon: thickness", 0.0, thickness_why(gnomon.kind));
     if (gnomon.kind == GnomonKind::edge)
         filler.note_unless_given("gnomon: holes", "0", "how it is fixed is the maker's choice");
@@ -105,7 +106,8 @@ void fill_gnomon_and_cutting(Design& design, Filler& filler, double s) {
     Cutting& cutting = design.cutting;
     const double line = std::clamp(0.0016 * s, 0.3, 3.0), sixty_fourth = 25.4 / 64.0;
     filler.fill(cutting.line_width_mm, "cutting: line width",
-                filler.inches() ? std::max(1.0, std::round(line / sixty_fourth)) * sixty_fourth : std::round(line * 10.0) / 10.0,
+                filler.inches() ? std::max(1.0, std::round(line / sixty_fourth)) * sixty_fourth
+                                : std::round(line * 10.0) / 10.0,
                 "1/600 of the plate: reads from where the plate is read");
     filler.fill(cutting.least_gap_mm, "cutting: least gap", 2.0 * cutting.line_width_mm, "twice the line width");
 }
@@ -137,7 +139,8 @@ void note_hours_and_dates(Design& design, Filler& filler) {
     if (filler.wants("hours: reach"))
         fill_reach(design, filler);
     if (counts_from_the_horizon(design))
-        filler.note_unless_given("hours: rise and set", "level horizon", "the Sun's middle on the horizon, no refraction");
+        filler.note_unless_given("hours: rise and set", "level horizon",
+                                 "the Sun's middle on the horizon, no refraction");
     filler.note_unless_given("dates: solstices", "yes", "the ends of the shadow's walk");
     filler.note_unless_given("dates: equinoxes", "yes", "the straight line between them");
     filler.note_unless_given("dates: signs", "no", "not asked for");

@@ -33,7 +33,7 @@ using layout::PlateShape;
 struct Place {
     std::string name;
     Site site;
-    std::string zone; ///< tz database name
+    std::string zone;                   ///< tz database name
     std::vector<Skyline::Mark> skyline; ///< empty: the flat horizon
 };
 
@@ -52,13 +52,13 @@ struct Hours {
     std::optional<double> first_h, last_h; ///< on the dial's own time; not given: all that are ever lit
     int divide_min = 15;                   ///< the finest division asked for: 60, 30, 15, 10, 5, 2, 1
     Numerals numerals = Numerals::roman;
-    int count = 12; ///< 12 or 24
+    int count = 12;                    ///< 12 or 24
     HalfYear curves = HalfYear::whole; ///< of clock time
     NumeralStand stand = NumeralStand::along_border;
     bool noon_mark = true;
     HourExtent reach = HourExtent::style;
     bool summer_numerals = false; ///< a second row, an hour on, for the zone's summer time
-    bool seen_rise = false;       ///< hours from sunrise or to sunset count from the rising that people see (refraction)
+    bool seen_rise = false; ///< hours from sunrise or to sunset count from the rising that people see (refraction)
 };
 
 /// Lines drawn on the field beside the hours of the chapter ring.

@@ -8,8 +8,8 @@
 #include <algorithm>
 #include <cassert>
 #include <functional>
-#include <optional>
 #include <map>
+#include <optional>
 #include <span>
 #include <string>
 #include <string_view>

@@ -52,8 +52,8 @@ Read<std::optional<HoursAsked>> hours_asked(HourTime time, std::string_view text
 }
 
 void read_more_hours(Design& design, const Section& also, std::string_view key, HourTime time) {
-    const auto asked = also.read<std::optional<HoursAsked>>(
-        key, [&](std::string_view text) { return hours_asked(time, text); });
+    const auto asked =
+        also.read<std::optional<HoursAsked>>(key, [&](std::string_view text) { return hours_asked(time, text); });
     if (!asked || !*asked)
         return;
     if (time == design.hours.time && !also.state().faulty("hours: time")) {
@@ -175,10 +175,10 @@ void read_noons(Design& design, const Section& also) {
             return abs((other.longitude - noon->longitude).signed_turn()) < Angle::degrees(1e-9);
         });
         if (same != made.end())
-            also.state().error(item.at, "also: noon at",
-                               fmt::format("{} has noon with {}: the two are one line", in_quotes(noon->name),
-                                           in_quotes(same->name)),
-                               "keep one of them, or put both names in it");
+            also.state().error(
+                item.at, "also: noon at",
+                fmt::format("{} has noon with {}: the two are one line", in_quotes(noon->name), in_quotes(same->name)),
+                "keep one of them, or put both names in it");
         else
             made.push_back(*noon);
     }
@@ -214,8 +214,7 @@ bool draws_straight_hours(const Design& design) {
 }
 
 bool counts_from_the_horizon(const Design& design) {
-    return draws_any(design,
-                     {HourTime::since_sunrise, HourTime::since_sunset, HourTime::to_sunset, HourTime::unequal});
+    return draws_any(design, {HourTime::since_sunrise, HourTime::since_sunset, HourTime::to_sunset, HourTime::unequal});
 }
 
 void read_also(Design& design, const Section& top) {

@@ -19,8 +19,8 @@ constexpr std::array<Choice<Numerals>, 3> k_numerals = {
 constexpr std::array<Choice<NumeralStand>, 2> k_stands = {
     {{"along border", NumeralStand::along_border}, {"upright", NumeralStand::upright}}};
 constexpr std::array<Choice<HalfYear>, 3> k_curves = {{{"whole", HalfYear::whole},
-                                                        {"december to june", HalfYear::december_to_june},
-                                                        {"june to december", HalfYear::june_to_december}}};
+                                                       {"december to june", HalfYear::december_to_june},
+                                                       {"june to december", HalfYear::june_to_december}}};
 constexpr std::array<Choice<HourExtent>, 2> k_reaches = {{{"style", HourExtent::style}, {"season", HourExtent::nodus}}};
 constexpr std::array<Choice<bool>, 2> k_rises = {{{"level horizon", false}, {"seen", true}}};
 constexpr std::array k_divisions_min = {60, 30, 15, 10, 5, 2, 1};

@@ -90,7 +90,9 @@ std::optional<Trouble> out_of_order(const std::vector<ReadMark>& marks, const st
     const double turn = turn_from_first[at];
     if (at == 0 || turn > turn_from_first[at - 1])
         return std::nullopt;
-    const auto name = [&](std::size_t i) { return fmt::format("pair {}, at {}", i + 1, in_quotes(marks[i].azimuth_text)); };
+    const auto name = [&](std::size_t i) {
+        return fmt::format("pair {}, at {}", i + 1, in_quotes(marks[i].azimuth_text));
+    };
     const auto after = std::lower_bound(turn_from_first.begin(), turn_from_first.begin() + std::ptrdiff_t(at), turn);
     const auto next = static_cast<std::size_t>(after - turn_from_first.begin());
     if (*after == turn)

@@ -135,7 +135,9 @@ void read_corners(Plate& made, const Section& plate) {
 }
 
 /// Which shape's keys a plate is measured by: an oval has the sides of its rectangle.
-PlateShape measured_as(PlateShape shape) { return shape == PlateShape::oval ? PlateShape::rectangle : shape; }
+PlateShape measured_as(PlateShape shape) {
+    return shape == PlateShape::oval ? PlateShape::rectangle : shape;
+}
 
 void read_size(Plate& made, const Section& plate) {
     const auto side = [&](std::string_view key) { return plate.length(key, k_smallest_plate_mm, k_largest_plate_mm); };

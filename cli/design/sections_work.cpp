@@ -42,10 +42,10 @@ void read_paper(Design& design, const Section& print) {
 }
 
 constexpr std::array<Choice<GnomonKind>, 5> k_gnomons = {{{"edge", GnomonKind::edge},
-                                                         {"rod", GnomonKind::rod},
-                                                         {"pin", GnomonKind::pin},
-                                                         {"upright pin", GnomonKind::upright_pin},
-                                                         {"disc", GnomonKind::disc}}};
+                                                          {"rod", GnomonKind::rod},
+                                                          {"pin", GnomonKind::pin},
+                                                          {"upright pin", GnomonKind::upright_pin},
+                                                          {"disc", GnomonKind::disc}}};
 
 constexpr std::array<Choice<NodusKind>, 4> k_nodi = {
     {{"notch", NodusKind::notch}, {"ball", NodusKind::ball}, {"tip", NodusKind::tip}, {"hole", NodusKind::hole}}};

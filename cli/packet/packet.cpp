@@ -53,17 +53,21 @@ std::vector<std::pair<std::string, std::string>> key_numbers(const Commission& c
     const layout::Face& face = commission.faces[i];
     const Style& style = face.delineation.style;
     std::vector<std::pair<std::string, std::string>> rows;
-    rows.emplace_back("Place", say_latitude(design.place.site.latitude) + ", " + say_longitude(design.place.site.longitude));
+    rows.emplace_back("Place",
+                      say_latitude(design.place.site.latitude) + ", " + say_longitude(design.place.site.longitude));
     rows.emplace_back("Zone", design.place.zone);
     rows.emplace_back("Plate", say_attitude(commission.plans[i].dial.attitude));
-    rows.emplace_back("Size", fmt::format("{} × {}", say_length(design.plate.width_mm, inches), say_length(design.plate.height_mm, inches)));
+    rows.emplace_back("Size", fmt::format("{} × {}", say_length(design.plate.width_mm, inches),
+                                          say_length(design.plate.height_mm, inches)));
     if (!design.plate.material.empty())
         rows.emplace_back("Material", design.plate.material);
     rows.emplace_back("Style height", degrees_minutes(style.height));
     if (style.height < Angle::degrees(89.99))
-        rows.emplace_back("Substyle", degrees_minutes(style.substyle) + " clockwise from " + (design.dial.kind == DialKind::level ? "north" : "up"));
+        rows.emplace_back("Substyle", degrees_minutes(style.substyle) + " clockwise from " +
+                                          (design.dial.kind == DialKind::level ? "north" : "up"));
     static constexpr const char* k_nodi[] = {"notch", "ball", "tip", "hole"};
-    rows.emplace_back("Nodus", std::string{k_nodi[static_cast<std::size_t>(design.gnomon.nodus)]} + ", " + say_length(face.placement.nodus_height_mm, inches) + " above the plate");
+    rows.emplace_back("Nodus", std::string{k_nodi[static_cast<std::size_t>(design.gnomon.nodus)]} + ", " +
+                                   say_length(face.placement.nodus_height_mm, inches) + " above the plate");
     if (commission.plans[i].dial.gnomon_thickness_mm > 0)
         rows.emplace_back("Gnomon", say_length(commission.plans[i].dial.gnomon_thickness_mm, inches) + " thick");
     rows.emplace_back("Shows", time_text(design.hours.time));
@@ -74,15 +78,20 @@ std::vector<std::pair<std::string, std::string>> key_numbers(const Commission& c
 
 /// Common practice, no source, where no other is named.
 std::vector<std::string> cautions(const Design& design) {
-    std::vector<std::string> list{
-        "Never look at the Sun to align a dial, not even for a moment and not through dark glass: work from the shadow.",
-        "The gnomon's tip and edges can wound, at face height and at child height above all: round them, or guard them.",
-        "Dust of stone and metal harms the lungs, silica from slate and sandstone gravely: cut wet or with extraction, and wear a fitted mask."};
+    std::vector<std::string> list{"Never look at the Sun to align a dial, not even for a moment and not through dark "
+                                  "glass: work from the shadow.",
+                                  "The gnomon's tip and edges can wound, at face height and at child height above all: "
+                                  "round them, or guard them.",
+                                  "Dust of stone and metal harms the lungs, silica from slate and sandstone gravely: "
+                                  "cut wet or with extraction, and wear a fitted mask."};
     if (design.dial.kind == DialKind::wall || design.dial.kind == DialKind::leaning)
-        list.push_back("A slab on a wall needs lifting gear and a fixing into sound masonry that a mason or engineer answers for. A listed building or a public place needs consent first: ask the authority.");
+        list.push_back("A slab on a wall needs lifting gear and a fixing into sound masonry that a mason or engineer "
+                       "answers for. A listed building or a public place needs consent first: ask the authority.");
     else
-        list.push_back("A slab of stone is heavier than it looks: lift with help or gear, and fix it so that nobody can pull it over. A public place needs consent first.");
-    list.push_back("Fumes of lasers, acids and soldering need extraction; metal in the Sun grows hot enough to burn. Local codes and licensed trades come before this sheet.");
+        list.push_back("A slab of stone is heavier than it looks: lift with help or gear, and fix it so that nobody "
+                       "can pull it over. A public place needs consent first.");
+    list.push_back("Fumes of lasers, acids and soldering need extraction; metal in the Sun grows hot enough to burn. "
+                   "Local codes and licensed trades come before this sheet.");
     return list;
 }
 
@@ -92,25 +101,31 @@ std::vector<std::string> steps(const Design& design, bool has_tiles) {
     };
     if (has_tiles)
         list.push_back("Join the sheets by their crosses, flat and straight, and measure across the joins.");
-    list.push_back("Check the plate: the outline is cut, what is black is engraved, holes are drilled; ochre marks are scored lightly, pale ones only help to set out.");
+    list.push_back("Check the plate: the outline is cut, what is black is engraved, holes are drilled; ochre marks are "
+                   "scored lightly, pale ones only help to set out.");
     if (design.dial.kind == DialKind::level)
         list.push_back("Fix the plate level, with its north to true north (not the compass needle's).");
     if (design.dial.kind == DialKind::equatorial)
-        list.push_back("Fix the plate in the plane of the equator, with its pin towards the pole, and the noon line in the meridian.");
+        list.push_back("Fix the plate in the plane of the equator, with its pin towards the pole, and the noon line in "
+                       "the meridian.");
     if (design.dial.kind == DialKind::wall || design.dial.kind == DialKind::leaning)
-        list.push_back("Check which way the wall faces and how it leans before you cut: the lines are right for this attitude alone.");
+        list.push_back("Check which way the wall faces and how it leans before you cut: the lines are right for this "
+                       "attitude alone.");
     list.push_back("Set the style at its height over the substyle, and prove it before the fixing sets.");
     return list;
 }
 
-std::shared_ptr<const Drawing> shared(const Drawing& drawing) { return {std::shared_ptr<void>{}, &drawing}; }
+std::shared_ptr<const Drawing> shared(const Drawing& drawing) {
+    return {std::shared_ptr<void>{}, &drawing};
+}
 
 std::string face_suffix(const Commission& commission, std::size_t i) {
     return commission.plans[i].name.empty() ? "" : "-" + commission.plans[i].name;
 }
 
 /// A PDF's page has a largest size: a larger work goes on tiles alone, and the maker is told.
-void add_own_size(std::vector<Sheet>& sheets, const std::shared_ptr<const Drawing>& drawing, const layout::PrintOptions& options, std::vector<std::string>& warnings) {
+void add_own_size(std::vector<Sheet>& sheets, const std::shared_ptr<const Drawing>& drawing,
+                  const layout::PrintOptions& options, std::vector<std::string>& warnings) {
     try {
         sheets.push_back(layout::own_size_sheet(drawing, options));
     } catch (const layout::ExportError& trouble) {
@@ -148,7 +163,9 @@ layout::SheetBook book_of(const Commission& commission, Packet& packet) {
     book.title = design.title;
     book.subject = "Full-scale templates of a sundial";
     const std::string where = design.place.name.empty() ? say_latitude(design.place.site.latitude) : design.place.name;
-    book.sheets = layout::cover_sheets({design.title, "Full-scale templates for a sundial at " + where, steps(design, has_tiles), packet.cautions, packet.warnings}, covers, options);
+    book.sheets = layout::cover_sheets({design.title, "Full-scale templates for a sundial at " + where,
+                                        steps(design, has_tiles), packet.cautions, packet.warnings},
+                                       covers, options);
     for (layout::Tiling& tiling : tilings)
         for (Sheet& sheet : tiling.sheets)
             book.sheets.push_back(std::move(sheet));
@@ -164,7 +181,9 @@ std::optional<Packet> take_packet(const Commission& commission) {
         return make_packet(commission);
     } catch (const layout::ExportError& trouble) {
         const Design& design = commission.design;
-        tell({error_at(design, first_given(design, {"print: margin", "print: overlap", "print: paper", "print", "plate"}), trouble.what(), "")});
+        tell({error_at(design,
+                       first_given(design, {"print: margin", "print: overlap", "print: paper", "print", "plate"}),
+                       trouble.what(), "")});
         return std::nullopt;
     }
 }
@@ -173,17 +192,20 @@ Packet make_packet(const Commission& commission) {
     Packet packet;
     for (std::size_t i = 0; i < commission.faces.size(); ++i)
         for (const std::string& warning : commission.faces[i].warnings)
-            packet.warnings.push_back(commission.plans[i].spec.name.empty() ? warning : commission.plans[i].spec.name + ": " + warning);
+            packet.warnings.push_back(
+                commission.plans[i].spec.name.empty() ? warning : commission.plans[i].spec.name + ": " + warning);
 
     packet.cautions = cautions(commission.design);
     const layout::SheetBook book = book_of(commission, packet);
     packet.sheets = book.sheets.size();
-    auto pdf = std::async(std::launch::async, [&book] { return layout::pdf_of(book); }); // the longest: beside all others
+    auto pdf =
+        std::async(std::launch::async, [&book] { return layout::pdf_of(book); }); // the longest: beside all others
     packet.items.push_back({{"sheets.pdf", {}}, "full-scale sheets: print this, and read its first page"});
     for (std::size_t i = 0; i < commission.faces.size(); ++i) {
         const Drawing& drawing = commission.faces[i].drawing;
-        packet.items.push_back({{"plate" + face_suffix(commission, i) + ".svg", layout::svg_of(drawing, layout::bounds_of(drawing))},
-                                "the plate for a machine, full scale, layers by process"});
+        packet.items.push_back(
+            {{"plate" + face_suffix(commission, i) + ".svg", layout::svg_of(drawing, layout::bounds_of(drawing))},
+             "the plate for a machine, full scale, layers by process"});
     }
     packet.items.push_back({{"hour-lines.csv", hour_lines_csv(commission)}, "angles and ends of the hour lines"});
     packet.items.push_back({{"numbers.txt", numbers_text(commission)}, "all numbers, to read"});

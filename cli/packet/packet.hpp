@@ -15,7 +15,7 @@ struct Packet {
     std::vector<Item> items;
     std::vector<std::string> warnings; ///< of this very design
     std::vector<std::string> cautions; ///< of the work
-    std::size_t sheets = 0; ///< in the PDF
+    std::size_t sheets = 0;            ///< in the PDF
 };
 
 /// @throws layout::ExportError  with a message for the maker

@@ -11,7 +11,8 @@
 namespace dialwright::cli {
 namespace {
 
-constexpr std::array<const char*, 12> k_months{"Jan", "Feb", "Mar", "Apr", "May", "Jun", "Jul", "Aug", "Sep", "Oct", "Nov", "Dec"};
+constexpr std::array<const char*, 12> k_months{"Jan", "Feb", "Mar", "Apr", "May", "Jun",
+                                               "Jul", "Aug", "Sep", "Oct", "Nov", "Dec"};
 /// The signs in the order of the Sun's longitude.
 constexpr std::array<const char*, 12> k_signs{"♈", "♉", "♊", "♋", "♌", "♍", "♎", "♏", "♐", "♑", "♒", "♓"};
 
@@ -35,7 +36,8 @@ class DateLines {
         plan.lines.push_back({std::move(label), declination});
     }
     void add_day(std::chrono::month_day day, std::string label) {
-        add(label.empty() ? date_text(day) : std::move(label), year_.at(year_.day_of(day, local_noon_ut_h_)).declination);
+        add(label.empty() ? date_text(day) : std::move(label),
+            year_.at(year_.day_of(day, local_noon_ut_h_)).declination);
     }
     [[nodiscard]] std::string date_of(double day) const { return date_text(year_.date_of(day)); }
 
@@ -46,7 +48,9 @@ class DateLines {
     double local_noon_ut_h_;
 };
 
-std::string pair_text(const std::string& first, const std::string& second) { return first + " · " + second; }
+std::string pair_text(const std::string& first, const std::string& second) {
+    return first + " · " + second;
+}
 
 /// The other face of the same slab.
 Attitude turned_over(const Attitude& front) {
@@ -62,10 +66,13 @@ Attitude attitude_of(const Design& design, bool first_face) {
     return first_face ? front : turned_over(front);
 }
 
-bool has_two_faces(const Design& design) { return design.dial.faces == Faces::both; }
+bool has_two_faces(const Design& design) {
+    return design.dial.faces == Faces::both;
+}
 
 std::string face_name(const Design& design, bool first_face) {
-    if (design.dial.kind == DialKind::level || (design.dial.kind != DialKind::equatorial && design.dial.faces == Faces::upper))
+    if (design.dial.kind == DialKind::level ||
+        (design.dial.kind != DialKind::equatorial && design.dial.faces == Faces::upper))
         return "";
     if (design.dial.kind == DialKind::equatorial)
         return first_face ? "upper" : "lower";
@@ -75,7 +82,8 @@ std::string face_name(const Design& design, bool first_face) {
 HourPlan hour_plan(const Design& design) {
     const Hours& hours = design.hours;
     const bool ring_time = hours.time == HourTime::sun || hours.time == HourTime::zone;
-    return {hours.time, hours.first_h, hours.last_h, ring_time ? hours.divide_min : 60, hours.curves, hours.reach, true};
+    return {hours.time,   hours.first_h, hours.last_h, ring_time ? hours.divide_min : 60,
+            hours.curves, hours.reach,   true};
 }
 
 HourPlan hour_plan(const MoreHours& more) {
@@ -87,7 +95,9 @@ double summer_shift_h(const Zone& zone, int year) {
     using namespace std::chrono;
     double most = 0;
     for (unsigned month = 1; month <= 12; ++month)
-        most = std::max(most, duration<double, std::ratio<3600>>(zone.at(sys_days{std::chrono::year{year} / month / 1}).summer_time).count());
+        most = std::max(
+            most, duration<double, std::ratio<3600>>(zone.at(sys_days{std::chrono::year{year} / month / 1}).summer_time)
+                      .count());
     return most;
 }
 
@@ -113,7 +123,8 @@ FacePlan plan_of(const Design& design, const MeanYear& year, bool upper_face) {
     dial.zone_meridian = zone->meridian(design.years.first);
     dial.attitude = attitude_of(design, upper_face);
     dial.nodus_height_mm = design.gnomon.nodus_height_mm.value_or(0.0);
-    dial.gnomon_thickness_mm = equatorial || design.gnomon.kind != layout::GnomonKind::edge ? 0.0 : design.gnomon.thickness_mm;
+    dial.gnomon_thickness_mm =
+        equatorial || design.gnomon.kind != layout::GnomonKind::edge ? 0.0 : design.gnomon.thickness_mm;
     if (!design.place.skyline.empty())
         dial.skyline = Skyline{design.place.skyline};
     dial.hours = hour_plan(design);
@@ -166,12 +177,14 @@ DatePlan date_plan(const Design& design, const MeanYear& year) {
         lines.add(lines.date_of(year.december_solstice_day()), -tilt);
     }
     if (design.dates.equinoxes)
-        lines.add(pair_text(lines.date_of(year.march_equinox_day()), lines.date_of(year.september_equinox_day())), Angle{});
+        lines.add(pair_text(lines.date_of(year.march_equinox_day()), lines.date_of(year.september_equinox_day())),
+                  Angle{});
     if (design.dates.signs)
         for (const auto& [first, second] : {std::pair{3, 3}, {2, 4}, {1, 5}, {0, 6}, {11, 7}, {10, 8}, {9, 9}}) {
             const Angle longitude = Angle::degrees(30.0 * first);
-            const std::string label = first == second ? k_signs[std::size_t(first)]
-                                                      : fmt::format("{} {}", k_signs[std::size_t(first)], k_signs[std::size_t(second)]);
+            const std::string label =
+                first == second ? k_signs[std::size_t(first)]
+                                : fmt::format("{} {}", k_signs[std::size_t(first)], k_signs[std::size_t(second)]);
             lines.add(label, arc_sine(sin(tilt) * sin(longitude)), false);
         }
     if (design.dates.months)

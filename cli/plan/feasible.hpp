@@ -23,12 +23,15 @@ namespace dialwright::cli {
 
 /// What the sky does not allow: a plate that the Sun never lights, hours that are never lit. Where there is such an
 /// error, also what is wrong with the fonts and the borders, which the drawing would have told.
-[[nodiscard]] std::vector<DesignError> what_cannot_be(const Design& design, const MeanYear& year, const std::vector<FacePlan>& plans);
+[[nodiscard]] std::vector<DesignError> what_cannot_be(const Design& design, const MeanYear& year,
+                                                      const std::vector<FacePlan>& plans);
 
 /// Which texts no font at hand can set, each at its own key; `otherwise` at the font's where each by itself can be set.
 [[nodiscard]] std::vector<DesignError> what_cannot_be_lettered(const Design& design, const std::string& otherwise);
 
 /// What fell off the plate: no hour line on it; a given nodus that throws every date line off it.
-[[nodiscard]] std::vector<DesignError> what_misses_the_plate(const Design& design, const MeanYear& year, const std::vector<FacePlan>& plans, const std::vector<layout::Face>& faces);
+[[nodiscard]] std::vector<DesignError> what_misses_the_plate(const Design& design, const MeanYear& year,
+                                                             const std::vector<FacePlan>& plans,
+                                                             const std::vector<layout::Face>& faces);
 
 } // namespace dialwright::cli

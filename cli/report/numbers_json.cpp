@@ -44,7 +44,9 @@ void write(const Json& json, std::string& text) {
     }
 }
 
-Json point(PlatePoint p) { return Json::array({number(p.u_mm), number(p.v_mm)}); }
+Json point(PlatePoint p) {
+    return Json::array({number(p.u_mm), number(p.v_mm)});
+}
 
 Json points(const std::vector<PlatePoint>& line) {
     Json list = Json::array();
@@ -91,11 +93,12 @@ void add_face(Json& out, const FacePlan& plan, const layout::Face& face) {
                                          {"declination_deg", number(line.declination.value_or(Angle{}).in_degrees())},
                                          {"points_mm", points(line.points)}});
         else if (line.set == 0 && is_hour(line.family))
-            out["hour_lines"].push_back({{"label", line.label},
-                                         {"time_h", number(line.time_h)},
-                                         {"hour_angle_deg", straight_or_clock ? number(line.hour_angle.in_degrees()) : Json(nullptr)},
-                                         {"angle_deg", line.direction ? number(line.direction->in_degrees()) : Json(nullptr)},
-                                         {"points_mm", points(line.points)}});
+            out["hour_lines"].push_back(
+                {{"label", line.label},
+                 {"time_h", number(line.time_h)},
+                 {"hour_angle_deg", straight_or_clock ? number(line.hour_angle.in_degrees()) : Json(nullptr)},
+                 {"angle_deg", line.direction ? number(line.direction->in_degrees()) : Json(nullptr)},
+                 {"points_mm", points(line.points)}});
         else
             out["more_lines"].push_back(more_line(line));
     }
@@ -155,15 +158,17 @@ std::string numbers_json(const Commission& commission) {
 }
 
 std::string hour_lines_csv(const Commission& commission) {
-    std::string text = "face,label,time_h,hour_angle_deg,angle_deg,inner_u_mm,inner_v_mm,outer_u_mm,outer_v_mm,points\n";
+    std::string text =
+        "face,label,time_h,hour_angle_deg,angle_deg,inner_u_mm,inner_v_mm,outer_u_mm,outer_v_mm,points\n";
     for (std::size_t i = 0; i < commission.faces.size(); ++i)
         for (const layout::DrawnLine& line : commission.faces[i].lines) {
             if (line.set != 0 || !is_hour(line.family))
                 continue;
             const PlatePoint a = line.points.front(), b = line.points.back();
-            text += fmt::format("{},{},{},{},{},{},{},{},{},{}\n", commission.plans[i].name, line.label, fixed(line.time_h, 6),
-                                fixed(line.hour_angle.in_degrees(), 6), line.direction ? fixed(line.direction->in_degrees(), 6) : "",
-                                fixed(a.u_mm, 4), fixed(a.v_mm, 4), fixed(b.u_mm, 4), fixed(b.v_mm, 4), line.points.size());
+            text += fmt::format("{},{},{},{},{},{},{},{},{},{}\n", commission.plans[i].name, line.label,
+                                fixed(line.time_h, 6), fixed(line.hour_angle.in_degrees(), 6),
+                                line.direction ? fixed(line.direction->in_degrees(), 6) : "", fixed(a.u_mm, 4),
+                                fixed(a.v_mm, 4), fixed(b.u_mm, 4), fixed(b.v_mm, 4), line.points.size());
         }
     return text;
 }

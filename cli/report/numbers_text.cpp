@@ -10,7 +10,8 @@ namespace {
 
 class Text {
   public:
-    template <class... Parts> void line(fmt::format_string<Parts...> form, Parts&&... parts) {
+    template <class... Parts>
+    void line(fmt::format_string<Parts...> form, Parts&&... parts) {
         fmt::format_to(std::back_inserter(text_), form, std::forward<Parts>(parts)...);
         text_ += '\n';
     }
@@ -21,18 +22,23 @@ class Text {
     std::string text_;
 };
 
-std::string point_text(PlatePoint p) { return fmt::format("{:>8} {:>8}", fixed(p.u_mm, 1), fixed(p.v_mm, 1)); }
+std::string point_text(PlatePoint p) {
+    return fmt::format("{:>8} {:>8}", fixed(p.u_mm, 1), fixed(p.v_mm, 1));
+}
 
 void say_site(Text& text, const Commission& commission) {
     const Design& design = commission.design;
     text.line("{}", design.title);
-    text.line("  place        {}, {}", say_latitude(design.place.site.latitude), say_longitude(design.place.site.longitude));
+    text.line("  place        {}, {}", say_latitude(design.place.site.latitude),
+              say_longitude(design.place.site.longitude));
     const Angle meridian = commission.plans.front().dial.zone_meridian;
     text.line("  zone         {}, standard meridian {}", design.place.zone, say_longitude(meridian));
     const double correction = (meridian - design.place.site.longitude).in_minutes_of_time();
-    text.line("  longitude    {} min of time {} the zone's meridian: zone time is Sun time {} {} min", fixed(std::abs(correction), 2),
-              correction >= 0 ? "west of" : "east of", correction >= 0 ? "+" : "-", fixed(std::abs(correction), 2));
-    text.line("  years        {} to {} (means of declination and equation of time)", design.years.first, design.years.last);
+    text.line("  longitude    {} min of time {} the zone's meridian: zone time is Sun time {} {} min",
+              fixed(std::abs(correction), 2), correction >= 0 ? "west of" : "east of", correction >= 0 ? "+" : "-",
+              fixed(std::abs(correction), 2));
+    text.line("  years        {} to {} (means of declination and equation of time)", design.years.first,
+              design.years.last);
 }
 
 void say_style(Text& text, const layout::Face& face, const FacePlan& plan, bool inches) {
@@ -42,31 +48,37 @@ void say_style(Text& text, const layout::Face& face, const FacePlan& plan, bool 
     text.line("  substyle     {} clockwise from up", both_ways(style.substyle));
     text.line("  nodus        {} above the plate", say_length(face.placement.nodus_height_mm, inches));
     if (style.centre)
-        text.line("  centre       u {}, v {} from the nodus' foot", say_length(style.centre->u_mm, inches), say_length(style.centre->v_mm, inches));
+        text.line("  centre       u {}, v {} from the nodus' foot", say_length(style.centre->u_mm, inches),
+                  say_length(style.centre->v_mm, inches));
     else
         text.line("  centre       none: the style is parallel to the plate");
-    text.line("  nodus' foot  {} right, {} up of the plate's middle", say_length(face.placement.foot.x_mm, inches), say_length(face.placement.foot.y_mm, inches));
+    text.line("  nodus' foot  {} right, {} up of the plate's middle", say_length(face.placement.foot.x_mm, inches),
+              say_length(face.placement.foot.y_mm, inches));
     if (plan.dial.gnomon_thickness_mm > 0)
-        text.line("  gnomon       {} thick: two half-dials, this far apart", say_length(plan.dial.gnomon_thickness_mm, inches));
+        text.line("  gnomon       {} thick: two half-dials, this far apart",
+                  say_length(plan.dial.gnomon_thickness_mm, inches));
 }
 
 void say_lines(Text& text, const layout::Face& face) {
     text.gap();
     text.line("  Hour lines: angle on the plate from the centre, clockwise from up; ends in mm from the nodus' foot");
-    text.line("  {:<8} {:>7} {:>11} {:>10} {:>12}   {:>8} {:>8}   {:>8} {:>8}", "line", "time", "hour angle", "angle", "", "from u", "v", "to u", "v");
+    text.line("  {:<8} {:>7} {:>11} {:>10} {:>12}   {:>8} {:>8}   {:>8} {:>8}", "line", "time", "hour angle", "angle",
+              "", "from u", "v", "to u", "v");
     for (const layout::DrawnLine& line : face.lines) {
         if (line.set != 0 || !is_hour(line.family))
             continue;
         const std::string angle = line.direction ? fixed(line.direction->in_degrees(), 4) + "°" : "curve";
         const std::string minutes = line.direction ? degrees_minutes(*line.direction) : "";
-        text.line("  {:<8} {:>7} {:>10}° {:>10} {:>12}   {}   {}", line.label, say_clock(line.time_h).substr(0, 5), fixed(line.hour_angle.in_degrees(), 4),
-                  angle, minutes, point_text(line.points.front()), point_text(line.points.back()));
+        text.line("  {:<8} {:>7} {:>10}° {:>10} {:>12}   {}   {}", line.label, say_clock(line.time_h).substr(0, 5),
+                  fixed(line.hour_angle.in_degrees(), 4), angle, minutes, point_text(line.points.front()),
+                  point_text(line.points.back()));
     }
     text.gap();
     text.line("  Date lines: ends in mm from the nodus' foot");
     for (const layout::DrawnLine& line : face.lines)
         if (line.family == Family::date)
-            text.line("  {:<28} {:>24}   {}   {}   {} points", line.label, both_ways(line.declination.value_or(Angle{})), point_text(line.points.front()),
+            text.line("  {:<28} {:>24}   {}   {}   {} points", line.label,
+                      both_ways(line.declination.value_or(Angle{})), point_text(line.points.front()),
                       point_text(line.points.back()), line.points.size());
 }
 
@@ -80,15 +92,16 @@ void say_more_lines(Text& text, const layout::Face& face) {
             text.line("  More lines: ends in mm from the nodus' foot");
         }
         headed = true;
-        text.line("  {:<16} {:<12}   {}   {}   {} points", say_family(line.family), line.label, point_text(line.points.front()), point_text(line.points.back()),
-                  line.points.size());
+        text.line("  {:<16} {:<12}   {}   {}   {} points", say_family(line.family), line.label,
+                  point_text(line.points.front()), point_text(line.points.back()), line.points.size());
     }
 }
 
 void list_equation(Text& text, const MeanYear& year) {
     text.gap();
     text.line("Equation of time, the mean of the years, at noon UT");
-    static constexpr const char* k_months[] = {"Jan", "Feb", "Mar", "Apr", "May", "Jun", "Jul", "Aug", "Sep", "Oct", "Nov", "Dec"};
+    static constexpr const char* k_months[] = {"Jan", "Feb", "Mar", "Apr", "May", "Jun",
+                                               "Jul", "Aug", "Sep", "Oct", "Nov", "Dec"};
     for (unsigned month = 1; month <= 12; ++month) {
         std::string row = fmt::format("  {}", k_months[month - 1]);
         for (const unsigned day : {1U, 11U, 21U}) {

@@ -7,14 +7,22 @@
 namespace dialwright::cli {
 namespace {
 
-std::string unsigned_degrees_minutes(Angle angle) { return degrees_minutes(abs(angle)); }
+std::string unsigned_degrees_minutes(Angle angle) {
+    return degrees_minutes(abs(angle));
+}
 
 } // namespace
 
-std::string both_ways(Angle angle) { return fmt::format("{}° ({})", fixed(angle.in_degrees(), 4), degrees_minutes(angle)); }
+std::string both_ways(Angle angle) {
+    return fmt::format("{}° ({})", fixed(angle.in_degrees(), 4), degrees_minutes(angle));
+}
 
-std::string say_latitude(Angle latitude) { return unsigned_degrees_minutes(latitude) + (latitude < Angle{} ? " S" : " N"); }
-std::string say_longitude(Angle longitude) { return unsigned_degrees_minutes(longitude) + (longitude < Angle{} ? " W" : " E"); }
+std::string say_latitude(Angle latitude) {
+    return unsigned_degrees_minutes(latitude) + (latitude < Angle{} ? " S" : " N");
+}
+std::string say_longitude(Angle longitude) {
+    return unsigned_degrees_minutes(longitude) + (longitude < Angle{} ? " W" : " E");
+}
 
 std::string say_bearing(Angle azimuth) {
     static constexpr const char* k_quarters[] = {"north", "east", "south", "west"};
@@ -34,7 +42,8 @@ std::string say_attitude(const Attitude& attitude) {
     const std::string facing = "facing " + say_bearing(attitude.normal_azimuth);
     if (std::abs(altitude) < 0.005)
         return "upright, " + facing;
-    return fmt::format("leaning {} {} from upright, {}", altitude > 0 ? "back" : "forward", degrees_minutes(abs(attitude.normal_altitude)), facing);
+    return fmt::format("leaning {} {} from upright, {}", altitude > 0 ? "back" : "forward",
+                       degrees_minutes(abs(attitude.normal_altitude)), facing);
 }
 
 std::string say_equation(Angle equation) {
@@ -42,8 +51,8 @@ std::string say_equation(Angle equation) {
     const double size = std::abs(seconds);
     if (size == 0)
         return "0 m 00 s";
-    return fmt::format("{}{:.0f} m {:02.0f} s, dial {}", seconds < 0 ? "-" : "+", std::floor(size / 60), std::fmod(size, 60.0),
-                       seconds < 0 ? "slow" : "fast");
+    return fmt::format("{}{:.0f} m {:02.0f} s, dial {}", seconds < 0 ? "-" : "+", std::floor(size / 60),
+                       std::fmod(size, 60.0), seconds < 0 ? "slow" : "fast");
 }
 
 const char* say_time(HourTime time) {

@@ -34,13 +34,18 @@ std::string clock_of(const Zone& zone, Instant at) {
     return write_instant(local).substr(0, 19) + " " + offset.abbreviation;
 }
 
-std::string reading_json(std::optional<double> hours) { return hours ? '"' + say_clock(*hours) + '"' : "null"; }
+std::string reading_json(std::optional<double> hours) {
+    return hours ? '"' + say_clock(*hours) + '"' : "null";
+}
 
-std::string reading_text(std::optional<double> hours) { return hours ? say_clock(*hours) : "none"; }
+std::string reading_text(std::optional<double> hours) {
+    return hours ? say_clock(*hours) : "none";
+}
 
 } // namespace
 
-std::vector<ShadowReport> shadow_reports(const Commission& commission, std::span<const Instant> instants, std::optional<std::size_t> face) {
+std::vector<ShadowReport> shadow_reports(const Commission& commission, std::span<const Instant> instants,
+                                         std::optional<std::size_t> face) {
     std::vector<Reader> readers;
     for (const FacePlan& plan : commission.plans)
         readers.push_back({&plan, caster_of(plan.dial)});
@@ -72,7 +77,8 @@ std::vector<ShadowReport> shadow_reports(const Commission& commission, std::span
     return reports;
 }
 
-std::string shadow_json(const Commission& commission, const std::vector<ShadowReport>& reports, std::span<const std::string> texts) {
+std::string shadow_json(const Commission& commission, const std::vector<ShadowReport>& reports,
+                        std::span<const std::string> texts) {
     fmt::memory_buffer out;
     const auto put = std::back_inserter(out);
     const bool several = commission.plans.size() > 1;
@@ -83,17 +89,20 @@ std::string shadow_json(const Commission& commission, const std::vector<ShadowRe
         if (several)
             fmt::format_to(put, "\"face\":\"{}\",", commission.plans[r.face].name);
         fmt::format_to(put,
-                       "\"sun\":{{\"altitude_deg\":{},\"azimuth_deg\":{},\"declination_deg\":{},\"hour_angle_deg\":{},\"equation_of_time_min\":{}}},\"lit\":{},",
+                       "\"sun\":{{\"altitude_deg\":{},\"azimuth_deg\":{},\"declination_deg\":{},\"hour_angle_deg\":{},"
+                       "\"equation_of_time_min\":{}}},\"lit\":{},",
                        fixed(r.towards_sun.altitude().in_degrees(), 7), fixed(r.towards_sun.azimuth().in_degrees(), 7),
                        fixed(r.sky.declination.in_degrees(), 7), fixed(r.sky.hour_angle.in_degrees(), 7),
                        fixed(r.sun.equation_of_time.in_minutes_of_time(), 6), r.lit);
         if (r.shadow)
-            fmt::format_to(put, "\"shadow_mm\":[{},{}],\"reads\":{}", fixed(r.shadow->u_mm, 6), fixed(r.shadow->v_mm, 6), reading_json(r.reads_h));
+            fmt::format_to(put, "\"shadow_mm\":[{},{}],\"reads\":{}", fixed(r.shadow->u_mm, 6),
+                           fixed(r.shadow->v_mm, 6), reading_json(r.reads_h));
         else
             fmt::format_to(put, "\"shadow_mm\":null,\"reads\":null");
         const auto& more = commission.plans[r.face].dial.more_hours;
         for (std::size_t k = 0; k < more.size(); ++k)
-            fmt::format_to(put, "{}\"{}\":{}", k == 0 ? ",\"also\":{" : ",", say_time(more[k].time), r.lit ? reading_json(r.also_reads_h[k]) : "null");
+            fmt::format_to(put, "{}\"{}\":{}", k == 0 ? ",\"also\":{" : ",", say_time(more[k].time),
+                           r.lit ? reading_json(r.also_reads_h[k]) : "null");
         fmt::format_to(put, "{}", more.empty() ? "}" : "}}");
     }
     fmt::format_to(put, "\n]\n");
@@ -105,14 +114,16 @@ std::string shadow_text(const Commission& commission, const std::vector<ShadowRe
     const auto put = std::back_inserter(out);
     const bool several = commission.plans.size() > 1;
     const auto zone = Zone::find(commission.design.place.zone);
-    fmt::format_to(put, "{:<26} {:>9} {:>9} {:>9} {:>10}  {:>9} {:>9}  {:<9}{}\n", "clock", "altitude", "azimuth", "decl.", "hour ang.", "u mm", "v mm", "reads",
-                   several ? " face" : "");
+    fmt::format_to(put, "{:<26} {:>9} {:>9} {:>9} {:>10}  {:>9} {:>9}  {:<9}{}\n", "clock", "altitude", "azimuth",
+                   "decl.", "hour ang.", "u mm", "v mm", "reads", several ? " face" : "");
     for (const ShadowReport& r : reports) {
         const auto degrees = [](Angle a) { return fixed(a.in_degrees(), 3) + "°"; };
-        fmt::format_to(put, "{:<26} {:>9} {:>9} {:>9} {:>10}  ", zone ? clock_of(*zone, r.at) : write_instant(r.at), degrees(r.towards_sun.altitude()),
-                       degrees(r.towards_sun.azimuth()), degrees(r.sky.declination), degrees(r.sky.hour_angle));
+        fmt::format_to(put, "{:<26} {:>9} {:>9} {:>9} {:>10}  ", zone ? clock_of(*zone, r.at) : write_instant(r.at),
+                       degrees(r.towards_sun.altitude()), degrees(r.towards_sun.azimuth()), degrees(r.sky.declination),
+                       degrees(r.sky.hour_angle));
         if (r.shadow)
-            fmt::format_to(put, "{:>9} {:>9}  {:<9}", fixed(r.shadow->u_mm, 2), fixed(r.shadow->v_mm, 2), reading_text(r.reads_h));
+            fmt::format_to(put, "{:>9} {:>9}  {:<9}", fixed(r.shadow->u_mm, 2), fixed(r.shadow->v_mm, 2),
+                           reading_text(r.reads_h));
         else
             fmt::format_to(put, "{:>9} {:>9}  {:<9}", "", "", r.towards_sun.enu.z() > 0 ? "unlit" : "Sun down");
         fmt::format_to(put, "{}", several ? " " + commission.plans[r.face].name : "");

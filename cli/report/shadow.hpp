@@ -17,8 +17,8 @@ struct ShadowReport {
     SiteDirection towards_sun;
     std::size_t face = 0; ///< of the commission
     bool lit = false;
-    std::optional<PlatePoint> shadow; ///< of the casting edge's nodus
-    std::optional<double> reads_h;                 ///< by the chapter ring's hours
+    std::optional<PlatePoint> shadow;                ///< of the casting edge's nodus
+    std::optional<double> reads_h;                   ///< by the chapter ring's hours
     std::vector<std::optional<double>> also_reads_h; ///< by each more set of hours, beside the plan's more_hours
 };
 

@@ -60,12 +60,26 @@ class Angle {
     double radians_ = 0.0;
 };
 
-[[nodiscard]] inline double sin(Angle a) { return std::sin(a.in_radians()); }
-[[nodiscard]] inline double cos(Angle a) { return std::cos(a.in_radians()); }
-[[nodiscard]] inline double tan(Angle a) { return std::tan(a.in_radians()); }
-[[nodiscard]] inline Angle abs(Angle a) { return Angle::radians(std::abs(a.in_radians())); }
-[[nodiscard]] inline Angle arc_sine(double value) { return Angle::radians(std::asin(std::fmin(1.0, std::fmax(-1.0, value)))); }
-[[nodiscard]] inline Angle arc_cosine(double value) { return Angle::radians(std::acos(std::fmin(1.0, std::fmax(-1.0, value)))); }
-[[nodiscard]] inline Angle arc_tangent(double y, double x) { return Angle::radians(std::atan2(y, x)); }
+[[nodiscard]] inline double sin(Angle a) {
+    return std::sin(a.in_radians());
+}
+[[nodiscard]] inline double cos(Angle a) {
+    return std::cos(a.in_radians());
+}
+[[nodiscard]] inline double tan(Angle a) {
+    return std::tan(a.in_radians());
+}
+[[nodiscard]] inline Angle abs(Angle a) {
+    return Angle::radians(std::abs(a.in_radians()));
+}
+[[nodiscard]] inline Angle arc_sine(double value) {
+    return Angle::radians(std::asin(std::fmin(1.0, std::fmax(-1.0, value))));
+}
+[[nodiscard]] inline Angle arc_cosine(double value) {
+    return Angle::radians(std::acos(std::fmin(1.0, std::fmax(-1.0, value))));
+}
+[[nodiscard]] inline Angle arc_tangent(double y, double x) {
+    return Angle::radians(std::atan2(y, x));
+}
 
 } // namespace dialwright

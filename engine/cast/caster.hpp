@@ -17,10 +17,12 @@ struct Cast {
 };
 
 /// Throws the shadow of a gnomon's nodus onto a surface at a site: the one way from the sky to the work.
-template <Surface S> class Caster {
+template <Surface S>
+class Caster {
   public:
     Caster(Angle latitude, S surface, GnomonEdges edges, Skyline skyline)
-        : latitude_{latitude}, sines_{latitude}, surface_{std::move(surface)}, edges_{edges}, skyline_{std::move(skyline)} {}
+        : latitude_{latitude}, sines_{latitude}, surface_{std::move(surface)}, edges_{edges}, skyline_{
+                                                                                                  std::move(skyline)} {}
 
     [[nodiscard]] Angle latitude() const { return latitude_; }
     [[nodiscard]] const S& surface() const { return surface_; }
@@ -49,7 +51,8 @@ template <Surface S> class Caster {
     Skyline skyline_;
 };
 
-template <Surface S> bool Caster<S>::ever_lit(Angle hour_angle, const Season& season) const {
+template <Surface S>
+bool Caster<S>::ever_lit(Angle hour_angle, const Season& season) const {
     constexpr double k_grazing = 1e-6; // sine: a Sun nearer to the plate's plane or the horizon throws no shadow to cut
     constexpr int k_parts = 94;
     const Eigen::Vector3d equator = to_site({hour_angle, Angle{}}, sines_).enu, pole = north_pole(latitude_).enu;

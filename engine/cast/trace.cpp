@@ -38,11 +38,13 @@ bool cut_to_box(PlatePoint a, double du, double dv, const PlateBox& box, double&
     return cut(a.u_mm, du, box.left_mm, box.right_mm) && cut(a.v_mm, dv, box.bottom_mm, box.top_mm);
 }
 
-template <Surface S> class Walk {
+template <Surface S>
+class Walk {
   public:
     Walk(const Caster<S>& caster, const SunPath& path, const PlateBox& window, double tolerance_mm)
-        : caster_{caster}, path_{path}, window_{window}, tolerance_mm_{tolerance_mm},
-          hills_{!caster.skyline().flat() && path.light == Light::seen} {}
+        : caster_{caster}, path_{path}, window_{window}, tolerance_mm_{tolerance_mm}, hills_{!caster.skyline().flat() &&
+                                                                                             path.light ==
+                                                                                                 Light::seen} {}
 
     std::vector<PlatePolyline> curve() {
         Step before = step(path_.first);
@@ -143,7 +145,8 @@ template <Surface S> class Walk {
     [[nodiscard]] static bool one_point(const Step& a, const Step& b) {
         constexpr double k_one_mm = 1e-9;
         return a.cast && b.cast && a.cast->edge == b.cast->edge &&
-               std::abs(a.cast->point.u_mm - b.cast->point.u_mm) + std::abs(a.cast->point.v_mm - b.cast->point.v_mm) < k_one_mm;
+               std::abs(a.cast->point.u_mm - b.cast->point.u_mm) + std::abs(a.cast->point.v_mm - b.cast->point.v_mm) <
+                   k_one_mm;
     }
 
     /// Whether a stretch with both ends outside the window or unlit might come in between.
@@ -152,8 +155,8 @@ template <Surface S> class Walk {
             // The curve bulges from its chord, by no more than a part of the chord's length.
             const PlatePoint p = a.cast->point, q = b.cast->point;
             const double du = q.u_mm - p.u_mm, dv = q.v_mm - p.v_mm, bulge_mm = 0.25 * std::hypot(du, dv);
-            const PlateBox wider{window_.left_mm - bulge_mm, window_.bottom_mm - bulge_mm,
-                                 window_.right_mm + bulge_mm, window_.top_mm + bulge_mm};
+            const PlateBox wider{window_.left_mm - bulge_mm, window_.bottom_mm - bulge_mm, window_.right_mm + bulge_mm,
+                                 window_.top_mm + bulge_mm};
             double first = 0.0, last = 1.0;
             return cut_to_box(p, du, dv, wider, first, last);
         }
@@ -178,7 +181,8 @@ template <Surface S> class Walk {
             return;
         }
         const auto near_chord = [this](const Step& s, const Step& from, const Step& to) {
-            return s.cast && square_from_chord(s.cast->point, from.cast->point, to.cast->point) <= tolerance_mm_ * tolerance_mm_;
+            return s.cast &&
+                   square_from_chord(s.cast->point, from.cast->point, to.cast->point) <= tolerance_mm_ * tolerance_mm_;
         };
         const Step early = step((a.at + middle.at) / 2), late = step((middle.at + b.at) / 2);
         if (near_chord(middle, a, b) && near_chord(early, a, b) && near_chord(late, a, b)) {
@@ -249,7 +253,8 @@ template <Surface S> class Walk {
 } // namespace
 
 template <Surface S>
-std::vector<PlatePolyline> trace(const Caster<S>& caster, const SunPath& path, const PlateBox& window, double tolerance_mm) {
+std::vector<PlatePolyline> trace(const Caster<S>& caster, const SunPath& path, const PlateBox& window,
+                                 double tolerance_mm) {
     Walk<S> walk{caster, path, window, tolerance_mm};
     return path.great_circle && S::straight_paths ? walk.straight() : walk.curve();
 }

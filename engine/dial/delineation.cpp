@@ -120,7 +120,8 @@ class Delineator {
         if (!line.pieces.empty())
             return true;
         for (int i = 0; i <= path.steps; ++i)
-            if (const auto sky = path.at(path.first + (path.last - path.first) * i / path.steps); sky && caster_.cast(*sky, path.light))
+            if (const auto sky = path.at(path.first + (path.last - path.first) * i / path.steps);
+                sky && caster_.cast(*sky, path.light))
                 return true;
         return false;
     }
@@ -132,7 +133,8 @@ class Delineator {
         line.direction = hour_line_direction(made_.frame, made_.style, plan_.site.latitude, line.hour_angle);
         SunPath path = extent == HourExtent::style ? hour_path_of_style(line.hour_angle)
                                                    : hour_path_of_nodus(line.hour_angle, made_.season);
-        if (!caster_.edges().both_cast(line.hour_angle)) // one edge casts the hour, up to the pole, where its Sun tells no more
+        if (!caster_.edges().both_cast(
+                line.hour_angle)) // one edge casts the hour, up to the pole, where its Sun tells no more
             path.edge = caster_.edges().casting(line.hour_angle);
         line.pieces = pieces_of(path);
         return true;
@@ -231,7 +233,8 @@ Family family_of(HourTime time) {
 }
 
 bool is_hour(Family family) {
-    return family != Family::date && family != Family::altitude && family != Family::azimuth && family != Family::place_noon;
+    return family != Family::date && family != Family::altitude && family != Family::azimuth &&
+           family != Family::place_noon;
 }
 
 Angle hour_angle_of(HourTime time, double time_h, const Site& site, Angle zone_meridian) {
@@ -274,7 +277,8 @@ double clock_reading(const DialPlan& plan, const MeanYear& year, const SkyPlace&
 
 } // namespace
 
-std::optional<double> reading_of(const DialPlan& plan, HourTime time, const MeanYear& year, const SkyPlace& sun, double day_of_year) {
+std::optional<double> reading_of(const DialPlan& plan, HourTime time, const MeanYear& year, const SkyPlace& sun,
+                                 double day_of_year) {
     if (time == HourTime::clock)
         return clock_reading(plan, year, sun, day_of_year);
     if (time == HourTime::sun || time == HourTime::zone)

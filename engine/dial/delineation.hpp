@@ -9,19 +9,30 @@
 namespace dialwright {
 
 /// How a line came about; which of a plan's sets of hours it belongs to stands beside it.
-enum class Family { hour, clock_hour, date, since_sunrise, since_sunset, to_sunset, unequal_hour, altitude, azimuth, place_noon };
+enum class Family {
+    hour,
+    clock_hour,
+    date,
+    since_sunrise,
+    since_sunset,
+    to_sunset,
+    unequal_hour,
+    altitude,
+    azimuth,
+    place_noon
+};
 [[nodiscard]] Family family_of(HourTime time);
 [[nodiscard]] bool is_hour(Family family); ///< one that has a time
 
 /// One line of the dial, not yet trimmed to the plate's borders.
 struct DialLine {
     Family family = Family::hour;
-    int set = 0;                      ///< 0: the plan's own hours; 1, 2, …: its more_hours
-    std::string label;                ///< of a date line, of a place
-    double time_h = 0.0;              ///< of an hour line, on its own scale
-    Angle level;                      ///< of an altitude circle or an azimuth line
-    int step_min = 60;                ///< the coarsest of 60, 30, 15, 10, 5, 2, 1 minutes that the time is a whole number of
-    Angle hour_angle;                 ///< of an hour line; of the mean Sun for the clock's
+    int set = 0;         ///< 0: the plan's own hours; 1, 2, …: its more_hours
+    std::string label;   ///< of a date line, of a place
+    double time_h = 0.0; ///< of an hour line, on its own scale
+    Angle level;         ///< of an altitude circle or an azimuth line
+    int step_min = 60;   ///< the coarsest of 60, 30, 15, 10, 5, 2, 1 minutes that the time is a whole number of
+    Angle hour_angle;    ///< of an hour line; of the mean Sun for the clock's
     std::optional<Angle> direction;   ///< of a straight hour line, from the centre, clockwise from +v
     std::optional<Angle> declination; ///< of a date line
     std::vector<PlatePolyline> pieces;
@@ -31,10 +42,10 @@ struct DialLine {
 struct Delineation {
     PlateFrame frame;
     Style style;
-    Season season;                     ///< of the mean year
-    std::vector<DialLine> lines;       ///< hours by time, then dates in the plan's order
-    std::vector<double> unlit_hours;   ///< whole hours that the plan asks for by name and that are never lit
-    std::vector<double> outside_hours; ///< whole hours that are lit, but whose lines lie wholly outside the window
+    Season season;                        ///< of the mean year
+    std::vector<DialLine> lines;          ///< hours by time, then dates in the plan's order
+    std::vector<double> unlit_hours;      ///< whole hours that the plan asks for by name and that are never lit
+    std::vector<double> outside_hours;    ///< whole hours that are lit, but whose lines lie wholly outside the window
     std::vector<std::string> unlit_dates; ///< date lines of which nothing falls into the window
 };
 
@@ -48,7 +59,7 @@ struct Delineation {
 /// falls, in [0, 24). On clock-time curves the curve of the half year that `day_of_year` lies in.
 /// @param day_of_year  of the mean year
 /// @return nothing for hours that count from a rising or setting on a day that has none
-[[nodiscard]] std::optional<double> reading_of(const DialPlan& plan, HourTime time, const MeanYear& year, const SkyPlace& sun,
-                                               double day_of_year);
+[[nodiscard]] std::optional<double> reading_of(const DialPlan& plan, HourTime time, const MeanYear& year,
+                                               const SkyPlace& sun, double day_of_year);
 
 } // namespace dialwright

@@ -61,9 +61,9 @@ struct DialPlan {
     double nodus_height_mm = 0.0;
     double gnomon_thickness_mm = 0.0;
     Skyline skyline;
-    HourPlan hours;                  ///< those of the chapter ring
+    HourPlan hours;                   ///< those of the chapter ring
     std::vector<HourPlan> more_hours; ///< drawn on the field beside them
-    Angle horizon;                   ///< the Sun's altitude at rising and setting, for hours that count from them: 0° or −50′
+    Angle horizon; ///< the Sun's altitude at rising and setting, for hours that count from them: 0° or −50′
     std::vector<Angle> altitudes, azimuths;
     std::vector<PlaceNoon> noons;
     DatePlan dates;

@@ -9,7 +9,8 @@ namespace dialwright {
 namespace {
 
 /// A path with the declination as its parameter, at an hour angle that follows from the day arc.
-template <class HourAngle> SunPath day_arc_path(Angle latitude, const Season& season, Angle horizon, HourAngle hour_angle) {
+template <class HourAngle>
+SunPath day_arc_path(Angle latitude, const Season& season, Angle horizon, HourAngle hour_angle) {
     SunPath path;
     path.at = [=](double radians) -> std::optional<SkyPlace> {
         const Angle declination = Angle::radians(radians);
@@ -25,7 +26,8 @@ template <class HourAngle> SunPath day_arc_path(Angle latitude, const Season& se
 }
 
 /// A path given in the site frame, of which only the season's Suns count.
-template <class Direction> SunPath site_path(Angle latitude, const Season& season, Direction direction) {
+template <class Direction>
+SunPath site_path(Angle latitude, const Season& season, Direction direction) {
     SunPath path;
     path.at = [=](double parameter) -> std::optional<SkyPlace> {
         const SkyPlace sky = to_sky(direction(Angle::radians(parameter)), latitude);
@@ -109,7 +111,8 @@ SunPath altitude_path(Angle altitude, Angle latitude, const Season& season) {
 
 SunPath azimuth_path(Angle azimuth, Angle latitude, const Season& season) {
     SunPath path = site_path(latitude, season, [azimuth](Angle altitude) { return direction_at(azimuth, altitude); });
-    path.first = 1e-9; // not the horizon itself, where the Sun is not seen: in the far north it may leave the season close by
+    path.first =
+        1e-9; // not the horizon itself, where the Sun is not seen: in the far north it may leave the season close by
     path.last = std::numbers::pi / 2;
     path.great_circle = true;
     return path;

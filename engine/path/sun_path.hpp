@@ -20,11 +20,11 @@ enum class Light {
 /// else knows how the curve comes about.
 struct SunPath {
     std::function<std::optional<SkyPlace>(double)> at; ///< nothing where no Sun of the path stands there
-    double first = 0.0, last = 1.0; ///< of the parameter
-    bool great_circle = false;      ///< its shadow is straight wherever the surface keeps great circles straight
+    double first = 0.0, last = 1.0;                    ///< of the parameter
+    bool great_circle = false; ///< its shadow is straight wherever the surface keeps great circles straight
     Light light = Light::seen;
-    std::optional<Edge> edge;       ///< the casting edge where the path is told; else by the Sun's hour angle
-    int steps = 96;                 ///< parameter steps within which the path does not turn twice
+    std::optional<Edge> edge; ///< the casting edge where the path is told; else by the Sun's hour angle
+    int steps = 96;           ///< parameter steps within which the path does not turn twice
 };
 
 /// The declinations that the Sun reaches in the mean year: ± this.

@@ -22,7 +22,9 @@ Edge GnomonEdges::casting(const SiteDirection& sun) const {
     return shadow_to_right == above_top ? Edge::right : Edge::left;
 }
 
-Edge GnomonEdges::casting(Angle hour_angle) const { return casting(to_site({hour_angle, Angle{}}, latitude_)); }
+Edge GnomonEdges::casting(Angle hour_angle) const {
+    return casting(to_site({hour_angle, Angle{}}, latitude_));
+}
 
 PlatePoint GnomonEdges::shift(Edge edge) const {
     const double half = edge == Edge::right ? thickness_mm_ / 2 : -thickness_mm_ / 2;

@@ -34,9 +34,10 @@ class GnomonEdges {
   private:
     Angle latitude_;
     double thickness_mm_;
-    PlatePoint right_;              ///< unit, plate frame
-    Eigen::Vector3d to_the_right_;  ///< the same, site frame
-    Eigen::Vector3d above_the_top_; ///< towards the Sun of the substyle's hour at the equinox: square to the gnomon's top
+    PlatePoint right_;             ///< unit, plate frame
+    Eigen::Vector3d to_the_right_; ///< the same, site frame
+    Eigen::Vector3d
+        above_the_top_; ///< towards the Sun of the substyle's hour at the equinox: square to the gnomon's top
 };
 
 } // namespace dialwright

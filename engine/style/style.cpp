@@ -35,7 +35,8 @@ Style style_of(const PlateFrame& frame, double nodus_height_mm, Angle latitude) 
     return style;
 }
 
-std::optional<Angle> hour_line_direction(const PlateFrame& frame, const Style& style, Angle latitude, Angle hour_angle) {
+std::optional<Angle> hour_line_direction(const PlateFrame& frame, const Style& style, Angle latitude,
+                                         Angle hour_angle) {
     const Eigen::Vector3d q = to_site({hour_angle, Angle{}}, latitude).enu;
     const double a = style.towards_nodus.dot(frame.n), b = q.dot(frame.n);
     constexpr double k_in_plane = 1e-12;

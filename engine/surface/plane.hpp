@@ -26,12 +26,14 @@ class Plane {
     /// @return mm in the plate frame; nothing where the plate's face is unlit
     /// Accuracy: 1e-9 of the result while the Sun is 0.01° or more above the plate's plane.
     /// Source: Meeus, Astronomical Algorithms, 2nd ed. 1998, ch. 58. Test: tests/published/dial/meeus_58.txt
-    [[nodiscard]] std::optional<PlatePoint> shadow_of_nodus(const SiteDirection& sun, PlatePoint shifted_mm = {}) const {
+    [[nodiscard]] std::optional<PlatePoint> shadow_of_nodus(const SiteDirection& sun,
+                                                            PlatePoint shifted_mm = {}) const {
         const double height = light(sun);
         if (!(height > 0))
             return std::nullopt;
         const double reach = -nodus_height_mm_ / height;
-        return PlatePoint{shifted_mm.u_mm + reach * sun.enu.dot(frame_.u), shifted_mm.v_mm + reach * sun.enu.dot(frame_.v)};
+        return PlatePoint{shifted_mm.u_mm + reach * sun.enu.dot(frame_.u),
+                          shifted_mm.v_mm + reach * sun.enu.dot(frame_.v)};
     }
 
   private:

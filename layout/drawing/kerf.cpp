@@ -73,9 +73,11 @@ Kerfed with_kerf(const Drawing& drawing, double kerf_mm) {
             }
         }
     }
-    made.said = kerf_mm == 0 ? "Kerf: none allowed for; lines to cut are where the part ends."
-                             : fmt::format("Kerf: {} mm, the whole width of the cut. Outlines stand {} mm outside the part, "
-                                           "holes as much inside.", plain(kerf_mm), plain(kerf_mm / 2));
+    made.said = kerf_mm == 0
+                    ? "Kerf: none allowed for; lines to cut are where the part ends."
+                    : fmt::format("Kerf: {} mm, the whole width of the cut. Outlines stand {} mm outside the part, "
+                                  "holes as much inside.",
+                                  plain(kerf_mm), plain(kerf_mm / 2));
     if (kerf_mm > 0 && made.left_alone > 0)
         made.said += fmt::format(" Open lines to cut, which were not moved: {}.", made.left_alone);
     return made;

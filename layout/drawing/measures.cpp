@@ -43,7 +43,8 @@ double doubled_area(Point a, const Piece& piece, Point origin) {
         // The integral of a cubic's x dy − y dx, from its Bernstein polynomials.
         const Point c1 = from(curve->control_1), c2 = from(curve->control_2);
         return (6 * cross(p, c1) + 3 * cross(p, c2) + cross(p, q) + 3 * cross(c1, c2) + 3 * cross(c1, q) +
-                6 * cross(c2, q)) / 10;
+                6 * cross(c2, q)) /
+               10;
     }
     return cross(p, q);
 }
@@ -106,7 +107,9 @@ std::vector<Nest> nests_of(const std::vector<const Path*>& paths) {
     std::transform(paths.begin(), paths.end(), std::back_inserter(boxes), [](const Path* p) { return bounds_of(*p); });
     std::vector<std::vector<Point>> rings(paths.size());
     std::vector<Nest> nests(paths.size());
-    const auto alike = [](const Box& a, const Box& b) { return a.grown(1e-6).contains(b) && b.grown(1e-6).contains(a); };
+    const auto alike = [](const Box& a, const Box& b) {
+        return a.grown(1e-6).contains(b) && b.grown(1e-6).contains(a);
+    };
     for (std::size_t i = 0; i < paths.size(); ++i) {
         nests[i].outermost = i;
         double widest = 0;

@@ -19,7 +19,7 @@ namespace dialwright::layout {
 
 /// Where a contour lies among others.
 struct Nest {
-    std::size_t depth = 0;    ///< how many closed contours go round it: even for an outline, odd for a hole
+    std::size_t depth = 0;     ///< how many closed contours go round it: even for an outline, odd for a hole
     std::size_t outermost = 0; ///< the index of the one that has all the others in it; its own if nothing goes round it
 };
 

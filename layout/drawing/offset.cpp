@@ -16,17 +16,31 @@ namespace dialwright::layout {
 namespace {
 
 constexpr double k_pi = std::numbers::pi;
-constexpr double k_scale = 1e6;   ///< Clipper works in whole numbers: nanometres
+constexpr double k_scale = 1e6;     ///< Clipper works in whole numbers: nanometres
 constexpr double k_fine_mm = 0.002; ///< of chords
-constexpr double k_smooth = 1e-7; ///< radians between two pieces that run on into each other
+constexpr double k_smooth = 1e-7;   ///< radians between two pieces that run on into each other
 
-Point operator+(Point a, Point b) { return {a.x_mm + b.x_mm, a.y_mm + b.y_mm}; }
-Point operator-(Point a, Point b) { return {a.x_mm - b.x_mm, a.y_mm - b.y_mm}; }
-Point operator*(double k, Point a) { return {k * a.x_mm, k * a.y_mm}; }
-double dot(Point a, Point b) { return a.x_mm * b.x_mm + a.y_mm * b.y_mm; }
-double cross(Point a, Point b) { return a.x_mm * b.y_mm - a.y_mm * b.x_mm; }
-double size(Point a) { return std::hypot(a.x_mm, a.y_mm); }
-Point right_of(Point way) { return {way.y_mm, -way.x_mm}; }
+Point operator+(Point a, Point b) {
+    return {a.x_mm + b.x_mm, a.y_mm + b.y_mm};
+}
+Point operator-(Point a, Point b) {
+    return {a.x_mm - b.x_mm, a.y_mm - b.y_mm};
+}
+Point operator*(double k, Point a) {
+    return {k * a.x_mm, k * a.y_mm};
+}
+double dot(Point a, Point b) {
+    return a.x_mm * b.x_mm + a.y_mm * b.y_mm;
+}
+double cross(Point a, Point b) {
+    return a.x_mm * b.y_mm - a.y_mm * b.x_mm;
+}
+double size(Point a) {
+    return std::hypot(a.x_mm, a.y_mm);
+}
+Point right_of(Point way) {
+    return {way.y_mm, -way.x_mm};
+}
 
 /// A line or an arc with the ways it sets out and comes in, as unit vectors.
 struct Edge {
@@ -146,9 +160,8 @@ bool join(Edge& a, Edge& b, Point corner, double by_mm, std::vector<Edge>& filli
     const std::vector<Point> found = crossings(a, b);
     if (found.empty())
         return false;
-    a.to = b.from = *std::min_element(found.begin(), found.end(), [&](Point p, Point q) {
-        return size(p - corner) < size(q - corner);
-    });
+    a.to = b.from = *std::min_element(found.begin(), found.end(),
+                                      [&](Point p, Point q) { return size(p - corner) < size(q - corner); });
     return true;
 }
 

@@ -103,9 +103,8 @@ void add_covered_arc(std::vector<Part>& parts, const Stretch& arc, const Stretch
 
 /// What is left of a stretch.
 std::vector<Part> left_of(const Stretch& s, std::vector<Part> covered) {
-    std::sort(covered.begin(), covered.end(), [](const Part& a, const Part& b) {
-        return std::tie(a.low, a.high) < std::tie(b.low, b.high);
-    });
+    std::sort(covered.begin(), covered.end(),
+              [](const Part& a, const Part& b) { return std::tie(a.low, a.high) < std::tie(b.low, b.high); });
     const double whole = s.arc != nullptr ? std::abs(s.arc->sweep.in_radians()) : s.size;
     const double least = s.arc != nullptr ? k_same_mm / s.size : k_same_mm;
     std::vector<Part> left;
@@ -285,7 +284,8 @@ std::size_t draw_once(std::vector<Mark>& marks) {
         std::vector<Path> left;
         for (std::size_t p = 0; p < marks[at].paths.size(); ++p) {
             const auto first = changed.lower_bound(Place{at, p, 0});
-            const bool is_changed = first != changed.end() && std::get<0>(first->first) == at && std::get<1>(first->first) == p;
+            const bool is_changed =
+                first != changed.end() && std::get<0>(first->first) == at && std::get<1>(first->first) == p;
             if (is_changed)
                 add_left(left, marks[at].paths[p], changed, Place{at, p, 0});
             else

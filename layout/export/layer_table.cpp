@@ -24,24 +24,29 @@ LayerTable usual_layers() {
 
 void LayerTable::check() const {
     const auto allowed = [](char c) {
-        return (c >= 'a' && c <= 'z') || (c >= 'A' && c <= 'Z') || (c >= '0' && c <= '9') || c == '-' || c == '_' || c == '$';
+        return (c >= 'a' && c <= 'z') || (c >= 'A' && c <= 'Z') || (c >= '0' && c <= '9') || c == '-' || c == '_' ||
+               c == '$';
     };
     const auto share = [](double part) { return part >= 0 && part <= 1; };
     for (std::size_t i = 0; i < styles.size(); ++i) {
         const LayerStyle& style = styles[i];
         if (style.name.empty() || style.name.size() > 31 || !std::all_of(style.name.begin(), style.name.end(), allowed))
-            throw ExportError(fmt::format("\"{}\" can't name a layer of a DXF: give 1 to 31 letters a to z, digits, \"-\", "
-                                          "\"_\" or \"$\".", style.name));
+            throw ExportError(
+                fmt::format("\"{}\" can't name a layer of a DXF: give 1 to 31 letters a to z, digits, \"-\", "
+                            "\"_\" or \"$\".",
+                            style.name));
         for (std::size_t j = 0; j < i; ++j) {
             if (in_capitals(styles[j].name) == in_capitals(style.name))
-                throw ExportError(fmt::format("Two layers are called \"{}\": a machine could not tell \"{}\" from \"{}\".",
-                                              style.name, name_of(static_cast<Layer>(j)), name_of(static_cast<Layer>(i))));
+                throw ExportError(
+                    fmt::format("Two layers are called \"{}\": a machine could not tell \"{}\" from \"{}\".",
+                                style.name, name_of(static_cast<Layer>(j)), name_of(static_cast<Layer>(i))));
         }
         if (style.colour < 1 || style.colour > 255)
             throw ExportError(fmt::format("Colour {} of the layer \"{}\" is none: a DXF numbers its colours 1 to 255.",
                                           style.colour, style.name));
         if (!share(style.tone.red) || !share(style.tone.green) || !share(style.tone.blue))
-            throw ExportError(fmt::format("The tone of the layer \"{}\" is none: red, green and blue are 0 to 1 each.", style.name));
+            throw ExportError(
+                fmt::format("The tone of the layer \"{}\" is none: red, green and blue are 0 to 1 each.", style.name));
     }
 }
 

@@ -12,7 +12,7 @@ namespace dialwright::layout {
 struct LayerStyle {
     std::string name; ///< the group in an SVG; in capitals the layer in a DXF
     Tone tone;        ///< in an SVG
-    int colour = 7;   ///< index in a DXF, 1 to 255: 1 red, 2 yellow, 3 green, 4 cyan, 5 blue, 6 magenta, 7 black or white
+    int colour = 7; ///< index in a DXF, 1 to 255: 1 red, 2 yellow, 3 green, 4 cyan, 5 blue, 6 magenta, 7 black or white
 };
 
 /// One style for each layer. Change what the machine's program wants otherwise.

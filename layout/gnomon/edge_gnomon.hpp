@@ -18,18 +18,20 @@ enum class NodusMark {
 struct EdgeGnomonPlan {
     Angle style_height;
     double nodus_height_mm = 0.0;
-    double nodus_along_mm = 0.0; ///< of the nodus' foot. The style meets the face at the start of the foot, or passes above it
-                                 ///< where the centre is off the plate
+    double nodus_along_mm =
+        0.0; ///< of the nodus' foot. The style meets the face at the start of the foot, or passes above it
+             ///< where the centre is off the plate
     double foot_mm = 0.0;
     double thickness_mm = 0.0, plate_thickness_mm = 0.0;
-    double style_end_mm = 0.0;   ///< of the style's straight edge, along the substyle; it may overhang the foot
-    double least_style_mm = 0.0; ///< the style's least length from where it meets the face or passes over the foot's start
+    double style_end_mm = 0.0; ///< of the style's straight edge, along the substyle; it may overhang the foot
+    double least_style_mm =
+        0.0; ///< the style's least length from where it meets the face or passes over the foot's start
     NodusMark nodus = NodusMark::v_notch;
     double notch_width_mm = 0.0; ///< along the style; of a round seat the diameter
     double notch_depth_mm = 0.0; ///< of a V
     double rounding_mm = 3.0;    ///< radius of the tip, and of the upper front corner; 0: sharp
     JointOptions joint;
-    bool inches = false;         ///< particulars say inches too
+    bool inches = false; ///< particulars say inches too
 };
 
 struct EdgeGnomon {
@@ -44,7 +46,8 @@ struct EdgeGnomon {
 
 /// The plan of a face's own gnomon, long enough for its shadow to reach the border at every hour.
 /// @return nothing where the face has no edge gnomon
-[[nodiscard]] std::optional<EdgeGnomonPlan> edge_gnomon_plan(const DialPlan& plan, const Face& face, const FaceSpec& spec,
-                                                             double plate_thickness_mm, const JointOptions& joint);
+[[nodiscard]] std::optional<EdgeGnomonPlan> edge_gnomon_plan(const DialPlan& plan, const Face& face,
+                                                             const FaceSpec& spec, double plate_thickness_mm,
+                                                             const JointOptions& joint);
 
 } // namespace dialwright::layout

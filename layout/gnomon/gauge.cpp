@@ -51,24 +51,30 @@ void add_lettering(Drawing& drawing, const GaugePlan& plan, const Shape& shape) 
         const double top = angle_up + angle.ink.top_mm + margin;
         const double right = shape.right_mm - margin;
         const double words_left = right - words.ink.width_mm(), angle_left = right - angle.ink.width_mm();
-        const auto edge_over = [&](double x) { return std::min(shape.top_mm, (x - shape.corner.x_mm) * shape.tangent); };
-        if (edge_over(angle_left - margin) < top - margin || edge_over(words_left - margin) < words_up + words.ink.top_mm || top > shape.top_mm)
+        const auto edge_over = [&](double x) {
+            return std::min(shape.top_mm, (x - shape.corner.x_mm) * shape.tangent);
+        };
+        if (edge_over(angle_left - margin) < top - margin ||
+            edge_over(words_left - margin) < words_up + words.ink.top_mm || top > shape.top_mm)
             continue;
         const auto set = [&](const LetteredLine& line, double left, double up, const char* name) {
-            drawing.marks.push_back({Layer::engrave, set_straight(line, {left - line.ink.left_mm, up}, Angle{}), 0.0, true, name});
+            drawing.marks.push_back(
+                {Layer::engrave, set_straight(line, {left - line.ink.left_mm, up}, Angle{}), 0.0, true, name});
         };
         set(angle, angle_left, angle_up, "angle");
         set(words, words_left, words_up, "words");
         return;
     }
-    throw std::invalid_argument(fmt::format("the gauge for {} is too small for its lettering: make its edge longer", degrees_minutes(plan.angle)));
+    throw std::invalid_argument(fmt::format("the gauge for {} is too small for its lettering: make its edge longer",
+                                            degrees_minutes(plan.angle)));
 }
 
 } // namespace
 
 Gauge gauge_of(const GaugePlan& plan) {
     if (!(plan.angle >= Angle::degrees(1)) || plan.angle > Angle::degrees(89))
-        throw std::invalid_argument(fmt::format("a gauge proves angles from 1° to 89°, not {}", degrees_minutes(plan.angle)));
+        throw std::invalid_argument(
+            fmt::format("a gauge proves angles from 1° to 89°, not {}", degrees_minutes(plan.angle)));
     if (!(plan.edge_mm >= 0 && plan.under_mm >= 0 && plan.rounding_mm >= 0 && plan.letter_mm > 0))
         throw std::invalid_argument("a length of the gauge is below zero");
     const double edge = plan.edge_mm > 0 ? plan.edge_mm : std::max(120.0, std::min(30.0 / sin(plan.angle), 500.0));
@@ -77,19 +83,29 @@ Gauge gauge_of(const GaugePlan& plan) {
     gauge.edge_from = shape.corners.back().at;
     gauge.edge_to = shape.corners[shape.corners.size() - 2].at;
     Drawing drawing{"gauge", {}};
-    drawing.marks.push_back({Layer::guide, {polyline({{-5, 0}, {shape.right_mm + 5, 0}})}, k_thin_mm, false, "face, along the base"});
+    drawing.marks.push_back(
+        {Layer::guide, {polyline({{-5, 0}, {shape.right_mm + 5, 0}})}, k_thin_mm, false, "face, along the base"});
     drawing.marks.push_back(cross_mark(Layer::guide, {}, 2.0, "centre"));
     const double r = std::min(0.3 * edge, 40.0);
-    drawing.marks.push_back({Layer::guide, {Path{shape.corner + Point{r, 0}, {ArcTo{shape.corner + r * Point{cos(plan.angle), sin(plan.angle)}, shape.corner, plan.angle}}, false}},
-                             k_thin_mm, false, "angle " + degrees_minutes(plan.angle)});
+    drawing.marks.push_back(
+        {Layer::guide,
+         {Path{shape.corner + Point{r, 0},
+               {ArcTo{shape.corner + r * Point{cos(plan.angle), sin(plan.angle)}, shape.corner, plan.angle}},
+               false}},
+         k_thin_mm,
+         false,
+         "angle " + degrees_minutes(plan.angle)});
     add_lettering(drawing, plan, shape);
     drawing.marks.push_back({Layer::cut, {rounded_polygon(shape.corners)}, k_cut_mm, false, "gauge"});
     gauge.part.drawings.push_back(std::move(drawing));
-    gauge.part.particulars = {{"Gauge", plan.words}, {"Angle", degrees_minutes(plan.angle)}, {"Edge", say_length(distance(gauge.edge_from, gauge.edge_to), plan.inches)}};
+    gauge.part.particulars = {{"Gauge", plan.words},
+                              {"Angle", degrees_minutes(plan.angle)},
+                              {"Edge", say_length(distance(gauge.edge_from, gauge.edge_to), plan.inches)}};
     if (plan.under_mm > 0)
         gauge.part.particulars.emplace_back("Edge under the style's axis by", say_length(plan.under_mm, plan.inches));
-    gauge.part.notes = {"Stand it on the face with its base along the substyle: no light shows between its edge and the style.",
-                        "Prove the gauge itself on a flat surface before it proves anything else."};
+    gauge.part.notes = {
+        "Stand it on the face with its base along the substyle: no light shows between its edge and the style.",
+        "Prove the gauge itself on a flat surface before it proves anything else."};
     gauge.part.cautions = {"Do not sight along the style or the gauge towards the Sun."};
     return gauge;
 }
@@ -106,12 +122,15 @@ Gauge substyle_gauge(Angle from_noon, GaugePlan plan) {
         const Placing over{Angle::degrees(180), {}, 1.0, 1.0, true};
         for (Mark& mark : gauge.part.drawings.front().marks) {
             const Box box = bounds_of(mark);
-            mark = mark.layer == Layer::engrave ? Placing{Angle::degrees(180), {box.left_mm + box.right_mm, 0}, 1.0, 1.0, false}(mark) : over(mark);
+            mark = mark.layer == Layer::engrave
+                       ? Placing{Angle::degrees(180), {box.left_mm + box.right_mm, 0}, 1.0, 1.0, false}(mark)
+                       : over(mark);
         }
         gauge.edge_from = over(gauge.edge_from);
         gauge.edge_to = over(gauge.edge_to);
     }
-    gauge.part.notes = {"Lay it on the face with its corner at the centre and its base along the noon line: its edge is the substyle."};
+    gauge.part.notes = {
+        "Lay it on the face with its corner at the centre and its base along the noon line: its edge is the substyle."};
     gauge.part.cautions.clear();
     return gauge;
 }

@@ -9,8 +9,9 @@ namespace dialwright::layout {
 struct GaugePlan {
     Angle angle;
     std::string words = "style height"; ///< written under the angle
-    double edge_mm = 0.0;   ///< length of the edge at the angle; found: 120 mm, or more until it rises 30 mm
-    double under_mm = 0.0;  ///< by which the edge runs below the angle's own line, square to it: half of a rod's diameter
+    double edge_mm = 0.0; ///< length of the edge at the angle; found: 120 mm, or more until it rises 30 mm
+    double under_mm =
+        0.0; ///< by which the edge runs below the angle's own line, square to it: half of a rod's diameter
     double letter_mm = 7.0; ///< capitals of the angle; smaller where it has no room
     std::string family = "EB Garamond";
     double rounding_mm = 2.0;
@@ -20,7 +21,7 @@ struct GaugePlan {
 /// Frame: the angle's corner (the dial's centre) at the origin, the base along x, which stands on the face along the
 /// substyle. The thin toe is cut off, so that it clears the joint at the centre and does not break.
 struct Gauge {
-    Part part; ///< drawing: "gauge"
+    Part part;                ///< drawing: "gauge"
     Point edge_from, edge_to; ///< of the straight edge that proves the angle, before its corners are rounded
 };
 

@@ -17,15 +17,15 @@ enum class FootKind {
 /// Lengths in millimetres; 0 means: found from the foot and the plate.
 struct JointOptions {
     FootKind kind = FootKind::tenons;
-    int count = 2;             ///< of tenons, or of places for screws along the foot
-    double tenon_mm = 0.0;     ///< length of each along the substyle
-    double proud_mm = 0.0;     ///< how far tenons stand out behind the plate, to be riveted or wedged
-    double fit_mm = 0.2;       ///< how much wider and longer a slot is than what goes into it, both sides together
-    double hole_mm = 0.0;      ///< diameter of the screw holes; 0: none
+    int count = 2;         ///< of tenons, or of places for screws along the foot
+    double tenon_mm = 0.0; ///< length of each along the substyle
+    double proud_mm = 0.0; ///< how far tenons stand out behind the plate, to be riveted or wedged
+    double fit_mm = 0.2;   ///< how much wider and longer a slot is than what goes into it, both sides together
+    double hole_mm = 0.0;  ///< diameter of the screw holes; 0: none
     double flange_width_mm = 0.0, flange_thickness_mm = 3.0;
-    double hook_mm = 0.0;      ///< how far hooks reach under the plate
-    double keel_mm = 0.0;      ///< height of hooks, or of the strip under the plate in a halving
-    double behind_mm = 0.0;    ///< halving: from the start of the foot back along the substyle to the plate's edge
+    double hook_mm = 0.0;   ///< how far hooks reach under the plate
+    double keel_mm = 0.0;   ///< height of hooks, or of the strip under the plate in a halving
+    double behind_mm = 0.0; ///< halving: from the start of the foot back along the substyle to the plate's edge
 };
 
 struct Span {
@@ -41,7 +41,9 @@ struct Joint {
     std::vector<Span> slots;  ///< of the plate, with the fit
     std::vector<Point> holes; ///< of the plate
     /// The gnomon's lowest edge above the face.
-    [[nodiscard]] double base_mm() const { return options.kind == FootKind::flange ? options.flange_thickness_mm : 0.0; }
+    [[nodiscard]] double base_mm() const {
+        return options.kind == FootKind::flange ? options.flange_thickness_mm : 0.0;
+    }
     [[nodiscard]] double slot_width_mm() const { return thickness_mm + options.fit_mm; }
 };
 
@@ -50,7 +52,8 @@ struct Joint {
 
 /// @throws std::invalid_argument  with a message for the maker: tenons longer than the foot, a fit that is wider than
 ///                                the slot's material, holes wider than the edge that they go into, …
-[[nodiscard]] Joint joint_of(const JointOptions& options, double foot_mm, double thickness_mm, double plate_thickness_mm);
+[[nodiscard]] Joint joint_of(const JointOptions& options, double foot_mm, double thickness_mm,
+                             double plate_thickness_mm);
 
 /// The foot's outline from its start to its end, tenons and all: corners of the gnomon, side view, in order.
 /// @param start_mm  where the gnomon begins along the substyle

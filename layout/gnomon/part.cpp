@@ -26,7 +26,8 @@ void Pen::arc_to(Point to, Point centre, bool anticlockwise) {
 void Pen::round_corner(Point corner, Point next, double radius_mm) {
     const Point in = corner - at_, out = next - corner;
     const double turn = std::atan2(cross(in, out), dot(in, out));
-    const double tangent = std::tan(std::abs(turn) / 2); // of half the turn: from the corner to where the arc begins, over the radius
+    const double tangent =
+        std::tan(std::abs(turn) / 2); // of half the turn: from the corner to where the arc begins, over the radius
     if (!(radius_mm > 0) || tangent < 1e-9)
         return line_to(corner);
     const double trim = std::min({radius_mm * tangent, length(in), length(out) / 2});
@@ -79,7 +80,9 @@ Mark dimension(Point from, Point to, std::string name) {
     const Point across = 1.5 * left_of(unit(to - from));
     return {Layer::guide,
             {polyline({from, to}), polyline({from - across, from + across}), polyline({to - across, to + across})},
-            k_thin_mm, false, std::move(name)};
+            k_thin_mm,
+            false,
+            std::move(name)};
 }
 
 Mark cross_mark(Layer layer, Point at, double arm_mm, std::string name) {

@@ -12,11 +12,11 @@ namespace dialwright::layout {
 /// One piece of the gnomon, or a tool to make or check it, at full scale. Side views have x along the substyle from the
 /// start of the gnomon's foot and y above the plate's face; the plate's own marks are in the seat frame (seat.hpp).
 struct Part {
-    std::vector<Drawing> drawings;   ///< the first is the part; then what belongs to it
-    std::vector<Mark> plate_marks;   ///< slots and holes that the plate gets for it: seat frame
+    std::vector<Drawing> drawings; ///< the first is the part; then what belongs to it
+    std::vector<Mark> plate_marks; ///< slots and holes that the plate gets for it: seat frame
     std::vector<std::pair<std::string, std::string>> particulars; ///< name and value, for the sheet's table
     std::vector<std::string> cautions;
-    std::vector<std::string> notes;  ///< how to make and fit it
+    std::vector<std::string> notes; ///< how to make and fit it
 };
 
 /// Follows an outline with lines and with arcs that touch them.

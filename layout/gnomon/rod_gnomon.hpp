@@ -12,9 +12,11 @@ struct RodPlan {
     Angle style_height;
     double nodus_height_mm = 0.0, nodus_along_mm = 0.0;
     double diameter_mm = 0.0, plate_thickness_mm = 0.0;
-    double exposed_mm = 0.0; ///< from the face (or the lower end) to the tip along the axis; found: the tip is the nodus
-    double bead_mm = 0.0;    ///< diameter of a bead that shows the nodus; 0: the tip does
-    double socket_mm = 0.0;  ///< along the axis; found: five diameters, or right through where those would break out behind
+    double exposed_mm =
+        0.0;              ///< from the face (or the lower end) to the tip along the axis; found: the tip is the nodus
+    double bead_mm = 0.0; ///< diameter of a bead that shows the nodus; 0: the tip does
+    double socket_mm =
+        0.0; ///< along the axis; found: five diameters, or right through where those would break out behind
     double strut_at_mm = 0.0; ///< along the substyle, of a strut beside the socket; 0: none
     double strut_diameter_mm = 0.0, strut_embedment_mm = 0.0;
     double jig_width_mm = 0.0, jig_guide_mm = 0.0; ///< of the drilling jig: across, and the drill's way through it
@@ -22,9 +24,9 @@ struct RodPlan {
 };
 
 struct Strut {
-    double along_mm = 0.0;    ///< where it stands on the substyle
-    Point meets;              ///< the rod's axis
-    double above_mm = 0.0;    ///< from the face to the rod's underside, on its own axis
+    double along_mm = 0.0; ///< where it stands on the substyle
+    Point meets;           ///< the rod's axis
+    double above_mm = 0.0; ///< from the face to the rod's underside, on its own axis
     double embedment_mm = 0.0;
 };
 

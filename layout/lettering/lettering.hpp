@@ -21,8 +21,8 @@ struct LetteringError : std::runtime_error {
 struct Glyph {
     /// Closed, lines and cubic curves; non-zero winding, outer contours anticlockwise. Of StrokeLettering: open strokes.
     std::vector<Path> outlines;
-    double pen_x_mm = 0.0;      ///< where its origin stands on the base line
-    double advance_mm = 0.0;    ///< without the tracking
+    double pen_x_mm = 0.0;   ///< where its origin stands on the base line
+    double advance_mm = 0.0; ///< without the tracking
 };
 
 /// A shaped line of text, starting at (0, 0), base line along x. Its glyphs stand from left to right as they are seen.

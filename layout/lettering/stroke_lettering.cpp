@@ -27,7 +27,8 @@ std::u32string taken_apart(char32_t character) {
 
 /// Characters that are told to a typesetter and never seen.
 bool is_unseen(char32_t character) {
-    return hb_unicode_general_category(hb_unicode_funcs_get_default(), character) == HB_UNICODE_GENERAL_CATEGORY_FORMAT ||
+    return hb_unicode_general_category(hb_unicode_funcs_get_default(), character) ==
+               HB_UNICODE_GENERAL_CATEGORY_FORMAT ||
            (character >= 0xFE00 && character <= 0xFE0F);
 }
 
@@ -171,7 +172,8 @@ LetteredLine StrokeLettering::line(std::string_view text, double size_mm, double
     const double scale = size_mm / k_stroke_capitals;
     LetteredLine line;
     const auto missing = [](char32_t c) {
-        return LetteringError("the single-stroke letters have no " + named(c) + ": change the text, or take lettering in outlines");
+        return LetteringError("the single-stroke letters have no " + named(c) +
+                              ": change the text, or take lettering in outlines");
     };
     for (std::size_t i = 0; i < characters.size();) {
         const char32_t letter = characters[i];

@@ -41,7 +41,8 @@ const std::vector<Accent>& accents() {
         {0x300, false, lines({{{-2.5, 4}, {1.5, 0}}})},
         {0x301, false, lines({{{2.5, 4}, {-1.5, 0}}})},
         {0x302, false, lines({{{-3.5, 0}, {0, 4}, {3.5, 0}}})},
-        {0x303, false, lines({{{-4, 0}, {-3.3, 1.6}, {-2, 2.4}, {-0.6, 1.9}, {0.6, 0.9}, {2, 0.4}, {3.3, 1.2}, {4, 2.8}}})},
+        {0x303, false,
+         lines({{{-4, 0}, {-3.3, 1.6}, {-2, 2.4}, {-0.6, 1.9}, {0.6, 0.9}, {2, 0.4}, {3.3, 1.2}, {4, 2.8}}})},
         {0x304, false, lines({{{-3.5, 1}, {3.5, 1}}})},
         {0x306, false, lines({{{-3.5, 3.5}, {-2.7, 1.4}, {-1, 0.2}, {1, 0.2}, {2.7, 1.4}, {3.5, 3.5}}})},
         {0x307, false, dots({{0, 1.5}})},
@@ -103,7 +104,8 @@ std::vector<StrokeShape> stroke_file(const std::string& name) {
     const std::string path = "/usr/share/hershey-fonts/" + name + ".jhf";
     std::ifstream file{path};
     if (!file)
-        throw LetteringError("the single-stroke letters " + path + " can't be read: install the package hershey-fonts-data, "
+        throw LetteringError("the single-stroke letters " + path +
+                             " can't be read: install the package hershey-fonts-data, "
                              "or take lettering in outlines");
     std::vector<StrokeShape> shapes;
     // Five columns of a number, three of a count of pairs, the pairs: first the two sides, then points.
@@ -156,7 +158,8 @@ std::optional<StrokeShape> own_shape(char32_t character) {
     case U'±':
         return shape(26, {{{13, 18}, {13, 4}}, {{6, 11}, {20, 11}}, {{6, 0}, {20, 0}}});
     case U'½':
-        return shape(30, {{{3, 18}, {6, 21}, {6, 10}}, {{23, 21}, {7, 0}},
+        return shape(30, {{{3, 18}, {6, 21}, {6, 10}},
+                          {{23, 21}, {7, 0}},
                           {{18, 8}, {19, 10}, {21, 11}, {24, 11}, {26, 9}, {26, 7}, {24, 5}, {18, 0}, {26, 0}}});
     case U'¼':
         return shape(30, {{{3, 18}, {6, 21}, {6, 10}}, {{23, 21}, {7, 0}}, {{24, 0}, {24, 11}, {17, 4}, {27, 4}}});
@@ -167,7 +170,8 @@ std::optional<StrokeShape> own_shape(char32_t character) {
     case U'“':
         return shape(12, {{{5.5, 21}, {3.5, 19}, {3, 17}, {4, 15.5}}, {{9.5, 21}, {7.5, 19}, {7, 17}, {8, 15.5}}});
     case U'”':
-        return shape(12, {{{4, 21}, {5, 19.5}, {4.5, 17.5}, {2.5, 15.5}}, {{8, 21}, {9, 19.5}, {8.5, 17.5}, {6.5, 15.5}}});
+        return shape(12,
+                     {{{4, 21}, {5, 19.5}, {4.5, 17.5}, {2.5, 15.5}}, {{8, 21}, {9, 19.5}, {8.5, 17.5}, {6.5, 15.5}}});
     case U'„':
         return shape(12, {{{4, 2}, {5, 0.5}, {4.5, -1.5}, {2.5, -3.5}}, {{8, 2}, {9, 0.5}, {8.5, -1.5}, {6.5, -3.5}}});
     case U'«':
@@ -175,19 +179,74 @@ std::optional<StrokeShape> own_shape(char32_t character) {
     case U'»':
         return shape(18, {{{4, 13}, {9, 8}, {4, 3}}, {{10, 13}, {15, 8}, {10, 3}}});
     case U'ß':
-        return shape(20, {{{4, 0}, {4, 16}, {5, 19}, {7, 21}, {11, 21}, {14, 19}, {15, 17}, {14, 14.5}, {11, 12.5}, {9, 12},
-                           {13, 11}, {16, 8.5}, {17, 6}, {16, 2.5}, {14, 0.7}, {11, 0}, {8, 0.3}}});
+        return shape(20, {{{4, 0},
+                           {4, 16},
+                           {5, 19},
+                           {7, 21},
+                           {11, 21},
+                           {14, 19},
+                           {15, 17},
+                           {14, 14.5},
+                           {11, 12.5},
+                           {9, 12},
+                           {13, 11},
+                           {16, 8.5},
+                           {17, 6},
+                           {16, 2.5},
+                           {14, 0.7},
+                           {11, 0},
+                           {8, 0.3}}});
     case U'Þ':
-        return shape(21, {{{4, 21}, {4, 0}}, {{4, 16}, {13, 16}, {16, 15}, {17.5, 12.5}, {17.5, 9}, {16, 6.5}, {13, 5.5}, {4, 5.5}}});
+        return shape(21, {{{4, 21}, {4, 0}},
+                          {{4, 16}, {13, 16}, {16, 15}, {17.5, 12.5}, {17.5, 9}, {16, 6.5}, {13, 5.5}, {4, 5.5}}});
     case U'þ':
-        return shape(19, {{{4, 21}, {4, -7}}, {{4, 11}, {6, 13}, {8, 14}, {11, 14}, {13, 13}, {15, 11}, {16, 8}, {16, 6},
-                                               {15, 3}, {13, 1}, {11, 0}, {8, 0}, {6, 1}, {4, 3}}});
+        return shape(19, {{{4, 21}, {4, -7}},
+                          {{4, 11},
+                           {6, 13},
+                           {8, 14},
+                           {11, 14},
+                           {13, 13},
+                           {15, 11},
+                           {16, 8},
+                           {16, 6},
+                           {15, 3},
+                           {13, 1},
+                           {11, 0},
+                           {8, 0},
+                           {6, 1},
+                           {4, 3}}});
     case U'ð':
-        return shape(19, {{{15, 8}, {13, 11}, {11, 12}, {8, 12}, {5, 10}, {3, 7}, {3, 5}, {5, 2}, {8, 0}, {11, 0}, {14, 2},
-                           {15.5, 5}, {15.5, 9}, {14, 14}, {11, 18}, {7, 21}}, {{6, 15}, {15, 20}}});
+        return shape(19, {{{15, 8},
+                           {13, 11},
+                           {11, 12},
+                           {8, 12},
+                           {5, 10},
+                           {3, 7},
+                           {3, 5},
+                           {5, 2},
+                           {8, 0},
+                           {11, 0},
+                           {14, 2},
+                           {15.5, 5},
+                           {15.5, 9},
+                           {14, 14},
+                           {11, 18},
+                           {7, 21}},
+                          {{6, 15}, {15, 20}}});
     case U'ς':
-        return shape(17, {{{15, 13}, {13, 14}, {10, 14}, {7, 13}, {4.5, 10}, {4, 7}, {5, 4}, {8, 2}, {11, 0.5}, {12.5, -1.5},
-                           {12.5, -4}, {11, -6}, {8.5, -7}}});
+        return shape(17, {{{15, 13},
+                           {13, 14},
+                           {10, 14},
+                           {7, 13},
+                           {4.5, 10},
+                           {4, 7},
+                           {5, 4},
+                           {8, 2},
+                           {11, 0.5},
+                           {12.5, -1.5},
+                           {12.5, -4},
+                           {11, -6},
+                           {8.5, -7}}});
     default:
         return std::nullopt;
     }
@@ -205,7 +264,8 @@ void add_accent(StrokeShape& shape, char32_t letter, char32_t mark) {
         shape.advance = std::max(shape.advance, x + 2);
         return;
     }
-    const auto found = std::find_if(accents().begin(), accents().end(), [&](const Accent& a) { return a.mark == mark; });
+    const auto found =
+        std::find_if(accents().begin(), accents().end(), [&](const Accent& a) { return a.mark == mark; });
     Box ink;
     if ((letter == U'i' || letter == U'j') && !found->below) // the accent takes the place of the dot
         std::erase_if(shape.strokes, [](const Path& stroke) { return bounds_of(stroke).bottom_mm > k_stroke_small; });

@@ -15,11 +15,11 @@ struct Bench {
 
     const FaceSpec& spec;
     const Delineation& delineation;
-    Point foot;                   ///< of the nodus
-    std::optional<Point> centre;  ///< where it is on the field
+    Point foot;                  ///< of the nodus
+    std::optional<Point> centre; ///< where it is on the field
     Rings rings;
     std::vector<Outline> keep_out; ///< the border round the centre, and labels that lines stop for
-    Point up;                     ///< unit, the reader's
+    Point up;                      ///< unit, the reader's
     Lettering lettering;
     ClearMap clear;
 
@@ -29,7 +29,9 @@ struct Bench {
 
     /// Widths in their order of weight.
     [[nodiscard]] double width_of_step(int step_min) const;
-    [[nodiscard]] double field_line_width(Family family) const { return (family == Family::date ? 0.6 : 0.5) * spec.cutting.line_width_mm; }
+    [[nodiscard]] double field_line_width(Family family) const {
+        return (family == Family::date ? 0.6 : 0.5) * spec.cutting.line_width_mm;
+    }
     /// How far into the field the marks of half and quarter hours reach from its border.
     [[nodiscard]] double half_hour_reach_mm() const;
     [[nodiscard]] double quarter_hour_reach_mm() const;

@@ -36,7 +36,8 @@ bool TurnedBox::overlaps(const TurnedBox& other) const {
         return high_a < low_b || high_b < low_a;
     };
     const Angle quarter = Angle::degrees(90);
-    return !(apart_along(turn) || apart_along(turn + quarter) || apart_along(other.turn) || apart_along(other.turn + quarter));
+    return !(apart_along(turn) || apart_along(turn + quarter) || apart_along(other.turn) ||
+             apart_along(other.turn + quarter));
 }
 
 ClearMap::ClearMap(const Outline& free_inside, double cell_mm) : cell_mm_{cell_mm} {

@@ -36,7 +36,9 @@ class ClearMap {
     [[nodiscard]] double cell_mm() const { return cell_mm_; }
 
   private:
-    [[nodiscard]] std::size_t index(int column, int row) const { return std::size_t(row) * std::size_t(columns_) + std::size_t(column); }
+    [[nodiscard]] std::size_t index(int column, int row) const {
+        return std::size_t(row) * std::size_t(columns_) + std::size_t(column);
+    }
     void block(Point p);
 
     double cell_mm_;

@@ -16,7 +16,8 @@ constexpr double k_numeral_share = 0.64; // of the chapter ring; the rest is for
 Outline inner_border(const Outline& from, double by_mm, const char* what) {
     const auto made = from.inset(by_mm);
     if (!made)
-        throw std::invalid_argument(fmt::format("the {} needs {:.1f} mm inside the border outside it, and the plate has no such room", what, by_mm));
+        throw std::invalid_argument(fmt::format(
+            "the {} needs {:.1f} mm inside the border outside it, and the plate has no such room", what, by_mm));
     return *made;
 }
 
@@ -97,8 +98,8 @@ Rings Rings::of(const FaceSpec& spec) {
 
 Bench::Bench(const FaceSpec& face_spec, const Delineation& delineated, const Placement& placed)
     : spec{face_spec}, delineation{delineated}, foot{placed.foot}, rings{Rings::of(face_spec)},
-      up{clockwise_from_up(face_spec.reader_up)}, lettering{face_spec.lettering.family},
-      clear{rings.divisions, cell_for(face_spec)} {
+      up{clockwise_from_up(face_spec.reader_up)}, lettering{face_spec.lettering.family}, clear{rings.divisions,
+                                                                                               cell_for(face_spec)} {
     if (delineated.style.centre && has_style(face_spec.gnomon.kind)) {
         const Point at = layout::to_work(*delineated.style.centre, foot);
         if (rings.divisions.contains(at))
@@ -111,9 +112,15 @@ double Bench::width_of_step(int step_min) const {
     return step_min >= 60 ? tool : step_min >= 30 ? 0.8 * tool : step_min >= 15 ? 0.65 * tool : 0.5 * tool;
 }
 
-double Bench::division_band_mm() const { return spec.divide_min > 0 ? (1 - k_numeral_share) * spec.borders.chapter_ring_mm : 0.0; }
-double Bench::half_hour_reach_mm() const { return spec.divide_min <= 30 ? 1.4 * division_band_mm() : 0.0; }
-double Bench::quarter_hour_reach_mm() const { return spec.divide_min <= 15 ? 0.5 * division_band_mm() : 0.0; }
+double Bench::division_band_mm() const {
+    return spec.divide_min > 0 ? (1 - k_numeral_share) * spec.borders.chapter_ring_mm : 0.0;
+}
+double Bench::half_hour_reach_mm() const {
+    return spec.divide_min <= 30 ? 1.4 * division_band_mm() : 0.0;
+}
+double Bench::quarter_hour_reach_mm() const {
+    return spec.divide_min <= 15 ? 0.5 * division_band_mm() : 0.0;
+}
 
 void Bench::engrave(const Polyline& line, double width_mm, std::string name) {
     marks.push_back({Layer::engrave, {polyline(line)}, width_mm, false, std::move(name)});
@@ -166,7 +173,9 @@ Face draw_face(DialPlan plan, const MeanYear& year, const FaceSpec& spec) {
     drawn(bench, face.gnomon_foot_mm, plan.nodus_height_mm);
 
     const auto by_family_and_time = [](const DrawnLine& a, const DrawnLine& b) {
-        const auto order = [](const DrawnLine& line) { return line.family == Family::date ? 1000 : is_hour(line.family) ? line.set : 500; };
+        const auto order = [](const DrawnLine& line) {
+            return line.family == Family::date ? 1000 : is_hour(line.family) ? line.set : 500;
+        };
         return order(a) != order(b) ? order(a) < order(b) : is_hour(a.family) && a.time_h < b.time_h;
     };
     std::stable_sort(bench.lines.begin(), bench.lines.end(), by_family_and_time);

@@ -21,12 +21,12 @@ struct FaceSpec {
     Numerals numerals = Numerals::roman;
     NumeralStand stand = NumeralStand::along_border;
     int numeral_count = 12;
-    int divide_min = 60;      ///< 0: the ring has no band of divisions
+    int divide_min = 60;       ///< 0: the ring has no band of divisions
     double summer_shift_h = 0; ///< > 0: a second row of numerals, this much on
     bool noon_mark = true;
     bool date_labels = true;
-    bool compass = false;  ///< level plates
-    Angle reader_up;       ///< what is up for the reader of the plate, clockwise from +v
+    bool compass = false; ///< level plates
+    Angle reader_up;      ///< what is up for the reader of the plate, clockwise from +v
 };
 
 /// Where the dial stands on its plate.
@@ -51,7 +51,7 @@ struct DrawnLine {
     Family family = Family::hour;
     int set = 0; ///< as DialLine::set
     int step_min = 60;
-    Angle level; ///< of an altitude circle or an azimuth line
+    Angle level;       ///< of an altitude circle or an azimuth line
     std::string label; ///< the numeral of a whole hour, "9:15" between, a date line's label
     double time_h = 0.0;
     Angle hour_angle;
@@ -83,7 +83,11 @@ struct Face {
 /// @throws LetteringError, std::invalid_argument  with a message for the maker
 [[nodiscard]] Face draw_face(DialPlan plan, const MeanYear& year, const FaceSpec& spec);
 
-[[nodiscard]] inline Point to_work(PlatePoint p, Point foot) { return {foot.x_mm + p.u_mm, foot.y_mm + p.v_mm}; }
-[[nodiscard]] inline PlatePoint to_plate(Point p, Point foot) { return {p.x_mm - foot.x_mm, p.y_mm - foot.y_mm}; }
+[[nodiscard]] inline Point to_work(PlatePoint p, Point foot) {
+    return {foot.x_mm + p.u_mm, foot.y_mm + p.v_mm};
+}
+[[nodiscard]] inline PlatePoint to_plate(Point p, Point foot) {
+    return {p.x_mm - foot.x_mm, p.y_mm - foot.y_mm};
+}
 
 } // namespace dialwright::layout

@@ -62,7 +62,8 @@ struct LabelPlace {
 class FieldDrawer {
   public:
     explicit FieldDrawer(Bench& bench)
-        : bench_{bench}, cap_mm_{bench.spec.lettering.label_height_mm}, room_{room_of(bench)}, room_without_hours_{room_} {}
+        : bench_{bench}, cap_mm_{bench.spec.lettering.label_height_mm}, room_{room_of(bench)}, room_without_hours_{
+                                                                                                   room_} {}
 
     void draw() {
         std::vector<const DialLine*> lines;
@@ -95,7 +96,8 @@ class FieldDrawer {
         const auto inside = bench.rings.divisions.inset(bench.half_hour_reach_mm());
         ClearMap room{inside.value_or(bench.rings.divisions), bench.clear.cell_mm()};
         for (const Outline& outline : bench.keep_out)
-            room.block(TurnedBox{outline.box().middle(), outline.box().width_mm() / 2, outline.box().height_mm() / 2, Angle{}});
+            room.block(TurnedBox{outline.box().middle(), outline.box().width_mm() / 2, outline.box().height_mm() / 2,
+                                 Angle{}});
         return room;
     }
 
@@ -158,7 +160,8 @@ class FieldDrawer {
     void draw(const DialLine& line) {
         for (const Polyline& part : on_field(line)) {
             if (part.size() == 2) {
-                const auto same = std::find_if(straight_.begin(), straight_.end(), [&](const StraightPart& s) { return covers(s.part, part); });
+                const auto same = std::find_if(straight_.begin(), straight_.end(),
+                                               [&](const StraightPart& s) { return covers(s.part, part); });
                 if (same != straight_.end()) {
                     shared_.push_back(fmt::format("\"{}\" and \"{}\"", label_of(line), label_of(*same->line)));
                     continue;
@@ -198,11 +201,13 @@ class FieldDrawer {
         for (const DialLine* line : lines)
             if (line->family == Family::date)
                 dates.push_back(line);
-        std::sort(dates.begin(), dates.end(), [](const DialLine* a, const DialLine* b) { return *a->declination < *b->declination; });
+        std::sort(dates.begin(), dates.end(),
+                  [](const DialLine* a, const DialLine* b) { return *a->declination < *b->declination; });
         const double wanted = bench_.spec.cutting.least_gap_mm + bench_.field_line_width(Family::date);
         for (std::size_t i = 0; i + 1 < dates.size(); ++i)
             if (const double gap = least_distance(*dates[i], *dates[i + 1]); gap < wanted)
-                bench_.warnings.push_back(fmt::format("the date lines \"{}\" and \"{}\" come within {:.1f} mm of each other, middle to middle: the tool wants {:.1f} mm",
+                bench_.warnings.push_back(fmt::format("the date lines \"{}\" and \"{}\" come within {:.1f} mm of each "
+                                                      "other, middle to middle: the tool wants {:.1f} mm",
                                                       dates[i]->label, dates[i + 1]->label, gap, wanted));
     }
 
@@ -227,7 +232,8 @@ class FieldDrawer {
                 for (const Polyline& part_b : parts_b)
                     for (std::size_t i = 0; i + 1 < part_b.size(); ++i) {
                         const Point run = part_b[i + 1] - part_b[i];
-                        const double along = dot(run, run) > 0 ? std::clamp(dot(p - part_b[i], run) / dot(run, run), 0.0, 1.0) : 0.0;
+                        const double along =
+                            dot(run, run) > 0 ? std::clamp(dot(p - part_b[i], run) / dot(run, run), 0.0, 1.0) : 0.0;
                         least = std::min(least, distance(p, part_b[i] + along * run));
                     }
         return least;
@@ -239,7 +245,9 @@ class FieldDrawer {
         std::string all;
         for (const std::string& label : unlabelled_)
             all += (all.empty() ? "\"" : ", \"") + label + "\"";
-        bench_.warnings.push_back(fmt::format("no room beside their lines for the labels {}: give the labels a smaller height, or draw fewer lines", all));
+        bench_.warnings.push_back(fmt::format(
+            "no room beside their lines for the labels {}: give the labels a smaller height, or draw fewer lines",
+            all));
     }
 
     [[nodiscard]] LabelPlace search(const DialLine& line, const LetteredLine& text, const ClearMap& room) const {
@@ -254,12 +262,13 @@ class FieldDrawer {
         return best;
     }
 
-    void consider(Family family, const Rule& rule, double s, double side, const LetteredLine& text, const ClearMap& room, LabelPlace& best) const {
+    void consider(Family family, const Rule& rule, double s, double side, const LetteredLine& text,
+                  const ClearMap& room, LabelPlace& best) const {
         const double half = text.ink.width_mm() / 2;
         const Point right{bench_.up.y_mm, -bench_.up.x_mm};
         const Point whole_run = rule.point(s + half) - rule.point(s - half);
         if (length(whole_run) < 1.6 * half)
-            return; // doubled back
+            return;                                                   // doubled back
         const double sense = dot(whole_run, right) >= 0 ? 1.0 : -1.0; // reads to the reader's right
         LabelPlace place;
         const int chunks = std::max(2, int(std::ceil(2 * half / (1.5 * cap_mm_))));
@@ -270,11 +279,14 @@ class FieldDrawer {
         double clearance = 1e300;
         std::vector<Point> bases;
         for (int i = 0; i < chunks; ++i) {
-            const double from = s + sense * half * (2.0 * i / chunks - 1), to = s + sense * half * (2.0 * (i + 1) / chunks - 1);
+            const double from = s + sense * half * (2.0 * i / chunks - 1),
+                         to = s + sense * half * (2.0 * (i + 1) / chunks - 1);
             const Point a = rule.point(from), b = rule.point(to), along = unit(b - a);
-            const TurnedBox box{between(a, b, 0.5) + (base_off + ink_middle) * left_of(along), distance(a, b) / 2, text.ink.height_mm() / 2, turn_of(along)};
+            const TurnedBox box{between(a, b, 0.5) + (base_off + ink_middle) * left_of(along), distance(a, b) / 2,
+                                text.ink.height_mm() / 2, turn_of(along)};
             clearance = std::min(clearance, room.clearance_mm(box));
-            if (clearance < 0.3 * cap_mm_ || std::any_of(placed_.begin(), placed_.end(), [&](const TurnedBox& p) { return p.overlaps(box); }))
+            if (clearance < 0.3 * cap_mm_ ||
+                std::any_of(placed_.begin(), placed_.end(), [&](const TurnedBox& p) { return p.overlaps(box); }))
                 return;
             place.chunks.push_back(box);
         }
@@ -286,7 +298,8 @@ class FieldDrawer {
         place.middle = base(s);
         place.end = base(s + sense * half);
         // Date lines are labelled towards the reader's left, the others towards the border.
-        const double wish = family == Family::date ? dot(place.middle, right) : bench_.rings.divisions.distance_mm(place.middle);
+        const double wish =
+            family == Family::date ? dot(place.middle, right) : bench_.rings.divisions.distance_mm(place.middle);
         place.score = std::min(clearance, cap_mm_) - 0.02 * wish / std::max(1.0, cap_mm_);
         place.found = true;
         if (place.score > best.score)
@@ -323,6 +336,8 @@ class FieldDrawer {
 
 } // namespace
 
-void draw_field_lines(Bench& bench) { FieldDrawer{bench}.draw(); }
+void draw_field_lines(Bench& bench) {
+    FieldDrawer{bench}.draw();
+}
 
 } // namespace dialwright::layout

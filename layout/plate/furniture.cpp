@@ -19,9 +19,12 @@ std::optional<Point> substyle_direction(const Bench& bench) {
 void add_hole(Bench& bench, Point at, double diameter_mm, const std::string& name) {
     const double arm = 0.9 * diameter_mm;
     bench.marks.push_back({Layer::drill, {circle(at, diameter_mm / 2)}, 0.15, false, name});
-    bench.marks.push_back({Layer::drill,
-                           {polyline({at - Point{arm, 0}, at + Point{arm, 0}}), polyline({at - Point{0, arm}, at + Point{0, arm}})},
-                           0.1, false, name + " centre"});
+    bench.marks.push_back(
+        {Layer::drill,
+         {polyline({at - Point{arm, 0}, at + Point{arm, 0}}), polyline({at - Point{0, arm}, at + Point{0, arm}})},
+         0.1,
+         false,
+         name + " centre"});
 }
 
 } // namespace
@@ -81,11 +84,16 @@ void draw_edge_seat(Bench& bench, Point along, double foot_mm) {
     if (gnomon.thickness_mm > 0) {
         const Point side = gnomon.thickness_mm / 2 * left_of(along);
         const Point end = start + foot_mm * along;
-        bench.marks.push_back({Layer::score, {polyline({start - side, end - side, end + side, start + side}, true)}, 0.15, false, "gnomon's foot"});
+        bench.marks.push_back({Layer::score,
+                               {polyline({start - side, end - side, end + side, start + side}, true)},
+                               0.15,
+                               false,
+                               "gnomon's foot"});
         bench.clear.block(TurnedBox{between(start, end, 0.5), foot_mm / 2, gnomon.thickness_mm / 2, turn_of(along)});
     }
     for (int i = 0; i < gnomon.holes; ++i)
-        add_hole(bench, start + foot_mm * (i + 0.5) / gnomon.holes * along, gnomon.hole_diameter_mm, fmt::format("fixing hole {}", i + 1));
+        add_hole(bench, start + foot_mm * (i + 0.5) / gnomon.holes * along, gnomon.hole_diameter_mm,
+                 fmt::format("fixing hole {}", i + 1));
 }
 
 } // namespace
@@ -97,7 +105,9 @@ void draw_gnomon_seat(Bench& bench, double foot_mm, double nodus_height_mm) {
     bench.marks.push_back({Layer::guide,
                            {polyline({bench.foot - Point{arm, 0}, bench.foot + Point{arm, 0}}),
                             polyline({bench.foot - Point{0, arm}, bench.foot + Point{0, arm}})},
-                           0.15, false, "nodus' foot"});
+                           0.15,
+                           false,
+                           "nodus' foot"});
     const double bore = gnomon.thickness_mm > 0 ? gnomon.thickness_mm : gnomon.hole_diameter_mm;
     const bool square_style = has_style(gnomon.kind) && !along;
     if (gnomon.kind == GnomonKind::pin || square_style) {
@@ -108,7 +118,11 @@ void draw_gnomon_seat(Bench& bench, double foot_mm, double nodus_height_mm) {
             add_hole(bench, foot_of_plumb_pin(bench, nodus_height_mm), bore, "hole for the plumb pin");
     } else if (gnomon.kind == GnomonKind::rod) {
         const Point start = bench.centre.value_or(bench.foot);
-        bench.marks.push_back({Layer::guide, {polyline({start, between(start, bench.foot, 1.0) + 5.0 * *along})}, 0.15, false, "substyle"});
+        bench.marks.push_back({Layer::guide,
+                               {polyline({start, between(start, bench.foot, 1.0) + 5.0 * *along})},
+                               0.15,
+                               false,
+                               "substyle"});
         if (bench.centre && bore > 0)
             add_hole(bench, start, bore, "hole for the rod, drilled at the style height along the substyle");
     } else if (gnomon.kind == GnomonKind::edge) {
@@ -145,7 +159,11 @@ void draw_compass(Bench& bench) {
         const Point right = best + waist_mm * clockwise_from_up(Angle::degrees(degrees + 45));
         // Half of each point is filled, as on an old chart.
         points.push_back(polyline({best, tip, right}, true));
-        bench.marks.push_back({Layer::engrave, {polyline({best, tip, left}, true)}, 0.5 * bench.spec.cutting.line_width_mm, false, "compass mark"});
+        bench.marks.push_back({Layer::engrave,
+                               {polyline({best, tip, left}, true)},
+                               0.5 * bench.spec.cutting.line_width_mm,
+                               false,
+                               "compass mark"});
     };
     for (const double degrees : {0.0, 90.0, 180.0, 270.0})
         ray(degrees, degrees == 0 ? reach : 0.78 * reach, 0.2 * reach);

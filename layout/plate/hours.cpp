@@ -15,7 +15,7 @@ struct Ray {
     const DialLine* line;
     int minute;
     std::vector<Polyline> field; ///< from the centre outward
-    Polyline tick;               ///< across the band of divisions, from the field outward; empty where the line does not reach it
+    Polyline tick; ///< across the band of divisions, from the field outward; empty where the line does not reach it
     [[nodiscard]] Point direction() const { return unit(field.back().back() - field.back().front()); }
     [[nodiscard]] Point end() const { return field.back().back(); }
 };
@@ -87,8 +87,11 @@ class HourDrawer {
         for (const Ray* ray : rays) {
             if (ray->minute % step != 0)
                 continue;
-            const double lines = before ? (bench_.width_of_step(before->line->step_min) + bench_.width_of_step(ray->line->step_min)) / 2 : 0;
-            if (before && before->minute != ray->minute && gap_mm(*before, *ray) - lines < bench_.spec.cutting.least_gap_mm)
+            const double lines =
+                before ? (bench_.width_of_step(before->line->step_min) + bench_.width_of_step(ray->line->step_min)) / 2
+                       : 0;
+            if (before && before->minute != ray->minute &&
+                gap_mm(*before, *ray) - lines < bench_.spec.cutting.least_gap_mm)
                 return false;
             before = ray;
         }
@@ -106,7 +109,8 @@ class HourDrawer {
         const double wanted = bench_.spec.cutting.least_gap_mm + bench_.width_of_step(60);
         std::vector<double> start(hours.size(), 0.0);
         for (std::size_t i = 0; i + 1 < hours.size(); ++i) {
-            const Point a = hours[i]->field.front().front() - *bench_.centre, b = hours[i + 1]->field.front().front() - *bench_.centre;
+            const Point a = hours[i]->field.front().front() - *bench_.centre,
+                        b = hours[i + 1]->field.front().front() - *bench_.centre;
             if (hours[i]->minute == hours[i + 1]->minute || dot(a, b) <= 0)
                 continue;
             const double spread = std::abs(cross(unit(a), unit(b)));
@@ -116,7 +120,8 @@ class HourDrawer {
         }
         for (std::size_t i = 0; i < hours.size(); ++i) {
             Polyline& first = hours[i]->field.front();
-            const double begins = distance(*bench_.centre, first.front()), ends = distance(*bench_.centre, first.back());
+            const double begins = distance(*bench_.centre, first.front()),
+                         ends = distance(*bench_.centre, first.back());
             if (start[i] > begins && start[i] < 0.8 * ends)
                 first.front() = between(first.front(), first.back(), (start[i] - begins) / (ends - begins));
         }
@@ -145,13 +150,16 @@ class HourDrawer {
             for (std::size_t i = 0; i + 1 < ray.field.size(); ++i)
                 bench_.add_line(*ray.line, ray.field[i], label_of(*ray.line), width);
             const bool noon_mark_here = bench_.spec.noon_mark && ray.minute == 720 && !ray.tick.empty();
-            Polyline last = {ray.field.back().front(), ray.tick.empty() || noon_mark_here ? ray.field.back().back() : ray.tick.back()};
+            Polyline last = {ray.field.back().front(),
+                             ray.tick.empty() || noon_mark_here ? ray.field.back().back() : ray.tick.back()};
             bench_.add_line(*ray.line, last, label_of(*ray.line), width);
             return;
         }
         if (ray.tick.empty())
             return; // divisions live in the ring
-        const double into_field = step == 30 ? bench_.half_hour_reach_mm() : step == 15 ? bench_.quarter_hour_reach_mm() : 0.0;
+        const double into_field = step == 30   ? bench_.half_hour_reach_mm()
+                                  : step == 15 ? bench_.quarter_hour_reach_mm()
+                                               : 0.0;
         const double across = step >= 10 ? 1.0 : step == 5 ? 0.7 : 0.45;
         Polyline mark{between(ray.tick.back(), ray.tick.front(), across), ray.tick.back()};
         if (into_field > 0)
@@ -161,7 +169,8 @@ class HourDrawer {
 
     [[nodiscard]] std::string label_of(const DialLine& line) const {
         const int minute = int(std::lround(line.time_h * 60));
-        return minute % 60 == 0 ? numeral(minute / 60, bench_.spec.numerals, bench_.spec.numeral_count) : time_label(line.time_h);
+        return minute % 60 == 0 ? numeral(minute / 60, bench_.spec.numerals, bench_.spec.numeral_count)
+                                : time_label(line.time_h);
     }
 
     void draw_clock_lines() {
@@ -263,6 +272,8 @@ class HourDrawer {
 
 } // namespace
 
-void draw_hours(Bench& bench) { HourDrawer{bench}.draw(); }
+void draw_hours(Bench& bench) {
+    HourDrawer{bench}.draw();
+}
 
 } // namespace dialwright::layout

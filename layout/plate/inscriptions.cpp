@@ -26,7 +26,8 @@ class Inscriber {
                 const LetteredLine line = bench_.lettering.line(text, height, 0.08 * height);
                 if (on_border(line, height, name) || straight(line, height, name, anywhere)) {
                     if (height < 0.999 * height_mm)
-                        bench_.warnings.push_back(fmt::format("the {} is {:.1f} mm high instead of {:.1f} mm, to find room", name, height, height_mm));
+                        bench_.warnings.push_back(fmt::format(
+                            "the {} is {:.1f} mm high instead of {:.1f} mm, to find room", name, height, height_mm));
                     return true;
                 }
             }
@@ -34,7 +35,8 @@ class Inscriber {
         };
         if (heights(0.6, false) || heights(0.499, true))
             return;
-        bench_.warnings.push_back(fmt::format("no room on the plate for the {} \"{}\": left out; a shorter or smaller one may fit", name, text));
+        bench_.warnings.push_back(fmt::format(
+            "no room on the plate for the {} \"{}\": left out; a shorter or smaller one may fit", name, text));
     }
 
   private:
@@ -61,19 +63,23 @@ class Inscriber {
         return false;
     }
 
-    [[nodiscard]] static TurnedBox arc_chunk(Point centre, double outer, double inner, Angle middle, double half_turn, double part) {
+    [[nodiscard]] static TurnedBox arc_chunk(Point centre, double outer, double inner, Angle middle, double half_turn,
+                                             double part) {
         const Angle turn = middle + Angle::radians(half_turn * part);
         const double radius = (outer + inner) / 2;
-        return {centre + radius * Point{cos(turn), sin(turn)}, (outer - inner) * 0.5, (outer - inner) / 2, turn + Angle::degrees(90)};
+        return {centre + radius * Point{cos(turn), sin(turn)}, (outer - inner) * 0.5, (outer - inner) / 2,
+                turn + Angle::degrees(90)};
     }
     [[nodiscard]] static int arc_chunks(double outer, double inner, double half_turn) {
         return std::max(2, int(std::ceil(2 * half_turn * outer / (outer - inner))));
     }
 
-    [[nodiscard]] bool arc_is_clear(Point centre, double outer, double inner, Angle middle, double half_turn, double wanted) const {
+    [[nodiscard]] bool arc_is_clear(Point centre, double outer, double inner, Angle middle, double half_turn,
+                                    double wanted) const {
         const int chunks = arc_chunks(outer, inner, half_turn);
         for (int i = 0; i <= chunks; ++i)
-            if (bench_.clear.clearance_mm(arc_chunk(centre, outer, inner, middle, half_turn, 2.0 * i / chunks - 1)) < wanted)
+            if (bench_.clear.clearance_mm(arc_chunk(centre, outer, inner, middle, half_turn, 2.0 * i / chunks - 1)) <
+                wanted)
                 return false;
         return true;
     }
@@ -102,7 +108,8 @@ class Inscriber {
                 if (clearance < wanted)
                     continue;
                 // Room counts up to twice the height; then the middle line; then low rather than high.
-                const double score = std::min(clearance, 2 * height) - 0.6 * std::abs(column) / 24.0 * reach / 2 - 0.002 * row;
+                const double score =
+                    std::min(clearance, 2 * height) - 0.6 * std::abs(column) / 24.0 * reach / 2 - 0.002 * row;
                 if (score > best_score) {
                     best_score = score;
                     best.middle = box.middle;
@@ -110,7 +117,8 @@ class Inscriber {
             }
         if (best_score <= -1e300)
             return false;
-        const Point start = best.middle - (line.ink.left_mm + line.ink.width_mm() / 2) * right_ - height / 2 * bench_.up;
+        const Point start =
+            best.middle - (line.ink.left_mm + line.ink.width_mm() / 2) * right_ - height / 2 * bench_.up;
         bench_.add_filled(set_straight(line, start, turn_of(right_)), name);
         bench_.clear.block(best);
         return true;
@@ -122,7 +130,9 @@ class Inscriber {
 
 } // namespace
 
-void draw_motto(Bench& bench) { Inscriber{bench}.inscribe(bench.spec.lettering.motto, bench.spec.lettering.motto_height_mm, "motto"); }
+void draw_motto(Bench& bench) {
+    Inscriber{bench}.inscribe(bench.spec.lettering.motto, bench.spec.lettering.motto_height_mm, "motto");
+}
 
 void draw_place_line(Bench& bench) {
     Inscriber{bench}.inscribe(bench.spec.lettering.place_line, bench.spec.lettering.label_height_mm, "place line");

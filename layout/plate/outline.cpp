@@ -89,7 +89,8 @@ Outline Outline::of(const Plate& plate) {
 
 Box Outline::box() const {
     if (is_round())
-        return Box{centre_.x_mm - radius_mm_, centre_.y_mm - radius_mm_, centre_.x_mm + radius_mm_, centre_.y_mm + radius_mm_};
+        return Box{centre_.x_mm - radius_mm_, centre_.y_mm - radius_mm_, centre_.x_mm + radius_mm_,
+                   centre_.y_mm + radius_mm_};
     Box box;
     for (const Point& corner : corners_)
         box.add(corner);
@@ -116,13 +117,16 @@ double Outline::distance_mm(Point p) const {
     double best = 1e300;
     for (std::size_t i = 0; i < corners_.size(); ++i) {
         const Point a = corners_[i], d = (corners_[(i + 1) % corners_.size()] - a), to = (p - a);
-        const double t = std::clamp((to.x_mm * d.x_mm + to.y_mm * d.y_mm) / (d.x_mm * d.x_mm + d.y_mm * d.y_mm), 0.0, 1.0);
+        const double t =
+            std::clamp((to.x_mm * d.x_mm + to.y_mm * d.y_mm) / (d.x_mm * d.x_mm + d.y_mm * d.y_mm), 0.0, 1.0);
         best = std::min(best, std::hypot(to.x_mm - t * d.x_mm, to.y_mm - t * d.y_mm));
     }
     return best;
 }
 
-Path Outline::path() const { return is_round() ? circle(centre_, radius_mm_) : polyline(corners_, true); }
+Path Outline::path() const {
+    return is_round() ? circle(centre_, radius_mm_) : polyline(corners_, true);
+}
 
 std::optional<Outline> Outline::inset(double by_mm) const {
     if (by_mm == 0)
@@ -180,8 +184,8 @@ void Outline::crossings(Point a, Point b, std::vector<double>& t) const {
 
 std::optional<Outline::Exit> Outline::exit(Point from, Point direction) const {
     const Box reach = box();
-    const double far = 2 * (reach.width_mm() + reach.height_mm()) +
-                       std::hypot(from.x_mm - centre_.x_mm, from.y_mm - centre_.y_mm);
+    const double far =
+        2 * (reach.width_mm() + reach.height_mm()) + std::hypot(from.x_mm - centre_.x_mm, from.y_mm - centre_.y_mm);
     const double length = std::hypot(direction.x_mm, direction.y_mm);
     const Point end{from.x_mm + far * direction.x_mm / length, from.y_mm + far * direction.y_mm / length};
     std::vector<double> t;

@@ -18,20 +18,23 @@ constexpr Angle k_least_style_for_centre = Angle::degrees(3);
 constexpr Angle k_pin = Angle::degrees(89.99); ///< a style this steep is a pin, square on the plate
 constexpr double k_crowded = 0.05;             ///< of the plate's size, between two hours at the border of the field
 
-double to_half_mm(double mm) { return std::round(mm * 2) / 2; }
+double to_half_mm(double mm) {
+    return std::round(mm * 2) / 2;
+}
 
 class Placer {
   public:
     Placer(const DialPlan& plan, const MeanYear& year, const FaceSpec& spec)
         : plan_{plan}, spec_{spec}, rings_{Rings::of(spec)}, season_{-year.obliquity(), year.obliquity()},
-          caster_{caster_of(unit_plan(plan))},
-          style_{style_of(caster_.surface().frame(), 1.0, plan.site.latitude)} {
+          caster_{caster_of(unit_plan(plan))}, style_{style_of(caster_.surface().frame(), 1.0, plan.site.latitude)} {
         // Hours that count from the Sun's rising or setting spread over the same shadows as the Sun's own hours do.
         const Family family = family_of(plan.hours.time);
         const bool own_hours = family == Family::hour || family == Family::clock_hour;
         for (int hour = 0; hour < 24; ++hour) {
-            const bool asked = !own_hours || ((!plan.hours.first_h || hour >= *plan.hours.first_h) && (!plan.hours.last_h || hour <= *plan.hours.last_h));
-            const Angle angle = hour_angle_of(own_hours ? plan.hours.time : HourTime::sun, hour, plan.site, plan.zone_meridian);
+            const bool asked = !own_hours || ((!plan.hours.first_h || hour >= *plan.hours.first_h) &&
+                                              (!plan.hours.last_h || hour <= *plan.hours.last_h));
+            const Angle angle =
+                hour_angle_of(own_hours ? plan.hours.time : HourTime::sun, hour, plan.site, plan.zone_meridian);
             if (asked && caster_.ever_lit(angle, season_))
                 hours_.push_back(angle);
         }
@@ -40,7 +43,8 @@ class Placer {
     Placement placed() {
         if (style_.height < k_least_style_for_centre || !style_.centre || !has_style(spec_.gnomon.kind))
             return placed_without_centre();
-        const Point centre = spec_.plate.centre ? Point{spec_.plate.centre->right_mm, spec_.plate.centre->up_mm} : best_centre();
+        const Point centre =
+            spec_.plate.centre ? Point{spec_.plate.centre->right_mm, spec_.plate.centre->up_mm} : best_centre();
         if (!spec_.plate.centre && closest_hours_mm(centre) < k_crowded * size_mm())
             return placed_without_centre();
         Placement placement;
@@ -49,7 +53,8 @@ class Placer {
         if (!spec_.plate.centre)
             placement.why_place = "gives the lines of all lit hours the most room";
         if (!(plan_.nodus_height_mm > 0))
-            placement.why_height = "the highest nodus whose shadow stays on the plate at every date line, at the hour nearest to the substyle";
+            placement.why_height = "the highest nodus whose shadow stays on the plate at every date line, at the hour "
+                                   "nearest to the substyle";
         return placement;
     }
 
@@ -84,7 +89,8 @@ class Placer {
         double least = 1e300;
         std::optional<Point> before;
         for (std::size_t i = 0; i < hours_.size(); ++i) {
-            const auto direction = hour_line_direction(caster_.surface().frame(), style_, plan_.site.latitude, hours_[i]);
+            const auto direction =
+                hour_line_direction(caster_.surface().frame(), style_, plan_.site.latitude, hours_[i]);
             const auto exit = direction ? rings_.divisions.exit(centre, clockwise_from_up(*direction)) : std::nullopt;
             const bool next = i > 0 && (hours_[i] - hours_[i - 1]).in_hours() < 1.5;
             if (exit && before && next)
@@ -111,8 +117,9 @@ class Placer {
         for (double step = size_mm() / 8; step > 0.2; step /= 2)
             for (bool moved = true; moved;) {
                 moved = false;
-                for (const Point& way : {Point{step, 0}, Point{-step, 0}, Point{0, step}, Point{0, -step}, Point{step, step},
-                                         Point{-step, step}, Point{step, -step}, Point{-step, -step}}) {
+                for (const Point& way :
+                     {Point{step, 0}, Point{-step, 0}, Point{0, step}, Point{0, -step}, Point{step, step},
+                      Point{-step, step}, Point{step, -step}, Point{-step, -step}}) {
                     const double score = room_score(best + way, allowed);
                     if (score > best_score + 1e-9) {
                         best_score = score;
@@ -128,14 +135,15 @@ class Placer {
     [[nodiscard]] std::optional<Angle> main_hour() const {
         std::optional<Angle> best;
         for (const Angle& hour : hours_)
-            if (!best || abs((hour - style_.substyle_hour_angle).signed_turn()) < abs((*best - style_.substyle_hour_angle).signed_turn()))
+            if (!best || abs((hour - style_.substyle_hour_angle).signed_turn()) <
+                             abs((*best - style_.substyle_hour_angle).signed_turn()))
                 best = hour;
         return best;
     }
 
     [[nodiscard]] double height_for(Point centre) const {
-        constexpr double k_fill = 0.82;          // of the hour line's length: clear of the half hours' marks
-        constexpr double k_least_spread = 0.13;  // nearest date line's part of the farthest's distance from the centre
+        constexpr double k_fill = 0.82;         // of the hour line's length: clear of the half hours' marks
+        constexpr double k_least_spread = 0.13; // nearest date line's part of the farthest's distance from the centre
         const double fallback = to_half_mm(0.15 * size_mm());
         const auto hour = main_hour();
         if (!hour)
@@ -147,7 +155,8 @@ class Placer {
         std::vector<double> reach; // of each date line's point, for a nodus 1 mm high
         const auto add = [&](Angle declination) {
             if (const auto cast = caster_.cast({*hour, declination}, Light::seen))
-                reach.push_back(std::hypot(cast->point.u_mm - style_.centre->u_mm, cast->point.v_mm - style_.centre->v_mm));
+                reach.push_back(
+                    std::hypot(cast->point.u_mm - style_.centre->u_mm, cast->point.v_mm - style_.centre->v_mm));
         };
         for (const DatePlan::Line& date : plan_.dates.lines)
             add(date.declination);
@@ -189,11 +198,14 @@ class Placer {
                     continue;
                 double gap = wanted_gap;
                 if (i > 0 && k < shadows[i - 1].points.size())
-                    gap = height_mm * std::hypot(p.u_mm - shadows[i - 1].points[k].u_mm, p.v_mm - shadows[i - 1].points[k].v_mm);
+                    gap = height_mm *
+                          std::hypot(p.u_mm - shadows[i - 1].points[k].u_mm, p.v_mm - shadows[i - 1].points[k].v_mm);
                 double spread = wanted_gap; // from the date before on the same hour
                 if (k > 0)
-                    spread = height_mm * std::hypot(p.u_mm - shadows[i].points[k - 1].u_mm, p.v_mm - shadows[i].points[k - 1].v_mm);
-                score += std::min(1.0, gap / wanted_gap) * std::min(1.0, spread / wanted_gap) + 0.1 * (gap + spread) / size_mm();
+                    spread = height_mm *
+                             std::hypot(p.u_mm - shadows[i].points[k - 1].u_mm, p.v_mm - shadows[i].points[k - 1].v_mm);
+                score += std::min(1.0, gap / wanted_gap) * std::min(1.0, spread / wanted_gap) +
+                         0.1 * (gap + spread) / size_mm();
             }
         return score;
     }
@@ -205,8 +217,9 @@ class Placer {
         double best_score = -1;
         constexpr int k_places = 8, k_heights = 32;
         for (int i = 0; i <= k_heights; ++i) {
-            const double height = plan_.nodus_height_mm > 0 ? plan_.nodus_height_mm
-                                                            : to_half_mm(size_mm() * 0.02 * std::pow(25.0, double(i) / k_heights));
+            const double height = plan_.nodus_height_mm > 0
+                                      ? plan_.nodus_height_mm
+                                      : to_half_mm(size_mm() * 0.02 * std::pow(25.0, double(i) / k_heights));
             if (height <= 0)
                 continue;
             for (int column = 0; column <= k_places; ++column)
@@ -216,7 +229,8 @@ class Placer {
                     if (spec_.plate.centre)
                         foot = {spec_.plate.centre->right_mm, spec_.plate.centre->up_mm};
                     // Of equals, the foot nearest to the middle.
-                    const double score = field_score(shadows, foot, height) - 1e-4 * distance(foot, box.middle()) / size_mm();
+                    const double score =
+                        field_score(shadows, foot, height) - 1e-4 * distance(foot, box.middle()) / size_mm();
                     if (score > best_score) {
                         best_score = score;
                         best.foot = foot;

@@ -37,7 +37,9 @@ enum class GnomonKind {
     disc         ///< a pierced disc; its hole is the nodus and throws a spot
 };
 /// Pins and discs throw no style's shadow: hour lines then run no farther than the nodus' own shadow does.
-[[nodiscard]] constexpr bool has_style(GnomonKind kind) { return kind == GnomonKind::edge || kind == GnomonKind::rod; }
+[[nodiscard]] constexpr bool has_style(GnomonKind kind) {
+    return kind == GnomonKind::edge || kind == GnomonKind::rod;
+}
 
 /// What on the gnomon throws the point that the date lines are read by.
 enum class NodusKind { notch, ball, tip, hole };

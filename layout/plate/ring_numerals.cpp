@@ -16,8 +16,8 @@ namespace {
 struct Row {
     Outline middle, outer, inner;
     double height_mm = 0.0;
-    double shift_h = 0.0;  ///< added to the hour
-    std::string name;      ///< "numeral ", "summer numeral "
+    double shift_h = 0.0; ///< added to the hour
+    std::string name;     ///< "numeral ", "summer numeral "
 };
 
 class NumeralDrawer {
@@ -37,7 +37,9 @@ class NumeralDrawer {
         if (!all_apart(all, height))
             drop_crowded(all, height);
         if (height < row_.height_mm)
-            bench_.warnings.push_back(fmt::format("{}s are {:.1f} mm high instead of {:.1f} mm, so that they stand clear", row_.name, height, row_.height_mm));
+            bench_.warnings.push_back(
+                fmt::format("{}s are {:.1f} mm high instead of {:.1f} mm, so that they stand clear", row_.name, height,
+                            row_.height_mm));
         for (const Numeral& n : all)
             set(n, height);
     }
@@ -72,14 +74,17 @@ class NumeralDrawer {
         const auto room = [&](double way) {
             double least = 1e300;
             for (const Point& corner : row_.middle.corners())
-                if (const double ahead = dot(corner - n.at, along) * way; ahead > -1e-6 && std::abs(dot(corner - n.at, n.normal)) < 1e-3)
+                if (const double ahead = dot(corner - n.at, along) * way;
+                    ahead > -1e-6 && std::abs(dot(corner - n.at, n.normal)) < 1e-3)
                     least = std::min(least, ahead);
             return least;
         };
         const double ahead = room(1), behind = room(-1);
         if (ahead + behind < 2 * half_width_mm || ahead > 1e200 || behind > 1e200)
             return n.at;
-        const double shift = ahead < half_width_mm ? ahead - half_width_mm : behind < half_width_mm ? half_width_mm - behind : 0.0;
+        const double shift = ahead < half_width_mm    ? ahead - half_width_mm
+                             : behind < half_width_mm ? half_width_mm - behind
+                                                      : 0.0;
         return n.at + shift * along;
     }
 
@@ -111,7 +116,9 @@ class NumeralDrawer {
     }
 
     /// Noon stays before all, then the quarters of the day and their halves, then the others.
-    [[nodiscard]] static int rank(const Numeral& n) { return n.hour == 12 ? 0 : n.hour % 6 == 0 ? 1 : n.hour % 3 == 0 ? 2 : 3; }
+    [[nodiscard]] static int rank(const Numeral& n) {
+        return n.hour == 12 ? 0 : n.hour % 6 == 0 ? 1 : n.hour % 3 == 0 ? 2 : 3;
+    }
 
     void drop_crowded(std::vector<Numeral>& all, double height) {
         std::stable_sort(all.begin(), all.end(), [](const Numeral& a, const Numeral& b) { return rank(a) < rank(b); });
@@ -119,14 +126,16 @@ class NumeralDrawer {
         std::string dropped;
         for (const Numeral& n : all) {
             const TurnedBox box = box_of(n, height);
-            const bool clash = std::any_of(kept.begin(), kept.end(), [&](const Numeral& k) { return box.overlaps(box_of(k, height)); });
+            const bool clash = std::any_of(kept.begin(), kept.end(),
+                                           [&](const Numeral& k) { return box.overlaps(box_of(k, height)); });
             if (!clash)
                 kept.push_back(n);
             else
                 dropped += (dropped.empty() ? "" : ", ") + n.text;
         }
         all = std::move(kept);
-        bench_.warnings.push_back(fmt::format("no room for the {}s {}: their hour lines stand too close together at the border", row_.name, dropped));
+        bench_.warnings.push_back(fmt::format(
+            "no room for the {}s {}: their hour lines stand too close together at the border", row_.name, dropped));
     }
 
     void set(const Numeral& n, double height) {
@@ -134,13 +143,16 @@ class NumeralDrawer {
         const std::string name = row_.name + " " + n.text;
         if (row_.middle.is_round() && !upright()) {
             const double radius = row_.middle.radius_mm() + (heads_out_ ? -height / 2 : height / 2);
-            bench_.add_filled(set_on_circle(line, row_.middle.centre(), radius, turn_of(n.at - row_.middle.centre()), !heads_out_), name);
+            bench_.add_filled(
+                set_on_circle(line, row_.middle.centre(), radius, turn_of(n.at - row_.middle.centre()), !heads_out_),
+                name);
             return;
         }
         const TurnedBox box = box_of(n, height);
         const Point along{cos(box.turn), sin(box.turn)};
         const double ink_middle = (line.ink.left_mm + line.ink.right_mm) / 2;
-        bench_.add_filled(set_straight(line, box.middle - ink_middle * along - height / 2 * left_of(along), box.turn), name);
+        bench_.add_filled(set_straight(line, box.middle - ink_middle * along - height / 2 * left_of(along), box.turn),
+                          name);
     }
 
     Bench& bench_;
@@ -156,9 +168,10 @@ std::vector<Row> rows_of(const Bench& bench) {
     if (!(bench.spec.summer_shift_h > 0))
         return {{at(0.5), bench.rings.outer, bench.rings.numerals, height, 0.0, "numeral"}};
     constexpr double k_border = 0.62;
-    return {{at(k_border / 2), bench.rings.outer, at(k_border), std::min(height, 0.66 * k_border * band), 0.0, "numeral"},
-            {at((1 + k_border) / 2), at(k_border), bench.rings.numerals, std::min(0.6 * height, 0.58 * (1 - k_border) * band),
-             bench.spec.summer_shift_h, "summer numeral"}};
+    return {
+        {at(k_border / 2), bench.rings.outer, at(k_border), std::min(height, 0.66 * k_border * band), 0.0, "numeral"},
+        {at((1 + k_border) / 2), at(k_border), bench.rings.numerals,
+         std::min(0.6 * height, 0.58 * (1 - k_border) * band), bench.spec.summer_shift_h, "summer numeral"}};
 }
 
 } // namespace
@@ -170,7 +183,11 @@ void draw_numerals(Bench& bench, const std::vector<RingHour>& hours, bool heads_
     for (const Row& row : rows)
         NumeralDrawer{bench, row, heads_out}.draw(hours);
     if (rows.size() > 1)
-        bench.marks.push_back({Layer::engrave, {rows.front().inner.path()}, bench.width_of_step(15), false, "border of the summer numerals"});
+        bench.marks.push_back({Layer::engrave,
+                               {rows.front().inner.path()},
+                               bench.width_of_step(15),
+                               false,
+                               "border of the summer numerals"});
 }
 
 } // namespace dialwright::layout

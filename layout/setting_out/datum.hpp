@@ -10,10 +10,10 @@ namespace dialwright::layout {
 
 /// Where a point of a border is, for a rule laid along it.
 struct BorderPlace {
-    std::string side;       ///< "top edge", "side BC", "edge" of a round plate
-    std::string from;       ///< "upper left corner", "corner B", "top mark"
-    std::string way;        ///< on a round border "left" or "right" of the mark
-    double along_mm = 0.0;  ///< along the side; on a round border straight across (the chord that dividers take)
+    std::string side;      ///< "top edge", "side BC", "edge" of a round plate
+    std::string from;      ///< "upper left corner", "corner B", "top mark"
+    std::string way;       ///< on a round border "left" or "right" of the mark
+    double along_mm = 0.0; ///< along the side; on a round border straight across (the chord that dividers take)
 };
 
 /// "top edge 214.3 mm from the upper left corner"; "edge 96.0 mm left of the top mark, straight across".

@@ -49,13 +49,16 @@ struct SeenLine {
     std::string name;
     Polyline points; ///< as the reader sees the plate; a straight one from the pole outward
     [[nodiscard]] bool straight() const { return points.size() == 2 && line->family != Family::date; }
-    [[nodiscard]] bool whole_hour() const { return line->family == Family::hour && line->set == 0 && line->step_min >= 60; }
+    [[nodiscard]] bool whole_hour() const {
+        return line->family == Family::hour && line->set == 0 && line->step_min >= 60;
+    }
 };
 
 class Setter {
   public:
     Setter(const Face& face, const FaceSpec& spec, const SettingOutOptions& options)
-        : face_{face}, options_{options}, spec_up_{spec.reader_up}, turn_{spec.reader_up, {}, 1.0, 1.0, false}, datum_{datum_of(spec, options.border, turn_)} {
+        : face_{face}, options_{options}, spec_up_{spec.reader_up}, turn_{spec.reader_up, {}, 1.0, 1.0, false},
+          datum_{datum_of(spec, options.border, turn_)} {
         lay_poles(spec);
         gather_lines();
         lay_zero_line();
@@ -83,7 +86,8 @@ class Setter {
         radial_ = style.centre && has_style(spec.gnomon.kind) && datum_.border().contains(seen(*style.centre));
         const Point pole = radial_ ? seen(*style.centre) : seen({});
         poles_ = {{radial_ ? "dial's centre" : "nodus' foot", pole}};
-        if (radial_ && spec.gnomon.kind == GnomonKind::edge && spec.gnomon.thickness_mm > 0 && style.height < Angle::degrees(89.99)) {
+        if (radial_ && spec.gnomon.kind == GnomonKind::edge && spec.gnomon.thickness_mm > 0 &&
+            style.height < Angle::degrees(89.99)) {
             const Point side = spec.gnomon.thickness_mm / 2 * left_of(clockwise_from_up(style.substyle - spec_up_));
             const bool level = std::abs(side.x_mm) > 0.2 * std::abs(side.y_mm);
             const bool first = level ? side.x_mm < 0 : side.y_mm > 0;
@@ -117,7 +121,8 @@ class Setter {
             SeenLine made{&line, name_of_family(line.family) + line.label, {}};
             for (const PlatePoint& p : line.points)
                 made.points.push_back(seen(p));
-            if (made.straight() && distance(made.points.front(), poles_[0].at) > distance(made.points.back(), poles_[0].at))
+            if (made.straight() &&
+                distance(made.points.front(), poles_[0].at) > distance(made.points.back(), poles_[0].at))
                 std::reverse(made.points.begin(), made.points.end());
             lines_.push_back(std::move(made));
         }
@@ -147,7 +152,8 @@ class Setter {
 
     [[nodiscard]] SettingOutPoint point(std::string line, std::string what, Point at, std::size_t pole) const {
         const Point ray = at - poles_[pole].at;
-        SettingOutPoint made{std::move(line), std::move(what), at - datum_.origin(), {}, poles_[pole].name, length(ray), {}, 0.0, 0.0};
+        SettingOutPoint made{
+            std::move(line), std::move(what), at - datum_.origin(), {}, poles_[pole].name, length(ray), {}, 0.0, 0.0};
         if (made.radius_mm > 1e-9)
             made.angle = (-arc_tangent(cross(zero_, ray), dot(zero_, ray))).signed_turn();
         made.chord_mm = 2 * out_.chord_radius_mm * std::abs(sin(made.angle / 2));
@@ -181,7 +187,8 @@ class Setter {
         for (const SeenLine& hour : lines_)
             if (hour.whole_hour() && hour.straight())
                 for (std::size_t i = 0; i + 1 < line.points.size(); ++i)
-                    if (const auto at = crossing(line.points[i], line.points[i + 1], hour.points.front(), hour.points.back())) {
+                    if (const auto at =
+                            crossing(line.points[i], line.points[i + 1], hour.points.front(), hour.points.back())) {
                         out_.points.push_back(point(line.name, "on " + hour.name, *at, pole_of(hour)));
                         break; // a curve crosses a ray from the centre once
                     }
@@ -190,7 +197,8 @@ class Setter {
 
     void add_holes(const std::vector<Mark>& marks) {
         for (const Mark& mark : marks) {
-            if (mark.layer != Layer::drill || mark.paths.size() != 1 || mark.paths.front().pieces.size() != 1 || !mark.paths.front().closed)
+            if (mark.layer != Layer::drill || mark.paths.size() != 1 || mark.paths.front().pieces.size() != 1 ||
+                !mark.paths.front().closed)
                 continue;
             if (const auto* arc = std::get_if<ArcTo>(&mark.paths.front().pieces.front())) {
                 SettingOutPoint made = point(mark.name, "drill", arc->centre, 0);
@@ -207,16 +215,19 @@ class Setter {
         for (const SettingOutPoint& p : out_.points)
             if (p.border && p.what.starts_with("meets the "))
                 if (const auto* seen_line = line_named(p.line); seen_line && seen_line->whole_hour())
-                    out_.checks.push_back(fmt::format("the {} line meets the {}", seen_line->line->label, say_place(*p.border, options_.inches)));
+                    out_.checks.push_back(fmt::format("the {} line meets the {}", seen_line->line->label,
+                                                      say_place(*p.border, options_.inches)));
         for (const SeenLine& line : lines_)
             if (line.whole_hour() && line.straight())
-                out_.checks.push_back(fmt::format("the outer end of the {} line is {} from the {} and {} from the {}", line.line->label,
-                                                  say(distance(line.points.back(), marks[0].at)), marks[0].name,
-                                                  say(distance(line.points.back(), marks[1].at)), marks[1].name));
+                out_.checks.push_back(fmt::format("the outer end of the {} line is {} from the {} and {} from the {}",
+                                                  line.line->label, say(distance(line.points.back(), marks[0].at)),
+                                                  marks[0].name, say(distance(line.points.back(), marks[1].at)),
+                                                  marks[1].name));
     }
 
     [[nodiscard]] const SeenLine* line_named(const std::string& name) const {
-        const auto found = std::find_if(lines_.begin(), lines_.end(), [&](const SeenLine& line) { return line.name == name; });
+        const auto found =
+            std::find_if(lines_.begin(), lines_.end(), [&](const SeenLine& line) { return line.name == name; });
         return found == lines_.end() ? nullptr : &*found;
     }
 
@@ -234,6 +245,8 @@ class Setter {
 
 } // namespace
 
-SettingOut set_out(const Face& face, const FaceSpec& spec, const SettingOutOptions& options) { return Setter{face, spec, options}.made(); }
+SettingOut set_out(const Face& face, const FaceSpec& spec, const SettingOutOptions& options) {
+    return Setter{face, spec, options}.made();
+}
 
 } // namespace dialwright::layout

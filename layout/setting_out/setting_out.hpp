@@ -12,21 +12,22 @@ enum class MeasuredBorder { plate_edge, outer_border, field };
 struct SettingOutOptions {
     MeasuredBorder border = MeasuredBorder::plate_edge;
     bool inches = false;
-    double chord_radius_mm = 0.0; ///< of the circle round the centre that dividers step along; 0: a round number that fits
-    bool divisions = true;        ///< lines finer than an hour as well
+    double chord_radius_mm =
+        0.0;               ///< of the circle round the centre that dividers step along; 0: a round number that fits
+    bool divisions = true; ///< lines finer than an hour as well
     std::vector<Mark> more_holes; ///< drill marks beside those of the face's drawing, in its frame
 };
 
 /// One point to mark. Every length is from one datum, none from another point.
 struct SettingOutPoint {
-    std::string line; ///< "hour line XI"; "fixing hole 1"
-    std::string what; ///< "inner end", "outer end", "meets the edge", "on hour line XI"
-    Point at;         ///< mm right and up of the datum
+    std::string line;                  ///< "hour line XI"; "fixing hole 1"
+    std::string what;                  ///< "inner end", "outer end", "meets the edge", "on hour line XI"
+    Point at;                          ///< mm right and up of the datum
     std::optional<BorderPlace> border; ///< where it lies on the measured border
-    std::string pole;       ///< that radius and angle are measured from; the own centre of an hour line
-    double radius_mm = 0.0; ///< from the pole
-    Angle angle;            ///< about the pole, from the zero line through it, clockwise positive, in [−180°, 180°)
-    double chord_mm = 0.0;  ///< on the chord circle, from where the zero line meets it to where the radius does
+    std::string pole;                  ///< that radius and angle are measured from; the own centre of an hour line
+    double radius_mm = 0.0;            ///< from the pole
+    Angle angle;           ///< about the pole, from the zero line through it, clockwise positive, in [−180°, 180°)
+    double chord_mm = 0.0; ///< on the chord circle, from where the zero line meets it to where the radius does
     double diameter_mm = 0.0; ///< of a hole
 };
 
@@ -40,7 +41,8 @@ struct SettingOut {
     double chord_radius_mm = 0.0;
     std::vector<SettingOutPoint> points; ///< line by line, as the face has them
     std::vector<SettingOutPoint> holes;
-    std::vector<std::string> checks;     ///< sentences: diagonals, where each hour line meets the border, two distances to its end
+    std::vector<std::string>
+        checks; ///< sentences: diagonals, where each hour line meets the border, two distances to its end
 };
 
 /// The numbers by which a mason draws the face with rule, square and dividers. Straight lines are carried on to the

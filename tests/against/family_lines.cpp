@@ -49,7 +49,8 @@ void print_piece(const PlatePolyline& piece, int parts) {
 
 DialPlan asked(DialPlan plan) {
     plan.nodus_height_mm = 100;
-    for (const HourTime time : {HourTime::clock, HourTime::since_sunrise, HourTime::since_sunset, HourTime::to_sunset, HourTime::unequal}) {
+    for (const HourTime time :
+         {HourTime::clock, HourTime::since_sunrise, HourTime::since_sunset, HourTime::to_sunset, HourTime::unequal}) {
         HourPlan hours;
         hours.time = time;
         plan.more_hours.push_back(hours);

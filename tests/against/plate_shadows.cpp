@@ -2,8 +2,8 @@
 //
 // Reads lines of "instant latitude longitude normal_azimuth normal_altitude" (degrees) and prints for each the shadow
 // "u v" in millimetres of a nodus 100 mm above the plate, or "unlit". For comparison with another program's Sun.
-#include "engine/surface/plane.hpp"
 #include "engine/sun/apparent_sun.hpp"
+#include "engine/surface/plane.hpp"
 #include "engine/time/instant_text.hpp"
 
 #include <fmt/format.h>

@@ -34,7 +34,9 @@ HourPlan hours(HourTime time, int divide_min = 60) {
     return made;
 }
 
-void add_sun_hours(DialPlan& plan) { plan.hours = hours(HourTime::sun, 15); }
+void add_sun_hours(DialPlan& plan) {
+    plan.hours = hours(HourTime::sun, 15);
+}
 void add_altitudes(DialPlan& plan) {
     for (int degrees = 10; degrees < 90; degrees += 10)
         plan.altitudes.push_back(Angle::degrees(degrees));
@@ -77,7 +79,8 @@ Cost cost_of(const DialPlan& plan, const MeanYear& year, int runs) {
 
 double row(std::string_view what, const Cost& cost, double compared_us) {
     const double each_us = 1000 * cost.ms / double(std::max<std::size_t>(cost.lines, 1));
-    fmt::print("{:<34}{:>8.3f} ms {:>6} lines {:>7} points {:>9.1f} us a line", what, cost.ms, cost.lines, cost.points, each_us);
+    fmt::print("{:<34}{:>8.3f} ms {:>6} lines {:>7} points {:>9.1f} us a line", what, cost.ms, cost.lines, cost.points,
+               each_us);
     fmt::print("{}\n", compared_us > 0 ? fmt::format("   x {:.2f}", each_us / compared_us) : "");
     return each_us;
 }
@@ -123,7 +126,8 @@ int main(int count, char** arguments) {
             plan.horizon = all.horizon;
             plan.hours = hours(time, divide_min);
             const std::string_view name = time == HourTime::clock ? "clock" : time == HourTime::sun ? "Sun" : "unequal";
-            const double each_us = row(fmt::format("{} hours, each {} min", name, divide_min), cost_of(plan, year, std::max(1, runs / 6)), first_us);
+            const double each_us = row(fmt::format("{} hours, each {} min", name, divide_min),
+                                       cost_of(plan, year, std::max(1, runs / 6)), first_us);
             first_us = first_us > 0 ? first_us : each_us;
         }
     }

@@ -30,7 +30,8 @@ class RandomDesign {
         std::string text = place() + skyline(); // one after the other: the plate's size bounds what follows
         text += dial();
         text += plate();
-        for (const auto section : {&RandomDesign::borders, &RandomDesign::gnomon, &RandomDesign::hours, &RandomDesign::also, &RandomDesign::dates, &RandomDesign::lettering,
+        for (const auto section : {&RandomDesign::borders, &RandomDesign::gnomon, &RandomDesign::hours,
+                                   &RandomDesign::also, &RandomDesign::dates, &RandomDesign::lettering,
                                    &RandomDesign::cutting, &RandomDesign::print, &RandomDesign::years})
             text += (this->*section)();
         return text;
@@ -40,7 +41,10 @@ class RandomDesign {
     bool chance(double part) { return number(0, 1) < part; }
     double number(double least, double most) { return std::uniform_real_distribution{least, most}(random_); }
     int whole(int least, int most) { return std::uniform_int_distribution{least, most}(random_); }
-    template <std::size_t n> std::string one_of(const std::array<const char*, n>& words) { return words[std::size_t(whole(0, int(n) - 1))]; }
+    template <std::size_t n>
+    std::string one_of(const std::array<const char*, n>& words) {
+        return words[std::size_t(whole(0, int(n) - 1))];
+    }
     /// Small as often as large.
     double size_mm(double least, double most) { return std::exp(number(std::log(least), std::log(most))); }
     std::string mm(double least, double most) { return fmt::format("{:.2f} mm", size_mm(least, most)); }
@@ -48,16 +52,20 @@ class RandomDesign {
     std::string some(double part, const std::string& line) { return chance(part) ? "  " + line + "\n" : ""; }
 
     std::string place() {
-        constexpr std::array k_latitudes{"0", "90 N", "90 S", "23.44", "-23.44", "66.56", "-66.56", "89.9", "0.001", "45"};
+        constexpr std::array k_latitudes{"0",     "90 N",   "90 S", "23.44", "-23.44",
+                                         "66.56", "-66.56", "89.9", "0.001", "45"};
         const std::string latitude = chance(0.3) ? one_of(k_latitudes) : fmt::format("{:.4f}", number(-90, 90));
-        return fmt::format("place:\n  name: {}\n  latitude: {}\n  longitude: {:.4f}\n  zone: {}\n", one_of(std::array{"Nether Beck", "Ærøholm", "Κάτω Λιμήν"}), latitude,
-                           number(-180, 180), one_of(std::array{"Europe/London", "Asia/Kathmandu", "Pacific/Kiritimati", "America/St_Johns", "UTC", "Antarctica/Troll", "Australia/Lord_Howe"}));
+        return fmt::format("place:\n  name: {}\n  latitude: {}\n  longitude: {:.4f}\n  zone: {}\n",
+                           one_of(std::array{"Nether Beck", "Ærøholm", "Κάτω Λιμήν"}), latitude, number(-180, 180),
+                           one_of(std::array{"Europe/London", "Asia/Kathmandu", "Pacific/Kiritimati",
+                                             "America/St_Johns", "UTC", "Antarctica/Troll", "Australia/Lord_Howe"}));
     }
     std::string skyline() {
         return chance(0.15) ? "  skyline: [[80°, 6°], [120°, 25°], [200°, 3°], [290°, 12°]]\n" : "";
     }
     std::string facing() {
-        return chance(0.4) ? one_of(std::array{"north", "south", "east", "west", "SE", "NNW", "S 23° E", "S 89.99° W", "S 0.01° W"})
+        return chance(0.4) ? one_of(std::array{"north", "south", "east", "west", "SE", "NNW", "S 23° E", "S 89.99° W",
+                                               "S 0.01° W"})
                            : fmt::format("{:.3f}°", number(0, 360));
     }
     std::string dial() {
@@ -65,13 +73,16 @@ class RandomDesign {
         case 0:
             return "dial: {kind: level}\n";
         case 1:
-            return fmt::format("dial:\n  kind: equatorial\n  faces: {}\n", one_of(std::array{"upper", "lower", "both"}));
+            return fmt::format("dial:\n  kind: equatorial\n  faces: {}\n",
+                               one_of(std::array{"upper", "lower", "both"}));
         case 2:
-            return fmt::format("dial:\n  kind: wall\n  facing: {}\n", facing()) + some(0.5, fmt::format("lean: {:.3f}° {}", number(0, 45), one_of(std::array{"back", "forward"}))) +
+            return fmt::format("dial:\n  kind: wall\n  facing: {}\n", facing()) +
+                   some(0.5, fmt::format("lean: {:.3f}° {}", number(0, 45), one_of(std::array{"back", "forward"}))) +
                    some(0.25, "faces: " + one_of(std::array{"front", "back", "both"}));
         default:
             return fmt::format("dial:\n  kind: leaning\n  facing: {}\n  lean: {}\n", facing(),
-                               chance(0.5) ? fmt::format("{:.3f}° back", number(0.1, 89.9)) : fmt::format("{:.3f}° forward", number(0.1, 80)));
+                               chance(0.5) ? fmt::format("{:.3f}° back", number(0.1, 89.9))
+                                           : fmt::format("{:.3f}° forward", number(0.1, 80)));
         }
     }
     std::string plate() {
@@ -93,16 +104,21 @@ class RandomDesign {
         default:
             text += "  corners: [";
             for (int i = 0, corners = whole(3, 9); i < corners; ++i) { // a star round a middle: never crossing
-                const double turn = 6.283185307 * (i + number(-0.3, 0.3)) / corners, reach = smaller_mm_ * number(0.3, 0.7);
-                text += fmt::format("{}[{:.2f} mm, {:.2f} mm]", i == 0 ? "" : ", ", reach * std::cos(turn), reach * std::sin(turn));
+                const double turn = 6.283185307 * (i + number(-0.3, 0.3)) / corners,
+                             reach = smaller_mm_ * number(0.3, 0.7);
+                text += fmt::format("{}[{:.2f} mm, {:.2f} mm]", i == 0 ? "" : ", ", reach * std::cos(turn),
+                                    reach * std::sin(turn));
             }
             text += "]\n";
         }
-        return text + some(0.25, fmt::format("centre: [{:.1f} mm, {:.1f} mm]", number(-0.8, 0.8) * smaller_mm_, number(-0.8, 0.8) * smaller_mm_)) +
+        return text +
+               some(0.25, fmt::format("centre: [{:.1f} mm, {:.1f} mm]", number(-0.8, 0.8) * smaller_mm_,
+                                      number(-0.8, 0.8) * smaller_mm_)) +
                some(0.3, "material: Welsh slate, 25 mm");
     }
     std::string borders() {
-        return "borders:\n  margin: " + mm(0.5, 0.05 * smaller_mm_ + 0.6) + "\n" + some(0.3, "chapter ring: " + (chance(0.3) ? "0 mm" : mm(1, 0.3 * smaller_mm_))) +
+        return "borders:\n  margin: " + mm(0.5, 0.05 * smaller_mm_ + 0.6) + "\n" +
+               some(0.3, "chapter ring: " + (chance(0.3) ? "0 mm" : mm(1, 0.3 * smaller_mm_))) +
                some(0.3, "inner border: " + (chance(0.3) ? "0 mm" : mm(1, 0.3 * smaller_mm_)));
     }
     std::string gnomon() {
@@ -111,14 +127,17 @@ class RandomDesign {
         if (kind == "edge")
             text += "  holes: " + std::to_string(whole(0, 4)) + "\n" + some(0.2, "foot: " + mm(20, smaller_mm_ + 21));
         has_style_ = kind == "edge" || kind == "rod";
-        return text + some(0.3, "nodus height: " + mm(1, std::max(1.1, smaller_mm_ / 2))) + some(0.4, "thickness: " + mm(0.5, 0.1 * smaller_mm_));
+        return text + some(0.3, "nodus height: " + mm(1, std::max(1.1, smaller_mm_ / 2))) +
+               some(0.4, "thickness: " + mm(0.5, 0.1 * smaller_mm_));
     }
     std::string hours() {
-        time_ = one_of(std::array{"sun", "zone", "sun", "zone", "clock", "since sunrise", "since sunset", "hours left", "unequal"});
+        time_ = one_of(std::array{"sun", "zone", "sun", "zone", "clock", "since sunrise", "since sunset", "hours left",
+                                  "unequal"});
         std::string text = "hours:\n  time: " + time_ + "\n";
         text += some(0.15, fmt::format("from: {}:00", whole(0, 23)));
         text += some(0.15, fmt::format("to: {}:30", whole(0, 23)));
-        text += some(0.7, "divide: " + one_of(std::array{"60 min", "30 min", "15 min", "10 min", "5 min", "2 min", "1 min"}));
+        text += some(0.7, "divide: " +
+                              one_of(std::array{"60 min", "30 min", "15 min", "10 min", "5 min", "2 min", "1 min"}));
         text += some(0.6, "numerals: " + one_of(std::array{"roman", "roman iiii", "arabic"}));
         text += some(0.3, "count: 24");
         text += some(0.4, "stand: " + one_of(std::array{"along border", "upright"}));
@@ -135,23 +154,38 @@ class RandomDesign {
         for (const char* time : {"sun", "clock", "since sunrise", "since sunset", "hours left", "unequal"})
             if (time_ != time)
                 text += some(0.3, std::string{time} + ": yes");
-        return text + some(0.4, "azimuths: each 30°") + some(0.4, "noon at: [{name: Far Haven, longitude: 30° E}, {name: Old Quay, longitude: 77° 30' W}]");
+        return text + some(0.4, "azimuths: each 30°") +
+               some(0.4, "noon at: [{name: Far Haven, longitude: 30° E}, {name: Old Quay, longitude: 77° 30' W}]");
     }
     std::string dates() {
-        return "dates:\n  solstices: " + one_of(std::array{"yes", "no"}) + "\n" + some(0.2, "equinoxes: no") + some(0.3, "signs: yes") + some(0.3, "months: yes") +
+        return "dates:\n  solstices: " + one_of(std::array{"yes", "no"}) + "\n" + some(0.2, "equinoxes: no") +
+               some(0.3, "signs: yes") + some(0.3, "months: yes") +
                some(0.3, "days: [29 February, {on: 14 June, label: The fair}, 21 June]") + some(0.2, "labels: no");
     }
     std::string lettering() {
-        return "lettering:\n  place line: " + one_of(std::array{"yes", "no", "Long ago and far away, by the old mill"}) + "\n" +
-               some(0.4, "motto: " + one_of(std::array{"Lux umbra Dei", "Ὥρα πάντα φέρει", "I", "A very long motto that winds on and on about the hours and the shade and never comes to its end"})) +
+        return "lettering:\n  place line: " +
+               one_of(std::array{"yes", "no", "Long ago and far away, by the old mill"}) + "\n" +
+               some(0.4, "motto: " + one_of(std::array{"Lux umbra Dei", "Ὥρα πάντα φέρει", "I",
+                                                       "A very long motto that winds on and on about the hours and the "
+                                                       "shade and never comes to its end"})) +
                some(0.2, "label height: " + mm(0.5, smaller_mm_ / 12));
     }
-    std::string cutting() { return "cutting:\n  least gap: " + mm(0.05, 20) + "\n" + some(0.3, "line width: " + mm(0.05, std::min(10.0, 0.1 * smaller_mm_))); }
-    std::string print() {
-        return "print:\n  paper: " + one_of(std::array{"A4", "A3", "A0", "Letter", "Tabloid", "A6", "roll 610 mm", "B5"}) + "\n" + some(0.2, "margin: " + mm(1, 50)) +
-               some(0.2, "overlap: " + mm(1, 100)) + some(0.2, "own size: no");
+    std::string cutting() {
+        return "cutting:\n  least gap: " + mm(0.05, 20) + "\n" +
+               some(0.3, "line width: " + mm(0.05, std::min(10.0, 0.1 * smaller_mm_)));
     }
-    std::string years() { return std::string{} + (chance(0.2) ? "years: 1901 to 1904\n" : chance(0.2) ? "years: 2093 to 2096\n" : "") + (chance(0.3) ? "units: inch\n" : ""); }
+    std::string print() {
+        return "print:\n  paper: " +
+               one_of(std::array{"A4", "A3", "A0", "Letter", "Tabloid", "A6", "roll 610 mm", "B5"}) + "\n" +
+               some(0.2, "margin: " + mm(1, 50)) + some(0.2, "overlap: " + mm(1, 100)) + some(0.2, "own size: no");
+    }
+    std::string years() {
+        return std::string{} +
+               (chance(0.2)   ? "years: 1901 to 1904\n"
+                : chance(0.2) ? "years: 2093 to 2096\n"
+                              : "") +
+               (chance(0.3) ? "units: inch\n" : "");
+    }
 
     std::mt19937 random_;
     double smaller_mm_ = 0;
@@ -172,10 +206,12 @@ bool sun_comes_there(const FacePlan& plan, const layout::Face& face, PlatePoint 
     const GnomonEdges edges{frame, face.delineation.style, plan.dial.site.latitude, plan.dial.gnomon_thickness_mm};
     for (const Edge edge : {Edge::left, Edge::right}) {
         const PlatePoint nodus = edges.shift(edge);
-        const Eigen::Vector3d towards = (nodus.u_mm - p.u_mm) * frame.u + (nodus.v_mm - p.v_mm) * frame.v + face.placement.nodus_height_mm * frame.n;
+        const Eigen::Vector3d towards = (nodus.u_mm - p.u_mm) * frame.u + (nodus.v_mm - p.v_mm) * frame.v +
+                                        face.placement.nodus_height_mm * frame.n;
         const SiteDirection sun{towards.normalized()};
         const SkyPlace sky = to_sky(sun, plan.dial.site.latitude);
-        const bool in_season = abs(sky.declination) <= std::max(abs(year.at(year.june_solstice_day()).declination), year.obliquity()) + slack;
+        const bool in_season = abs(sky.declination) <=
+                               std::max(abs(year.at(year.june_solstice_day()).declination), year.obliquity()) + slack;
         if (in_season && plan.dial.skyline.clearance(sun) > -slack.in_radians())
             return true;
     }
@@ -189,8 +225,9 @@ void check_lines(const Commission& commission) {
         const FacePlan& plan = commission.plans[i];
         const layout::Outline field = layout::Rings::of(plan.spec).numerals;
         for (const layout::DrawnLine& line : face.lines) {
-            const bool of_style = (line.family == Family::hour && line.set == 0 && plan.dial.hours.extent == HourExtent::style) ||
-                                  (line.family == Family::place_noon && plan.dial.hours.extent == HourExtent::style);
+            const bool of_style =
+                (line.family == Family::hour && line.set == 0 && plan.dial.hours.extent == HourExtent::style) ||
+                (line.family == Family::place_noon && plan.dial.hours.extent == HourExtent::style);
             INFO("line " << line.label);
             REQUIRE(line.points.size() >= 2);
             for (const PlatePoint& p : line.points) {

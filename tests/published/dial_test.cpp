@@ -13,7 +13,8 @@ using Catch::Matchers::WithinAbs;
 namespace {
 
 double shadow_of_nodus(const published::Case& c, const std::string& name) {
-    const Attitude attitude{Angle::degrees(c.number("normal_azimuth_deg")), Angle::degrees(c.number("normal_altitude_deg"))};
+    const Attitude attitude{Angle::degrees(c.number("normal_azimuth_deg")),
+                            Angle::degrees(c.number("normal_altitude_deg"))};
     const Plane plane{frame_of(attitude), c.number("nodus_height")};
     const SkyPlace sun{Angle::degrees(c.number("hour_angle_deg")), Angle::degrees(c.number("declination_deg"))};
     const auto shadow = plane.shadow_of_nodus(to_site(sun, Angle::degrees(c.number("latitude_deg"))));
@@ -21,8 +22,10 @@ double shadow_of_nodus(const published::Case& c, const std::string& name) {
 }
 
 double style(const published::Case& c, const std::string& name) {
-    const Attitude attitude{Angle::degrees(c.number("normal_azimuth_deg")), Angle::degrees(c.number("normal_altitude_deg"))};
-    const Style found = style_of(frame_of(attitude), c.number("nodus_height"), Angle::degrees(c.number("latitude_deg")));
+    const Attitude attitude{Angle::degrees(c.number("normal_azimuth_deg")),
+                            Angle::degrees(c.number("normal_altitude_deg"))};
+    const Style found =
+        style_of(frame_of(attitude), c.number("nodus_height"), Angle::degrees(c.number("latitude_deg")));
     if (name == "height_deg")
         return found.height.in_degrees();
     return name == "centre_u" ? found.centre.value().u_mm : found.centre.value().v_mm;

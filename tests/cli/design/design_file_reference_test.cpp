@@ -97,8 +97,8 @@ Sections design_around(const Row& row) {
     if (row.section == "hours" && key == "rise and set")
         design["hours"] = {{"time", "since sunrise"}};
     if (row.section == "also: noon at")
-        design["also"]["noon at"] =
-            key == "name" ? "[{longitude: 5° E, name: " + row.example + "}]" : "[{name: x, longitude: " + row.example + "}]";
+        design["also"]["noon at"] = key == "name" ? "[{longitude: 5° E, name: " + row.example + "}]"
+                                                  : "[{name: x, longitude: " + row.example + "}]";
     else if (row.section == "dates: days")
         design["dates"]["days"] =
             key == "on" ? "[{on: " + row.example + "}]" : "[{on: 14 June, label: " + row.example + "}]";

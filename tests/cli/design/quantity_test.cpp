@@ -211,7 +211,8 @@ TEST_CASE("hours, minutes, years, counts, yes and no", "[cli]") {
     const auto on = [](HourTime time) { return [time](std::string_view text) { return bool{hour_on(time, text)}; }; };
     CHECK(on(HourTime::clock)("8 pm"));
     CHECK(on(HourTime::zone)("noon"));
-    for (const HourTime time : {HourTime::since_sunrise, HourTime::since_sunset, HourTime::to_sunset, HourTime::unequal}) {
+    for (const HourTime time :
+         {HourTime::since_sunrise, HourTime::since_sunset, HourTime::to_sunset, HourTime::unequal}) {
         CHECK_FALSE(on(time)("8 am"));
         CHECK_FALSE(on(time)("noon"));
         CHECK(on(time)(" 0 "));

@@ -260,12 +260,13 @@ TEST_CASE("hours that count from the Sun's rising and setting", "[cli]") {
 }
 
 TEST_CASE("what is drawn beside the hours of the ring", "[cli]") {
-    const Design design = good(k_short + "hours: {curves: june to december}\n"
-                                         "also:\n  unequal: 1 to 11\n  clock: 9 am-3 pm\n  zone: noon\n  hours left: yes\n"
-                                         "  since sunset: no\n  since sunrise: 3\n"
-                                         "  altitudes: [5° 30', 45]\n  azimuths: [S 30° E, 210°]\n"
-                                         "  noon at:\n    - {name: Port Amber, longitude: 12° 29' E}\n"
-                                         "    - {name: Westholm, longitude: -70.5}\n");
+    const Design design =
+        good(k_short + "hours: {curves: june to december}\n"
+                       "also:\n  unequal: 1 to 11\n  clock: 9 am-3 pm\n  zone: noon\n  hours left: yes\n"
+                       "  since sunset: no\n  since sunrise: 3\n"
+                       "  altitudes: [5° 30', 45]\n  azimuths: [S 30° E, 210°]\n"
+                       "  noon at:\n    - {name: Port Amber, longitude: 12° 29' E}\n"
+                       "    - {name: Westholm, longitude: -70.5}\n");
     const std::vector<MoreHours>& more = design.also.hours;
     REQUIRE(more.size() == 5);
     CHECK(more[0].time == HourTime::unequal);

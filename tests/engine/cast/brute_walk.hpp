@@ -60,7 +60,8 @@ class BruteWalk {
         double most = 0.0;
         for (const PlatePolyline& piece : pieces)
             for (std::size_t k = 2; k + 1 < piece.size(); ++k) {
-                const PlatePoint middle{(piece[k - 1].u_mm + piece[k].u_mm) / 2, (piece[k - 1].v_mm + piece[k].v_mm) / 2};
+                const PlatePoint middle{(piece[k - 1].u_mm + piece[k].u_mm) / 2,
+                                        (piece[k - 1].v_mm + piece[k].v_mm) / 2};
                 most = std::max(most, distance_mm(middle, walk_));
             }
         return most;

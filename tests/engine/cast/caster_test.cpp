@@ -12,7 +12,8 @@ namespace {
 
 constexpr double k_nodus_mm = 100;
 
-Caster<Plane> caster_at(Angle latitude, const Attitude& attitude, double thickness_mm = 0.0, const Skyline& skyline = {}) {
+Caster<Plane> caster_at(Angle latitude, const Attitude& attitude, double thickness_mm = 0.0,
+                        const Skyline& skyline = {}) {
     const Plane plane{frame_of(attitude), k_nodus_mm};
     const Style style = style_of(plane.frame(), k_nodus_mm, latitude);
     return {latitude, plane, GnomonEdges{plane.frame(), style, latitude, thickness_mm}, skyline};

@@ -70,7 +70,8 @@ void require_whole(const Dial& dial, const SunPath& path, const PlateBox& window
     const BruteWalk fine{dial.caster, path, window, path.steps * 20};
     // Behind hills the tracer looks four times a step (trace.hpp); elsewhere a stretch of any length is found.
     const bool flat = dial.caster.skyline().flat();
-    const double missed = (flat ? fine : BruteWalk{dial.caster, path, window, path.steps * 4}).farthest_sample_from(pieces);
+    const double missed =
+        (flat ? fine : BruteWalk{dial.caster, path, window, path.steps * 4}).farthest_sample_from(pieces);
     REQUIRE(missed < 0.01);
     const double astray = fine.farthest_chord_of(pieces);
     REQUIRE(astray < 0.01);
@@ -86,7 +87,8 @@ TEST_CASE("Hour lines of a style lie on the homogeneous form, on the lit half, a
         const RandomPlate plate = random.plate();
         const double thickness_mm = random.pick(2) == 0 ? 0.0 : 8.0;
         const Dial dial{plate.latitude, plate.attitude, thickness_mm};
-        const Angle hour = random.pick(2) == 0 ? Angle::minutes_of_time(5 * random.pick(288) - 720) : random.degrees(-180, 180);
+        const Angle hour =
+            random.pick(2) == 0 ? Angle::minutes_of_time(5 * random.pick(288) - 720) : random.degrees(-180, 180);
         const PlateBox window = window_of(random);
         INFO(told(k_seed, i, plate) << ", hour angle " << hour.in_degrees());
         if (!dial.caster.ever_lit(hour, {Angle::degrees(-23.44), Angle::degrees(23.44)}))
@@ -216,8 +218,10 @@ TEST_CASE("The noon gap parts every date line, the equinox's too", "[engine][cas
 
 TEST_CASE("A hill hides its part of a date line", "[engine][cast]") {
     // A hill 40° high from azimuth 170° to 190°; the equinox Sun at 50° N stands 40° high at noon.
-    const Skyline hill{{{Angle::degrees(169), Angle{}}, {Angle::degrees(170), Angle::degrees(60)},
-                        {Angle::degrees(190), Angle::degrees(60)}, {Angle::degrees(191), Angle{}}}};
+    const Skyline hill{{{Angle::degrees(169), Angle{}},
+                        {Angle::degrees(170), Angle::degrees(60)},
+                        {Angle::degrees(190), Angle::degrees(60)},
+                        {Angle::degrees(191), Angle{}}}};
     const Dial dial{Angle::degrees(50), {}, 0.0, hill};
     for (const double degrees : {0.0, 5.0}) {
         const auto pieces = trace(dial.caster, declination_path(Angle::degrees(degrees)), {-200, -200, 200, 300});
@@ -225,7 +229,8 @@ TEST_CASE("A hill hides its part of a date line", "[engine][cast]") {
         REQUIRE(pieces.size() == 2);
         const PlatePoint before = pieces[0].back(), after = pieces[1].front();
         const SiteDirection last_seen{sun_of(dial, before)};
-        CHECK_THAT(last_seen.altitude().in_degrees(), WithinAbs(hill.altitude_at(last_seen.azimuth()).in_degrees(), 1e-6));
+        CHECK_THAT(last_seen.altitude().in_degrees(),
+                   WithinAbs(hill.altitude_at(last_seen.azimuth()).in_degrees(), 1e-6));
         CHECK_THAT(before.u_mm, WithinAbs(-after.u_mm, 1e-6));
     }
 }

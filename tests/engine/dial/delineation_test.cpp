@@ -92,8 +92,9 @@ TEST_CASE("A zone's lines are the site's, shifted by the longitude", "[engine][d
         const Angle hour = Angle::hours(-12 + 0.5 * i);
         const double time = time_of(HourTime::zone, hour, plan.site, plan.zone_meridian);
         CHECK((time >= 0 && time < 24));
-        CHECK_THAT((hour_angle_of(HourTime::zone, time, plan.site, plan.zone_meridian) - hour).signed_turn().in_degrees(),
-                   WithinAbs(0, 1e-10));
+        CHECK_THAT(
+            (hour_angle_of(HourTime::zone, time, plan.site, plan.zone_meridian) - hour).signed_turn().in_degrees(),
+            WithinAbs(0, 1e-10));
     }
 }
 
@@ -163,19 +164,24 @@ TEST_CASE("A lit hour whose line misses the plate is not called unlit", "[engine
 TEST_CASE("Dates that the Sun never shows are named", "[engine][dial]") {
     const auto dated = [](const Attitude& attitude) {
         DialPlan plan = plan_at(54, -2, attitude);
-        plan.dates.lines = {{"June", Angle::degrees(23.44)}, {"equinox", Angle{}}, {"December", Angle::degrees(-23.44)}};
+        plan.dates.lines = {
+            {"June", Angle::degrees(23.44)}, {"equinox", Angle{}}, {"December", Angle::degrees(-23.44)}};
         return delineate(plan, mean_year(), k_window);
     };
     CHECK(dated({Angle::degrees(180), Angle{}}).unlit_dates.empty());
-    CHECK(dated(equatorial_attitude(Angle::degrees(54), true)).unlit_dates == std::vector<std::string>{"equinox", "December"});
-    CHECK(dated(equatorial_attitude(Angle::degrees(54), false)).unlit_dates == std::vector<std::string>{"June", "equinox"});
+    CHECK(dated(equatorial_attitude(Angle::degrees(54), true)).unlit_dates ==
+          std::vector<std::string>{"equinox", "December"});
+    CHECK(dated(equatorial_attitude(Angle::degrees(54), false)).unlit_dates ==
+          std::vector<std::string>{"June", "equinox"});
     const Delineation north = dated({Angle{}, Angle{}});
     CHECK(north.unlit_dates == std::vector<std::string>{"equinox", "December"});
 }
 
 TEST_CASE("An equatorial dial's lit hours turn with its face", "[engine][dial]") {
-    const auto summer = times_of(delineate(plan_at(54, -2, equatorial_attitude(Angle::degrees(54), true)), mean_year(), k_window));
-    const auto winter = times_of(delineate(plan_at(54, -2, equatorial_attitude(Angle::degrees(54), false)), mean_year(), k_window));
+    const auto summer =
+        times_of(delineate(plan_at(54, -2, equatorial_attitude(Angle::degrees(54), true)), mean_year(), k_window));
+    const auto winter =
+        times_of(delineate(plan_at(54, -2, equatorial_attitude(Angle::degrees(54), false)), mean_year(), k_window));
     CHECK((summer.front() == 4 && summer.back() == 20));
     CHECK((winter.front() >= 6 && winter.back() <= 18));
 }
@@ -212,7 +218,8 @@ TEST_CASE("A dial reads the line on which its shadow falls", "[engine][dial]") {
         const MeanYear::Season season = mean_year().at(day);
         const SkyPlace sun{random.degrees(-75, 75), season.declination};
         CAPTURE(k_seed, i, day);
-        REQUIRE_THAT(*reading_of(plan, plan.hours.time, mean_year(), sun, day), WithinAbs(12 + sun.hour_angle.in_hours(), 1e-9));
+        REQUIRE_THAT(*reading_of(plan, plan.hours.time, mean_year(), sun, day),
+                     WithinAbs(12 + sun.hour_angle.in_hours(), 1e-9));
         plan.hours.time = HourTime::zone;
         const double zone_time = 12 + (sun.hour_angle - plan.site.longitude + plan.zone_meridian).in_hours();
         REQUIRE_THAT(*reading_of(plan, plan.hours.time, mean_year(), sun, day), WithinAbs(zone_time, 1e-9));
@@ -239,12 +246,13 @@ TEST_CASE("The clock's reading lies on the traced curve", "[engine][dial]") {
         if (!shadow || !k_window.contains(shadow->point))
             continue;
         ++compared;
-        const Angle mean = hour_angle_of(HourTime::clock, *reading_of(plan, plan.hours.time, mean_year(), sun, day), plan.site, plan.zone_meridian);
+        const Angle mean = hour_angle_of(HourTime::clock, *reading_of(plan, plan.hours.time, mean_year(), sun, day),
+                                         plan.site, plan.zone_meridian);
         const double june = mean_year().june_solstice_day(), december = mean_year().december_solstice_day();
         const double length = mean_year().length_days();
-        const SunPath half = day < june        ? mean_time_path(mean, mean_year(), december - length, june)
-                             : day < december  ? mean_time_path(mean, mean_year(), june, december)
-                                               : mean_time_path(mean, mean_year(), december, june + length);
+        const SunPath half = day < june       ? mean_time_path(mean, mean_year(), december - length, june)
+                             : day < december ? mean_time_path(mean, mean_year(), june, december)
+                                              : mean_time_path(mean, mean_year(), december, june + length);
         CAPTURE(k_seed, i, day);
         REQUIRE(test::distance_mm(shadow->point, trace(caster, half, k_window)) < 0.01);
     }
@@ -275,7 +283,8 @@ TEST_CASE("Poles and equator delineate without a number that is not one", "[engi
                     DialPlan plan = plan_at(latitude, 10, {Angle::degrees(azimuth), Angle::degrees(altitude)});
                     plan.gnomon_thickness_mm = 5;
                     plan.hours.time = time;
-                    plan.dates.lines = {{"June", Angle::degrees(23.44)}, {"equinox", Angle{}}, {"May", Angle::degrees(20)}};
+                    plan.dates.lines = {
+                        {"June", Angle::degrees(23.44)}, {"equinox", Angle{}}, {"May", Angle::degrees(20)}};
                     CAPTURE(latitude, altitude, azimuth, int(time));
                     for (const DialLine& line : delineate(plan, mean_year(), k_window).lines)
                         for (const PlatePolyline& piece : line.pieces)

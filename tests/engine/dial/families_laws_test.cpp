@@ -84,8 +84,11 @@ TEST_CASE("East and west change places in the mirror of the meridian", "[engine]
             return line;
         };
         Delineation dial = delineate(plan, mean_year(), k_window);
-        std::erase_if(dial.lines, [](const DialLine& line) { return line.family == Family::since_sunset; }); // mirrors to none here
-        require_image(dial, delineate(mirrored, mean_year(), k_window), renamed, [](PlatePoint p) { return PlatePoint{-p.u_mm, p.v_mm}; });
+        std::erase_if(dial.lines,
+                      [](const DialLine& line) { return line.family == Family::since_sunset; }); // mirrors to none here
+        require_image(dial, delineate(mirrored, mean_year(), k_window), renamed, [](PlatePoint p) {
+            return PlatePoint{-p.u_mm, p.v_mm};
+        });
     }
 }
 
@@ -106,9 +109,10 @@ TEST_CASE("North and south change places with the seasons in the mirror of the e
                 line.level = Angle::degrees(180) - line.level;
             return line;
         };
-        require_image(delineate(plan, mean_year(), k_window), delineate(mirrored, mean_year(), k_window), renamed, [level](PlatePoint p) {
-            return level ? PlatePoint{p.u_mm, -p.v_mm} : PlatePoint{-p.u_mm, p.v_mm};
-        });
+        require_image(delineate(plan, mean_year(), k_window), delineate(mirrored, mean_year(), k_window), renamed,
+                      [level](PlatePoint p) {
+                          return level ? PlatePoint{p.u_mm, -p.v_mm} : PlatePoint{-p.u_mm, p.v_mm};
+                      });
     }
 }
 
@@ -121,14 +125,16 @@ TEST_CASE("The two faces of a slab carry the two halves of the same lines", "[en
         front.gnomon_thickness_mm = 0;
         front.horizon = {};
         DialPlan back = front;
-        back.attitude = {(front.attitude.normal_azimuth + Angle::degrees(180)).positive_turn(), -front.attitude.normal_altitude};
+        back.attitude = {(front.attitude.normal_azimuth + Angle::degrees(180)).positive_turn(),
+                         -front.attitude.normal_altitude};
         INFO(told(k_seed, i, front));
         const Delineation a = delineate(front, mean_year(), k_window), b = delineate(back, mean_year(), k_window);
         // The back's nodus stands as far behind the slab as the front's before it: a straight line of the front goes on
         // there after half a turn about the foot.
         for (const DialLine& line : a.lines) {
             const DialLine* other = line_named(b, line);
-            const bool straight = line.family != Family::altitude && line.family != Family::unequal_hour && line.family != Family::date;
+            const bool straight =
+                line.family != Family::altitude && line.family != Family::unequal_hour && line.family != Family::date;
             if (!other || !straight || length_mm(line.pieces[0]) < 1 || length_mm(other->pieces[0]) < 1)
                 continue;
             INFO("family " << int(line.family) << ", time " << line.time_h << ", level " << line.level.in_degrees());
@@ -143,7 +149,8 @@ TEST_CASE("The two faces of a slab carry the two halves of the same lines", "[en
             const SkyPlace sun{random.degrees(-180, 180), random.degrees(-23.4, 23.4)};
             const bool seen = to_site(sun, front.site.latitude).enu.z() > 1e-9;
             if (seen && std::abs(to_site(sun, front.site.latitude).enu.dot(a.frame.n)) > 1e-9)
-                REQUIRE(caster_of(front).cast(sun, Light::seen).has_value() != caster_of(back).cast(sun, Light::seen).has_value());
+                REQUIRE(caster_of(front).cast(sun, Light::seen).has_value() !=
+                        caster_of(back).cast(sun, Light::seen).has_value());
         }
     }
     CHECK(on_both > 200);
@@ -165,7 +172,8 @@ TEST_CASE("A plate is the level dial of the place where it would lie level", "[e
         // The same moments on both: apparent time of the plate's own meridian.
         plan.hours.time = level.hours.time = HourTime::zone;
         plan.zone_meridian = level.zone_meridian = plan.site.longitude;
-        const Delineation here = delineate(plan, mean_year(), k_window), there = delineate(level, mean_year(), k_window);
+        const Delineation here = delineate(plan, mean_year(), k_window),
+                          there = delineate(level, mean_year(), k_window);
         // v of the level plate is north there: the pole's part in the plate.
         const Eigen::Vector3d north = north_pole(plan.site.latitude).enu;
         if (std::hypot(north.dot(frame.u), north.dot(frame.v)) < 1e-6)
@@ -175,17 +183,20 @@ TEST_CASE("A plate is the level dial of the place where it would lie level", "[e
             return PlatePoint{p.u_mm * cos(turn) + p.v_mm * sin(turn), p.v_mm * cos(turn) - p.u_mm * sin(turn)};
         };
         REQUIRE_THAT(here.style.height.in_degrees(), WithinAbs(there.style.height.in_degrees(), 1e-6));
-        if (here.style.centre && there.style.centre && std::hypot(here.style.centre->u_mm, here.style.centre->v_mm) < 1e4) {
+        if (here.style.centre && there.style.centre &&
+            std::hypot(here.style.centre->u_mm, here.style.centre->v_mm) < 1e4) {
             const PlatePoint centre = turned(*there.style.centre);
             REQUIRE(std::hypot(centre.u_mm - here.style.centre->u_mm, centre.v_mm - here.style.centre->v_mm) < 1e-5);
         }
         for (const DialLine& line : here.lines)
-            if (const DialLine* other = line_named(there, line); other && length_mm(line.pieces[0]) > 1 && length_mm(other->pieces[0]) > 1) {
+            if (const DialLine* other = line_named(there, line);
+                other && length_mm(line.pieces[0]) > 1 && length_mm(other->pieces[0]) > 1) {
                 ++compared;
                 INFO("hour " << line.time_h);
                 // Where the style is parallel to the plate its lines run both ways, told by whichever pole is up at the site.
                 const Angle apart = *line.direction - *other->direction - turn;
-                REQUIRE_THAT(here.style.centre ? apart.signed_turn().in_degrees() : 90 * sin(apart), WithinAbs(0, 1e-6));
+                REQUIRE_THAT(here.style.centre ? apart.signed_turn().in_degrees() : 90 * sin(apart),
+                             WithinAbs(0, 1e-6));
                 for (const PlatePoint p : other->pieces[0])
                     REQUIRE(off_line_mm(turned(p), line.pieces[0]) < 1e-4);
             }

@@ -65,17 +65,22 @@ double astray(const DialPlan& plan, const DialLine& line, const SkyPlace& sun) {
 
 /// The least of `astray` over the gnomon's edges that may have cast the point, in mm on the plate; 1e9 where no Sun that
 /// counts could have cast it.
-double astray_mm(const DialPlan& plan, const Caster<Plane>& caster, const Delineation& dial, const DialLine& line, PlatePoint p) {
+double astray_mm(const DialPlan& plan, const Caster<Plane>& caster, const Delineation& dial, const DialLine& line,
+                 PlatePoint p) {
     double least = 1e9;
     for (const Edge edge : {Edge::left, Edge::right}) {
         const SiteDirection sun{sun_above(plan, dial.frame, p, caster.edges().shift(edge))};
         const SkyPlace sky = to_sky(sun, plan.site.latitude);
-        const bool of_style = line.family == Family::hour || line.family == Family::place_noon; // runs on beyond the Sun's own
-        const bool counts = of_style || (sun.enu.z() > -1e-8 && abs(sky.declination) < dial.season.greatest + Angle::radians(1e-8));
+        const bool of_style =
+            line.family == Family::hour || line.family == Family::place_noon; // runs on beyond the Sun's own
+        const bool counts =
+            of_style || (sun.enu.z() > -1e-8 && abs(sky.declination) < dial.season.greatest + Angle::radians(1e-8));
         const Angle hour = of_style ? line.hour_angle : sky.hour_angle;
         const PlatePoint right = caster.edges().shift(Edge::right);
-        const double between = to_site({hour, Angle{}}, plan.site.latitude).enu.dot(right.u_mm * dial.frame.u + right.v_mm * dial.frame.v);
-        const double above_top = cos(hour - dial.style.substyle_hour_angle); // the edges change places 6 h from the substyle's hour
+        const double between =
+            to_site({hour, Angle{}}, plan.site.latitude).enu.dot(right.u_mm * dial.frame.u + right.v_mm * dial.frame.v);
+        const double above_top =
+            cos(hour - dial.style.substyle_hour_angle); // the edges change places 6 h from the substyle's hour
         const bool at_a_change = std::abs(between) < 1e-6 || std::abs(above_top) < 1e-6;
         if (!counts || (caster.edges().casting(hour) != edge && !at_a_change))
             continue;
@@ -88,7 +93,8 @@ double astray_mm(const DialPlan& plan, const Caster<Plane>& caster, const Deline
 /// Half of the day arc by halving the Sun's way from noon to midnight; nothing where it does not cross the horizon.
 std::optional<double> setting_of(const DialPlan& plan, double declination) {
     const auto height = [&](double hour_angle) {
-        return altitude_of(plan.site.latitude, Angle::radians(hour_angle), Angle::radians(declination)) - plan.horizon.in_radians();
+        return altitude_of(plan.site.latitude, Angle::radians(hour_angle), Angle::radians(declination)) -
+               plan.horizon.in_radians();
     };
     double up = 0, down = Angle::degrees(180).in_radians();
     if (!(height(up) > 0) || !(height(down) < 0))
@@ -112,9 +118,11 @@ std::optional<SkyPlace> sun_of_hour(const DialPlan& plan, HourTime time, double 
 }
 
 /// How far the shadow of a Sun lies from the pieces of the line that it belongs to; 0 where it throws none that counts.
-double missed_mm(const DialPlan& plan, const Caster<Plane>& caster, const Delineation& dial, const DialLine& name, const SkyPlace& sun) {
+double missed_mm(const DialPlan& plan, const Caster<Plane>& caster, const Delineation& dial, const DialLine& name,
+                 const SkyPlace& sun) {
     const SiteDirection direction = to_site(sun, plan.site.latitude);
-    if (!(direction.enu.z() > 1e-7) || !(direction.enu.dot(dial.frame.n) > 1e-7) || abs(sun.declination) > dial.season.greatest - Angle::radians(1e-9))
+    if (!(direction.enu.z() > 1e-7) || !(direction.enu.dot(dial.frame.n) > 1e-7) ||
+        abs(sun.declination) > dial.season.greatest - Angle::radians(1e-9))
         return 0;
     const auto shadow = caster.cast(sun, Light::seen);
     constexpr double k_inner_mm = 399.999;
@@ -149,12 +157,14 @@ TEST_CASE("Every point of every family is the shadow of a Sun that keeps the def
                 }
         }
     }
-    for (const Family family : {Family::hour, Family::date, Family::since_sunrise, Family::since_sunset, Family::to_sunset,
-                                Family::unequal_hour, Family::altitude, Family::azimuth, Family::place_noon})
+    for (const Family family :
+         {Family::hour, Family::date, Family::since_sunrise, Family::since_sunset, Family::to_sunset,
+          Family::unequal_hour, Family::altitude, Family::azimuth, Family::place_noon})
         CHECK(drawn[std::size_t(family)] > 50);
 }
 
-TEST_CASE("Every Sun of an hour from rise or set, of an altitude or an azimuth has its shadow on the line", "[engine][dial]") {
+TEST_CASE("Every Sun of an hour from rise or set, of an altitude or an azimuth has its shadow on the line",
+          "[engine][dial]") {
     constexpr int k_seed = 602;
     RandomPlates random{k_seed};
     const double obliquity = mean_year().obliquity().in_radians();
@@ -169,9 +179,11 @@ TEST_CASE("Every Sun of an hour from rise or set, of an altitude or an azimuth h
             for (int k = 0; k < (time == HourTime::unequal ? 12 : 24); ++k)
                 for (int j = 0; j < 40; ++j) {
                     // Evenly, and crowded to the ends of the season and of the range in which the Sun rises.
-                    const double limit = std::min(obliquity, (Angle::degrees(90) - abs(plan.site.latitude)).in_radians());
+                    const double limit =
+                        std::min(obliquity, (Angle::degrees(90) - abs(plan.site.latitude)).in_radians());
                     const double near_end = std::pow(10.0, random.number(-4, -1));
-                    const double declination = j < 20 ? random.number(-obliquity, obliquity) : (j % 2 == 0 ? limit - near_end : near_end - limit);
+                    const double declination = j < 20 ? random.number(-obliquity, obliquity)
+                                                      : (j % 2 == 0 ? limit - near_end : near_end - limit);
                     const auto sun = sun_of_hour(plan, time, k, declination);
                     if (!sun)
                         continue;
@@ -179,7 +191,8 @@ TEST_CASE("Every Sun of an hour from rise or set, of an altitude or an azimuth h
                     name.family = family_of(time);
                     name.set = set;
                     name.time_h = k;
-                    INFO("family " << int(name.family) << ", hour " << k << ", declination " << sun->declination.in_degrees());
+                    INFO("family " << int(name.family) << ", hour " << k << ", declination "
+                                   << sun->declination.in_degrees());
                     REQUIRE(missed_mm(plan, caster, dial, name, *sun) < 0.01);
                 }
         }
@@ -189,9 +202,12 @@ TEST_CASE("Every Sun of an hour from rise or set, of an altitude or an azimuth h
                     DialLine name;
                     name.family = azimuths ? Family::azimuth : Family::altitude;
                     name.level = level;
-                    const Angle altitude = j % 2 == 0 ? random.degrees(0, 90) : Angle::degrees(std::pow(10.0, random.number(-4, 0)));
-                    const SiteDirection sun = azimuths ? direction_at(level, altitude) : direction_at(random.degrees(0, 360), level);
-                    INFO("azimuths: " << azimuths << ", level " << level.in_degrees() << ", altitude " << altitude.in_degrees());
+                    const Angle altitude =
+                        j % 2 == 0 ? random.degrees(0, 90) : Angle::degrees(std::pow(10.0, random.number(-4, 0)));
+                    const SiteDirection sun =
+                        azimuths ? direction_at(level, altitude) : direction_at(random.degrees(0, 360), level);
+                    INFO("azimuths: " << azimuths << ", level " << level.in_degrees() << ", altitude "
+                                      << altitude.in_degrees());
                     REQUIRE(missed_mm(plan, caster, dial, name, to_sky(sun, plan.site.latitude)) < 0.01);
                 }
     }
@@ -231,7 +247,8 @@ TEST_CASE("Each line in a thick gnomon's own plane has two sides, of every famil
     ask_for_every_family(plan);
     int found = 0;
     for (const DialLine& line : delineate(plan, mean_year(), k_window).lines)
-        if ((line.family == Family::hour && line.time_h == 12) || (line.family == Family::unequal_hour && line.time_h == 6) ||
+        if ((line.family == Family::hour && line.time_h == 12) ||
+            (line.family == Family::unequal_hour && line.time_h == 6) ||
             (line.family == Family::azimuth && line.level == Angle::degrees(180))) {
             ++found;
             CAPTURE(int(line.family));
@@ -254,7 +271,8 @@ TEST_CASE("Hours from a level horizon and azimuths are straight; from the seen r
         INFO(told(k_seed, i, plan));
         const auto dial = delineate(plan, mean_year(), k_window);
         for (const DialLine& line : dial.lines) {
-            const bool from_horizon = line.family == Family::since_sunrise || line.family == Family::since_sunset || line.family == Family::to_sunset;
+            const bool from_horizon = line.family == Family::since_sunrise || line.family == Family::since_sunset ||
+                                      line.family == Family::to_sunset;
             for (const PlatePolyline& piece : line.pieces)
                 if (line.family == Family::azimuth || (from_horizon && plan.horizon == Angle{}))
                     REQUIRE(piece.size() == 2);
@@ -272,8 +290,9 @@ TEST_CASE("On the equinox unequal hours, hours from rise and hours to set agree 
         const Angle latitude = Angle::degrees(degrees);
         for (int k = 0; k <= 12; ++k) {
             CAPTURE(degrees, k);
-            for (const SunPath& path : {rise_path(Angle::hours(k), latitude, season, {}), unequal_hour_path(k / 12.0, latitude, season, {}),
-                                        set_path(Angle::hours(12 - k), latitude, season, {})})
+            for (const SunPath& path :
+                 {rise_path(Angle::hours(k), latitude, season, {}), unequal_hour_path(k / 12.0, latitude, season, {}),
+                  set_path(Angle::hours(12 - k), latitude, season, {})})
                 CHECK_THAT(path.at(0)->hour_angle.in_hours(), WithinAbs(k - 6, 1e-12));
         }
     }
@@ -310,7 +329,8 @@ TEST_CASE("A reading is the line on which the shadow falls", "[engine][dial]") {
         if (!(to_site(sun, plan.site.latitude).enu.z() > 0))
             continue;
         INFO(told(k_seed, i, plan));
-        for (const HourTime time : {HourTime::since_sunrise, HourTime::since_sunset, HourTime::to_sunset, HourTime::unequal}) {
+        for (const HourTime time :
+             {HourTime::since_sunrise, HourTime::since_sunset, HourTime::to_sunset, HourTime::unequal}) {
             const auto reading = reading_of(plan, time, mean_year(), sun, 100);
             const bool rises = setting_of(plan, sun.declination.in_radians()).has_value();
             REQUIRE(reading.has_value() == rises);
@@ -337,7 +357,8 @@ TEST_CASE("Noon at a place 15° east is the site's XI, 15° west its I", "[engin
         for (const auto& [name, time_h] : {std::pair{"east", 11.0}, std::pair{"west", 13.0}}) {
             const auto of = [&](auto is) { return std::find_if(dial.lines.begin(), dial.lines.end(), is); };
             const auto noon = of([&, label = std::string{name}](const DialLine& line) { return line.label == label; });
-            const auto hour = of([&, at = time_h](const DialLine& line) { return line.family == Family::hour && line.time_h == at; });
+            const auto hour =
+                of([&, at = time_h](const DialLine& line) { return line.family == Family::hour && line.time_h == at; });
             REQUIRE((noon == dial.lines.end()) == (hour == dial.lines.end()));
             if (noon == dial.lines.end())
                 continue;
@@ -387,7 +408,8 @@ TEST_CASE("Azimuth lines run together in the foot of a plumb line from the nodus
 
 TEST_CASE("A meridian line's yearly curve holds the shadow of clock noon on every date", "[engine][dial]") {
     for (const double latitude : {52.0, -34.0, 10.0})
-        for (const Attitude& attitude : {Attitude{}, Attitude{Angle::degrees(latitude > 0 ? 180 : 0), Angle::degrees(12)}}) {
+        for (const Attitude& attitude :
+             {Attitude{}, Attitude{Angle::degrees(latitude > 0 ? 180 : 0), Angle::degrees(12)}}) {
             DialPlan plan;
             plan.site = {Angle::degrees(latitude), Angle::degrees(9.5)};
             plan.zone_meridian = Angle::degrees(15);
@@ -398,14 +420,16 @@ TEST_CASE("A meridian line's yearly curve holds the shadow of clock noon on ever
             clock.time = HourTime::clock;
             plan.more_hours = {clock};
             const Delineation dial = delineate(plan, mean_year(), {-1000, -1000, 1000, 1000});
-            const auto curve = std::find_if(dial.lines.begin(), dial.lines.end(), [](const DialLine& line) { return line.family == Family::clock_hour; });
+            const auto curve = std::find_if(dial.lines.begin(), dial.lines.end(),
+                                            [](const DialLine& line) { return line.family == Family::clock_hour; });
             REQUIRE(curve != dial.lines.end());
             const Caster<Plane> caster = caster_of(plan);
             int shadows = 0;
             for (int day = 0; day < 365; ++day) {
                 // Twelve by clocks an hour ahead of UT is 11h UT.
                 const MeanYear::Season season = mean_year().at(mean_year().day_of(mean_year().date_of(day), 11));
-                const SkyPlace sun{season.equation_of_time + plan.site.longitude - plan.zone_meridian, season.declination};
+                const SkyPlace sun{season.equation_of_time + plan.site.longitude - plan.zone_meridian,
+                                   season.declination};
                 CAPTURE(latitude, day);
                 if (const auto shadow = caster.cast(sun, Light::seen); shadow && std::abs(shadow->point.v_mm) < 1000) {
                     ++shadows;

@@ -22,16 +22,17 @@ inline std::string told(int seed, int i, const DialPlan& plan) {
     std::ostringstream text;
     text.precision(17);
     text << "seed " << seed << ", case " << i << ": latitude " << plan.site.latitude.in_degrees() << ", longitude "
-         << plan.site.longitude.in_degrees() << ", normal azimuth " << plan.attitude.normal_azimuth.in_degrees() << ", altitude "
-         << plan.attitude.normal_altitude.in_degrees() << ", thickness " << plan.gnomon_thickness_mm << ", horizon "
-         << plan.horizon.in_degrees();
+         << plan.site.longitude.in_degrees() << ", normal azimuth " << plan.attitude.normal_azimuth.in_degrees()
+         << ", altitude " << plan.attitude.normal_altitude.in_degrees() << ", thickness " << plan.gnomon_thickness_mm
+         << ", horizon " << plan.horizon.in_degrees();
     return text.str();
 }
 
 /// Every family at once, each set of hours in its own place of more_hours.
 inline void ask_for_every_family(DialPlan& plan) {
     plan.hours.time = HourTime::sun;
-    for (const HourTime time : {HourTime::since_sunrise, HourTime::since_sunset, HourTime::to_sunset, HourTime::unequal}) {
+    for (const HourTime time :
+         {HourTime::since_sunrise, HourTime::since_sunset, HourTime::to_sunset, HourTime::unequal}) {
         HourPlan hours;
         hours.time = time;
         plan.more_hours.push_back(hours);
@@ -57,7 +58,8 @@ inline DialPlan random_plan(RandomPlates& random) {
 
 /// The Sun whose shadow of the nodus falls on a point, by the ray from the point through the nodus.
 inline Eigen::Vector3d sun_above(const DialPlan& plan, const PlateFrame& frame, PlatePoint p, PlatePoint foot) {
-    return (plan.nodus_height_mm * frame.n - (p.u_mm - foot.u_mm) * frame.u - (p.v_mm - foot.v_mm) * frame.v).normalized();
+    return (plan.nodus_height_mm * frame.n - (p.u_mm - foot.u_mm) * frame.u - (p.v_mm - foot.v_mm) * frame.v)
+        .normalized();
 }
 
 /// How far a point lies from the infinite line through a piece's ends.
@@ -78,7 +80,8 @@ inline bool same_name(const DialLine& a, const DialLine& b) {
 }
 
 inline const DialLine* line_named(const Delineation& dial, const DialLine& name) {
-    const auto found = std::find_if(dial.lines.begin(), dial.lines.end(), [&](const DialLine& line) { return same_name(line, name); });
+    const auto found =
+        std::find_if(dial.lines.begin(), dial.lines.end(), [&](const DialLine& line) { return same_name(line, name); });
     return found == dial.lines.end() ? nullptr : &*found;
 }
 

@@ -7,8 +7,12 @@ using namespace dialwright;
 using Catch::Matchers::WithinAbs;
 
 namespace {
-Skyline::Mark mark(double azimuth, double altitude) { return {Angle::degrees(azimuth), Angle::degrees(altitude)}; }
-double altitude(const Skyline& skyline, double azimuth) { return skyline.altitude_at(Angle::degrees(azimuth)).in_degrees(); }
+Skyline::Mark mark(double azimuth, double altitude) {
+    return {Angle::degrees(azimuth), Angle::degrees(altitude)};
+}
+double altitude(const Skyline& skyline, double azimuth) {
+    return skyline.altitude_at(Angle::degrees(azimuth)).in_degrees();
+}
 } // namespace
 
 TEST_CASE("A skyline runs straight from mark to mark and round through north", "[engine][site]") {

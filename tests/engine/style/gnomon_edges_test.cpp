@@ -17,8 +17,9 @@ constexpr double k_nodus_mm = 100, k_thickness_mm = 8, k_reach_mm = 1e7;
 class Slab {
   public:
     Slab(Angle latitude, const Attitude& attitude)
-        : latitude_{latitude}, plane_{frame_of(attitude), k_nodus_mm}, style_{style_of(plane_.frame(), k_nodus_mm, latitude)},
-          edges_{plane_.frame(), style_, latitude, k_thickness_mm} {}
+        : latitude_{latitude}, plane_{frame_of(attitude), k_nodus_mm},
+          style_{style_of(plane_.frame(), k_nodus_mm, latitude)}, edges_{plane_.frame(), style_, latitude,
+                                                                         k_thickness_mm} {}
 
     [[nodiscard]] const Style& style() const { return style_; }
     [[nodiscard]] const GnomonEdges& edges() const { return edges_; }
@@ -127,7 +128,8 @@ TEST_CASE("At 6 h from the substyle the line starts on the side to which it runs
         if (style.height > Angle::degrees(89) || style.height < Angle::degrees(1e-3))
             continue;
         const GnomonEdges edges{frame, style, latitude, k_thickness_mm};
-        CAPTURE(k_seed, i, latitude.in_degrees(), attitude.normal_azimuth.in_degrees(), attitude.normal_altitude.in_degrees());
+        CAPTURE(k_seed, i, latitude.in_degrees(), attitude.normal_azimuth.in_degrees(),
+                attitude.normal_altitude.in_degrees());
         for (const double hours : {-6.0, 6.0}) {
             const Angle hour_angle = style.substyle_hour_angle + Angle::hours(hours);
             const auto direction = hour_line_direction(frame, style, latitude, hour_angle);

@@ -27,10 +27,14 @@ struct Dial {
 };
 
 /// Degrees between two directions.
-double apart(Angle a, Angle b) { return std::abs((a - b).signed_turn().in_degrees()); }
+double apart(Angle a, Angle b) {
+    return std::abs((a - b).signed_turn().in_degrees());
+}
 
 const Attitude k_level{};
-Attitude wall(Angle declination_west_of_south) { return {Angle::degrees(180) + declination_west_of_south, Angle{}}; }
+Attitude wall(Angle declination_west_of_south) {
+    return {Angle::degrees(180) + declination_west_of_south, Angle{}};
+}
 
 } // namespace
 
@@ -64,7 +68,8 @@ TEST_CASE("Declining walls by the classical formulas", "[engine][style][classica
         CAPTURE(k_seed, i, phi.in_degrees(), d.in_degrees(), hour_angle.in_degrees());
         const Dial dial{phi, wall(d)};
         // cot X = (cos d cot H + sin d sin φ)/cos φ; afternoon lines to the right of the plumb line
-        const Angle x = arc_tangent(cos(phi) * sin(hour_angle), cos(d) * cos(hour_angle) + sin(d) * sin(phi) * sin(hour_angle));
+        const Angle x =
+            arc_tangent(cos(phi) * sin(hour_angle), cos(d) * cos(hour_angle) + sin(d) * sin(phi) * sin(hour_angle));
         REQUIRE_THAT(apart(dial.line(hour_angle), Angle::degrees(180) - x), WithinAbs(0, 1e-9));
         // sin SH = cos d cos φ; tan SD = sin d cot φ; tan DL = tan d / sin φ
         REQUIRE_THAT(sin(dial.style.height), WithinAbs(cos(d) * cos(phi), 1e-14));
@@ -84,7 +89,8 @@ TEST_CASE("Equatorial plates: 15 degrees an hour", "[engine][style][classical]")
             REQUIRE(dial.style.centre);
             CHECK_THAT(std::hypot(dial.style.centre->u_mm, dial.style.centre->v_mm), WithinAbs(0, 1e-9));
             for (int minute = -1440; minute < 1440; minute += 5) {
-                const Angle step = dial.line(Angle::minutes_of_time(minute + 5)) - dial.line(Angle::minutes_of_time(minute));
+                const Angle step =
+                    dial.line(Angle::minutes_of_time(minute + 5)) - dial.line(Angle::minutes_of_time(minute));
                 const bool clockwise = (degrees > 0) == summer; // as its reader sees it
                 CHECK_THAT(step.signed_turn().in_degrees(), WithinAbs(clockwise ? 1.25 : -1.25, 1e-10));
             }
@@ -98,7 +104,8 @@ TEST_CASE("The style runs through centre and nodus along the Earth's axis", "[en
     for (int i = 0; i < 5000; ++i) {
         const auto [phi, attitude] = random.plate();
         const Dial dial{phi, attitude};
-        CAPTURE(k_seed, i, phi.in_degrees(), attitude.normal_azimuth.in_degrees(), attitude.normal_altitude.in_degrees());
+        CAPTURE(k_seed, i, phi.in_degrees(), attitude.normal_azimuth.in_degrees(),
+                attitude.normal_altitude.in_degrees());
         REQUIRE_THAT(std::abs(dial.style.towards_nodus.dot(north_pole(phi).enu)), WithinAbs(1, 1e-14));
         REQUIRE(dial.style.towards_nodus.dot(dial.frame.n) > -1e-12);
         REQUIRE((dial.style.height >= Angle{} && dial.style.height <= Angle::degrees(90)));
@@ -109,8 +116,8 @@ TEST_CASE("The style runs through centre and nodus along the Earth's axis", "[en
             REQUIRE(tan(dial.style.height) <= k_nodus_mm / k_centre_at_infinity_mm * 1.000001);
             continue;
         }
-        const Eigen::Vector3d rise = k_nodus_mm * dial.frame.n - dial.style.centre->u_mm * dial.frame.u -
-                                     dial.style.centre->v_mm * dial.frame.v;
+        const Eigen::Vector3d rise =
+            k_nodus_mm * dial.frame.n - dial.style.centre->u_mm * dial.frame.u - dial.style.centre->v_mm * dial.frame.v;
         REQUIRE((rise.normalized() - dial.style.towards_nodus).norm() < 1e-9);
     }
     CHECK(at_infinity > 100);
@@ -132,7 +139,8 @@ TEST_CASE("The substyle's hour is that of the Sun in the style's plane", "[engin
     }
 }
 
-TEST_CASE("The two faces of one slab carry the same half-lines, each lit when the other is not", "[engine][style][law]") {
+TEST_CASE("The two faces of one slab carry the same half-lines, each lit when the other is not",
+          "[engine][style][law]") {
     constexpr int k_seed = 205;
     test::RandomPlates random{k_seed};
     for (int i = 0; i < 5000; ++i) {
@@ -141,11 +149,13 @@ TEST_CASE("The two faces of one slab carry the same half-lines, each lit when th
         const Dial front_dial{phi, attitude}, back_dial{phi, back};
         const Angle hour_angle = random.degrees(-180, 180);
         const Eigen::Vector3d sun = to_site({hour_angle, random.degrees(-23.44, 23.44)}, phi).enu;
-        CAPTURE(k_seed, i, phi.in_degrees(), attitude.normal_azimuth.in_degrees(), attitude.normal_altitude.in_degrees());
+        CAPTURE(k_seed, i, phi.in_degrees(), attitude.normal_azimuth.in_degrees(),
+                attitude.normal_altitude.in_degrees());
         if (std::abs(sun.dot(front_dial.frame.n)) > 1e-12)
             REQUIRE((sun.dot(front_dial.frame.n) > 0) != (sun.dot(back_dial.frame.n) > 0));
         // A plate whose style is all but parallel to it counts the elevated pole's end as the outer one on both faces.
-        if (front_dial.style.height < Angle::degrees(1e-9) || !hour_line_direction(front_dial.frame, front_dial.style, phi, hour_angle))
+        if (front_dial.style.height < Angle::degrees(1e-9) ||
+            !hour_line_direction(front_dial.frame, front_dial.style, phi, hour_angle))
             continue;
         const auto in_space = [hour_angle](const Dial& dial) {
             const Angle line = dial.line(hour_angle);

@@ -15,7 +15,8 @@ std::optional<PlatePoint> shadow(Angle latitude, const Attitude& attitude, const
     return Plane{frame_of(attitude), 100}.shadow_of_nodus(to_site(sun, latitude));
 }
 
-void require_same(const std::optional<PlatePoint>& a, const std::optional<PlatePoint>& b, double u_sign, double v_sign) {
+void require_same(const std::optional<PlatePoint>& a, const std::optional<PlatePoint>& b, double u_sign,
+                  double v_sign) {
     REQUIRE(a.has_value() == b.has_value());
     if (!a)
         return;
@@ -52,7 +53,8 @@ TEST_CASE("North against south, with the seasons exchanged", "[engine][surface][
     for (int i = 0; i < 5000; ++i) {
         const auto [latitude, attitude] = random.plate();
         const SkyPlace sun{random.degrees(-180, 180), random.degrees(-23.44, 23.44)};
-        const Attitude mirrored{(Angle::degrees(180) - attitude.normal_azimuth).positive_turn(), attitude.normal_altitude};
+        const Attitude mirrored{(Angle::degrees(180) - attitude.normal_azimuth).positive_turn(),
+                                attitude.normal_altitude};
         const auto here = shadow(latitude, attitude, sun);
         const auto there = shadow(-latitude, mirrored, {sun.hour_angle, -sun.declination});
         CAPTURE(k_seed, i, latitude.in_degrees());
@@ -74,8 +76,8 @@ TEST_CASE("East against west, with morning and afternoon exchanged", "[engine][s
         CAPTURE(k_seed, i, latitude.in_degrees());
         if (std::abs(Plane{frame_of(attitude), 1}.light(to_site(sun, latitude))) < 1e-12)
             continue;
-        require_same(shadow(latitude, attitude, sun),
-                     shadow(latitude, mirrored, {-sun.hour_angle, sun.declination}), -1, 1);
+        require_same(shadow(latitude, attitude, sun), shadow(latitude, mirrored, {-sun.hour_angle, sun.declination}),
+                     -1, 1);
     }
 }
 
@@ -109,7 +111,8 @@ TEST_CASE("Equatorial date circles and polar hour lines", "[engine][surface][cla
     }
 }
 
-TEST_CASE("Direct east and west walls: hour lines parallel to the axis, h cot H apart", "[engine][surface][classical]") {
+TEST_CASE("Direct east and west walls: hour lines parallel to the axis, h cot H apart",
+          "[engine][surface][classical]") {
     constexpr int k_seed = 115;
     test::RandomPlates random{k_seed};
     for (int i = 0; i < 1000; ++i) {

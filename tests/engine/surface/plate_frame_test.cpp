@@ -36,7 +36,8 @@ TEST_CASE("The cardinal plates look where the conventions say", "[engine][surfac
     const PlateFrame south_wall = frame_of({Angle::degrees(180), Angle{}});
     CHECK((south_wall.u - Eigen::Vector3d(1, 0, 0)).norm() < 1e-15);
     CHECK((south_wall.v - Eigen::Vector3d(0, 0, 1)).norm() < 1e-15);
-    const PlateFrame east_wall = frame_of({Angle::degrees(90), Angle{}}); // its reader looks west: north is on the right
+    const PlateFrame east_wall =
+        frame_of({Angle::degrees(90), Angle{}}); // its reader looks west: north is on the right
     CHECK((east_wall.u - Eigen::Vector3d(0, 1, 0)).norm() < 1e-15);
     const PlateFrame reclining = frame_of({Angle::degrees(180), Angle::degrees(30)});
     CHECK(reclining.n.z() > 0);

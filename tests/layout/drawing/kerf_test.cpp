@@ -28,7 +28,8 @@ const Path& first(const Kerfed& made, std::size_t place = 0) {
 }
 
 bool has_arcs(const Path& path) {
-    return std::any_of(path.pieces.begin(), path.pieces.end(), [](const Piece& p) { return std::holds_alternative<ArcTo>(p); });
+    return std::any_of(path.pieces.begin(), path.pieces.end(),
+                       [](const Piece& p) { return std::holds_alternative<ArcTo>(p); });
 }
 
 /// The least and the greatest distance of the moved path from the first.
@@ -86,10 +87,14 @@ TEST_CASE("Nothing but closed outlines that are cut moves, and nothing at all wi
 
 TEST_CASE("Arcs in an outline stay arcs", "[layout]") {
     // A slot with round ends, and a plate with a bow in its side and a round notch.
-    const Path slot{{20, 10}, {LineTo{{40, 10}}, ArcTo{{40, 16}, {40, 13}, Angle::degrees(180)}, LineTo{{20, 16}},
-                               ArcTo{{20, 10}, {20, 13}, Angle::degrees(180)}}, true};
-    const Path notched{{0, 0}, {LineTo{{40, 0}}, ArcTo{{60, 0}, {50, 0}, Angle::degrees(-180)}, LineTo{{100, 0}},
-                                ArcTo{{100, 60}, {100, 30}, Angle::degrees(180)}, LineTo{{0, 60}}, LineTo{{0, 0}}}, true};
+    const Path slot{{20, 10},
+                    {LineTo{{40, 10}}, ArcTo{{40, 16}, {40, 13}, Angle::degrees(180)}, LineTo{{20, 16}},
+                     ArcTo{{20, 10}, {20, 13}, Angle::degrees(180)}},
+                    true};
+    const Path notched{{0, 0},
+                       {LineTo{{40, 0}}, ArcTo{{60, 0}, {50, 0}, Angle::degrees(-180)}, LineTo{{100, 0}},
+                        ArcTo{{100, 60}, {100, 30}, Angle::degrees(180)}, LineTo{{0, 60}}, LineTo{{0, 0}}},
+                       true};
     for (const Path& path : {slot, reversed(slot), notched, reversed(notched)}) {
         for (const double kerf_mm : {0.1, 1.0, 3.0}) {
             const Kerfed made = with_kerf(cut_out({path}), kerf_mm);
@@ -119,7 +124,8 @@ TEST_CASE("Whatever the outline, its moved path keeps half the kerf away", "[lay
         const Path star = polyline(corners, true);
         const double kerf_mm = kerf(random);
         const bool is_hole = round % 2 == 1;
-        const Kerfed made = with_kerf(is_hole ? cut_out({star, rectangle({-90, -90, 90, 90})}) : cut_out({star}), kerf_mm);
+        const Kerfed made =
+            with_kerf(is_hole ? cut_out({star, rectangle({-90, -90, 90, 90})}) : cut_out({star}), kerf_mm);
         const auto [least, greatest] = distances(star, first(made));
         CHECK_THAT(least, WithinAbs(kerf_mm / 2, 0.005));
         const double side = (is_hole ? -1 : 1) * (std::abs(area_of(first(made))) - std::abs(area_of(star)));
@@ -137,14 +143,37 @@ TEST_CASE("Curves become chords at the right distance", "[layout]") {
 TEST_CASE("A kerf that a part does not bear is said, with the part's name", "[layout]") {
     const Catch::Matchers::StdString::ContainsMatcher part = Catch::Contains("\"gnomon\"");
     CHECK_THROWS_WITH(with_kerf(cut_out({rectangle({0, 0, 50, 2})}), 2.5), part && Catch::Contains("wider than"));
-    CHECK_THROWS_WITH(with_kerf(cut_out({rectangle({0, 0, 50, 50}), circle({20, 20}, 1)}), 2.5), part && Catch::Contains("closes a hole"));
+    CHECK_THROWS_WITH(with_kerf(cut_out({rectangle({0, 0, 50, 50}), circle({20, 20}, 1)}), 2.5),
+                      part && Catch::Contains("closes a hole"));
     // A mouth of 1 mm into a chamber; a hole of two chambers with 1 mm between.
-    const Path mouth = polyline({{0, 0}, {50, 0}, {50, 50}, {25.5, 50}, {25.5, 40}, {40, 40}, {40, 10}, {10, 10}, {10, 40},
-                                 {24.5, 40}, {24.5, 50}, {0, 50}}, true);
+    const Path mouth = polyline({{0, 0},
+                                 {50, 0},
+                                 {50, 50},
+                                 {25.5, 50},
+                                 {25.5, 40},
+                                 {40, 40},
+                                 {40, 10},
+                                 {10, 10},
+                                 {10, 40},
+                                 {24.5, 40},
+                                 {24.5, 50},
+                                 {0, 50}},
+                                true);
     CHECK_THROWS_WITH(with_kerf(cut_out({mouth}), 2), part && Catch::Contains("gap"));
     CHECK_NOTHROW(with_kerf(cut_out({mouth}), 0.5));
-    const Path two = polyline({{5, 5}, {20, 5}, {20, 12}, {25, 12}, {25, 5}, {40, 5}, {40, 20}, {25, 20}, {25, 13}, {20, 13},
-                               {20, 20}, {5, 20}}, true);
+    const Path two = polyline({{5, 5},
+                               {20, 5},
+                               {20, 12},
+                               {25, 12},
+                               {25, 5},
+                               {40, 5},
+                               {40, 20},
+                               {25, 20},
+                               {25, 13},
+                               {20, 13},
+                               {20, 20},
+                               {5, 20}},
+                              true);
     CHECK_THROWS_WITH(with_kerf(cut_out({rectangle({0, 0, 50, 50}), two}), 1.5), part && Catch::Contains("narrowest"));
     CHECK_THROWS_AS(with_kerf(cut_out({mouth}), -0.1), std::invalid_argument);
     CHECK_THROWS_AS(with_kerf(cut_out({mouth}), std::numeric_limits<double>::quiet_NaN()), std::invalid_argument);

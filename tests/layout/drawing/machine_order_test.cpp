@@ -50,7 +50,8 @@ TEST_CASE("Marks come by process, contours from within", "[layout]") {
         if (mark.layer == Layer::cut)
             areas.push_back(std::abs(area_of(mark.paths.at(0))));
     }
-    CHECK(names == std::vector<std::string>{"line", "spot", "score", "bore", "two plates", "island", "two plates", "two plates"});
+    CHECK(names == std::vector<std::string>{"line", "spot", "score", "bore", "two plates", "island", "two plates",
+                                            "two plates"});
     CHECK_THAT(areas[0], WithinAbs(10000, 1e-6)); // the plate by itself
     CHECK_THAT(areas[1], WithinAbs(100, 1e-6));   // then from the island outward
     CHECK_THAT(areas[2], WithinAbs(900 * std::numbers::pi, 1e-6));
@@ -76,7 +77,8 @@ TEST_CASE("A path drawn twice is drawn once, whichever way it runs and wherever 
 }
 
 TEST_CASE("Lines that run along others lose what is there", "[layout]") {
-    Drawing drawing{"overlap", {engraved(polyline({{0, 0}, {100, 50}})), engraved(polyline({{120, 60}, {60, 30}, {60, 90}}))}};
+    Drawing drawing{"overlap",
+                    {engraved(polyline({{0, 0}, {100, 50}})), engraved(polyline({{120, 60}, {60, 30}, {60, 90}}))}};
     const MachineWork work = ready_for_machine(drawing);
     CHECK(work.dropped == 1);
     REQUIRE(work.drawing.marks.size() == 2);
@@ -98,7 +100,8 @@ TEST_CASE("Lines that run along others lose what is there", "[layout]") {
 }
 
 TEST_CASE("The wider stroke stays", "[layout]") {
-    const Drawing drawing{"widths", {engraved(polyline({{0, 0}, {90, 0}}), 0.2), engraved(polyline({{30, 0}, {60, 0}}), 0.8)}};
+    const Drawing drawing{"widths",
+                          {engraved(polyline({{0, 0}, {90, 0}}), 0.2), engraved(polyline({{30, 0}, {60, 0}}), 0.8)}};
     const MachineWork work = ready_for_machine(drawing);
     REQUIRE(work.drawing.marks.size() == 2);
     CHECK(work.drawing.marks[0].paths.size() == 2);
@@ -107,8 +110,11 @@ TEST_CASE("The wider stroke stays", "[layout]") {
 
 TEST_CASE("Arcs that run along others lose what is there", "[layout]") {
     const auto arc = [](double from_deg, double sweep_deg) {
-        const auto at = [](double deg) { return Point{10 + 40 * cos(Angle::degrees(deg)), 40 * sin(Angle::degrees(deg))}; };
-        return engraved(Path{at(from_deg), {ArcTo{at(from_deg + sweep_deg), {10, 0}, Angle::degrees(sweep_deg)}}, false});
+        const auto at = [](double deg) {
+            return Point{10 + 40 * cos(Angle::degrees(deg)), 40 * sin(Angle::degrees(deg))};
+        };
+        return engraved(
+            Path{at(from_deg), {ArcTo{at(from_deg + sweep_deg), {10, 0}, Angle::degrees(sweep_deg)}}, false});
     };
     const double degree = 40 * std::numbers::pi / 180;
     Drawing drawing{"arcs", {arc(350, 60), arc(90, -80)}}; // 350° to 50°, 90° to 10°
@@ -122,8 +128,9 @@ TEST_CASE("Arcs that run along others lose what is there", "[layout]") {
 }
 
 TEST_CASE("Two outlines with a side in common cut it once", "[layout]") {
-    const Drawing drawing{"sides", {{Layer::cut, {rectangle({0, 0, 50, 50})}, 0.1, false, "left"},
-                                    {Layer::cut, {rectangle({50, 10, 90, 40})}, 0.1, false, "right"}}};
+    const Drawing drawing{"sides",
+                          {{Layer::cut, {rectangle({0, 0, 50, 50})}, 0.1, false, "left"},
+                           {Layer::cut, {rectangle({50, 10, 90, 40})}, 0.1, false, "right"}}};
     const MachineWork work = ready_for_machine(drawing);
     CHECK(work.dropped == 1);
     CHECK_THAT(length_of(work.drawing), WithinAbs(200 + 140 - 30, 1e-9));
@@ -141,6 +148,7 @@ TEST_CASE("Contours of filled shapes go only where all of them is there", "[layo
 }
 
 TEST_CASE("What is no number goes to no machine", "[layout]") {
-    CHECK_THROWS_AS(ready_for_machine({"bad", {engraved(polyline({{0, 0}, {std::numeric_limits<double>::infinity(), 0}}))}}),
-                    ExportError);
+    CHECK_THROWS_AS(
+        ready_for_machine({"bad", {engraved(polyline({{0, 0}, {std::numeric_limits<double>::infinity(), 0}}))}}),
+        ExportError);
 }

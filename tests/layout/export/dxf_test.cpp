@@ -86,8 +86,10 @@ Path arc_path(Point centre, double radius_mm, double from_deg, double sweep_deg)
 
 /// An F of lines, an arc, a slot with round ends, a filled bow, a circle: no symmetry in it.
 Drawing letter_f() {
-    Path slot{{20, 10}, {LineTo{{40, 10}}, ArcTo{{40, 16}, {40, 13}, Angle::degrees(180)}, LineTo{{20, 16}},
-                         ArcTo{{20, 10}, {20, 13}, Angle::degrees(180)}}, true};
+    Path slot{{20, 10},
+              {LineTo{{40, 10}}, ArcTo{{40, 16}, {40, 13}, Angle::degrees(180)}, LineTo{{20, 16}},
+               ArcTo{{20, 10}, {20, 13}, Angle::degrees(180)}},
+              true};
     Drawing drawing{"F", {}};
     drawing.marks = {
         {Layer::cut, {rectangle({-5, -5, 65, 105})}, 0.1, false, "outline"},
@@ -162,7 +164,8 @@ TEST_CASE("A letter F keeps its place and its hand in DXF, SVG and PDF, plain an
     const Box frame{-70, -10, 70, 110};
     std::vector<ReadLine> svg_lines;
     std::istringstream facts{output_of("/usr/bin/python3 " + std::string{DIALWRIGHT_SOURCE_DIR} +
-                                       "/tests/layout/export/read_svg.py " + kept_as("hand.svg", svg_of(drawing, frame)))};
+                                       "/tests/layout/export/read_svg.py " +
+                                       kept_as("hand.svg", svg_of(drawing, frame)))};
     for (std::string row; std::getline(facts, row);) {
         std::istringstream in{row};
         std::string kind, layer;
@@ -192,9 +195,10 @@ TEST_CASE("A letter F keeps its place and its hand in DXF, SVG and PDF, plain an
 }
 
 TEST_CASE("Arcs are arcs and circles circles, true to 0.001 mm at a radius of 1 m", "[layout]") {
-    Drawing drawing{"metre", {{Layer::cut, {circle({123.45678, -7.5}, 1000)}, 0.1, false, "rim"},
-                              {Layer::engrave, {arc_path({0.3333333, 0}, 999.87654, 350, 47.123)}, 0.1, false, "arc"},
-                              {Layer::score, {arc_path({0, 0}, 990, 10, -300)}, 0.1, false, "wide"}}};
+    Drawing drawing{"metre",
+                    {{Layer::cut, {circle({123.45678, -7.5}, 1000)}, 0.1, false, "rim"},
+                     {Layer::engrave, {arc_path({0.3333333, 0}, 999.87654, 350, 47.123)}, 0.1, false, "arc"},
+                     {Layer::score, {arc_path({0, 0}, 990, 10, -300)}, 0.1, false, "wide"}}};
     // A polyline's arcs: a sector whose arc is bulges.
     Path sector = arc_path({0, 0}, 1000, 10, 200);
     sector.pieces.push_back(LineTo{{0, 0}});
@@ -257,9 +261,10 @@ TEST_CASE("Letters are closed contours in a DXF", "[layout]") {
 
 TEST_CASE("Lines that meet end in the same digits", "[layout]") {
     const Point meet{100.0 / 3, 200.0 / 7};
-    const Drawing drawing{"meet", {{Layer::engrave, {polyline({{0, 0}, meet})}, 0.1, false, "a"},
-                                   {Layer::engrave, {polyline({meet, {90, 1}})}, 0.1, false, "b"},
-                                   {Layer::engrave, {polyline({{-0.00001, 50}, meet})}, 0.1, false, "c"}}};
+    const Drawing drawing{"meet",
+                          {{Layer::engrave, {polyline({{0, 0}, meet})}, 0.1, false, "a"},
+                           {Layer::engrave, {polyline({meet, {90, 1}})}, 0.1, false, "b"},
+                           {Layer::engrave, {polyline({{-0.00001, 50}, meet})}, 0.1, false, "c"}}};
     const std::string dxf = dxf_of(drawing);
     CHECK(dxf.find("\n11\n33.3333\n21\n28.5714\n") != std::string::npos);
     CHECK(dxf.find("\n10\n33.3333\n20\n28.5714\n") != std::string::npos);

@@ -111,7 +111,8 @@ TEST_CASE("gnomons of all heights, feet and sheets are sound outlines", "[gnomon
         plan.joint.hole_mm = plan.joint.kind == FootKind::flange ? 2.0 : 0.0;
         plan.joint.behind_mm = any(10, 200);
         plan.least_style_mm = any(0, 1.5) * foot;
-        INFO("seed 20, case " << i << ": style " << degrees << ", foot " << foot << ", nodus " << plan.nodus_height_mm << " at " << plan.nodus_along_mm);
+        INFO("seed 20, case " << i << ": style " << degrees << ", foot " << foot << ", nodus " << plan.nodus_height_mm
+                              << " at " << plan.nodus_along_mm);
         EdgeGnomon gnomon;
         try {
             gnomon = edge_gnomon(plan);

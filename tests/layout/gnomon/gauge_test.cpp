@@ -21,7 +21,8 @@ void check_lettering_inside(const Drawing& drawing, double clear_mm) {
                     bool inside = false;
                     for (std::size_t i = 0; i + 1 < ring.size(); ++i)
                         if ((ring[i].y_mm > p.y_mm) != (ring[i + 1].y_mm > p.y_mm) &&
-                            p.x_mm < ring[i].x_mm + (p.y_mm - ring[i].y_mm) * (ring[i + 1].x_mm - ring[i].x_mm) / (ring[i + 1].y_mm - ring[i].y_mm))
+                            p.x_mm < ring[i].x_mm + (p.y_mm - ring[i].y_mm) * (ring[i + 1].x_mm - ring[i].x_mm) /
+                                                        (ring[i + 1].y_mm - ring[i].y_mm))
                             inside = !inside;
                     if (!inside)
                         FAIL("lettering outside the gauge at " << p.x_mm << ", " << p.y_mm);
@@ -69,7 +70,8 @@ TEST_CASE("a substyle gauge turns the way its words say", "[gnomon]") {
         CHECK(stands_clear_of_itself(ring));
         const Stretch edge = longest_at(outline(drawing, "gauge"), std::fmod(180 - degrees, 180));
         CHECK_THAT(std::remainder(edge.degrees + degrees, 180.0), WithinAbs(0, 0.001)); // clockwise positive
-        CHECK_THAT(std::atan2(gauge.edge_to.y_mm, gauge.edge_to.x_mm) * 180 / std::numbers::pi, WithinAbs(-degrees, 0.001));
+        CHECK_THAT(std::atan2(gauge.edge_to.y_mm, gauge.edge_to.x_mm) * 180 / std::numbers::pi,
+                   WithinAbs(-degrees, 0.001));
         check_lettering_inside(drawing, 0.5);
     }
 }

@@ -98,7 +98,8 @@ TEST_CASE("a halving's slots are of half the foot each and bear on each other", 
     o.behind_mm = 70;
     const double foot = 90, plate = 9;
     const Joint joint = joint_of(o, foot, 6, plate);
-    const auto blade = spans_at(foot_corners(joint, 0), -plate / 2), keel = spans_at(foot_corners(joint, 0), -plate - o.fit_mm - 1);
+    const auto blade = spans_at(foot_corners(joint, 0), -plate / 2),
+               keel = spans_at(foot_corners(joint, 0), -plate - o.fit_mm - 1);
     REQUIRE(blade.size() == 1);
     REQUIRE(keel.size() == 1);
     CHECK_THAT(blade[0].to_mm, WithinAbs(45, 1e-9));

@@ -57,7 +57,8 @@ inline Made level_round(double thickness_mm = 6) {
 }
 /// An upright dial on an oblong plate at 52.25° north that declines 23° east of south.
 inline Made wall_oblong(double thickness_mm = 6) {
-    return made(dial_plan(52.25, {Angle::degrees(157), Angle{}}, thickness_mm), face_spec(PlateShape::rectangle, 500, 620, thickness_mm));
+    return made(dial_plan(52.25, {Angle::degrees(157), Angle{}}, thickness_mm),
+                face_spec(PlateShape::rectangle, 500, 620, thickness_mm));
 }
 /// A level dial on an octagon at 34° south, which its reader sees from the north.
 inline Made southern_octagon() {

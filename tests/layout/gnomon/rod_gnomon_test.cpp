@@ -61,7 +61,8 @@ TEST_CASE("the drilling jig leads the drill to the centre at the style height", 
         }
         // The face that the drill enters is square to it.
         CHECK(longest_at(outline(jig, "jig, from the side"), degrees + 90).length_mm > 16);
-        CHECK_THAT(longest_at(outline(jig, "jig, from the side"), degrees + 90).degrees, WithinAbs(std::fmod(degrees + 90, 180), 0.001));
+        CHECK_THAT(longest_at(outline(jig, "jig, from the side"), degrees + 90).degrees,
+                   WithinAbs(std::fmod(degrees + 90, 180), 0.001));
         const Box mouth = bounds_of(mark(jig, "bore's mouth").paths.front());
         CHECK_THAT(mouth.width_mm(), WithinAbs(8 / s, 1e-4));
         CHECK_THAT(mouth.height_mm(), WithinAbs(8, 1e-4));

@@ -38,7 +38,8 @@ TEST_CASE("the plate's own holes and foot are those of the gnomon", "[gnomon]") 
                 }
             CHECK(found);
         }
-        const Box foot_of_plate = bounds_of(mark(made.face.drawing, "gnomon's foot")), foot_of_gnomon = bounds_of(mark(placed, "gnomon's foot"));
+        const Box foot_of_plate = bounds_of(mark(made.face.drawing, "gnomon's foot")),
+                  foot_of_gnomon = bounds_of(mark(placed, "gnomon's foot"));
         CHECK_THAT(foot_of_plate.left_mm, WithinAbs(foot_of_gnomon.left_mm, 1e-9));
         CHECK_THAT(foot_of_plate.top_mm, WithinAbs(foot_of_gnomon.top_mm, 1e-9));
         CHECK_THAT(foot_of_plate.right_mm, WithinAbs(foot_of_gnomon.right_mm, 1e-9));
@@ -77,5 +78,6 @@ TEST_CASE("a style is long enough for its shadow to reach the border", "[gnomon]
         CHECK(style_mm * reach >= to_border - 1e-6);
     }
     CHECK_THAT(style_mm, WithinAbs(longest_need, 0.15 * longest_need)); // other hours may need a little more
-    CHECK(least_style_mm(made_faces::great_decliner().plan, made_faces::great_decliner().face, made_faces::great_decliner().spec) == 0.0);
+    CHECK(least_style_mm(made_faces::great_decliner().plan, made_faces::great_decliner().face,
+                         made_faces::great_decliner().spec) == 0.0);
 }

@@ -17,7 +17,8 @@ using namespace dialwright::layout;
 using Catch::Matchers::WithinAbs;
 
 inline const Mark& mark(const Drawing& drawing, const std::string& name) {
-    const auto found = std::find_if(drawing.marks.begin(), drawing.marks.end(), [&](const Mark& m) { return m.name == name; });
+    const auto found =
+        std::find_if(drawing.marks.begin(), drawing.marks.end(), [&](const Mark& m) { return m.name == name; });
     if (found == drawing.marks.end())
         FAIL("no mark \"" << name << "\" in the drawing \"" << drawing.name << "\"");
     return *found;
@@ -45,7 +46,8 @@ inline bool stands_clear_of_itself(const std::vector<Point>& ring) {
             const Point a = ring[i], b = ring[i + 1], c = ring[k], d = ring[k + 1];
             if (side_of(a, b, c) * side_of(a, b, d) > 0 || side_of(c, d, a) * side_of(c, d, b) > 0)
                 continue; // one lies wholly to a side of the other
-            const bool in_line = std::abs(side_of(a, b, c)) < k_touch * distance(a, b) && std::abs(side_of(a, b, d)) < k_touch * distance(a, b);
+            const bool in_line = std::abs(side_of(a, b, c)) < k_touch * distance(a, b) &&
+                                 std::abs(side_of(a, b, d)) < k_touch * distance(a, b);
             const double near = std::min({away(a, c, d), away(b, c, d), away(c, a, b), away(d, a, b)});
             if (!in_line || near < k_touch)
                 return false;
@@ -67,7 +69,8 @@ inline void check_outline(const Path& path) {
     for (const Piece& piece : path.pieces) {
         const Point to = end_of(piece);
         if (const auto* arc = std::get_if<ArcTo>(&piece))
-            CHECK_THAT(distance(at, arc->centre), WithinAbs(distance(to, arc->centre), 1e-9)); // both ends on one circle
+            CHECK_THAT(distance(at, arc->centre),
+                       WithinAbs(distance(to, arc->centre), 1e-9)); // both ends on one circle
         else
             CHECK(distance(at, to) > 1e-9);
         at = to;
@@ -98,13 +101,15 @@ inline int touching_arcs(const Path& path, double tolerance) {
             continue;
         const std::size_t before = (i + n - 1) % n, after = (i + 1) % n;
         const auto [begins, ends] = directions(starts[i], path.pieces[i]);
-        const Point in = directions(starts[before], path.pieces[before]).second, out = directions(starts[after], path.pieces[after]).first;
+        const Point in = directions(starts[before], path.pieces[before]).second,
+                    out = directions(starts[after], path.pieces[after]).first;
         count += distance(in, begins) < tolerance && distance(ends, out) < tolerance;
     }
     return count;
 }
 inline int arcs(const Path& path) {
-    return int(std::count_if(path.pieces.begin(), path.pieces.end(), [](const Piece& p) { return std::holds_alternative<ArcTo>(p); }));
+    return int(std::count_if(path.pieces.begin(), path.pieces.end(),
+                             [](const Piece& p) { return std::holds_alternative<ArcTo>(p); }));
 }
 
 /// The longest straight stretch of a path whose direction is within 0.5° of an angle (either way round): its own angle in

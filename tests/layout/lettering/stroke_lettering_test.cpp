@@ -25,7 +25,8 @@ TEST_CASE("Single-stroke capitals are as high as asked, on the base line", "[lay
 }
 
 TEST_CASE("Strokes are open, each drawn once", "[layout]") {
-    const LetteredLine line = StrokeLettering{}.line("ABCDEFGHIJKLMNOPQRSTUVWXYZabcdefghijklmnopqrstuvwxyz0123456789", 10);
+    const LetteredLine line =
+        StrokeLettering{}.line("ABCDEFGHIJKLMNOPQRSTUVWXYZabcdefghijklmnopqrstuvwxyz0123456789", 10);
     for (const Glyph& glyph : line.glyphs) {
         CHECK_FALSE(glyph.outlines.empty());
         for (const Path& stroke : glyph.outlines)
@@ -35,10 +36,10 @@ TEST_CASE("Strokes are open, each drawn once", "[layout]") {
 
 TEST_CASE("Letters of the languages that dials speak have strokes", "[layout]") {
     const StrokeLettering strokes;
-    for (const char* words : {"54° 27′ 12″ · 51–52", "Été, où, ça, naïve, œuvre", "ÀÂÄÅÃ ÇÉÈÊË ÍÌÎÏ ÑÓÒÔÖÕ ÚÙÛÜ ÝŸ", "größer Straße",
-                              "smørrebrød Ærø þórður Þing ð", "kůň ďábel říčka ťal ĺ ľ Ľ", "żółć gęślą jaźń Łódź", "őrült tűz",
-                              "ūdeņš ķēve ģimene", "ışık Iğdır şeker", "¿Qué? ¡Sí! «eñe» “yes” ‘no’ „so“ … ½ × ± −",
-                              "Ἀλλά τὸ φῶς", "ΩΡΑΙ ώρα Σωκράτης ΰ"}) {
+    for (const char* words : {"54° 27′ 12″ · 51–52", "Été, où, ça, naïve, œuvre", "ÀÂÄÅÃ ÇÉÈÊË ÍÌÎÏ ÑÓÒÔÖÕ ÚÙÛÜ ÝŸ",
+                              "größer Straße", "smørrebrød Ærø þórður Þing ð", "kůň ďábel říčka ťal ĺ ľ Ľ",
+                              "żółć gęślą jaźń Łódź", "őrült tűz", "ūdeņš ķēve ģimene", "ışık Iğdır şeker",
+                              "¿Qué? ¡Sí! «eñe» “yes” ‘no’ „so“ … ½ × ± −", "Ἀλλά τὸ φῶς", "ΩΡΑΙ ώρα Σωκράτης ΰ"}) {
         INFO(words);
         if (std::string{words}.starts_with("Ἀ"))
             CHECK_THROWS_WITH(strokes.line(words, 5), Catch::Contains("U+0313")); // breathings are not drawn
@@ -49,7 +50,8 @@ TEST_CASE("Letters of the languages that dials speak have strokes", "[layout]") 
 
 TEST_CASE("An accent stands over its letter, composed or not, and takes the place of a dot", "[layout]") {
     const StrokeLettering strokes;
-    const LetteredLine composed = strokes.line("é", 21), apart = strokes.line("e\u0301", 21), plain = strokes.line("e", 21);
+    const LetteredLine composed = strokes.line("é", 21), apart = strokes.line("e\u0301", 21),
+                       plain = strokes.line("e", 21);
     REQUIRE(composed.glyphs.size() == 1);
     REQUIRE(apart.glyphs.size() == 1);
     CHECK(composed.glyphs[0].outlines.size() == plain.glyphs[0].outlines.size() + 1);

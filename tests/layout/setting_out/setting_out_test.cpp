@@ -57,11 +57,13 @@ TEST_CASE("hour lines meet an oblong plate's edge where another reckoning has th
         REQUIRE(p->border);
         const bool level_side = std::abs(std::abs(at.y_mm) - 310) < 1e-6;
         CHECK_THAT(p->border->along_mm, WithinAbs(level_side ? at.x_mm + 250 : at.y_mm + 310, 1e-6));
-        CHECK(p->border->side == (level_side ? (at.y_mm > 0 ? "top edge" : "bottom edge") : (at.x_mm > 0 ? "right edge" : "left edge")));
+        CHECK(p->border->side ==
+              (level_side ? (at.y_mm > 0 ? "top edge" : "bottom edge") : (at.x_mm > 0 ? "right edge" : "left edge")));
         CHECK(p->border->from == (level_side ? (at.y_mm > 0 ? "upper left corner" : "lower left corner")
                                              : (at.x_mm > 0 ? "lower right corner" : "lower left corner")));
         const std::string sentence = "the " + line.label + " line meets the " + p->border->side + " ";
-        CHECK(std::any_of(out.checks.begin(), out.checks.end(), [&](const std::string& s) { return s.starts_with(sentence); }));
+        CHECK(std::any_of(out.checks.begin(), out.checks.end(),
+                          [&](const std::string& s) { return s.starts_with(sentence); }));
         ++checked;
     }
     CHECK(checked >= 8);
@@ -69,16 +71,19 @@ TEST_CASE("hour lines meet an oblong plate's edge where another reckoning has th
 }
 
 TEST_CASE("radius, angle and chord lead to the same point as x and y", "[setting out]") {
-    for (const Made& made : {made_faces::level_round(), made_faces::wall_oblong(), made_faces::southern_octagon(), made_faces::great_decliner()}) {
+    for (const Made& made : {made_faces::level_round(), made_faces::wall_oblong(), made_faces::southern_octagon(),
+                             made_faces::great_decliner()}) {
         const SettingOut out = set_out(made.face, made.spec, {});
         const bool down = out.zero_line.starts_with("straight down");
         REQUIRE(out.points.size() > 20);
         for (const SettingOutPoint& p : out.points) {
             const double a = p.angle.in_radians(), zero = down ? -1.0 : 1.0;
             // Clockwise from straight up or straight down.
-            const auto pole = std::find_if(out.poles.begin(), out.poles.end(), [&](const Datum::NamedPoint& named) { return named.name == p.pole; });
+            const auto pole = std::find_if(out.poles.begin(), out.poles.end(),
+                                           [&](const Datum::NamedPoint& named) { return named.name == p.pole; });
             REQUIRE(pole != out.poles.end());
-            const Point by_angle{pole->at.x_mm + zero * p.radius_mm * std::sin(a), pole->at.y_mm + zero * p.radius_mm * std::cos(a)};
+            const Point by_angle{pole->at.x_mm + zero * p.radius_mm * std::sin(a),
+                                 pole->at.y_mm + zero * p.radius_mm * std::cos(a)};
             CHECK(distance(by_angle, p.at) < 1e-9);
             // The chord joins two points of its circle.
             const double r = out.chord_radius_mm;
@@ -103,8 +108,11 @@ TEST_CASE("each hour line has one angle all along, from the centre of its own ha
             if (line.family != Family::hour || line.step_min < 60 || line.time_h >= 12)
                 continue;
             const double h = (line.time_h - 12) * 15 * rad;
-            const double wanted = made == &level ? std::atan2(std::sin(phi) * std::sin(h), std::cos(h)) / rad
-                                                 : -std::atan2(std::cos(phi) * std::sin(h), std::cos(d) * std::cos(h) + std::sin(d) * std::sin(phi) * std::sin(h)) / rad;
+            const double wanted =
+                made == &level ? std::atan2(std::sin(phi) * std::sin(h), std::cos(h)) / rad
+                               : -std::atan2(std::cos(phi) * std::sin(h),
+                                             std::cos(d) * std::cos(h) + std::sin(d) * std::sin(phi) * std::sin(h)) /
+                                     rad;
             for (const char* what : {"inner end", "outer end", "meets"}) {
                 const auto* p = find(out, "hour line " + line.label, what);
                 if (!p || (made == &level && line.time_h < 6))
@@ -160,8 +168,10 @@ TEST_CASE("date lines are given where they cross the hour lines", "[setting out]
     int checked = 0;
     for (const auto& [label, part] : {std::pair{"21 Jun", 1.0}, {"equinox", 0.0}, {"21 Dec", -1.0}}) {
         const double altitude = std::numbers::pi / 2 - phi + part * made_faces::year().obliquity().in_radians();
-        if (const auto* p = find(out, std::string{"date line "} + label, "on hour line XII"); p && p->what == "on hour line XII") {
-            CHECK_THAT(p->radius_mm, WithinAbs(h / std::tan(phi) + h / std::tan(altitude), 0.02)); // the curve is drawn to 0.01 mm
+        if (const auto* p = find(out, std::string{"date line "} + label, "on hour line XII");
+            p && p->what == "on hour line XII") {
+            CHECK_THAT(p->radius_mm,
+                       WithinAbs(h / std::tan(phi) + h / std::tan(altitude), 0.02)); // the curve is drawn to 0.01 mm
             ++checked;
         }
     }
@@ -180,7 +190,8 @@ TEST_CASE("every point of the setting out lies where the face's drawing has it",
                     drawn.emplace_back(m.name, flattened(path, 0.001));
             if (m.name == "plate's edge")
                 for (const Point& p : flattened(m.paths.front(), 0.01))
-                    if (p.x_mm + p.y_mm < low_left.x_mm + low_left.y_mm - 1e-6 || (std::abs(p.x_mm + p.y_mm - low_left.x_mm - low_left.y_mm) < 1e-6 && p.y_mm < low_left.y_mm))
+                    if (p.x_mm + p.y_mm < low_left.x_mm + low_left.y_mm - 1e-6 ||
+                        (std::abs(p.x_mm + p.y_mm - low_left.x_mm - low_left.y_mm) < 1e-6 && p.y_mm < low_left.y_mm))
                         low_left = p;
         }
         for (const SettingOutPoint& p : out.points) {
@@ -210,7 +221,8 @@ TEST_CASE("setting out is written in millimetres to a tenth or in sixty-fourths"
     const Made made = made_faces::wall_oblong();
     SettingOutOptions options;
     const std::string metric = csv_of(set_out(made.face, made.spec, options));
-    CHECK(metric.starts_with("line,point,x_mm,y_mm,border,from,along_mm,pole,radius_mm,angle_deg,angle,chord_mm,diameter_mm\ndatum,lower left corner,0.0,0.0,"));
+    CHECK(metric.starts_with("line,point,x_mm,y_mm,border,from,along_mm,pole,radius_mm,angle_deg,angle,chord_mm,"
+                             "diameter_mm\ndatum,lower left corner,0.0,0.0,"));
     const auto lines = std::count(metric.begin(), metric.end(), '\n');
     options.inches = true;
     const SettingOut out = set_out(made.face, made.spec, options);
