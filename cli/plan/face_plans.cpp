@@ -154,6 +154,8 @@ FacePlan plan_of(const Design& design, const MeanYear& year, bool upper_face) {
     const bool ring_time = design.hours.time == HourTime::sun || design.hours.time == HourTime::zone;
     spec.divide_min = ring_time && design.hours.reach == HourExtent::style ? design.hours.divide_min : 0;
     spec.summer_shift_h = design.hours.summer_numerals ? summer_shift_h(*zone, design.years.first) : 0.0;
+    spec.numeral_height_asked = design.where.contains("lettering: numeral height");
+    spec.motto_height_asked = design.where.contains("lettering: motto height");
     spec.noon_mark = design.hours.noon_mark;
     spec.date_labels = design.dates.labels;
     spec.compass = design.dial.kind == DialKind::level;

@@ -23,6 +23,8 @@ struct FaceSpec {
     int numeral_count = 12;
     int divide_min = 60;       ///< 0: the ring has no band of divisions
     double summer_shift_h = 0; ///< > 0: a second row of numerals, this much on
+    bool numeral_height_asked = true; ///< the maker named it, and is told where it has to be less; so with the motto's
+    bool motto_height_asked = true;
     bool noon_mark = true;
     bool date_labels = true;
     bool compass = false; ///< level plates

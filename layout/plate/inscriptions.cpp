@@ -17,7 +17,8 @@ class Inscriber {
   public:
     explicit Inscriber(Bench& bench) : bench_{bench}, right_{bench.up.y_mm, -bench.up.x_mm} {}
 
-    void inscribe(const std::string& text, double height_mm, const std::string& name) {
+    /// @param asked  the maker named the height, and is told where it has to be less
+    void inscribe(const std::string& text, double height_mm, bool asked, const std::string& name) {
         if (text.empty() || height_mm <= 0)
             return;
         bench_.clear.measure();
@@ -25,7 +26,7 @@ class Inscriber {
             for (double height = height_mm; height >= least * height_mm; height *= 0.93) {
                 const LetteredLine line = bench_.lettering.line(text, height, 0.08 * height);
                 if (on_border(line, height, name) || straight(line, height, name, anywhere)) {
-                    if (height < 0.999 * height_mm)
+                    if (height < 0.999 * height_mm && asked)
                         bench_.warnings.push_back(fmt::format(
                             "the {} is {:.1f} mm high instead of {:.1f} mm, to find room", name, height, height_mm));
                     return true;
@@ -131,11 +132,13 @@ class Inscriber {
 } // namespace
 
 void draw_motto(Bench& bench) {
-    Inscriber{bench}.inscribe(bench.spec.lettering.motto, bench.spec.lettering.motto_height_mm, "motto");
+    Inscriber{bench}.inscribe(bench.spec.lettering.motto, bench.spec.lettering.motto_height_mm,
+                              bench.spec.motto_height_asked, "motto");
 }
 
 void draw_place_line(Bench& bench) {
-    Inscriber{bench}.inscribe(bench.spec.lettering.place_line, bench.spec.lettering.label_height_mm, "place line");
+    Inscriber{bench}.inscribe(bench.spec.lettering.place_line, bench.spec.lettering.label_height_mm, false,
+                              "place line");
 }
 
 } // namespace dialwright::layout

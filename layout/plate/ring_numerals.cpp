@@ -36,7 +36,7 @@ class NumeralDrawer {
             height *= 0.95;
         if (!all_apart(all, height))
             drop_crowded(all, height);
-        if (height < row_.height_mm)
+        if (height < row_.height_mm && bench_.spec.numeral_height_asked)
             bench_.warnings.push_back(
                 fmt::format("{}s are {:.1f} mm high instead of {:.1f} mm, so that they stand clear", row_.name, height,
                             row_.height_mm));

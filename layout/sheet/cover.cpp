@@ -63,8 +63,7 @@ class Flow {
                                       : fmt::format("What this packet makes, page {}", sheets_.size() + 1);
         const double m = options_.margin_mm;
         sheet.printable = {m, m, sheet.width_mm - m, sheet.height_mm - m};
-        const SheetWords words{fmt::format("{}, {:.0f} × {:.0f} mm", sheet.paper, sheet.width_mm, sheet.height_mm),
-                               title_, "", 1, 1};
+        const SheetWords words{paper_words(options_, sheet.width_mm, sheet.height_mm), title_, "", 1, 1};
         const Surround surround = surround_of(sheet.width_mm, sheet.height_mm, m, options_.inches, words);
         field_ = opening_of(sheet.width_mm, sheet.height_mm, m, surround);
         furnish(sheet, field_, surround, words);
@@ -130,6 +129,7 @@ void put_map(Flow& flow, const CoverFace& face) {
     const double height = scale * tiling.map_box.height_mm();
     flow.need(height + 12);
     flow.heading(face.name.empty() ? "How the sheets join" : "How the sheets of the " + face.name + " join");
+    flow.space(1.5);
     const Placing placing{
         {},
         {flow.left() - scale * tiling.map_box.left_mm, flow.y() - height - scale * tiling.map_box.bottom_mm},

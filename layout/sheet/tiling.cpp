@@ -37,13 +37,6 @@ Box turned_box(const Box& box, bool turned) {
     return turned ? Box{-box.top_mm, box.left_mm, -box.bottom_mm, box.right_mm} : box;
 }
 
-std::string paper_words(const PrintOptions& options, double width_mm, double height_mm) {
-    const std::string mm = fmt::format("{:.4g} × {:.4g} mm", width_mm, height_mm);
-    return options.inches
-               ? fmt::format("{}, {:.4g} × {:.4g} in ({})", options.paper.name, width_mm / 25.4, height_mm / 25.4, mm)
-               : options.paper.name + ", " + mm;
-}
-
 void require_work(const Drawing& drawing) {
     for (const Mark& mark : drawing.marks) {
         if (!is_finite(mark)) {
@@ -291,6 +284,13 @@ void require_options(const PrintOptions& options) {
 }
 
 } // namespace
+
+std::string paper_words(const PrintOptions& options, double width_mm, double height_mm) {
+    const std::string mm = fmt::format("{:.4g} × {:.4g} mm", width_mm, height_mm);
+    return options.inches
+               ? fmt::format("{}, {:.4g} × {:.4g} in ({})", options.paper.name, width_mm / 25.4, height_mm / 25.4, mm)
+               : options.paper.name + ", " + mm;
+}
 
 Tiling tile(std::shared_ptr<const Drawing> drawing, const PrintOptions& options) {
     require_options(options);

@@ -19,6 +19,9 @@ struct PrintOptions {
     std::string title;        ///< on every sheet
 };
 
+/// The paper and its size, for people: "A4, 210 × 297 mm", "Letter, 8.5 × 11 in (215.9 × 279.4 mm)".
+[[nodiscard]] std::string paper_words(const PrintOptions& options, double width_mm, double height_mm);
+
 /// The work on tiles of a paper: the turn and the upright or lying paper that need the fewest sheets, blank tiles left
 /// out. Each sheet: the work in its opening, crosses that coincide when joined, its row and column, its neighbours, a
 /// 100 mm bar in x and in y (50 or 20 mm on small paper) with what to measure, the paper's name, "100 %". One sheet, with
