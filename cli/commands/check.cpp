@@ -24,8 +24,7 @@ std::vector<Assumption> chosen(const Commission& commission) {
             list.push_back(
                 {"gnomon: nodus height" + face, say_length(placement.nodus_height_mm, inches), placement.why_height});
         if (!placement.why_place.empty()) {
-            const auto& centre = commission.faces[i].delineation.style.centre;
-            const layout::Point at = layout::to_work(centre.value_or(PlatePoint{}), placement.foot);
+            const layout::Point at = placement.key;
             list.push_back({"plate: centre" + face,
                             fmt::format("[{}, {}]", say_length(at.x_mm, false), say_length(at.y_mm, false)),
                             placement.why_place});

@@ -99,7 +99,9 @@ int run_shadow(const ShadowOptions& options) {
         face = face_named(*commission, options.face);
         if (!face) {
             std::cerr << fmt::format("--face {}: this design has no such face{}\n", options.face,
-                                     commission->plans.size() > 1 ? "; it has upper and lower" : " (it has only one)");
+                                     commission->plans.size() > 1
+                                         ? "; it has " + commission->plans[0].name + " and " + commission->plans[1].name
+                                         : std::string{" (it has only one)"});
             return k_error;
         }
     }
@@ -124,7 +126,8 @@ void add_shadow(CLI::App& app, int& status) {
     command->add_option("--at", options->at, "an instant, ISO 8601 with Z or an offset; may be given several times")
         ->allow_extra_args(false);
     command->add_option("--at-file", options->at_file, "a file with one instant a line; - for standard input");
-    command->add_option("--face", options->face, "upper or lower, of a dial with two faces [the one that is lit]");
+    command->add_option("--face", options->face,
+                        "of a dial with two faces: upper or lower, front or back [the one that is lit]");
     command->add_flag("--json", options->json, "for programs (docs/output-formats.md)");
     command->callback([options, &status] { status = run_shadow(*options); });
 }

@@ -6,6 +6,7 @@
 #include "cli/report/say.hpp"
 #include "layout/export/pdf.hpp"
 #include "layout/export/svg.hpp"
+#include "layout/plate/numerals.hpp"
 #include "layout/sheet/cover.hpp"
 
 #include <fmt/format.h>
@@ -44,7 +45,7 @@ std::string hours_text(const layout::Face& face) {
             first = std::min(first, line.time_h);
             last = std::max(last, line.time_h);
         }
-    return first > last ? "none" : say_clock(first).substr(0, 5) + " to " + say_clock(last).substr(0, 5);
+    return first > last ? "none" : layout::time_label(first) + " to " + layout::time_label(last);
 }
 
 std::vector<std::pair<std::string, std::string>> key_numbers(const Commission& commission, std::size_t i) {
@@ -111,7 +112,9 @@ std::vector<std::string> steps(const Design& design, bool has_tiles) {
     if (design.dial.kind == DialKind::wall || design.dial.kind == DialKind::leaning)
         list.push_back("Check which way the wall faces and how it leans before you cut: the lines are right for this "
                        "attitude alone.");
-    list.push_back("Set the style at its height over the substyle, and prove it before the fixing sets.");
+    list.push_back(has_style(design.gnomon.kind)
+                       ? "Set the style at its height over the substyle, and prove it before the fixing sets."
+                       : "Set the nodus at its height over its foot, and prove it before the fixing sets.");
     return list;
 }
 

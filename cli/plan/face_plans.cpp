@@ -137,7 +137,7 @@ FacePlan plan_of(const Design& design, const MeanYear& year, bool upper_face) {
     dial.dates = date_plan(design, year);
     if (equatorial) // the Sun stands on this face's side of the equator, or never lights it
         std::erase_if(dial.dates.lines, [&](const DatePlan::Line& line) {
-            const bool north = (dial.attitude.normal_altitude > Angle{}) == (dial.site.latitude >= Angle{});
+            const bool north = (dial.site.latitude >= Angle{}) == upper_face;
             return (north ? line.declination : -line.declination) < Angle::degrees(0.1);
         });
 

@@ -6,6 +6,7 @@
 #include "layout/plate/numerals.hpp"
 
 #include <algorithm>
+#include <cmath>
 #include <fmt/format.h>
 #include <optional>
 #include <stdexcept>
@@ -170,6 +171,12 @@ std::vector<DesignError> what_cannot_be(const Design& design, const MeanYear& ye
         if (!counts_from_horizon(plan.dial.hours.time))
             add_unlit_hours(errors, design, plan, lit, plans.size() > 1);
         add_missing_families(errors, design, plan.dial, year);
+        if (std::fmod(plan.spec.summer_shift_h, 1.0) != 0)
+            errors.push_back(
+                error_at(design, "hours: summer numerals",
+                         fmt::format("the zone's summer time is {:.0f} minutes on, which no row of hours can show",
+                                     plan.spec.summer_shift_h * 60),
+                         "leave the key out"));
     }
     if (!errors.empty()) {
         for (DesignError& error : what_cannot_be_lettered(design, ""))
@@ -210,8 +217,10 @@ std::vector<DesignError> what_misses_the_plate(const Design& design, const MeanY
     std::vector<DesignError> errors;
     for (std::size_t i = 0; i < faces.size(); ++i) {
         bool hours = false, dates = false;
-        for (const layout::DrawnLine& line : faces[i].lines)
-            (line.family == Family::date ? dates : hours) = true;
+        for (const layout::DrawnLine& line : faces[i].lines) {
+            dates = dates || line.family == Family::date;
+            hours = hours || is_hour(line.family);
+        }
         if (!hours)
             errors.push_back(no_hours_error(design));
         const bool asked = !plans[i].dial.dates.lines.empty();

@@ -62,6 +62,10 @@ Json style_json(const Style& style) {
             {"centre_mm", style.centre ? point(*style.centre) : Json(nullptr)}};
 }
 
+bool has_hour_angle(const layout::DrawnLine& line) {
+    return line.family == Family::hour || line.family == Family::clock_hour;
+}
+
 /// A line that is neither one of the ring's hours nor a date: with its time, or with the angle that it stands for.
 Json more_line(const layout::DrawnLine& line) {
     Json out{{"family", say_family(line.family)}, {"label", line.label}};
@@ -87,7 +91,6 @@ void add_face(Json& out, const FacePlan& plan, const layout::Face& face) {
     out["date_lines"] = Json::array();
     out["more_lines"] = Json::array();
     for (const layout::DrawnLine& line : face.lines) {
-        const bool straight_or_clock = line.family == Family::hour || line.family == Family::clock_hour;
         if (line.family == Family::date)
             out["date_lines"].push_back({{"label", line.label},
                                          {"declination_deg", number(line.declination.value_or(Angle{}).in_degrees())},
@@ -96,7 +99,7 @@ void add_face(Json& out, const FacePlan& plan, const layout::Face& face) {
             out["hour_lines"].push_back(
                 {{"label", line.label},
                  {"time_h", number(line.time_h)},
-                 {"hour_angle_deg", straight_or_clock ? number(line.hour_angle.in_degrees()) : Json(nullptr)},
+                 {"hour_angle_deg", has_hour_angle(line) ? number(line.hour_angle.in_degrees()) : Json(nullptr)},
                  {"angle_deg", line.direction ? number(line.direction->in_degrees()) : Json(nullptr)},
                  {"points_mm", points(line.points)}});
         else
@@ -165,10 +168,11 @@ std::string hour_lines_csv(const Commission& commission) {
             if (line.set != 0 || !is_hour(line.family))
                 continue;
             const PlatePoint a = line.points.front(), b = line.points.back();
-            text += fmt::format("{},{},{},{},{},{},{},{},{},{}\n", commission.plans[i].name, line.label,
-                                fixed(line.time_h, 6), fixed(line.hour_angle.in_degrees(), 6),
-                                line.direction ? fixed(line.direction->in_degrees(), 6) : "", fixed(a.u_mm, 4),
-                                fixed(a.v_mm, 4), fixed(b.u_mm, 4), fixed(b.v_mm, 4), line.points.size());
+            text +=
+                fmt::format("{},{},{},{},{},{},{},{},{},{}\n", commission.plans[i].name, line.label,
+                            fixed(line.time_h, 6), has_hour_angle(line) ? fixed(line.hour_angle.in_degrees(), 6) : "",
+                            line.direction ? fixed(line.direction->in_degrees(), 6) : "", fixed(a.u_mm, 4),
+                            fixed(a.v_mm, 4), fixed(b.u_mm, 4), fixed(b.v_mm, 4), line.points.size());
         }
     return text;
 }

@@ -33,7 +33,7 @@ void say_site(Text& text, const Commission& commission) {
               say_longitude(design.place.site.longitude));
     const Angle meridian = commission.plans.front().dial.zone_meridian;
     text.line("  zone         {}, standard meridian {}", design.place.zone, say_longitude(meridian));
-    const double correction = (meridian - design.place.site.longitude).in_minutes_of_time();
+    const double correction = (meridian - design.place.site.longitude).signed_turn().in_minutes_of_time();
     text.line("  longitude    {} min of time {} the zone's meridian: zone time is Sun time {} {} min",
               fixed(std::abs(correction), 2), correction >= 0 ? "west of" : "east of", correction >= 0 ? "+" : "-",
               fixed(std::abs(correction), 2));

@@ -24,7 +24,8 @@ std::vector<int> minutes_of(const HourPlan& plan) {
     const bool from_horizon = family_of(plan.time) != Family::hour && family_of(plan.time) != Family::clock_hour;
     for (int minute = 0; minute <= 24 * 60; minute += plan.divide_min) {
         const bool horizon_itself = from_horizon && (minute == 0 || minute == end_of_scale);
-        if (minute >= first && minute <= last && !horizon_itself)
+        const bool midnight_again = minute == 24 * 60 && first == 0; // the line of 0 h is that of 24 h
+        if (minute >= first && minute <= last && !horizon_itself && !midnight_again)
             minutes.push_back(minute);
     }
     return minutes;
@@ -184,8 +185,8 @@ class Delineator {
         line.family = family;
         line.level = level;
         add_curve(line, path);
-        if (!line.pieces.empty())
-            made_.lines.push_back(std::move(line));
+        const std::string name = family == Family::altitude ? "altitude " : "azimuth ";
+        keep_or_list(std::move(line), name + std::to_string(std::lround(level.in_degrees())) + "°");
     }
 
     void keep_or_list(DialLine&& line, const std::string& name) {
@@ -239,11 +240,12 @@ bool is_hour(Family family) {
 
 Angle hour_angle_of(HourTime time, double time_h, const Site& site, Angle zone_meridian) {
     const Angle from_noon = Angle::hours(time_h - 12.0);
-    return time == HourTime::sun ? from_noon : from_noon + (site.longitude - zone_meridian);
+    return time == HourTime::sun ? from_noon : from_noon + (site.longitude - zone_meridian).signed_turn();
 }
 
 double time_of(HourTime time, Angle hour_angle, const Site& site, Angle zone_meridian) {
-    const Angle on_dial = time == HourTime::sun ? hour_angle : hour_angle - (site.longitude - zone_meridian);
+    const Angle on_dial =
+        time == HourTime::sun ? hour_angle : hour_angle - (site.longitude - zone_meridian).signed_turn();
     return (on_dial + Angle::degrees(180)).positive_turn().in_hours();
 }
 

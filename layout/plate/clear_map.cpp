@@ -54,7 +54,9 @@ ClearMap::ClearMap(const Outline& free_inside, double cell_mm) : cell_mm_{cell_m
         t.clear();
         free_inside.crossings(a, b, t);
         std::sort(t.begin(), t.end());
-        for (std::size_t k = 0; k + 1 < t.size(); k += 2) {
+        for (std::size_t k = 0; k + 1 < t.size(); ++k) { // a row through a corner crosses there twice, or touches
+            if (!free_inside.contains(between(a, b, (t[k] + t[k + 1]) / 2)))
+                continue;
             const int from = int(std::ceil(t[k] * columns_)), to = int(std::floor(t[k + 1] * columns_));
             for (int column = from; column <= to && column < columns_; ++column)
                 distance_[index(column, row)] = 1e9F;

@@ -21,8 +21,8 @@ struct FaceSpec {
     Numerals numerals = Numerals::roman;
     NumeralStand stand = NumeralStand::along_border;
     int numeral_count = 12;
-    int divide_min = 60;       ///< 0: the ring has no band of divisions
-    double summer_shift_h = 0; ///< > 0: a second row of numerals, this much on
+    int divide_min = 60;              ///< 0: the ring has no band of divisions
+    double summer_shift_h = 0;        ///< > 0: a second row of numerals, this much on
     bool numeral_height_asked = true; ///< the maker named it, and is told where it has to be less; so with the motto's
     bool motto_height_asked = true;
     bool noon_mark = true;
@@ -35,6 +35,7 @@ struct FaceSpec {
 struct Placement {
     Point foot; ///< of the nodus, work frame (mm from the middle of the plate's box)
     double nodus_height_mm = 0.0;
+    Point key; ///< what the design's "plate: centre" would say: the dial's centre, or the foot of a nodus without one
     std::string why_place, why_height; ///< for the maker; empty where the design says it
 };
 

@@ -6,6 +6,7 @@
 #include <cmath>
 #include <fmt/format.h>
 #include <map>
+#include <optional>
 
 namespace dialwright::layout {
 namespace {
@@ -35,6 +36,7 @@ class HourDrawer {
         }
         choose_steps();
         part_near_centre();
+        noon_mark_ = noon_mark();
         for (const Ray& ray : rays_)
             draw_ray(ray);
         draw_clock_lines();
@@ -109,11 +111,10 @@ class HourDrawer {
         const double wanted = bench_.spec.cutting.least_gap_mm + bench_.width_of_step(60);
         std::vector<double> start(hours.size(), 0.0);
         for (std::size_t i = 0; i + 1 < hours.size(); ++i) {
-            const Point a = hours[i]->field.front().front() - *bench_.centre,
-                        b = hours[i + 1]->field.front().front() - *bench_.centre;
+            const Point a = hours[i]->direction(), b = hours[i + 1]->direction();
             if (hours[i]->minute == hours[i + 1]->minute || dot(a, b) <= 0)
                 continue;
-            const double spread = std::abs(cross(unit(a), unit(b)));
+            const double spread = std::abs(cross(a, b));
             const double from = spread > 1e-9 ? wanted / spread : 0.0;
             start[i] = std::max(start[i], from);
             start[i + 1] = std::max(start[i + 1], from);
@@ -149,7 +150,7 @@ class HourDrawer {
         if (step >= 60) {
             for (std::size_t i = 0; i + 1 < ray.field.size(); ++i)
                 bench_.add_line(*ray.line, ray.field[i], label_of(*ray.line), width);
-            const bool noon_mark_here = bench_.spec.noon_mark && ray.minute == 720 && !ray.tick.empty();
+            const bool noon_mark_here = noon_mark_ && ray.minute == 720;
             Polyline last = {ray.field.back().front(),
                              ray.tick.empty() || noon_mark_here ? ray.field.back().back() : ray.tick.back()};
             bench_.add_line(*ray.line, last, label_of(*ray.line), width);
@@ -240,27 +241,39 @@ class HourDrawer {
         return !best || dot(clock_numeral_ray(*best).second, bench_.up) >= 0;
     }
 
-    void draw_noon_mark() {
-        if (!bench_.spec.noon_mark)
-            return;
+    /// The noon mark stands in the band of divisions, in the place of the noon tick.
+    struct NoonMark {
+        Point inner, outer;
+        double half_width_mm;
+    };
+
+    /// @return nothing where it is not asked for, or would stand too close to its neighbours
+    [[nodiscard]] std::optional<NoonMark> noon_mark() const {
         std::vector<const Ray*> noon;
-        double nearest = 1e300;
         for (const Ray& ray : rays_)
             if (ray.minute == 720 && !ray.tick.empty())
                 noon.push_back(&ray);
-        if (noon.empty())
-            return;
+        if (noon.empty() || !bench_.spec.noon_mark)
+            return std::nullopt;
         const Point inner = between(noon.front()->tick.front(), noon.back()->tick.front(), 0.5);
         const Point outer = between(noon.front()->tick.back(), noon.back()->tick.back(), 0.5);
+        double nearest = 1e300;
         for (const Ray& ray : rays_)
             if (ray.minute != 720 && !ray.tick.empty() && drawn(ray))
                 nearest = std::min(nearest, std::abs(cross(noon.front()->direction(), ray.tick.front() - inner)));
-        const double height = distance(inner, outer);
         const double gap = distance(noon.front()->tick.front(), noon.back()->tick.front());
-        const double half_width = std::min({0.36 * height + gap / 2, nearest - bench_.spec.cutting.least_gap_mm});
+        const double half_width =
+            std::min(0.36 * distance(inner, outer) + gap / 2, nearest - bench_.spec.cutting.least_gap_mm);
         if (half_width < bench_.spec.cutting.line_width_mm)
+            return std::nullopt;
+        return NoonMark{inner, outer, half_width};
+    }
+
+    void draw_noon_mark() {
+        if (!noon_mark_)
             return;
-        const Point out = unit(outer - inner), side = half_width * left_of(out), middle = between(inner, outer, 0.5);
+        const auto& [inner, outer, half_width] = *noon_mark_;
+        const Point side = half_width * left_of(unit(outer - inner)), middle = between(inner, outer, 0.5);
         bench_.add_filled({polyline({inner, middle - side, outer, middle + side}, true)}, "noon mark");
     }
 
@@ -268,6 +281,7 @@ class HourDrawer {
     std::vector<Ray> rays_;
     std::vector<const DialLine*> clock_lines_;
     std::map<int, int> step_of_hour_;
+    std::optional<NoonMark> noon_mark_;
 };
 
 } // namespace

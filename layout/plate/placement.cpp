@@ -49,6 +49,7 @@ class Placer {
             return placed_without_centre();
         Placement placement;
         placement.nodus_height_mm = plan_.nodus_height_mm > 0 ? plan_.nodus_height_mm : height_for(centre);
+        placement.key = centre;
         placement.foot = centre - placement.nodus_height_mm * Point{style_.centre->u_mm, style_.centre->v_mm};
         if (!spec_.plate.centre)
             placement.why_place = "gives the lines of all lit hours the most room";
@@ -240,6 +241,10 @@ class Placer {
             if (plan_.nodus_height_mm > 0)
                 break;
         }
+        const bool centre_counts =
+            has_style(spec_.gnomon.kind) && style_.height >= k_least_style_for_centre && style_.centre;
+        best.key = centre_counts ? best.foot + best.nodus_height_mm * Point{style_.centre->u_mm, style_.centre->v_mm}
+                                 : best.foot;
         if (!spec_.plate.centre)
             best.why_place = "brings the most hours and dates onto the plate (the centre lies off it)";
         if (!(plan_.nodus_height_mm > 0))

@@ -94,11 +94,11 @@ void put_picture(Flow& flow, const std::shared_ptr<const Drawing>& drawing, Poin
 
 /// The picture on the left, the numbers beside it.
 void put_face(Flow& flow, const CoverFace& face) {
-    const double side = std::min({0.44 * flow.width(), 78.0, 0.45 * (flow.room() + 1)});
     const double row = k_line_mm;
-    flow.need(std::max(side, row * double(face.numbers.size())) + 8);
+    flow.need(std::max(std::min(0.44 * flow.width(), 78.0), 1.3 * row * double(face.numbers.size())) + 18);
     if (!face.name.empty())
         flow.heading(face.name);
+    const double side = std::min({0.44 * flow.width(), 78.0, std::max(20.0, flow.room() - 8)});
     const double top = flow.y();
     put_picture(flow, face.drawing, {flow.left(), top - side - 1}, side);
     flow.note({flow.left(), top - side - 4.5}, "Picture of the plate, not full size.", 2.5);
