@@ -69,8 +69,10 @@ std::vector<std::pair<std::string, std::string>> key_numbers(const Commission& c
     static constexpr const char* k_nodi[] = {"notch", "ball", "tip", "hole"};
     rows.emplace_back("Nodus", std::string{k_nodi[static_cast<std::size_t>(design.gnomon.nodus)]} + ", " +
                                    say_length(face.placement.nodus_height_mm, inches) + " above the plate");
-    if (commission.plans[i].dial.gnomon_thickness_mm > 0)
-        rows.emplace_back("Gnomon", say_length(commission.plans[i].dial.gnomon_thickness_mm, inches) + " thick");
+    if (design.gnomon.thickness_mm > 0)
+        rows.emplace_back("Gnomon", say_length(design.gnomon.thickness_mm, inches) + " thick");
+    if (face.gnomon_foot_mm > 0)
+        rows.emplace_back("Its foot", say_length(face.gnomon_foot_mm, inches) + " along the substyle");
     rows.emplace_back("Shows", time_text(design.hours.time));
     rows.emplace_back("Hours", hours_text(face));
     rows.emplace_back("Date lines", fmt::format("mean of {} to {}", design.years.first, design.years.last));
@@ -112,9 +114,12 @@ std::vector<std::string> steps(const Design& design, bool has_tiles) {
     if (design.dial.kind == DialKind::wall || design.dial.kind == DialKind::leaning)
         list.push_back("Check which way the wall faces and how it leans before you cut: the lines are right for this "
                        "attitude alone.");
-    list.push_back(has_style(design.gnomon.kind)
-                       ? "Set the style at its height over the substyle, and prove it before the fixing sets."
-                       : "Set the nodus at its height over its foot, and prove it before the fixing sets.");
+    if (design.dial.kind == DialKind::equatorial)
+        list.push_back("Set the pin square through the plate, and prove it from two sides before the fixing sets.");
+    else
+        list.push_back(has_style(design.gnomon.kind)
+                           ? "Set the style at its height over the substyle, and prove it before the fixing sets."
+                           : "Set the nodus at its height over its foot, and prove it before the fixing sets.");
     return list;
 }
 

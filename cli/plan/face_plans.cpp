@@ -82,12 +82,11 @@ std::string face_name(const Design& design, bool first_face) {
 HourPlan hour_plan(const Design& design) {
     const Hours& hours = design.hours;
     const bool ring_time = hours.time == HourTime::sun || hours.time == HourTime::zone;
-    return {hours.time,   hours.first_h, hours.last_h, ring_time ? hours.divide_min : 60,
-            hours.curves, hours.reach,   true};
+    return {hours.time, hours.first_h, hours.last_h, ring_time ? hours.divide_min : 60, hours.curves, hours.reach};
 }
 
 HourPlan hour_plan(const MoreHours& more) {
-    return {more.time, more.first_h, more.last_h, 60, more.curves, HourExtent::nodus, more.first_h.has_value()};
+    return {more.time, more.first_h, more.last_h, 60, more.curves, HourExtent::nodus};
 }
 
 /// How far the zone's summer time is ahead of its standard time, in hours; 0 where it has none.

@@ -85,7 +85,7 @@ void add_face(Json& out, const FacePlan& plan, const layout::Face& face) {
                     {"normal_altitude_deg", number(attitude.normal_altitude.in_degrees())},
                     {"middle_mm", point({-face.placement.foot.x_mm, -face.placement.foot.y_mm})}};
     out["nodus"] = {{"height_mm", number(face.placement.nodus_height_mm)}};
-    out["gnomon"] = {{"thickness_mm", number(plan.dial.gnomon_thickness_mm)}};
+    out["gnomon"] = {{"thickness_mm", number(plan.dial.gnomon_thickness_mm)}, {"foot_mm", number(face.gnomon_foot_mm)}};
     out["style"] = style_json(face.delineation.style);
     out["hour_lines"] = Json::array();
     out["date_lines"] = Json::array();

@@ -2,6 +2,7 @@
 #include "cli/report/numbers.hpp"
 #include "cli/report/say.hpp"
 
+#include <cmath>
 #include <fmt/format.h>
 #include <iterator>
 
@@ -54,6 +55,13 @@ void say_style(Text& text, const layout::Face& face, const FacePlan& plan, bool 
         text.line("  centre       none: the style is parallel to the plate");
     text.line("  nodus' foot  {} right, {} up of the plate's middle", say_length(face.placement.foot.x_mm, inches),
               say_length(face.placement.foot.y_mm, inches));
+    if (face.gnomon_foot_mm > 0)
+        text.line("  gnomon foot  {} along the substyle from the centre", say_length(face.gnomon_foot_mm, inches));
+    if (style.centre)
+        text.line(
+            "  nodus at     {} along the style from the centre",
+            say_length(std::hypot(std::hypot(style.centre->u_mm, style.centre->v_mm), face.placement.nodus_height_mm),
+                       inches));
     if (plan.dial.gnomon_thickness_mm > 0)
         text.line("  gnomon       {} thick: two half-dials, this far apart",
                   say_length(plan.dial.gnomon_thickness_mm, inches));

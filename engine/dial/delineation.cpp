@@ -82,9 +82,9 @@ class Delineator {
             const bool whole_hour = minute % 60 == 0;
             if (!line.pieces.empty())
                 made_.lines.push_back(std::move(line));
-            else if (whole_hour && lit && hours.listed)
+            else if (whole_hour && lit && set == 0)
                 made_.outside_hours.push_back(line.time_h);
-            else if (whole_hour && hours.first_h && hours.listed)
+            else if (whole_hour && hours.first_h && set == 0)
                 made_.unlit_hours.push_back(line.time_h);
         }
     }

@@ -36,7 +36,6 @@ struct HourPlan {
     int divide_min = 60;                   ///< a divisor of 60
     HalfYear half_year = HalfYear::whole;
     HourExtent extent = HourExtent::style;
-    bool listed = true; ///< hours that are asked for and never lit are told
 };
 
 /// Noon at another place, shown by an hour line of this dial.

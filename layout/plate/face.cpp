@@ -157,6 +157,12 @@ Polyline Bench::to_work(const PlatePolyline& piece) const {
     return line;
 }
 
+void drop_scraps(std::vector<Polyline>& pieces, double width_mm) {
+    constexpr double k_least_widths = 6;
+    if (pieces.size() > 1)
+        std::erase_if(pieces, [&](const Polyline& piece) { return length_mm(piece) < k_least_widths * width_mm; });
+}
+
 Angle upright_turn(Point along, Point up) {
     return dot(left_of(along), up) >= 0 ? turn_of(along) : turn_of(-1.0 * along);
 }

@@ -168,8 +168,11 @@ class FieldDrawer {
                 }
                 straight_.push_back({&line, part});
             }
-            for (const Polyline& piece : clipped(part, {{}, bench_.keep_out}))
-                bench_.add_line(line, piece, label_of(line), bench_.field_line_width(line.family));
+            const double width = bench_.field_line_width(line.family);
+            std::vector<Polyline> pieces = clipped(part, {{}, bench_.keep_out});
+            drop_scraps(pieces, width);
+            for (const Polyline& piece : pieces)
+                bench_.add_line(line, piece, label_of(line), width);
         }
     }
 

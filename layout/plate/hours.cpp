@@ -52,6 +52,11 @@ class HourDrawer {
                 std::reverse(whole.begin(), whole.end()); // from the centre outward
             Ray ray{&line, int(std::lround(line.time_h * 60)), clipped(whole, bench_.field()), {}};
             const auto ticks = clipped(whole, {{bench_.rings.numerals}, {bench_.rings.divisions}});
+            // The outermost piece carries the tick, however short; scraps before it are dropped.
+            const double least = 6 * bench_.width_of_step(line.step_min);
+            for (std::size_t i = 0; i + 1 < ray.field.size();)
+                length_mm(ray.field[i]) < least ? void(ray.field.erase(ray.field.begin() + std::ptrdiff_t(i)))
+                                                : void(++i);
             if (ray.field.empty())
                 continue;
             // Only the outer end is a tick; a line whose centre is off the plate enters through the ring as well.
