@@ -11,7 +11,7 @@ namespace dialwright::cli {
 [[nodiscard]] std::string numbers_text(const Commission& commission);
 /// For programs: docs/output-formats.md. One line of JSON, always valid: what has no value is null.
 [[nodiscard]] std::string numbers_json(const Commission& commission);
-/// The hour lines as a table with a heading row. `only_face` < 0: all faces.
+/// The hour lines as a table with a heading row.
 [[nodiscard]] std::string hour_lines_csv(const Commission& commission);
 
 } // namespace dialwright::cli

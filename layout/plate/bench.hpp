@@ -47,9 +47,6 @@ struct Bench {
 /// Drops what a label has left of a line on both its sides: crumbs that a tool would only spoil.
 void drop_scraps(std::vector<Polyline>& pieces, double width_mm);
 
-/// The anticlockwise turn at which text runs so that it stands upright for the reader along a line of direction `along`.
-[[nodiscard]] Angle upright_turn(Point along, Point up);
-
 /// Where a whole hour's line points to in the chapter ring.
 struct RingHour {
     int hour;

@@ -32,7 +32,7 @@ PlateBox window_of(const Outline& edge, Point foot) {
     return {box.left_mm - foot.x_mm, box.bottom_mm - foot.y_mm, box.right_mm - foot.x_mm, box.top_mm - foot.y_mm};
 }
 
-Bench& drawn(Bench& bench, double foot_mm, double nodus_height_mm) {
+void draw_all(Bench& bench, double foot_mm, double nodus_height_mm) {
     draw_borders(bench);
     draw_gnomon_seat(bench, foot_mm, nodus_height_mm);
     draw_field_lines(bench); // labels first ask for room; hour lines then stop for them
@@ -40,7 +40,6 @@ Bench& drawn(Bench& bench, double foot_mm, double nodus_height_mm) {
     draw_motto(bench);
     draw_place_line(bench);
     draw_compass(bench);
-    return bench;
 }
 
 void report_unlit(const Delineation& delineation, std::vector<std::string>& warnings) {
@@ -163,10 +162,6 @@ void drop_scraps(std::vector<Polyline>& pieces, double width_mm) {
         std::erase_if(pieces, [&](const Polyline& piece) { return length_mm(piece) < k_least_widths * width_mm; });
 }
 
-Angle upright_turn(Point along, Point up) {
-    return dot(left_of(along), up) >= 0 ? turn_of(along) : turn_of(-1.0 * along);
-}
-
 Face draw_face(DialPlan plan, const MeanYear& year, const FaceSpec& spec) {
     Face face;
     face.name = spec.name;
@@ -176,7 +171,7 @@ Face draw_face(DialPlan plan, const MeanYear& year, const FaceSpec& spec) {
 
     Bench bench{spec, face.delineation, face.placement};
     face.gnomon_foot_mm = gnomon_foot_mm(bench);
-    drawn(bench, face.gnomon_foot_mm, plan.nodus_height_mm);
+    draw_all(bench, face.gnomon_foot_mm, plan.nodus_height_mm);
 
     const auto by_family_and_time = [](const DrawnLine& a, const DrawnLine& b) {
         const auto order = [](const DrawnLine& line) {
