@@ -3,6 +3,7 @@
 
 #include "cli/design/read_design.hpp"
 #include "cli/plan/face_plans.hpp"
+#include "layout/gnomon/gnomon_parts.hpp"
 
 #include <filesystem>
 #include <optional>
@@ -13,8 +14,9 @@ namespace dialwright::cli {
 struct Commission {
     Design design;
     MeanYear year;
-    std::vector<FacePlan> plans;     ///< the nodus' height filled in
-    std::vector<layout::Face> faces; ///< beside their plans
+    std::vector<FacePlan> plans;                    ///< the nodus' height filled in
+    std::vector<layout::Face> faces;                ///< beside their plans
+    std::vector<std::vector<layout::Part>> gnomons; ///< the parts of each face's gnomon, beside their plans
 };
 
 /// A commission, or what is wrong with its design: one or the other, never both, never neither.

@@ -89,32 +89,112 @@ void check_gnomon_kind(const Design& design, const Section& gnomon) {
     if (dial.kind == DialKind::equatorial && (kind == GnomonKind::upright_pin || kind == GnomonKind::disc))
         gnomon.error("kind", "the gnomon of an equatorial dial stands square through its plate",
                      "give edge, rod or pin");
+    if (dial.kind == DialKind::equatorial)
+        gnomon.refuse({"joint"}, "the gnomon of an equatorial dial stands square through its plate, in one hole",
+                      "leave it out");
     if (kind != GnomonKind::edge)
-        gnomon.refuse({"foot", "holes", "hole diameter"}, "only an edge has a foot along the substyle",
-                      "leave it out, or make the gnomon \"kind: edge\"");
+        gnomon.refuse({"foot", "holes", "hole diameter", "joint", "tenons", "tenon length", "proud", "fit", "hook",
+                       "keel", "flange width", "flange thickness"},
+                      "only an edge has a foot along the substyle", "leave it out, or make the gnomon \"kind: edge\"");
+    if (kind == GnomonKind::edge || kind == GnomonKind::disc)
+        gnomon.refuse({"socket"}, "only a rod or a pin stands in a socket", "leave it out");
+    if (kind != GnomonKind::rod)
+        gnomon.refuse({"strut"}, "only a rod is held by a strut", "leave it out, or make the gnomon \"kind: rod\"");
+    if (kind == GnomonKind::rod || kind == GnomonKind::disc)
+        gnomon.refuse({"rounding"}, "a rod's tip is always round, and a disc has none", "leave it out");
+    if (design.gnomon.nodus != NodusKind::ball)
+        gnomon.refuse({"ball"}, "the nodus is no ball", "leave it out, or give \"nodus: ball\"");
+    if (design.gnomon.ball_mm > 0 && design.gnomon.ball_mm <= design.gnomon.thickness_mm && kind != GnomonKind::edge)
+        gnomon.error("ball",
+                     fmt::format("a ball of {} does not show on a gnomon of {}",
+                                 length_text(design.gnomon.ball_mm, design.units),
+                                 length_text(design.gnomon.thickness_mm, design.units)),
+                     "three times the gnomon's thickness shows well");
+}
+
+constexpr std::array<Choice<FootKind>, 5> k_joints = {{{"plain", FootKind::plain},
+                                                       {"tenons", FootKind::tenons},
+                                                       {"hooked tenons", FootKind::hooked_tenons},
+                                                       {"flange", FootKind::flange},
+                                                       {"halving", FootKind::halving}}};
+
+bool goes_through(FootKind kind) {
+    return kind == FootKind::tenons || kind == FootKind::hooked_tenons || kind == FootKind::halving;
 }
 
 /// Holes that fit in the foot.
-void read_fixing(Design& design, const Section& gnomon) {
-    Gnomon& made = design.gnomon;
-    if (const auto mm = gnomon.length("foot", 1.0, k_largest_plate_mm))
-        made.foot_mm = *mm;
-    made.holes = gnomon.count("holes", 0, 20).value_or(0);
-    length_into(made.hole_diameter_mm, gnomon, "hole diameter", 0.2, 100.0);
-    if (gnomon.has("hole diameter") && !gnomon.has("holes"))
+void check_holes(const Design& design, const Section& gnomon) {
+    const Gnomon& made = design.gnomon;
+    const double hole_mm = made.joint.hole_mm;
+    if (gnomon.has("hole diameter") && !gnomon.has("holes") && made.joint.kind != FootKind::flange)
         gnomon.error("hole diameter", "there are no holes to have it", "say how many, as in \"holes: 2\"");
-    if (made.foot_mm && made.hole_diameter_mm >= *made.foot_mm)
+    if (made.foot_mm && hole_mm >= *made.foot_mm)
         gnomon.error("hole diameter",
-                     fmt::format("a hole of {} does not fit in a foot of {}",
-                                 length_text(made.hole_diameter_mm, design.units),
+                     fmt::format("a hole of {} does not fit in a foot of {}", length_text(hole_mm, design.units),
                                  length_text(*made.foot_mm, design.units)),
                      "make the holes smaller or the foot longer");
-    else if (made.foot_mm && made.holes * made.hole_diameter_mm >= *made.foot_mm)
+    else if (made.foot_mm && made.joint.count * hole_mm >= *made.foot_mm)
         gnomon.error("holes",
-                     fmt::format("{} holes of {} do not fit in a foot of {}", made.holes,
-                                 length_text(made.hole_diameter_mm, design.units),
-                                 length_text(*made.foot_mm, design.units)),
+                     fmt::format("{} holes of {} do not fit in a foot of {}", made.joint.count,
+                                 length_text(hole_mm, design.units), length_text(*made.foot_mm, design.units)),
                      "make fewer or smaller holes");
+}
+
+/// Keys that belong to one joint are wrong beside another.
+void refuse_other_joints(const Section& gnomon, FootKind kind) {
+    const auto only = [&](bool belongs, std::initializer_list<std::string_view> keys, const char* of) {
+        if (!belongs)
+            gnomon.refuse(keys, fmt::format("this joint has no such thing: it goes with {}", of),
+                          "leave it out, or name the joint that has it");
+    };
+    only(kind == FootKind::plain || kind == FootKind::flange, {"holes", "hole diameter"},
+         "\"joint: plain\" or \"joint: flange\"");
+    only(kind == FootKind::tenons || kind == FootKind::hooked_tenons, {"tenons", "tenon length"},
+         "\"joint: tenons\" or \"joint: hooked tenons\"");
+    only(kind == FootKind::tenons, {"proud"}, "\"joint: tenons\"");
+    only(goes_through(kind), {"fit"}, "a joint that goes through the plate");
+    only(kind == FootKind::hooked_tenons, {"hook"}, "\"joint: hooked tenons\"");
+    only(kind == FootKind::hooked_tenons || kind == FootKind::halving, {"keel"},
+         "\"joint: hooked tenons\" or \"joint: halving\"");
+    only(kind == FootKind::flange, {"flange width", "flange thickness"}, "\"joint: flange\"");
+}
+
+/// What a joint through the plate, or one that holds the gnomon by its thickness, must know.
+void check_joint_thickness(const Design& design, const Section& gnomon) {
+    const FootKind kind = design.gnomon.joint.kind;
+    if (kind == FootKind::plain)
+        return;
+    if (design.gnomon.thickness_mm <= 0 && !gnomon.state().faulty("gnomon: thickness"))
+        gnomon.error("joint", "this joint is cut to the gnomon's thickness, which the design does not say",
+                     "measure the sheet and give it, as in \"thickness: 5 mm\"");
+    if (goes_through(kind) && design.plate.thickness_mm <= 0 && !gnomon.state().faulty("plate: thickness"))
+        gnomon.error("joint", "this joint goes through the plate, whose thickness the design does not say",
+                     "measure the plate and give it under \"plate\", as in \"thickness: 12 mm\"");
+}
+
+void read_joint(Design& design, const Section& gnomon) {
+    Gnomon& made = design.gnomon;
+    JointOptions& joint = made.joint;
+    if (const auto mm = gnomon.length("foot", 1.0, k_largest_plate_mm))
+        made.foot_mm = *mm;
+    joint.kind = gnomon.choice<FootKind>("joint", k_joints).value_or(FootKind::plain);
+    const bool tenons = joint.kind == FootKind::tenons || joint.kind == FootKind::hooked_tenons;
+    joint.count = tenons ? gnomon.count("tenons", 1, 10).value_or(2)
+                         : gnomon.count("holes", joint.kind == FootKind::flange ? 1 : 0, 20)
+                               .value_or(joint.kind == FootKind::flange ? 2 : 0);
+    if (joint.kind == FootKind::halving)
+        joint.count = 1;
+    length_into(joint.hole_mm, gnomon, "hole diameter", 0.2, 100.0);
+    length_into(joint.tenon_mm, gnomon, "tenon length", 1.0, k_largest_plate_mm);
+    length_into(joint.proud_mm, gnomon, "proud", 0.0, 100.0);
+    length_into(joint.fit_mm, gnomon, "fit", -0.5, 2.0); // below zero where it is pressed in
+    length_into(joint.hook_mm, gnomon, "hook", 0.5, 200.0);
+    length_into(joint.keel_mm, gnomon, "keel", 1.0, 500.0);
+    length_into(joint.flange_width_mm, gnomon, "flange width", 2.0, k_largest_plate_mm);
+    length_into(joint.flange_thickness_mm, gnomon, "flange thickness", 0.3, 100.0);
+    refuse_other_joints(gnomon, joint.kind);
+    check_holes(design, gnomon);
+    check_joint_thickness(design, gnomon);
 }
 
 constexpr double k_least_letter_mm = 0.5;
@@ -138,8 +218,12 @@ void read_gnomon(Design& design, const Section& top) {
     if (const auto mm = gnomon.length("nodus height", 1.0, k_largest_plate_mm))
         made.nodus_height_mm = *mm;
     length_into(made.thickness_mm, gnomon, "thickness", 0.0, k_largest_plate_mm);
+    length_into(made.rounding_mm, gnomon, "rounding", 0.0, 200.0);
+    length_into(made.ball_mm, gnomon, "ball", 1.0, 500.0);
+    length_into(made.socket_mm, gnomon, "socket", 1.0, k_largest_plate_mm);
+    length_into(made.strut_mm, gnomon, "strut", 1.0, k_largest_plate_mm);
     if (made.kind == GnomonKind::edge)
-        read_fixing(design, gnomon);
+        read_joint(design, gnomon);
     check_gnomon_kind(design, gnomon);
 }
 
