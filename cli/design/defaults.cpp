@@ -119,10 +119,18 @@ void fill_gnomon_and_cutting(Design& design, Filler& filler, double s) {
     fill_joint(gnomon, filler, s);
     Cutting& cutting = design.cutting;
     const double line = std::clamp(0.0016 * s, 0.3, 3.0), sixty_fourth = 25.4 / 64.0;
-    filler.fill(cutting.line_width_mm, "cutting: line width",
-                filler.inches() ? std::max(1.0, std::round(line / sixty_fourth)) * sixty_fourth
-                                : std::round(line * 10.0) / 10.0,
-                "1/600 of the plate: reads from where the plate is read");
+    const bool tool_says = cutting.diameter_mm > 0 || (cutting.tool != Tool::any && !filler.wants("cutting: depth"));
+    if (tool_says && filler.wants("cutting: line width"))
+        filler.note("cutting: line width", length_text(cutting.line_width_mm, design.units), "what the tool leaves");
+    else
+        filler.fill(cutting.line_width_mm, "cutting: line width",
+                    filler.inches() ? std::max(1.0, std::round(line / sixty_fourth)) * sixty_fourth
+                                    : std::round(line * 10.0) / 10.0,
+                    "1/600 of the plate: reads from where the plate is read");
+    if ((cutting.tool == Tool::v_cutter || cutting.tool == Tool::chisel) && filler.wants("cutting: depth"))
+        filler.fill(cutting.depth_mm, "cutting: depth",
+                    std::max(0.0, cutting.line_width_mm - cutting.flat_mm) / (2 * tan(cutting.point_angle / 2)),
+                    "what the line width asks of this V");
     filler.fill(cutting.least_gap_mm, "cutting: least gap", 2.0 * cutting.line_width_mm, "twice the line width");
 }
 

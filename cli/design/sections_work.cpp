@@ -1,8 +1,7 @@
 // SPDX-License-Identifier: MIT
-// What is put on the plate and how it is cut: borders, gnomon, lettering, cutting, print.
+// What is put on the plate and how it is cut: borders, gnomon, lettering.
 #include "cli/design/nearest.hpp"
 #include "cli/design/sections.hpp"
-#include "layout/sheet/paper.hpp"
 
 #include <fmt/format.h>
 
@@ -14,31 +13,9 @@ namespace dialwright::cli {
 
 namespace {
 
-/// Leaves `target` alone when there is no good value.
-void length_into(double& target, const Section& section, std::string_view key, double least_mm, double most_mm) {
-    if (const auto mm = section.length(key, least_mm, most_mm))
-        target = *mm;
-}
-
 void line_into(std::string& target, const Section& section, std::string_view key, std::size_t most) {
     if (const auto text = section.line(key, most))
         target = *text;
-}
-
-void read_paper(Design& design, const Section& print) {
-    const std::optional<std::string> name = print.line("paper", 100);
-    if (!name)
-        return;
-    design.print.paper = *name;
-    if (layout::paper_named(*name))
-        return;
-    std::vector<std::string> names = layout::paper_names();
-    std::erase_if(names, [](const std::string& one) { return one.starts_with("roll"); }); // examples, not names
-    const std::vector<std::string_view> candidates{names.begin(), names.end()};
-    const std::string_view near = nearest(*name, candidates);
-    print.error("paper", in_quotes(*name) + " is not a paper that is known here",
-                near.empty() ? "give A4, A3, Letter, Tabloid, or a roll by its width from 100 mm, as in \"roll 610 mm\""
-                             : fmt::format("did you mean {}?", near));
 }
 
 constexpr std::array<Choice<GnomonKind>, 5> k_gnomons = {{{"edge", GnomonKind::edge},
@@ -184,14 +161,14 @@ void read_joint(Design& design, const Section& gnomon) {
                                .value_or(joint.kind == FootKind::flange ? 2 : 0);
     if (joint.kind == FootKind::halving)
         joint.count = 1;
-    length_into(joint.hole_mm, gnomon, "hole diameter", 0.2, 100.0);
-    length_into(joint.tenon_mm, gnomon, "tenon length", 1.0, k_largest_plate_mm);
-    length_into(joint.proud_mm, gnomon, "proud", 0.0, 100.0);
-    length_into(joint.fit_mm, gnomon, "fit", -0.5, 2.0); // below zero where it is pressed in
-    length_into(joint.hook_mm, gnomon, "hook", 0.5, 200.0);
-    length_into(joint.keel_mm, gnomon, "keel", 1.0, 500.0);
-    length_into(joint.flange_width_mm, gnomon, "flange width", 2.0, k_largest_plate_mm);
-    length_into(joint.flange_thickness_mm, gnomon, "flange thickness", 0.3, 100.0);
+    gnomon.length_into(joint.hole_mm, "hole diameter", 0.2, 100.0);
+    gnomon.length_into(joint.tenon_mm, "tenon length", 1.0, k_largest_plate_mm);
+    gnomon.length_into(joint.proud_mm, "proud", 0.0, 100.0);
+    gnomon.length_into(joint.fit_mm, "fit", -0.5, 2.0); // below zero where it is pressed in
+    gnomon.length_into(joint.hook_mm, "hook", 0.5, 200.0);
+    gnomon.length_into(joint.keel_mm, "keel", 1.0, 500.0);
+    gnomon.length_into(joint.flange_width_mm, "flange width", 2.0, k_largest_plate_mm);
+    gnomon.length_into(joint.flange_thickness_mm, "flange thickness", 0.3, 100.0);
     refuse_other_joints(gnomon, joint.kind);
     check_holes(design, gnomon);
     check_joint_thickness(design, gnomon);
@@ -205,9 +182,9 @@ constexpr double k_largest_letter_mm = 1000.0;
 void read_borders(Design& design, const Section& top) {
     const Section borders{top.entry("borders"), "borders", top.state()};
     Borders& made = design.borders;
-    length_into(made.margin_mm, borders, "margin", 0.0, k_largest_plate_mm / 2);
-    length_into(made.chapter_ring_mm, borders, "chapter ring", 0.0, k_largest_plate_mm / 2);
-    length_into(made.inner_mm, borders, "inner border", 0.0, k_largest_plate_mm / 2);
+    borders.length_into(made.margin_mm, "margin", 0.0, k_largest_plate_mm / 2);
+    borders.length_into(made.chapter_ring_mm, "chapter ring", 0.0, k_largest_plate_mm / 2);
+    borders.length_into(made.inner_mm, "inner border", 0.0, k_largest_plate_mm / 2);
 }
 
 void read_gnomon(Design& design, const Section& top) {
@@ -217,11 +194,11 @@ void read_gnomon(Design& design, const Section& top) {
     read_nodus(design, gnomon);
     if (const auto mm = gnomon.length("nodus height", 1.0, k_largest_plate_mm))
         made.nodus_height_mm = *mm;
-    length_into(made.thickness_mm, gnomon, "thickness", 0.0, k_largest_plate_mm);
-    length_into(made.rounding_mm, gnomon, "rounding", 0.0, 200.0);
-    length_into(made.ball_mm, gnomon, "ball", 1.0, 500.0);
-    length_into(made.socket_mm, gnomon, "socket", 1.0, k_largest_plate_mm);
-    length_into(made.strut_mm, gnomon, "strut", 1.0, k_largest_plate_mm);
+    gnomon.length_into(made.thickness_mm, "thickness", 0.0, k_largest_plate_mm);
+    gnomon.length_into(made.rounding_mm, "rounding", 0.0, 200.0);
+    gnomon.length_into(made.ball_mm, "ball", 1.0, 500.0);
+    gnomon.length_into(made.socket_mm, "socket", 1.0, k_largest_plate_mm);
+    gnomon.length_into(made.strut_mm, "strut", 1.0, k_largest_plate_mm);
     if (made.kind == GnomonKind::edge)
         read_joint(design, gnomon);
     check_gnomon_kind(design, gnomon);
@@ -231,10 +208,10 @@ void read_lettering(Design& design, const Section& top) {
     const Section lettering{top.entry("lettering"), "lettering", top.state()};
     LetteringChoice& made = design.lettering;
     line_into(made.family, lettering, "font", 100);
-    length_into(made.numeral_height_mm, lettering, "numeral height", k_least_letter_mm, k_largest_letter_mm);
-    length_into(made.label_height_mm, lettering, "label height", k_least_letter_mm, k_largest_letter_mm);
+    lettering.length_into(made.numeral_height_mm, "numeral height", k_least_letter_mm, k_largest_letter_mm);
+    lettering.length_into(made.label_height_mm, "label height", k_least_letter_mm, k_largest_letter_mm);
     line_into(made.motto, lettering, "motto", 200);
-    length_into(made.motto_height_mm, lettering, "motto height", k_least_letter_mm, k_largest_letter_mm);
+    lettering.length_into(made.motto_height_mm, "motto height", k_least_letter_mm, k_largest_letter_mm);
     if (lettering.has("motto height") && !lettering.has("motto"))
         lettering.error("motto height", "there is no motto to have it", "give the motto, or leave this out");
     line_into(made.place_line, lettering, "place line", 200);
@@ -245,20 +222,6 @@ void read_lettering(Design& design, const Section& top) {
     const std::string where =
         latitude_text(design.place.site.latitude) + "  " + longitude_text(design.place.site.longitude);
     made.place_line = !*wanted ? std::string{} : (design.place.name.empty() ? where : design.place.name + "  " + where);
-}
-
-void read_cutting(Design& design, const Section& top) {
-    const Section cutting{top.entry("cutting"), "cutting", top.state()};
-    length_into(design.cutting.line_width_mm, cutting, "line width", 0.05, 10.0);
-    length_into(design.cutting.least_gap_mm, cutting, "least gap", 0.05, 50.0);
-}
-
-void read_print(Design& design, const Section& top) {
-    const Section print{top.entry("print"), "print", top.state()};
-    read_paper(design, print);
-    length_into(design.print.margin_mm, print, "margin", 0.0, 50.0);
-    length_into(design.print.overlap_mm, print, "overlap", 0.0, 100.0);
-    print.read_into(design.print.own_size, "own size", yes_or_no);
 }
 
 } // namespace dialwright::cli

@@ -71,9 +71,24 @@ struct LetteringChoice {
     std::string place_line; ///< empty: none
 };
 
+/// What the lines are cut with.
+enum class Tool {
+    any,      ///< not said: nothing is checked against it
+    v_cutter, ///< a pointed cutter that turns: width = flat + 2 · depth · tan(angle / 2)
+    end_mill,
+    laser,
+    chisel ///< by hand: the line is a V of the chisel's own angle
+};
+
 struct Cutting {
-    double line_width_mm = 0.4; ///< the tool's own line: hour lines; finer ones are never thinner than half of it
-    double least_gap_mm = 0.8;  ///< clear material between two lines
+    Tool tool = Tool::any;
+    Angle point_angle;           ///< between the two sides of a V
+    double depth_mm = 0.0;       ///< of the lines
+    double flat_mm = 0.0;        ///< at a V cutter's point
+    double diameter_mm = 0.0;    ///< of an end mill or a laser's spot
+    bool single_strokes = false; ///< lettering for an engraving point, in place of outlines
+    double line_width_mm = 0.4;  ///< the tool's own line: hour lines; finer ones are never thinner than half of it
+    double least_gap_mm = 0.8;   ///< clear material between two lines
 };
 
 } // namespace dialwright::layout
