@@ -2,6 +2,7 @@
 #pragma once
 
 #include "engine/dial/dial_plan.hpp"
+#include "layout/correction/correction_plate.hpp"
 #include "layout/plate/plate_spec.hpp"
 
 #include <chrono>
@@ -16,6 +17,7 @@ using dialwright::HalfYear;
 using dialwright::HourExtent;
 using dialwright::HourTime;
 using layout::Borders;
+using layout::CorrectionForm;
 using layout::Cutting;
 using layout::Gnomon;
 using layout::GnomonKind;
@@ -26,6 +28,7 @@ using layout::NumeralStand;
 using layout::Plate;
 using layout::PlatePointMm;
 using layout::PlateShape;
+using layout::TableSteps;
 
 /// What a design file says, with what it leaves open filled in by the trade's habit (each such filling is in `assumed`).
 /// Lengths are millimetres. One struct a section of the file; docs/design-file.md describes each key.
@@ -83,6 +86,15 @@ struct Dates {
     bool labels = true;
 };
 
+/// The plate that says how to come from the dial to the clock.
+struct CorrectionMade {
+    bool wanted = false; ///< the section is there: a plate is made
+    CorrectionForm form = CorrectionForm::graph;
+    double width_mm = 0.0, height_mm = 0.0; ///< a ring: both its diameter
+    double letter_height_mm = 0.0;
+    std::optional<TableSteps> dates; ///< of a table; nothing: the closest for which its letters have room
+};
+
 struct Years {
     int first = 2027, last = 2046;
 };
@@ -117,6 +129,7 @@ struct Design {
     Hours hours;
     Also also;
     Dates dates;
+    CorrectionMade correction;
     Years years;
     LetteringChoice lettering;
     Cutting cutting;

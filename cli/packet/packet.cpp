@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "cli/packet/packet.hpp"
 
+#include "cli/packet/correction_parts.hpp"
 #include "cli/plan/feasible.hpp"
 #include "cli/report/numbers.hpp"
 #include "cli/report/say.hpp"
@@ -141,13 +142,18 @@ void add_own_size(std::vector<Sheet>& sheets, const std::shared_ptr<const Drawin
     }
 }
 
-layout::SheetBook book_of(const Commission& commission, Packet& packet) {
-    const Design& design = commission.design;
+layout::PrintOptions print_options(const Design& design) {
     layout::PrintOptions options;
     options.paper = layout::paper_named(design.print.paper).value();
     options.margin_mm = design.print.margin_mm;
     options.overlap_mm = design.print.overlap_mm;
     options.inches = design.units == Units::inches;
+    return options;
+}
+
+layout::SheetBook book_of(const Commission& commission, CorrectionParts& correction, Packet& packet) {
+    const Design& design = commission.design;
+    layout::PrintOptions options = print_options(design);
 
     std::vector<layout::Tiling> tilings;
     std::vector<layout::CoverFace> covers;
@@ -160,6 +166,16 @@ layout::SheetBook book_of(const Commission& commission, Packet& packet) {
         if (design.print.own_size)
             add_own_size(own_sizes, drawing, options, packet.warnings);
         covers.push_back({name, drawing, key_numbers(commission, i), nullptr});
+    }
+    std::vector<Sheet> correction_sheets;
+    for (const CorrectionParts::Part& part : correction.parts) {
+        options.title = design.title + ", " + part.title;
+        for (Sheet& sheet : layout::tile(part.drawing, options).sheets) {
+            sheet.title = part.title + ", " + sheet.title;
+            correction_sheets.push_back(std::move(sheet));
+        }
+        if (design.print.own_size)
+            add_own_size(correction_sheets, part.drawing, options, packet.warnings);
     }
     bool has_tiles = false;
     for (std::size_t i = 0; i < tilings.size(); ++i) {
@@ -177,6 +193,10 @@ layout::SheetBook book_of(const Commission& commission, Packet& packet) {
     for (layout::Tiling& tiling : tilings)
         for (Sheet& sheet : tiling.sheets)
             book.sheets.push_back(std::move(sheet));
+    for (Sheet& sheet : correction.card)
+        book.sheets.push_back(std::move(sheet));
+    for (Sheet& sheet : correction_sheets)
+        book.sheets.push_back(std::move(sheet));
     for (Sheet& sheet : own_sizes)
         book.sheets.push_back(std::move(sheet));
     return book;
@@ -204,7 +224,9 @@ Packet make_packet(const Commission& commission) {
                 commission.plans[i].spec.name.empty() ? warning : commission.plans[i].spec.name + ": " + warning);
 
     packet.cautions = cautions(commission.design);
-    const layout::SheetBook book = book_of(commission, packet);
+    CorrectionParts correction = correction_parts(commission, print_options(commission.design));
+    packet.warnings.insert(packet.warnings.end(), correction.warnings.begin(), correction.warnings.end());
+    const layout::SheetBook book = book_of(commission, correction, packet);
     packet.sheets = book.sheets.size();
     auto pdf =
         std::async(std::launch::async, [&book] { return layout::pdf_of(book); }); // the longest: beside all others
@@ -215,6 +237,9 @@ Packet make_packet(const Commission& commission) {
             {{"plate" + face_suffix(commission, i) + ".svg", layout::svg_of(drawing, layout::bounds_of(drawing))},
              "the plate for a machine, full scale, layers by process"});
     }
+    for (const CorrectionParts::Part& part : correction.parts)
+        packet.items.push_back(
+            {{part.file + ".svg", layout::svg_of(*part.drawing, layout::bounds_of(*part.drawing))}, part.purpose});
     packet.items.push_back({{"hour-lines.csv", hour_lines_csv(commission)}, "angles and ends of the hour lines"});
     packet.items.push_back({{"numbers.txt", numbers_text(commission)}, "all numbers, to read"});
     packet.items.push_back({{"numbers.json", numbers_json(commission)}, "all numbers, for programs"});

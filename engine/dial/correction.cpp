@@ -69,26 +69,23 @@ std::vector<double> Correction::days_of(double minutes) const {
 
 Correction::Spread Correction::spread() const {
     using namespace std::chrono;
-    const auto equation = [&](double day) { return year_.at(mean_day(day)).equation_of_time; };
-    // The mean changes fastest where its rate turns.
-    const std::vector<double> steepest = zeros([&](double day) {
-        const auto rate = [&](double at) { return year_.rate_at(mean_day(at)).equation_of_time.in_radians(); };
-        return rate(day + 0.5) - rate(day - 0.5);
-    });
-    Spread spread;
-    for (const double day : steepest) {
-        const month_day date = year_.date_of(day);
-        if (date == February / 29)
-            continue;
-        const Angle mean = equation(noon_of(date));
-        for (int y = year_.first_year(); y <= year_.last_year(); ++y) {
-            const Instant noon = Instant{sys_days{std::chrono::year{y} / date}} +
-                                 round<microseconds>(duration<double, days::period>(0.5 + noon_shift_days_));
-            const double off_s =
-                std::abs((apparent_sun(noon).equation_of_time - mean).signed_turn().in_minutes_of_time()) * 60;
-            if (off_s > spread.seconds)
-                spread = {off_s, date};
+    // Years stray by when the date falls in them: most where the mean changes fastest.
+    month_day steepest = January / 1;
+    double most = 0.0;
+    for (const month_day date : dates_of_year()) {
+        const double rate = std::abs(year_.rate_at(mean_day(noon_of(date))).equation_of_time.in_radians());
+        if (date != February / 29 && rate > most) {
+            most = rate;
+            steepest = date;
         }
+    }
+    const Angle mean = year_.at(mean_day(noon_of(steepest))).equation_of_time;
+    Spread spread{0.0, steepest};
+    for (int y = year_.first_year(); y <= year_.last_year(); ++y) {
+        const Instant noon = Instant{sys_days{std::chrono::year{y} / steepest}} +
+                             round<microseconds>(duration<double, days::period>(0.5 + noon_shift_days_));
+        const Angle off = (apparent_sun(noon).equation_of_time - mean).signed_turn();
+        spread.seconds = std::max(spread.seconds, std::abs(off.in_minutes_of_time()) * 60);
     }
     return spread;
 }

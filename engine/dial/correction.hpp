@@ -59,7 +59,8 @@ class Correction {
         double seconds = 0.0;
         std::chrono::month_day date{};
     };
-    /// Takes the Sun of every year on the days on which the mean changes fastest, where single years stray farthest: 40 µs each.
+    /// Takes the Sun of every year on the date on which the mean changes fastest, where single years stray farthest: 40 µs
+    /// each.
     [[nodiscard]] Spread spread() const;
 
   private:
