@@ -63,7 +63,7 @@ std::vector<std::string> how_to_read(const Design& design) {
     else if (design.gnomon.kind == GnomonKind::rod)
         list.push_back("The time is where the middle of the rod’s shadow lies among the hour lines.");
     else
-        list.push_back("The time is where the shadow of the gnomon’s sloping edge lies among the hour lines.");
+        list.push_back("The time is where the shadow of the gnomon’s straight edge lies among the hour lines.");
     list.push_back(
         "Between two lines, judge by eye how far the shadow has gone from one to the next. Its edge is soft: "
         "read its middle.");
@@ -94,9 +94,10 @@ std::string example(const Correction& correction, std::chrono::month_day date, d
     const double ahead_h = summer ? double(correction.summer().ahead.count()) / 3600 : 0.0;
     const std::string more =
         summer ? fmt::format(", and add {} for summer time", layout::say_ahead(correction.summer().ahead)) : "";
-    return fmt::format("On {} the dial shows {}. {}{}{}: clock time is {}.", layout::say_date(date), clock_of(dial_h),
+    return fmt::format("On {} the dial shows {}. {}{}{}: clock time is {}{}.", layout::say_date(date), clock_of(dial_h),
                        change, minutes == 0 || std::abs(minutes) >= 60 ? "" : " minutes", more,
-                       clock_of(dial_h + minutes / 60 + ahead_h));
+                       clock_of(dial_h + minutes / 60 + ahead_h),
+                       correction.summer().kind == SummerTime::Kind::irregular ? ", standard time" : "");
 }
 
 /// A date in the middle of summer time.
@@ -116,18 +117,19 @@ std::vector<std::string> examples(const Correction& correction, const Design& de
     return list;
 }
 
+/// Months side by side, their tenth days below each other.
 void put_table(Flow& flow, const Correction& correction) {
-    std::vector<Flow::Column> columns{{"", layout::Align::left}};
-    for (const unsigned day : {1U, 6U, 11U, 16U, 21U, 26U})
-        columns.push_back({fmt::format("{}", day), layout::Align::right});
+    std::vector<Flow::Column> columns{{"", layout::Align::right}};
+    for (unsigned month = 1; month <= 12; ++month)
+        columns.push_back({std::string{layout::month_name(month)}.substr(0, 3), layout::Align::right});
     std::vector<std::vector<std::string>> rows;
-    for (unsigned month = 1; month <= 12; ++month) {
-        std::vector<std::string> row{layout::month_name(month)};
-        for (const unsigned day : {1U, 6U, 11U, 16U, 21U, 26U})
+    for (const unsigned day : {1U, 11U, 21U}) {
+        std::vector<std::string> row{fmt::format("{}", day)};
+        for (unsigned month = 1; month <= 12; ++month)
             row.push_back(layout::add_or_take(correction.add_min(std::chrono::month{month} / std::chrono::day{day})));
         rows.push_back(std::move(row));
     }
-    flow.table(columns, rows);
+    flow.table(columns, rows, 2.5);
 }
 
 /// The graph as it stands on paper: no outline to cut.
@@ -135,7 +137,8 @@ std::shared_ptr<const Drawing> graph_for_paper(const Correction& correction, con
     layout::CorrectionSpec spec = correction_spec(design);
     spec.form = CorrectionForm::graph;
     spec.width_mm = 180;
-    spec.height_mm = 105;
+    spec.height_mm = 78;
+    spec.sentences = false;
     spec.letter_height_mm = 2.4;
     spec.cutting = {0.25, 0.35};
     try {
@@ -172,7 +175,7 @@ void put_correction(Flow& flow, const Commission& commission) {
     flow.space(1.5);
     if (const auto graph = graph_for_paper(correction, design)) {
         const double width = std::min(flow.width(), 180.0);
-        flow.picture(graph, width, width * 105 / 180);
+        flow.picture(graph, width, width * 78 / 180);
     }
     flow.space(2);
     put_table(flow, correction);
@@ -183,20 +186,17 @@ void put_correction(Flow& flow, const Commission& commission) {
 }
 
 void put_care(Flow& flow) {
-    flow.list(
-        "What the dial wants of you",
-        {"Never look at the Sun, not to read the dial and not to check it: its shadow says all.",
-         "Mind the gnomon’s tip and edges, and show them to children. Metal in the Sun can burn.",
-         "Wash it with water and a soft brush. No acid, no wire, no polish in the lines; leave the patina.",
-         "Lean on nothing and hang nothing from the gnomon: bent by a degree, it tells the time wrong by minutes.",
-         "Keep trees and new walls out of its Sun, and let nobody turn it towards the clock in summer: the hour "
-         "is added in the mind.",
-         "If it has been moved or struck, ask its maker to try it against a clock before it is fixed again."});
+    flow.list("What the dial wants of you",
+              {"Never look at the Sun, not to read the dial and not to check it: its shadow says all.",
+               "Mind the gnomon’s tip and edges, and show them to children. Metal in the Sun can burn.",
+               "Wash it with water and a soft brush. No acid, no wire, no polish in the lines; leave the patina.",
+               "Hang nothing from the gnomon: bent by a degree, it is wrong by minutes. If the dial has been moved or "
+               "struck, have it tried against a clock before it is fixed again.",
+               "Do not turn it to follow summer time: what the clocks add is added in the mind."});
     flow.heading("Whom to ask");
-    flow.space(3);
-    flow.paragraph("Made by  ........................................................................");
-    flow.space(3);
-    flow.paragraph("In the year  .....................   Fixed by  .................................................");
+    flow.space(2);
+    flow.paragraph(
+        "Made by  .............................................................  in the year  ..............");
     flow.space(1);
     flow.paragraph("With this card belongs the design file: from it the dial can be made again.");
 }

@@ -33,6 +33,7 @@ struct CorrectionSpec {
     std::optional<TableSteps> steps;        ///< of a table; nothing: the closest for which the letters have room
     std::string family = "EB Garamond";
     Cutting cutting;
+    bool sentences = true;        ///< false where a graph stands beside them: heading and sentences are left out
     bool summer_numerals = false; ///< the dial has a row of numerals for summer time
 };
 

@@ -20,7 +20,7 @@ class Graph {
 
     void draw() {
         const Box inside = draw_rectangle(work_);
-        Box room = draw_heading_and_words(work_, inside);
+        Box room = work_.spec.sentences ? draw_heading_and_words(work_, inside) : inside.grown(-letter_);
         find_range(room);
         const double figures = widest_figure() + 1.5 * letter_;
         room.left_mm += figures;
@@ -48,8 +48,13 @@ class Graph {
 
     /// Whole minutes round the year's, and room for the words on either side of nothing.
     void find_range(const Box& room) {
-        low_ = std::floor(work_.correction.least_min() - 0.4);
-        high_ = std::ceil(work_.correction.most_min() + 0.4);
+        const double least = work_.correction.least_min(), most = work_.correction.most_min();
+        low_ = std::floor(least - 0.4);
+        high_ = std::ceil(most + 0.4);
+        if (least >= 0) // what is only added has no side for what is taken
+            low_ = std::max(low_, 0.0);
+        if (most <= 0)
+            high_ = std::min(high_, 0.0);
         if (low_ > 0 && low_ < 5)
             low_ = 0;
         if (high_ < 0 && high_ > -5)

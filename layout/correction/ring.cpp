@@ -24,7 +24,7 @@ class Ring {
         const double margin = std::max(0.025 * 2 * rim, 1.5 + work_.line_mm());
         months_ = rim - margin;
         days_ = months_ - 2.0 * letter_;
-        minutes_ = days_ - 2.2 * letter_;
+        minutes_ = days_ - 2.4 * letter_;
         sides_ = minutes_ - 3.4 * letter_;
         middle_ = sides_ - 2.0 * letter_;
         if (middle_ < 4 * letter_)
@@ -78,11 +78,11 @@ class Ring {
                 continue;
             const double noon = work_.correction.noon_of(date);
             const bool tenth = day % 10 == 0 && day < 30, fifth = day % 5 == 0 && day < 30;
-            const double length = tenth ? 0.45 : fifth ? 0.45 : 0.28;
+            const double length = fifth ? 0.36 : 0.24;
             spoke(noon, minutes_, minutes_ + length * band, fifth ? work_.middle_mm() : work_.fine_mm(),
                   say_date(date));
             if (tenth || (fives && fifth))
-                work_.letter_round(fmt::format("{}", day), height, days_ - 0.1 * band - height / 2, turn(noon),
+                work_.letter_round(fmt::format("{}", day), height, minutes_ + 0.68 * band, turn(noon),
                                    "day " + say_date(date));
         }
     }
@@ -115,14 +115,26 @@ class Ring {
         return beside_a_turn ? 2 : mark.minutes % 2 == 0 ? 3 : 4;
     }
 
+    /// Under the circle of minutes, where no other figure has the place.
+    void set_figure(int minutes, double day) {
+        const double radius = minutes_ - 1.8 * letter_;
+        const std::string figure = minutes_figure(minutes);
+        const double half =
+            (work_.width_mm(figure, letter_) / 2 + 0.25 * letter_) / radius * k_length_days / (2 * std::numbers::pi);
+        for (const auto& [other, other_half] : figures_)
+            if (std::abs(std::remainder(other - day, k_length_days)) < other_half + half)
+                return;
+        figures_.emplace_back(day, half);
+        work_.letter_round(figure, letter_, radius, turn(day), fmt::format("figure {}", minutes));
+    }
+
     void draw_minutes() {
-        const double length = 0.9 * letter_, figures = minutes_ - 1.3 * letter_ - letter_ / 2;
+        const double length = 0.9 * letter_;
         std::vector<MinuteMark> marks = minute_marks();
         const double pitch_days = work_.least_pitch_mm() / (2 * std::numbers::pi * (minutes_ - length)) * k_length_days;
         std::stable_sort(marks.begin(), marks.end(),
                          [this](const MinuteMark& a, const MinuteMark& b) { return rank(a) < rank(b); });
         std::vector<double> drawn;
-        std::vector<std::pair<double, double>> taken; // days that figures cover
         bool thinned = false;
         for (const MinuteMark& mark : marks) {
             const auto too_near = [&](double other) {
@@ -136,16 +148,16 @@ class Ring {
             const bool five = mark.minutes % 5 == 0;
             spoke(mark.day, minutes_, minutes_ - (five ? 1.0 : 0.7) * length,
                   five ? work_.middle_mm() : work_.fine_mm(), fmt::format("minute {}", mark.minutes));
-            const std::string figure = minutes_figure(mark.minutes);
-            const double half = (work_.width_mm(figure, letter_) / 2 + 0.25 * letter_) / figures * k_length_days /
-                                (2 * std::numbers::pi);
-            const bool crowded = std::any_of(taken.begin(), taken.end(), [&](const auto& other) {
-                return std::abs(std::remainder(other.first - mark.day, k_length_days)) < other.second + half;
+            set_figure(mark.minutes, mark.day);
+        }
+        // Where the year turns short of a whole minute that is nearest there, its figure stands without a mark.
+        for (const double day : work_.correction.turns()) {
+            const double value = work_.correction.add_min(day), nearest = std::round(value);
+            const bool passed = std::any_of(marks.begin(), marks.end(), [&](const MinuteMark& mark) {
+                return mark.minutes == int(nearest) && std::abs(std::remainder(mark.day - day, k_length_days)) < 60;
             });
-            if (crowded)
-                continue;
-            taken.emplace_back(mark.day, half);
-            work_.letter_round(figure, letter_, figures, turn(mark.day), fmt::format("figure {}", mark.minutes));
+            if (!passed)
+                set_figure(int(nearest), day);
         }
         if (thinned)
             work_.warnings.push_back("some minute marks of the ring would stand closer than the tool cuts: left out");
@@ -233,6 +245,7 @@ class Ring {
 
     PlateWork& work_;
     double letter_;
+    std::vector<std::pair<double, double>> figures_; ///< days that they stand at, and cover to either side
     double months_ = 0, days_ = 0, minutes_ = 0, sides_ = 0, middle_ = 0; ///< outer radii of the bands, mm
 };
 
