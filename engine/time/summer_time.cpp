@@ -17,8 +17,8 @@ using namespace std::chrono;
 constexpr std::size_t k_fewest_years = 3; // two dates may agree by chance
 
 struct Change {
-    year_month_day date; ///< on which the clocks change; of midnight, the day that begins
-    bool at_midnight = false;
+    year_month_day date;      ///< the first on whose noon the clocks have changed
+    bool at_midnight = false; ///< or in the evening before
 };
 
 struct YearOfClocks {
@@ -38,7 +38,9 @@ YearOfClocks clocks_of(const Zone& zone, int wanted) {
         const ZoneOffset after = zone.at(change);
         const local_time<microseconds> reading{change.time_since_epoch() + before.from_utc}; // the old clock's
         const auto day = floor<days>(reading);
-        const Change one{year_month_day{day}, reading - day < seconds{1}};
+        const bool evening = reading - day > hours{12};
+        const Change one{year_month_day{sys_days{(day + days{evening}).time_since_epoch()}},
+                         evening || reading - day < seconds{1}};
         if (after.standard() != before.standard())
             found.standard_moves = true;
         else

@@ -20,8 +20,7 @@ struct YearlyDay {
     std::chrono::weekday weekday{0};
     unsigned nth = 0;
     std::chrono::month_day earliest{}, latest{};
-    bool at_its_end =
-        false; ///< the clocks change in the midnight that ends the day, else on the day or in the midnight before
+    bool at_its_end = false; ///< the clocks change in its evening or the midnight after, else before its noon
 };
 
 /// How a zone keeps summer time over a span of years, by its own changes of the clocks.

@@ -23,10 +23,10 @@ class Ring {
         const double rim = work_.spec.width_mm / 2;
         const double margin = std::max(0.025 * 2 * rim, 1.5 + work_.line_mm());
         months_ = rim - margin;
-        days_ = months_ - 2.0 * letter_;
-        minutes_ = days_ - 2.4 * letter_;
-        sides_ = minutes_ - 3.4 * letter_;
-        middle_ = sides_ - 2.0 * letter_;
+        days_ = months_ - 2.5 * letter_ - work_.line_mm();
+        minutes_ = days_ - 0.85 * letter_ - day_height() - 2 * day_air();
+        sides_ = minutes_ - 3.1 * letter_ - work_.line_mm();
+        middle_ = sides_ - 2.3 * letter_ - work_.line_mm();
         if (middle_ < 4 * letter_)
             work_.too_small("a ring");
         work_.cut(circle({}, rim));
@@ -43,6 +43,10 @@ class Ring {
     }
 
   private:
+    /// Of the days' figures, and the air between them and what is next to them.
+    [[nodiscard]] double day_height() const { return std::max(work_.least_letter(), 0.7 * letter_); }
+    [[nodiscard]] double day_air() const { return 0.35 * letter_ + work_.line_mm(); }
+
     [[nodiscard]] static Angle turn(double day) { return Angle::degrees(360.0 * day / k_length_days); }
     [[nodiscard]] static Point at(double day, double radius) { return radius * clockwise_from_up(turn(day)); }
 
@@ -64,13 +68,12 @@ class Ring {
 
     /// A stroke for the middle of each date, or each fifth; the 10th and 20th with their figures.
     void draw_days() {
-        const double height = std::max(work_.least_letter(), 0.7 * letter_);
+        const double height = day_height();
         const double day_mm = 2 * std::numbers::pi * minutes_ / k_length_days;
         const int step = day_mm >= work_.least_pitch_mm() ? 1 : 5;
         if (step * day_mm < work_.least_pitch_mm())
             work_.too_small("the days of a ring");
         const bool fives = 5 * day_mm > work_.width_mm("15", height) + 0.6 * height;
-        const double band = days_ - minutes_;
         for (const std::chrono::month_day date : dates_of_year()) {
             const unsigned day = unsigned(date.day());
             // 29 February is but a quarter of a day wide here; the last of a month is close to the month's own line.
@@ -78,11 +81,10 @@ class Ring {
                 continue;
             const double noon = work_.correction.noon_of(date);
             const bool tenth = day % 10 == 0 && day < 30, fifth = day % 5 == 0 && day < 30;
-            const double length = fifth ? 0.36 : 0.24;
-            spoke(noon, minutes_, minutes_ + length * band, fifth ? work_.middle_mm() : work_.fine_mm(),
-                  say_date(date));
+            const double length = (fifth ? 0.85 : 0.55) * letter_;
+            spoke(noon, minutes_, minutes_ + length, fifth ? work_.middle_mm() : work_.fine_mm(), say_date(date));
             if (tenth || (fives && fifth))
-                work_.letter_round(fmt::format("{}", day), height, minutes_ + 0.68 * band, turn(noon),
+                work_.letter_round(fmt::format("{}", day), height, days_ - day_air() - height / 2, turn(noon),
                                    "day " + say_date(date));
         }
     }

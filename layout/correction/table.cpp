@@ -12,7 +12,6 @@
 namespace dialwright::layout {
 namespace {
 
-constexpr double k_row = 1.95;       // height of a row, of the letters'
 constexpr double k_column_air = 1.3; // beside the text of a column
 constexpr double k_block_gap = 1.1;
 constexpr double k_widest = 1.9; // cells spread to fill the plate, but not so far that rows fall apart
@@ -116,6 +115,7 @@ class Table {
     }
 
     // Sizes of everything for letters of 1 mm.
+    [[nodiscard]] double row_height() const { return 2.05 + work_.line_mm() / letter_; }
     [[nodiscard]] double month_width() const {
         double widest = 0;
         for (unsigned month = 1; month <= 12; ++month)
@@ -147,7 +147,7 @@ class Table {
         return one.across ? block : one.blocks * block + (one.blocks - 1) * k_block_gap;
     }
     [[nodiscard]] double height_at_1(const Arrangement& one) const {
-        const double block = (rows(one) + 1) * k_row;
+        const double block = (rows(one) + 1) * row_height();
         return one.across ? one.blocks * block + (one.blocks - 1) * k_block_gap : block;
     }
 
@@ -159,7 +159,7 @@ class Table {
         const double width = letter_ * wide * width_at_1(one), height = letter_ * tall * height_at_1(one);
         column_mm_ = letter_ * wide * column_width(one);
         head_mm_ = letter_ * wide * head_width(one);
-        row_mm_ = letter_ * tall * k_row;
+        row_mm_ = letter_ * tall * row_height();
         const Point corner{box.middle().x_mm - width / 2, box.middle().y_mm + height / 2};
         const int months = 12 / one.blocks;
         for (int block = 0; block < one.blocks; ++block) {
