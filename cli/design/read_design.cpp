@@ -45,7 +45,7 @@ class Agreement {
         fits("lettering", "label height", design_.lettering.label_height_mm, s / 4);
         fits("lettering", "motto height", design_.lettering.motto_height_mm, s / 4);
         const CorrectionMade& correction = design_.correction;
-        if (correction.wanted && correction.width_mm > 0 && correction.height_mm > 0 &&
+        if (state_.gives("correction: letter height") && correction.width_mm > 0 && correction.height_mm > 0 &&
             correction.letter_height_mm > 0.1 * std::min(correction.width_mm, correction.height_mm))
             report({"letter height"}, "correction",
                    fmt::format("letters of {} are too large for a correction plate of {} by {}",

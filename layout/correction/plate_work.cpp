@@ -172,6 +172,11 @@ CorrectionPlate draw_correction(const Correction& correction, const CorrectionSp
         plate.warnings = std::move(work.warnings);
         break;
     }
+    if (spec.letter_height_mm < 0.999 * least_letter_mm(spec.cutting))
+        plate.warnings.push_back(fmt::format("letters of {:.1f} mm on the correction plate are lower than {:.1f} mm, "
+                                             "the least that a line of {:.1f} mm cuts well",
+                                             spec.letter_height_mm, least_letter_mm(spec.cutting),
+                                             spec.cutting.line_width_mm));
     if (plate.letter_height_mm < 0.999 * spec.letter_height_mm)
         plate.warnings.push_back(fmt::format("letters of the correction plate are {:.1f} mm high instead of {:.1f} mm, "
                                              "to find room",

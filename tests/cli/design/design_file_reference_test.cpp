@@ -96,6 +96,8 @@ Sections design_around(const Row& row) {
         design["hours"] = {{"time", "zone"}};
     if (row.section == "hours" && key == "rise and set")
         design["hours"] = {{"time", "since sunrise"}};
+    if (row.section == "correction" && (key == "diameter" || key == "dates"))
+        design["correction"] = {{"form", key == "dates" ? "table" : "ring"}};
     if (row.section == "also: noon at")
         design["also"]["noon at"] = key == "name" ? "[{longitude: 5° E, name: " + row.example + "}]"
                                                   : "[{name: x, longitude: " + row.example + "}]";
@@ -154,7 +156,7 @@ TEST_CASE("every example of the reference is read", "[cli]") {
 
 TEST_CASE("the long example of the reference gives every key that can stand together", "[cli]") {
     // What its wall and its rectangle exclude.
-    const std::set<std::string> others = {"plate: diameter", "plate: across", "plate: corners"};
+    const std::set<std::string> others = {"plate: diameter", "plate: across", "plate: corners", "correction: diameter"};
     const DesignReading reading = read_design(reference().blocks.at(1), "long.yaml");
     REQUIRE(reading.design);
     CHECK(reading.design->assumed.empty());
