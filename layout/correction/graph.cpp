@@ -32,6 +32,7 @@ class Graph {
             work_.too_small("a graph");
         find_range(room);
         step_ = number_step();
+        walk_curve();
         place_words();
         draw_days();
         draw_minutes();
@@ -93,15 +94,20 @@ class Graph {
         return step_;
     }
 
+    void walk_curve() {
+        curve_.clear();
+        for (double day = 0; day <= k_length_days; day += 1)
+            curve_.push_back({x(day), y(work_.correction.add_min(day))});
+    }
+
     [[nodiscard]] double clear_of_curve(const Box& box) const {
-        double least = 1e300;
-        for (double day = 0; day <= k_length_days; day += 0.5) {
-            const Point p{x(day), y(work_.correction.add_min(day))};
+        double least = 1e300; // squared
+        for (const Point& p : curve_) {
             const double right = std::max({box.left_mm - p.x_mm, p.x_mm - box.right_mm, 0.0});
             const double up = std::max({box.bottom_mm - p.y_mm, p.y_mm - box.top_mm, 0.0});
-            least = std::min(least, std::hypot(right, up));
+            least = std::min(least, right * right + up * up);
         }
-        return least;
+        return std::sqrt(least);
     }
 
     /// Where words stand clearest of the curve between two heights of the field; near the middle before the sides.
@@ -110,10 +116,10 @@ class Graph {
         const double half_w = work_.width_mm(words, height) / 2 + 0.6 * height, half_h = 0.95 * height;
         std::optional<Box> best;
         double best_score = 0.0;
-        for (int row = 0; row <= 24; ++row)
-            for (int column = 0; column <= 60; ++column) {
-                const Point at{between({field_.left_mm + half_w, 0}, {field_.right_mm - half_w, 0}, column / 60.0).x_mm,
-                               bottom + half_h + (top - bottom - 2 * half_h) * row / 24.0};
+        for (int row = 0; row <= 16; ++row)
+            for (int column = 0; column <= 40; ++column) {
+                const Point at{between({field_.left_mm + half_w, 0}, {field_.right_mm - half_w, 0}, column / 40.0).x_mm,
+                               bottom + half_h + (top - bottom - 2 * half_h) * row / 16.0};
                 const Box box{at.x_mm - half_w, at.y_mm - half_h, at.x_mm + half_w, at.y_mm + half_h};
                 if (box.bottom_mm < bottom || box.top_mm > top || 2 * half_w > 0.9 * field_.width_mm())
                     continue;
@@ -220,6 +226,7 @@ class Graph {
     int step_ = 5;
     PlateWork::MonthNames months_;
     std::vector<Outline> kept_free_;
+    std::vector<Point> curve_; ///< at each day
 };
 
 } // namespace
