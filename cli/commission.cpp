@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "cli/commission.hpp"
 
+#include "cli/plan/correction_plan.hpp"
 #include "cli/plan/feasible.hpp"
 #include "layout/lettering/lettering.hpp"
 
@@ -79,7 +80,23 @@ CommissionTaking take_commission(DesignReading reading) {
     } catch (const layout::GnomonError& trouble) {
         return {std::nullopt, {gnomon_error(design, trouble.what())}};
     }
-    return {Commission{std::move(design), std::move(year), std::move(plans), std::move(faces), std::move(gnomons)}, {}};
+    std::optional<Correction> correction = correction_of(design, year, plans.front().dial.zone_meridian);
+    std::optional<layout::CorrectionPlate> correction_plate;
+    if (design.correction.wanted && correction)
+        try {
+            correction_plate = layout::draw_correction(*correction, correction_spec(design));
+        } catch (const layout::LetteringError& trouble) {
+            return {std::nullopt, in_order(what_cannot_be_lettered(design, trouble.what()))};
+        } catch (const std::invalid_argument& trouble) {
+            return {std::nullopt,
+                    {error_at(design,
+                              first_given(design, {"correction: width", "correction: diameter", "correction: height",
+                                                   "correction"}),
+                              trouble.what(), "make the plate larger, or give \"cutting: line width\" a finer line")}};
+        }
+    return {Commission{std::move(design), std::move(year), std::move(plans), std::move(faces), std::move(gnomons),
+                       std::move(correction), std::move(correction_plate)},
+            {}};
 }
 
 } // namespace dialwright::cli

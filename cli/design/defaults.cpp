@@ -172,6 +172,28 @@ void note_hours_and_dates(Design& design, Filler& filler) {
                              "the Sun's mean path over five leap cycles");
 }
 
+void fill_correction(Design& design, Filler& filler) {
+    CorrectionMade& made = design.correction;
+    if (!made.wanted)
+        return;
+    filler.note_unless_given("correction: form", "graph", "it shows every day, and what lies between");
+    if (made.form == CorrectionForm::ring) {
+        filler.fill_tidy(made.width_mm, "correction: diameter",
+                         std::clamp(0.7 * design.plate.width_mm, 180.0, k_largest_plate_mm), "7/10 of the plate");
+        made.height_mm = made.width_mm;
+    } else {
+        filler.fill_tidy(made.width_mm, "correction: width",
+                         std::clamp(0.75 * design.plate.width_mm, 180.0, k_largest_plate_mm), "3/4 of the plate");
+        filler.fill_tidy(made.height_mm, "correction: height", 0.55 * made.width_mm, "a little over half of its width");
+    }
+    filler.fill_tidy(made.letter_height_mm, "correction: letter height",
+                     std::max(made.form == CorrectionForm::ring ? made.width_mm / 75 : made.height_mm / 45,
+                              layout::least_letter_mm(design.cutting)),
+                     made.form == CorrectionForm::ring ? "1/75 of the ring" : "1/45 of its height");
+    if (made.form == CorrectionForm::table)
+        filler.note_unless_given("correction: dates", "as close as its letters have room", "no dates are named");
+}
+
 void fill_print(Design& design, Filler& filler) {
     Print& print = design.print;
     const bool inches = filler.inches();
@@ -208,6 +230,7 @@ void fill_defaults(Design& design, const ReadingState& state) {
     fill_borders_and_letters(design, filler, s);
     fill_gnomon_and_cutting(design, filler, s);
     note_hours_and_dates(design, filler);
+    fill_correction(design, filler);
     fill_print(design, filler);
 }
 

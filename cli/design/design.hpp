@@ -2,6 +2,7 @@
 #pragma once
 
 #include "engine/dial/dial_plan.hpp"
+#include "layout/correction/correction_plate.hpp"
 #include "layout/export/layer_table.hpp"
 #include "layout/plate/plate_spec.hpp"
 #include "layout/sheet/compensation.hpp"
@@ -18,6 +19,7 @@ using dialwright::HalfYear;
 using dialwright::HourExtent;
 using dialwright::HourTime;
 using layout::Borders;
+using layout::CorrectionForm;
 using layout::Cutting;
 using layout::FootKind;
 using layout::Gnomon;
@@ -30,6 +32,7 @@ using layout::NumeralStand;
 using layout::Plate;
 using layout::PlatePointMm;
 using layout::PlateShape;
+using layout::TableSteps;
 using layout::Tool;
 
 /// What a design file says, with what it leaves open filled in by the trade's habit (each such filling is in `assumed`).
@@ -88,6 +91,15 @@ struct Dates {
     bool labels = true;
 };
 
+/// The plate that says how to come from the dial to the clock.
+struct CorrectionMade {
+    bool wanted = false; ///< the section is there: a plate is made
+    CorrectionForm form = CorrectionForm::graph;
+    double width_mm = 0.0, height_mm = 0.0; ///< a ring: both its diameter
+    double letter_height_mm = 0.0;
+    std::optional<TableSteps> dates; ///< of a table; nothing: the closest for which its letters have room
+};
+
 struct Years {
     int first = 2027, last = 2046;
 };
@@ -143,6 +155,7 @@ struct Design {
     Hours hours;
     Also also;
     Dates dates;
+    CorrectionMade correction;
     Years years;
     LetteringChoice lettering;
     Cutting cutting;

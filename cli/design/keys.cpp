@@ -106,6 +106,14 @@ constexpr auto k_keys = std::to_array<KnownKey>({
     {"dates: days", "label"},
     {"dates", "labels"},
 
+    {"", "correction"},
+    {"correction", "form"},
+    {"correction", "width"},
+    {"correction", "height"},
+    {"correction", "diameter"},
+    {"correction", "letter height"},
+    {"correction", "dates"},
+
     {"", "lettering"},
     {"lettering", "font"},
     {"lettering", "numeral height"},

@@ -5,6 +5,7 @@
 #include "cli/packet/contents.hpp"
 #include "cli/packet/cover_words.hpp"
 #include "cli/packet/machine_files.hpp"
+#include "cli/packet/owners_card.hpp"
 #include "cli/packet/work_pieces.hpp"
 #include "cli/plan/feasible.hpp"
 #include "cli/report/numbers.hpp"
@@ -73,6 +74,7 @@ class Book {
         add(gnomon_pages(commission_, pieces_, options_));
         for (std::size_t i = 0; i < commission_.faces.size(); ++i)
             add(setting_out_pages(commission_, i, options_));
+        add(owners_card(commission_, options_));
         for (const WorkPiece& piece : pieces_)
             if (design_.print.own_size && piece.is_plate)
                 add_own_size(piece);
@@ -133,7 +135,7 @@ class Book {
     [[nodiscard]] std::vector<Sheet> cover(const std::vector<std::vector<layout::Tiling>>& tilings) const {
         std::vector<layout::CoverFace> faces;
         bool has_tiles = false;
-        for (std::size_t i = 0; i < tilings.size(); ++i) {
+        for (std::size_t i = 0; i < commission_.faces.size(); ++i) {
             const layout::Tiling& tiling = tilings[i].front();
             faces.push_back({commission_.plans[i].spec.name, pieces_[i].drawing, key_numbers(commission_, i), &tiling});
             has_tiles = has_tiles || tiling.sheets.size() > 1;
@@ -210,6 +212,9 @@ Packet make_packet(const Commission& commission) {
             packet.warnings.push_back(
                 commission.plans[i].spec.name.empty() ? warning : commission.plans[i].spec.name + ": " + warning);
 
+    if (commission.correction_plate)
+        packet.warnings.insert(packet.warnings.end(), commission.correction_plate->warnings.begin(),
+                               commission.correction_plate->warnings.end());
     packet.cautions = cautions(commission.design);
     Book book{commission, packet};
     const layout::SheetBook sheets = book.whole();

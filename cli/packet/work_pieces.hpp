@@ -16,12 +16,12 @@ struct WorkPiece {
     std::string title; ///< on its sheets: "Plate, upper face"
     std::shared_ptr<const layout::Drawing> drawing;
     bool for_machine = true; ///< false: the side of solid work, which no machine cuts from this file
-    bool is_plate = false;
+    bool is_plate = false;   ///< a dial's or the correction's: on tiles of its own, and a page of its own size
     const layout::Part* part = nullptr; ///< what is said of it; none for a plate
     std::size_t face = 0;
 };
 
-/// Plates first, then what belongs to their gnomons.
+/// The dial's plates first, then the correction's, then what belongs to their gnomons.
 [[nodiscard]] std::vector<WorkPiece> work_pieces(const Commission& commission);
 
 /// A drawing turned over about its upright axis.

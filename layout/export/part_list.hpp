@@ -12,7 +12,7 @@ namespace dialwright::layout {
 struct ListedPart {
     const Drawing* drawing = nullptr; ///< as it is drawn, without the kerf
     int count = 1;
-    std::string name; ///< empty: the drawing's own
+    std::string name{}; ///< empty: the drawing's own
 };
 
 /// The parts as CSV (RFC 4180, from memory; lines end in "\n"), a row each under
