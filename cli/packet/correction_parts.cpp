@@ -140,7 +140,9 @@ std::shared_ptr<const Drawing> graph_for_paper(const Correction& correction, con
     spec.height_mm = 78;
     spec.sentences = false;
     spec.letter_height_mm = 2.4;
-    spec.cutting = {0.25, 0.35};
+    spec.cutting = {};
+    spec.cutting.line_width_mm = 0.25;
+    spec.cutting.least_gap_mm = 0.35;
     try {
         auto drawing = std::make_shared<Drawing>(layout::draw_correction(correction, spec).drawing);
         std::erase_if(drawing->marks, [](const layout::Mark& mark) { return mark.layer == layout::Layer::cut; });

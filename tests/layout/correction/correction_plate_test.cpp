@@ -186,7 +186,8 @@ TEST_CASE("a table holds the minutes of its dates, and thins to letters that can
     }
     // Small plates get smaller letters, told to the maker, and none that can't be cut.
     CorrectionSpec small = spec(CorrectionForm::table, 110, 80, 4);
-    small.cutting = {0.3, 0.4};
+    small.cutting.line_width_mm = 0.3;
+    small.cutting.least_gap_mm = 0.4;
     const CorrectionPlate shrunk = draw_correction(one, small);
     CHECK(shrunk.letter_height_mm < 4);
     CHECK(shrunk.letter_height_mm >= least_letter_mm(small.cutting));
@@ -209,6 +210,18 @@ TEST_CASE("a table by whole minutes names every change, and each holds until the
         if (const auto changed = std::find(names.begin(), names.end(), here); changed != names.end())
             now = minutes_figure(one.add_min(date));
         CHECK(now == minutes_figure(one.add_min(date)));
+    }
+}
+
+TEST_CASE("an engraving point gets single strokes", "[correction]") {
+    for (const CorrectionForm form : {CorrectionForm::graph, CorrectionForm::ring, CorrectionForm::table}) {
+        CorrectionSpec wanted = spec(form, 260, form == CorrectionForm::ring ? 260 : 180, 3.5);
+        wanted.cutting.single_strokes = true;
+        const CorrectionPlate plate = draw_correction(correction(-1.7), wanted);
+        check_on_plate(plate);
+        for (const Mark& one : plate.drawing.marks)
+            CHECK_FALSE(one.filled);
+        CHECK(mark(plate, "heading").paths.size() > 20);
     }
 }
 
