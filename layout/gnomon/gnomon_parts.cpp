@@ -11,7 +11,7 @@
 namespace dialwright::layout {
 namespace {
 
-constexpr Angle k_least_gauge = Angle::degrees(1), k_most_gauge = Angle::degrees(89);
+constexpr Angle k_least_gauge = Angle::degrees(3), k_most_gauge = Angle::degrees(89);
 
 /// Where the noon line runs on the plate, clockwise from +v; nothing where it is not drawn from the centre.
 std::optional<Angle> noon_direction(const Face& face) {

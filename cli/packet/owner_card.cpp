@@ -2,7 +2,7 @@
 //
 // The owner's card is for one who has never read a dial: how the shadow is read, how the reading becomes clock time, with
 // an example, and what the dial wants of its owner. Care of metal and stone: common practice, no source.
-#include "cli/packet/correction_parts.hpp"
+#include "cli/packet/owner_card.hpp"
 
 #include "cli/plan/correction_plan.hpp"
 #include "cli/report/say.hpp"
@@ -18,10 +18,6 @@ namespace {
 
 using layout::Drawing;
 using layout::Flow;
-
-const char* form_name(CorrectionForm form) {
-    return form == CorrectionForm::graph ? "graph" : form == CorrectionForm::ring ? "ring" : "table";
-}
 
 std::string what_it_is(const Design& design) {
     static constexpr const char* k_kinds[] = {"A level dial", "A dial on a wall", "A leaning dial",
@@ -205,18 +201,8 @@ void put_care(Flow& flow) {
 
 } // namespace
 
-CorrectionParts correction_parts(const Commission& commission, layout::PrintOptions options) {
+std::vector<layout::Sheet> owner_card(const Commission& commission, const layout::PrintOptions& options) {
     const Design& design = commission.design;
-    CorrectionParts parts;
-    if (commission.correction_plate) {
-        const std::string form = form_name(design.correction.form);
-        parts.parts.push_back({"correction-" + form,
-                               "correction " + form,
-                               "the correction plate for a machine, full scale, layers by process",
-                               {std::shared_ptr<void>{}, &commission.correction_plate->drawing}});
-        parts.warnings = commission.correction_plate->warnings;
-    }
-    options.title = design.title;
     Flow flow{options, "For the owner"};
     flow.paragraph(design.title, "", true, 5);
     flow.paragraph("For the owner of this dial");
@@ -226,8 +212,7 @@ CorrectionParts correction_parts(const Commission& commission, layout::PrintOpti
     flow.list("How to read it", how_to_read(design));
     put_correction(flow, commission);
     put_care(flow);
-    parts.card = flow.sheets();
-    return parts;
+    return flow.sheets();
 }
 
 } // namespace dialwright::cli
