@@ -192,6 +192,8 @@ CorrectionPlate draw_correction(const Correction& correction, const CorrectionSp
         plate.drawing = {"correction", std::move(work.marks)};
         plate.letter_height_mm = tried.letter_height_mm;
         plate.warnings = std::move(work.warnings);
+        for (std::string& limit : say_limits(correction)) // its words leave them out
+            plate.warnings.push_back("correction plate: " + std::move(limit));
         break;
     }
     if (spec.letter_height_mm < 0.999 * least_letter_mm(spec.cutting))
