@@ -39,7 +39,7 @@ std::vector<Sheet> gnomon_pages(const Commission& commission, const std::vector<
     std::optional<Flow> flow;
     const layout::Part* before = nullptr;
     for (const WorkPiece& piece : pieces) {
-        if (piece.is_plate)
+        if (piece.part == nullptr)
             continue;
         if (!flow)
             flow.emplace(options, "The gnomon and its gauges");

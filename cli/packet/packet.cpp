@@ -5,7 +5,7 @@
 #include "cli/packet/contents.hpp"
 #include "cli/packet/cover_words.hpp"
 #include "cli/packet/machine_files.hpp"
-#include "cli/packet/owners_card.hpp"
+#include "cli/packet/owner_card.hpp"
 #include "cli/packet/work_pieces.hpp"
 #include "cli/plan/feasible.hpp"
 #include "cli/report/numbers.hpp"
@@ -74,7 +74,13 @@ class Book {
         add(gnomon_pages(commission_, pieces_, options_));
         for (std::size_t i = 0; i < commission_.faces.size(); ++i)
             add(setting_out_pages(commission_, i, options_));
-        add(owners_card(commission_, options_));
+        add(owner_card(commission_, options_));
+        for (const WorkPiece& piece : pieces_)
+            if (is_correction(piece)) {
+                add(layout::tile(piece.drawing, options_of(piece)).sheets);
+                if (design_.print.own_size)
+                    add_own_size(piece);
+            }
         for (const WorkPiece& piece : pieces_)
             if (design_.print.own_size && piece.is_plate)
                 add_own_size(piece);
@@ -99,6 +105,8 @@ class Book {
     }
 
   private:
+    [[nodiscard]] static bool is_correction(const WorkPiece& piece) { return !piece.is_plate && piece.part == nullptr; }
+
     [[nodiscard]] layout::PrintOptions options_of(const WorkPiece& piece) const {
         layout::PrintOptions options = options_;
         options.title = design_.title + ", " + piece.title;
@@ -135,7 +143,7 @@ class Book {
     [[nodiscard]] std::vector<Sheet> cover(const std::vector<std::vector<layout::Tiling>>& tilings) const {
         std::vector<layout::CoverFace> faces;
         bool has_tiles = false;
-        for (std::size_t i = 0; i < commission_.faces.size(); ++i) {
+        for (std::size_t i = 0; i < tilings.size(); ++i) {
             const layout::Tiling& tiling = tilings[i].front();
             faces.push_back({commission_.plans[i].spec.name, pieces_[i].drawing, key_numbers(commission_, i), &tiling});
             has_tiles = has_tiles || tiling.sheets.size() > 1;

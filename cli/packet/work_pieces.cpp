@@ -9,10 +9,6 @@ std::shared_ptr<const layout::Drawing> shared(const layout::Drawing& drawing) {
     return {std::shared_ptr<void>{}, &drawing};
 }
 
-const char* form_name(CorrectionForm form) {
-    return form == CorrectionForm::graph ? "graph" : form == CorrectionForm::ring ? "ring" : "table";
-}
-
 std::string hyphenated(std::string text) {
     for (char& c : text)
         c = c == ' ' ? '-' : c;
@@ -32,11 +28,6 @@ std::vector<WorkPiece> work_pieces(const Commission& commission) {
     for (std::size_t i = 0; i < commission.faces.size(); ++i)
         pieces.push_back(
             {"plate" + suffix(i), "Plate" + of_face(i), shared(commission.faces[i].drawing), true, true, nullptr, i});
-    if (commission.correction_plate) {
-        const std::string form = form_name(commission.design.correction.form);
-        pieces.push_back({"correction-" + form, "Correction " + form, shared(commission.correction_plate->drawing),
-                          true, true, nullptr, 0});
-    }
     for (std::size_t i = 0; i < commission.gnomons.size(); ++i)
         for (const layout::Part& part : commission.gnomons[i])
             for (std::size_t j = 0; j < part.drawings.size(); ++j) {
@@ -45,6 +36,12 @@ std::vector<WorkPiece> work_pieces(const Commission& commission) {
                 pieces.push_back({hyphenated(drawing.name) + suffix(i), title + of_face(i), shared(drawing),
                                   part.from_sheet, false, &part, i});
             }
+    if (commission.correction_plate) {
+        static constexpr const char* k_forms[] = {"graph", "ring", "table"};
+        const std::string form = k_forms[static_cast<std::size_t>(commission.design.correction.form)];
+        pieces.push_back({"correction-" + form, "Correction " + form, shared(commission.correction_plate->drawing),
+                          true, false, nullptr, 0});
+    }
     return pieces;
 }
 

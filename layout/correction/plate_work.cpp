@@ -31,30 +31,44 @@ void PlateWork::cut(Path path) {
     marks.push_back({Layer::cut, {std::move(path)}, 0.2, false, "outline"});
 }
 
+PlateWork::Letters::Letters(const CorrectionSpec& wanted) {
+    if (wanted.cutting.single_strokes)
+        strokes_.emplace();
+    else
+        outlines_.emplace(wanted.family);
+}
+
+LetteredLine PlateWork::Letters::line(const std::string& text, double height_mm) const {
+    const double tracking = k_tracking * height_mm;
+    return strokes_ ? strokes_->line(text, height_mm, tracking) : outlines_->line(text, height_mm, tracking);
+}
+
+void PlateWork::add_letters(std::vector<Path> paths, std::string name) {
+    marks.push_back({Layer::engrave, std::move(paths), middle_mm(), !spec.cutting.single_strokes, std::move(name)});
+}
+
 double PlateWork::width_mm(const std::string& text, double height_mm) const {
     auto found = width_at_1_.find(text);
     if (found == width_at_1_.end())
-        found = width_at_1_.emplace(text, lettering_.line(text, 1.0, k_tracking).ink.width_mm()).first;
+        found = width_at_1_.emplace(text, letters_.line(text, 1.0).ink.width_mm()).first;
     return found->second * height_mm;
 }
 
 void PlateWork::letter(const std::string& text, double height_mm, Point middle, Angle turn, std::string name) {
-    const LetteredLine line = lettering_.line(text, height_mm, k_tracking * height_mm);
+    const LetteredLine line = letters_.line(text, height_mm);
     const Point along{cos(turn), sin(turn)};
     const double ink_middle = (line.ink.left_mm + line.ink.right_mm) / 2;
-    marks.push_back({Layer::engrave,
-                     set_straight(line, middle - ink_middle * along - height_mm / 2 * left_of(along), turn), 0.0, true,
-                     std::move(name)});
+    add_letters(set_straight(line, middle - ink_middle * along - height_mm / 2 * left_of(along), turn),
+                std::move(name));
 }
 
 void PlateWork::letter_round(const std::string& text, double height_mm, double radius_mm, Angle clockwise,
                              std::string name) {
-    const LetteredLine line = lettering_.line(text, height_mm, k_tracking * height_mm);
+    const LetteredLine line = letters_.line(text, height_mm);
     const bool below = cos(clockwise) < -1e-9;
-    marks.push_back(
-        {Layer::engrave,
-         set_on_circle(line, {}, radius_mm + (below ? 0.5 : -0.5) * height_mm, Angle::degrees(90) - clockwise, below),
-         0.0, true, std::move(name)});
+    add_letters(
+        set_on_circle(line, {}, radius_mm + (below ? 0.5 : -0.5) * height_mm, Angle::degrees(90) - clockwise, below),
+        std::move(name));
 }
 
 std::optional<std::vector<std::string>> PlateWork::wrapped(const std::string& text, double height_mm,
@@ -130,10 +144,18 @@ Box draw_heading_and_words(PlateWork& work, const Box& box, const std::string& m
                                         say_summer(work.correction.summer(), work.spec.summer_numerals)}) {
         if (sentence.empty())
             continue;
-        const auto some = work.wrapped(
+        auto some = work.wrapped(
             sentence, height, [&](std::size_t) { return width; }, 4);
         if (!some)
             work.too_small("its words");
+        // As many lines, but of one length.
+        for (double narrower = 0.97 * width; some->size() > 1; narrower *= 0.97) {
+            auto again = work.wrapped(
+                sentence, height, [&](std::size_t) { return narrower; }, some->size());
+            if (!again)
+                break;
+            some = std::move(again);
+        }
         lines.insert(lines.end(), some->begin(), some->end());
     }
     double up = box.bottom_mm + air + 0.1 * letter_mm + height / 2;
@@ -151,9 +173,9 @@ CorrectionPlate draw_correction(const Correction& correction, const CorrectionSp
     // Letters shrink until everything has room.
     CorrectionSpec tried = spec;
     const double least = std::min(least_letter_mm(spec.cutting), spec.letter_height_mm);
-    const Lettering lettering{spec.family};
+    const PlateWork::Letters letters{spec};
     while (true) {
-        PlateWork work{correction, tried, lettering};
+        PlateWork work{correction, tried, letters};
         try {
             if (spec.form == CorrectionForm::graph)
                 draw_graph(work);
@@ -170,6 +192,8 @@ CorrectionPlate draw_correction(const Correction& correction, const CorrectionSp
         plate.drawing = {"correction", std::move(work.marks)};
         plate.letter_height_mm = tried.letter_height_mm;
         plate.warnings = std::move(work.warnings);
+        for (std::string& limit : say_limits(correction)) // its words leave them out
+            plate.warnings.push_back("correction plate: " + std::move(limit));
         break;
     }
     if (spec.letter_height_mm < 0.999 * least_letter_mm(spec.cutting))

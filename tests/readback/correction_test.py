@@ -5,8 +5,12 @@ Where a plate's scales lie is found from its own lines: the field and the lines 
 ring. Lettering is outlines, so the words of a plate are tested where they are set.
 """
 import math
+import subprocess
 import unittest
 
+import ezdxf
+import ezdxf.bbox
+import fitz
 import numpy as np
 
 from packet_test import Svg
@@ -91,6 +95,30 @@ class Correction(Bench):
         self.assertAlmostEqual(size[0], 180, delta=0.001)
         self.assertAlmostEqual(size[1], 120, delta=0.001)
         self.assertEqual({layer for layer, _, _ in svg.strokes}, {"engrave", "cut"})
+        dxf = ezdxf.readfile(folder / "correction-table.dxf")
+        self.assertEqual(len(dxf.audit().errors), 0)
+        box = ezdxf.bbox.extents(dxf.modelspace().query('*[layer=="CUT"]'))
+        self.assertAlmostEqual(box.size.x, 180, delta=0.001)
+        self.assertAlmostEqual(box.size.y, 120, delta=0.001)
+        titles = subprocess.run(["mutool", "show", folder / "sheets.pdf", "outline"], check=True, capture_output=True, text=True).stdout
+        for title in ('"For the owner"', '"Correction table"', '"Correction table, own size"'):
+            self.assertIn(title, titles)
+
+    def test_the_owner_is_told_how_to_come_to_the_clock(self):
+        for hours, parts in (("sun", ["with the minutes of the day added", "On 11 February the dial shows 11:00. Add 22 minutes: clock time is 11:22.",
+                                      "On 15 July the dial shows 15:00. Add 14 minutes, and add one hour for summer time: clock time is 16:14."]),
+                             ("clock", ["nothing is added to it", "also add one hour for summer time"]),
+                             ("unequal", ["no minutes of a date turn them into clock time"])):
+            with self.subTest(hours):
+                folder = self.folder / hours
+                status, _, err = run("make", self.design(LEVEL + f"hours: {{time: {hours}}}\n"), "--to", folder)
+                self.assertIn(status, (FINE, WITH_WARNINGS), err)
+                self.assertFalse(list(folder.glob("correction*")))  # none was asked for
+                with fitz.open(folder / "sheets.pdf") as document:
+                    [card] = [page for page in document if "For the owner of this dial" in page.get_text()]
+                    words = " ".join(card.get_text().split())
+                for part in parts + ["Never look at the Sun", "Made by"]:
+                    self.assertIn(part, words)
 
 
 if __name__ == "__main__":

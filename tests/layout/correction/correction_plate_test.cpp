@@ -213,6 +213,18 @@ TEST_CASE("a table by whole minutes names every change, and each holds until the
     }
 }
 
+TEST_CASE("an engraving point gets single strokes", "[correction]") {
+    for (const CorrectionForm form : {CorrectionForm::graph, CorrectionForm::ring, CorrectionForm::table}) {
+        CorrectionSpec wanted = spec(form, 260, form == CorrectionForm::ring ? 260 : 180, 3.5);
+        wanted.cutting.single_strokes = true;
+        const CorrectionPlate plate = draw_correction(correction(-1.7), wanted);
+        check_on_plate(plate);
+        for (const Mark& one : plate.drawing.marks)
+            CHECK_FALSE(one.filled);
+        CHECK(mark(plate, "heading").paths.size() > 20);
+    }
+}
+
 TEST_CASE("plates of random sizes, places and tools are clear, or refused in plain words", "[correction]") {
     std::mt19937 random{20};
     INFO("seed 20");

@@ -2,7 +2,7 @@
 //
 // The owner's card is for one who has never read a dial: how the shadow is read, how the reading becomes clock time, with
 // an example, and what the dial wants of its owner. Care of metal and stone: common practice, no source.
-#include "cli/packet/owners_card.hpp"
+#include "cli/packet/owner_card.hpp"
 
 #include "cli/plan/correction_plan.hpp"
 #include "cli/report/say.hpp"
@@ -136,6 +136,7 @@ std::shared_ptr<const Drawing> graph_for_paper(const Correction& correction, con
     spec.height_mm = 78;
     spec.sentences = false;
     spec.letter_height_mm = 2.4;
+    spec.cutting = {};
     spec.cutting.line_width_mm = 0.25;
     spec.cutting.least_gap_mm = 0.35;
     try {
@@ -200,7 +201,7 @@ void put_care(Flow& flow) {
 
 } // namespace
 
-std::vector<layout::Sheet> owners_card(const Commission& commission, const layout::PrintOptions& options) {
+std::vector<layout::Sheet> owner_card(const Commission& commission, const layout::PrintOptions& options) {
     const Design& design = commission.design;
     Flow flow{options, "For the owner"};
     flow.paragraph(design.title, "", true, 5);
