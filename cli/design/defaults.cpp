@@ -91,11 +91,13 @@ std::string_view thickness_why(GnomonKind kind) {
     return {};
 }
 
-void fill_joint(Gnomon& gnomon, Filler& filler, double s) {
+void fill_joint(Gnomon& gnomon, bool equatorial, Filler& filler, double s) {
     if (gnomon.kind != GnomonKind::edge)
         return;
     const FootKind kind = gnomon.joint.kind;
-    filler.note_unless_given("gnomon: joint", "plain", "it stands on the face; how it is fixed is the maker's choice");
+    if (!equatorial)
+        filler.note_unless_given("gnomon: joint", "plain",
+                                 "it stands on the face; how it is fixed is the maker's choice");
     if (kind == FootKind::plain)
         filler.note_unless_given("gnomon: holes", "0", "how it is fixed is the maker's choice");
     const bool screwed = (kind == FootKind::plain && gnomon.joint.count > 0) || kind == FootKind::flange;
@@ -116,7 +118,7 @@ void fill_gnomon_and_cutting(Design& design, Filler& filler, double s) {
     filler.note_unless_given("gnomon: nodus", k_nodi[static_cast<std::size_t>(gnomon.nodus)],
                              "as such a gnomon commonly has it");
     filler.fill(gnomon.thickness_mm, "gnomon: thickness", 0.0, thickness_why(gnomon.kind));
-    fill_joint(gnomon, filler, s);
+    fill_joint(gnomon, design.dial.kind == DialKind::equatorial, filler, s);
     Cutting& cutting = design.cutting;
     const double line = std::clamp(0.0016 * s, 0.3, 3.0), sixty_fourth = 25.4 / 64.0;
     const bool tool_says = cutting.diameter_mm > 0 || (cutting.tool != Tool::any && !filler.wants("cutting: depth"));
@@ -128,9 +130,8 @@ void fill_gnomon_and_cutting(Design& design, Filler& filler, double s) {
                                     : std::round(line * 10.0) / 10.0,
                     "1/600 of the plate: reads from where the plate is read");
     if ((cutting.tool == Tool::v_cutter || cutting.tool == Tool::chisel) && filler.wants("cutting: depth"))
-        filler.fill(cutting.depth_mm, "cutting: depth",
-                    std::max(0.0, cutting.line_width_mm - cutting.flat_mm) / (2 * tan(cutting.point_angle / 2)),
-                    "what the line width asks of this V");
+        cutting.depth_mm =
+            std::max(0.0, cutting.line_width_mm - cutting.flat_mm) / (2 * tan(cutting.point_angle / 2)); // it follows
     filler.fill(cutting.least_gap_mm, "cutting: least gap", 2.0 * cutting.line_width_mm, "twice the line width");
 }
 

@@ -275,7 +275,10 @@ std::string outcome(const std::string& text) {
         REQUIRE(packet.items.front().file.bytes.substr(0, 5) == "%PDF-");
         for (const Packet::Item& item : packet.items)
             REQUIRE_FALSE(item.file.bytes.empty());
-        REQUIRE_NOTHROW(nlohmann::json::parse(packet.items.back().file.bytes));
+        const auto numbers = std::find_if(packet.items.begin(), packet.items.end(),
+                                          [](const Packet::Item& item) { return item.file.name == "numbers.json"; });
+        REQUIRE(numbers != packet.items.end());
+        REQUIRE_NOTHROW(nlohmann::json::parse(numbers->file.bytes));
     } catch (const layout::ExportError& trouble) {
         return trouble.what(); // told at the design's key by take_packet
     }
