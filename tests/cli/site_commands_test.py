@@ -1,10 +1,12 @@
 # SPDX-License-Identifier: MIT
-"""The commands that are asked of a place: sun."""
+"""The commands that are asked of a place: sun, sunlight."""
 import csv
 import io
 import unittest
 
-from program import ERROR, FINE, LEVEL, Bench, run, strict_json
+import fitz
+
+from program import ERROR, FINE, LEVEL, TWO_FACES, WALL, Bench, run, strict_json
 
 MOOR = ("--latitude", "54° 12' N", "--longitude", "-1.9", "--zone", "Europe/London")
 
@@ -70,6 +72,72 @@ class Sun(Bench):
         for words, parts in cases.items():
             with self.subTest(words):
                 status, out, err = run("sun", *words)
+                self.assertEqual((status, out), (ERROR, ""))
+                for part in parts:
+                    self.assertIn(part, err)
+
+
+class Sunlight(Bench):
+    def test_months_add_up(self):
+        status, out, err = run("sunlight", self.design(WALL), "--json")
+        self.assertEqual((status, err), (FINE, ""))
+        face = strict_json(out)["faces"][0]
+        self.assertEqual((face["year"], len(face["days"])), (2027, 365))
+        for key in ("up_h", "facing_h", "lit_h", "days_lit"):
+            self.assertAlmostEqual(face["total"][key], sum(month[key] for month in face["months"]), places=4)
+        for key in ("up_h", "facing_h", "lit_h"):
+            self.assertAlmostEqual(face["total"][key], sum(day[key] for day in face["days"]), places=3)
+        for day in face["days"]:
+            self.assertTrue(day["lit_h"] <= day["facing_h"] + 1e-9 <= day["up_h"] + 2e-9)
+            self.assertEqual(bool(day["lit"]), day["lit_h"] > 0)
+
+    def test_two_faces_share_the_day(self):
+        faces = strict_json(run("sunlight", self.design(TWO_FACES), "--json")[1])["faces"]
+        self.assertEqual(len(faces), 2)
+        self.assertTrue(abs(sum(face["total"]["lit_h"] for face in faces) - faces[0]["total"]["up_h"]) < 0.05)
+
+    def test_walls_side_by_side(self):
+        status, out, err = run("sunlight", *MOOR, "--facing", "S", "--facing", "N", "--level", "--year", "2028")
+        self.assertEqual((status, err), (FINE, ""))
+        self.assertIn("facing south", out.splitlines()[1])
+        self.assertIn("Not lit from", out)  # the north wall in winter
+        rows = list(csv.DictReader(io.StringIO(run("sunlight", *MOOR, "--facing", "S 23° E", "--year", "2028", "--csv")[1])))
+        self.assertEqual(len(rows), 366)
+
+    def test_the_skyline_takes_its_share(self):
+        text = WALL.replace("zone: Europe/London", "zone: Europe/London, skyline: [[90°, 20°], [S, 10°], [270°, 20°], [N, 0°]]")
+        total = strict_json(run("sunlight", self.design(text), "--json")[1])["faces"][0]["total"]
+        self.assertTrue(0 < total["lit_h"] < 0.9 * total["facing_h"])
+        self.assertIn("The skyline takes", run("sunlight", self.design(text))[1])
+
+    def test_sheets(self):
+        sheet = self.folder / "light.pdf"
+        status, _, err = run("sunlight", self.design(WALL), "--facing", "S", "--sheet", sheet)
+        self.assertEqual((status, err), (FINE, ""))
+        pages = [page.get_text() for page in fitz.open(sheet)]
+        self.assertEqual(len(pages), 3)
+        self.assertIn("Sunlight compared", pages[0])
+        self.assertIn("shaded by the skyline", pages[1])
+
+    def test_wrong_words(self):
+        wall = self.design(WALL)
+        cases = {
+            (): ["no plate is given"],
+            MOOR: ["no plate is given"],
+            ("--facing", "S"): ["no place is given"],
+            (*MOOR, "--facing", "S 100° E"): ["--facing"],
+            (*MOOR, "--facing", "S", "--lean", "sideways"): ["--lean"],
+            (wall, "--lean", "5° back"): ["--lean goes with --facing"],
+            (wall, wall, "--level"): ["name one design"],
+            (wall, *MOOR): ["its own place"],
+            (wall, "--year", "1850"): ["--year", "1901 to 2099"],
+            (wall, "--year", "next"): ["--year", "not a year"],
+            (*([wall] * 13),): ["too many"],
+            (self.folder / "none.yaml",): ["no such file"],
+        }
+        for words, parts in cases.items():
+            with self.subTest(words):
+                status, out, err = run("sunlight", *words)
                 self.assertEqual((status, out), (ERROR, ""))
                 for part in parts:
                     self.assertIn(part, err)

@@ -344,6 +344,8 @@ TEST_CASE("random scraps of quantities never trip a reader", "[cli]") {
             CHECK((*read >= 0.0 && *read <= 24.0));
         if (const auto read = day_of_year(text))
             CHECK(read->ok());
+        if (const auto read = calendar_date(text))
+            CHECK(read->ok());
         (void)years(text);
         (void)minutes(text);
         (void)whole_number(text);
