@@ -196,6 +196,14 @@ DatePlan date_plan(const Design& design, const MeanYear& year) {
     return std::move(lines.plan);
 }
 
+std::vector<FaceAttitude> face_attitudes(const Design& design) {
+    std::vector<FaceAttitude> faces;
+    for (const bool upper : {true, false})
+        if (has_two_faces(design) || design.dial.faces == (upper ? Faces::upper : Faces::lower))
+            faces.push_back({face_name(design, upper), attitude_of(design, upper)});
+    return faces;
+}
+
 std::vector<FacePlan> face_plans(const Design& design, const MeanYear& year) {
     std::vector<FacePlan> faces;
     if (has_two_faces(design) || design.dial.faces == Faces::upper)
