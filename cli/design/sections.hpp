@@ -22,6 +22,8 @@ void read_hours(Design& design, const Section& top);
 void read_also(Design& design, const Section& top); ///< after the hours: no time is drawn twice
 void read_dates(Design& design, const Section& top);
 void read_correction(Design& design, const Section& top); ///< after the hours, which it corrects
+void read_fixing(Design& design, const Section& top);
+void read_accuracy(Design& design, const Section& top);
 void read_lettering(Design& design, const Section& top);
 void read_cutting(Design& design, const Section& top);
 void read_print(Design& design, const Section& top);
