@@ -40,6 +40,7 @@ int main(int count, char** words) {
     add_numbers(app, status);
     add_shadow(app, status);
     add_check(app, status);
+    add_calibrate(app, status);
     add_sun(app, status);
     add_sunlight(app, status);
     if (const std::string wrong = count > 1 ? no_command(app, words[1]) : std::string{}; !wrong.empty()) {
