@@ -12,6 +12,7 @@ void add_make(CLI::App& app, int& status);
 void add_numbers(CLI::App& app, int& status);
 void add_shadow(CLI::App& app, int& status);
 void add_check(CLI::App& app, int& status);
+void add_calibrate(CLI::App& app, int& status);
 void add_sun(CLI::App& app, int& status);
 void add_sunlight(CLI::App& app, int& status);
 void add_fix(CLI::App& app, int& status);

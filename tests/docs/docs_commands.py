@@ -12,7 +12,7 @@ import sys
 import tempfile
 from pathlib import Path
 
-COMMANDS = ("make", "numbers", "shadow", "check", "sun", "sunlight")
+COMMANDS = ("make", "numbers", "shadow", "check", "calibrate", "sun", "sunlight")
 
 
 def blocks(text):
