@@ -29,9 +29,8 @@ struct Bench {
 
     /// Widths in their order of weight.
     [[nodiscard]] double width_of_step(int step_min) const;
-    [[nodiscard]] double field_line_width(Family family) const {
-        return (family == Family::date ? 0.6 : 0.5) * spec.cutting.line_width_mm;
-    }
+    /// @param set  as DialLine::set
+    [[nodiscard]] double field_line_width(Family family, int set) const;
     /// How far into the field the marks of half and quarter hours reach from its border.
     [[nodiscard]] double half_hour_reach_mm() const;
     [[nodiscard]] double quarter_hour_reach_mm() const;

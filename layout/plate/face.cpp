@@ -106,8 +106,20 @@ Bench::Bench(const FaceSpec& face_spec, const Delineation& delineated, const Pla
     }
 }
 
+double Bench::field_line_width(Family family, int set) const {
+    const LineWidths& widths = spec.widths;
+    const double asked = family == Family::date         ? widths.dates_mm
+                         : family == Family::altitude   ? widths.altitudes_mm
+                         : family == Family::azimuth    ? widths.azimuths_mm
+                         : family == Family::place_noon ? widths.noons_mm
+                         : set > 0 && std::size_t(set) <= widths.more_hours_mm.size()
+                             ? widths.more_hours_mm[std::size_t(set) - 1]
+                             : widths.hours_mm;
+    return asked > 0 ? asked : (family == Family::date ? 0.6 : 0.5) * spec.cutting.line_width_mm;
+}
+
 double Bench::width_of_step(int step_min) const {
-    const double tool = spec.cutting.line_width_mm;
+    const double tool = spec.widths.hours_mm > 0 ? spec.widths.hours_mm : spec.cutting.line_width_mm;
     return step_min >= 60 ? tool : step_min >= 30 ? 0.8 * tool : step_min >= 15 ? 0.65 * tool : 0.5 * tool;
 }
 

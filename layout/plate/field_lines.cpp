@@ -168,7 +168,7 @@ class FieldDrawer {
                 }
                 straight_.push_back({&line, part});
             }
-            const double width = bench_.field_line_width(line.family);
+            const double width = bench_.field_line_width(line.family, line.set);
             std::vector<Polyline> pieces = clipped(part, {{}, bench_.keep_out});
             drop_scraps(pieces, width);
             for (const Polyline& piece : pieces)
@@ -206,7 +206,7 @@ class FieldDrawer {
                 dates.push_back(line);
         std::sort(dates.begin(), dates.end(),
                   [](const DialLine* a, const DialLine* b) { return *a->declination < *b->declination; });
-        const double wanted = bench_.spec.cutting.least_gap_mm + bench_.field_line_width(Family::date);
+        const double wanted = bench_.spec.cutting.least_gap_mm + bench_.field_line_width(Family::date, 0);
         for (std::size_t i = 0; i + 1 < dates.size(); ++i)
             if (const double gap = least_distance(*dates[i], *dates[i + 1]); gap < wanted)
                 bench_.warnings.push_back(fmt::format("the date lines \"{}\" and \"{}\" come within {:.1f} mm of each "
