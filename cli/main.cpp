@@ -43,6 +43,7 @@ int main(int count, char** words) {
     add_calibrate(app, status);
     add_sun(app, status);
     add_sunlight(app, status);
+    add_fix(app, status);
     if (const std::string wrong = count > 1 ? no_command(app, words[1]) : std::string{}; !wrong.empty()) {
         std::cerr << "dialwright: " << wrong << '\n';
         return k_error;

@@ -5,6 +5,7 @@
 #include "cli/design/nearest.hpp"
 #include "cli/design/plain_text.hpp"
 #include "cli/design/quantity.hpp"
+#include "cli/packet/print_options.hpp"
 #include "cli/packet/write_files.hpp"
 #include "layout/export/pdf.hpp"
 #include "layout/sheet/export_error.hpp"
@@ -106,35 +107,24 @@ void SheetOptions::add_to(CLI::App& command) {
     command.add_option("--paper", paper, "for the PDF: A4, Letter, … [the design's, else A4]");
 }
 
-layout::PrintOptions print_options(const Design* design) {
-    layout::PrintOptions options;
-    const Print print = design != nullptr ? design->print : Print{};
-    options.paper = layout::paper_named(print.paper).value();
-    options.margin_mm = print.margin_mm;
-    options.overlap_mm = print.overlap_mm;
-    options.inches = design != nullptr && design->units == Units::inches;
-    options.title = design != nullptr ? design->title : "";
-    return options;
-}
-
-std::optional<layout::PrintOptions> asked_print(const SheetOptions& options, const Design* design) {
-    layout::PrintOptions print = print_options(design);
-    if (options.paper.empty())
-        return print;
-    const auto paper = layout::paper_named(options.paper);
-    if (!paper) {
+std::optional<AskedPrint> asked_print(const SheetOptions& options, const Design* design) {
+    Design asked = design != nullptr ? *design : Design{};
+    if (!options.paper.empty()) {
         const std::vector<std::string> names = layout::paper_names();
-        const std::string_view near = nearest(options.paper, std::vector<std::string_view>{names.begin(), names.end()});
-        tell("--paper",
-             {in_quotes(options.paper) + " is not a paper",
-              near.empty() ? "write it as in A4, Letter or roll 610 mm" : "did you mean " + std::string{near} + "?"});
-        return std::nullopt;
+        if (!layout::paper_named(options.paper)) {
+            const std::string_view near =
+                nearest(options.paper, std::vector<std::string_view>{names.begin(), names.end()});
+            tell("--paper", {in_quotes(options.paper) + " is not a paper",
+                             near.empty() ? std::string{"write it as in A4, Letter or roll 610 mm"}
+                                          : fmt::format("did you mean {}?", near)});
+            return std::nullopt;
+        }
+        asked.print.paper = options.paper;
     }
-    print.paper = *paper;
-    return print;
+    return AskedPrint{print_options(asked), asked.print.printer};
 }
 
-bool write_pdf(const std::string& file, const std::function<layout::SheetBook()>& make) {
+bool write_pdf(const std::string& file, const AskedPrint& print, const std::function<layout::SheetBook()>& make) {
     const std::filesystem::path path{file};
     try {
         std::error_code trouble;
@@ -142,8 +132,11 @@ bool write_pdf(const std::string& file, const std::function<layout::SheetBook()>
             std::cerr << fmt::format("--sheet: {} is a folder: give the name of a file in it\n", file);
             return false;
         }
+        layout::SheetBook book = make();
+        for (layout::Sheet& sheet : book.sheets)
+            layout::compensate(sheet, print.printer, print.options.paper.roll);
         write_files(path.has_parent_path() ? path.parent_path() : std::filesystem::path{"."},
-                    {{path.filename().string(), layout::pdf_of(make())}});
+                    {{path.filename().string(), layout::pdf_of(book)}});
         return true;
     } catch (const WriteError& trouble) {
         std::cerr << trouble.what() << "; nothing was changed there\n";

@@ -3,6 +3,7 @@
 
 #include "cli/design/design.hpp"
 #include "engine/time/zone.hpp"
+#include "layout/sheet/compensation.hpp"
 #include "layout/sheet/sheet.hpp"
 #include "layout/sheet/tiling.hpp"
 
@@ -47,11 +48,15 @@ struct SheetOptions {
     void add_to(CLI::App& command);
     [[nodiscard]] bool asked() const { return !file.empty(); }
 };
-/// How a design wants its sheets printed; the usual A4 without one.
-[[nodiscard]] layout::PrintOptions print_options(const Design* design);
-/// The same with the paper that the options name; tells on stderr what is wrong, and then gives nothing.
-[[nodiscard]] std::optional<layout::PrintOptions> asked_print(const SheetOptions& options, const Design* design);
+/// How the sheets are printed: as the design wants, the usual A4 without one, or on the paper that the options name.
+struct AskedPrint {
+    layout::PrintOptions options;
+    layout::Compensation printer;
+};
+/// Tells on stderr what is wrong, and then gives nothing.
+[[nodiscard]] std::optional<AskedPrint> asked_print(const SheetOptions& options, const Design* design);
 /// Makes the sheets and writes them as one PDF. Tells on stderr what keeps it from being made, and then is false.
-[[nodiscard]] bool write_pdf(const std::string& file, const std::function<layout::SheetBook()>& make);
+[[nodiscard]] bool write_pdf(const std::string& file, const AskedPrint& print,
+                             const std::function<layout::SheetBook()>& make);
 
 } // namespace dialwright::cli

@@ -15,5 +15,6 @@ void add_check(CLI::App& app, int& status);
 void add_calibrate(CLI::App& app, int& status);
 void add_sun(CLI::App& app, int& status);
 void add_sunlight(CLI::App& app, int& status);
+void add_fix(CLI::App& app, int& status);
 
 } // namespace dialwright::cli

@@ -32,7 +32,8 @@ int run_sun(const SunOptions& options) {
     const Angle altitude = options.bare ? Angle{} : k_upper_edge_altitude;
     const SunTable table{asked->name, asked->place.site, asked->zone, !options.bare,
                          civil_days(asked->place.site, asked->zone, dates->first, dates->last, altitude)};
-    if (options.sheet.asked() && !write_pdf(options.sheet.file, [&] { return sun_sheets(table, *print); }))
+    if (options.sheet.asked() &&
+        !write_pdf(options.sheet.file, *print, [&] { return sun_sheets(table, print->options); }))
         return k_error;
     std::cout << (options.json ? sun_json(table) : options.csv ? sun_csv(table) : sun_text(table));
     return said(k_fine);

@@ -134,7 +134,8 @@ int run_sunlight(const SunlightOptions& options) {
     std::vector<LightYear> years;
     for (LightFace& face : faces)
         years.push_back(light_year(std::move(face), *year));
-    if (options.sheet.asked() && !write_pdf(options.sheet.file, [&] { return sunlight_sheets(years, *print); }))
+    if (options.sheet.asked() &&
+        !write_pdf(options.sheet.file, *print, [&] { return sunlight_sheets(years, print->options); }))
         return k_error;
     std::cout << (options.json ? sunlight_json(years) : options.csv ? sunlight_csv(years) : sunlight_text(years));
     return said(k_fine);

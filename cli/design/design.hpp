@@ -135,6 +135,22 @@ enum class PrintedLayers {
     in_viewer   ///< the viewer can switch them
 };
 
+/// The dates for which the packet gets a fixing sheet.
+struct FixingDates {
+    std::optional<std::chrono::year_month_day> first, last; ///< both or none
+};
+
+/// How well the work can be done: what the accuracy page reckons with. Each is how far off the thing may be, either way.
+struct Tolerances {
+    double marking_mm = 0.5;                  ///< a line beside its place
+    Angle style_height = Angle::degrees(0.5); ///< of a pin: how far it leans up or down the plate
+    Angle substyle = Angle::degrees(0.5);     ///< of a pin: how far it leans to a side
+    Angle facing = Angle::degrees(1);         ///< of a level plate: how it is turned
+    Angle lean = Angle::degrees(0.5);         ///< from upright, from the slope, from level
+    double print_mm = 0.2;                    ///< of a 100 mm bar, one way of the paper against the other
+    Angle position = Angle::degrees(0.01);    ///< on the map, in latitude and in longitude
+};
+
 struct Print {
     std::string paper = "A4";
     double margin_mm = 8.0, overlap_mm = 10.0;
@@ -170,6 +186,8 @@ struct Design {
     Also also;
     Dates dates;
     CorrectionMade correction;
+    FixingDates fixing;
+    Tolerances tolerances;
     Years years;
     LetteringChoice lettering;
     Cutting cutting;

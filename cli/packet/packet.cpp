@@ -6,6 +6,7 @@
 #include "cli/packet/cover_words.hpp"
 #include "cli/packet/machine_files.hpp"
 #include "cli/packet/owner_card.hpp"
+#include "cli/packet/print_options.hpp"
 #include "cli/packet/work_pieces.hpp"
 #include "cli/plan/feasible.hpp"
 #include "cli/report/numbers.hpp"
@@ -22,20 +23,6 @@ namespace {
 
 using layout::Drawing;
 using layout::Sheet;
-
-layout::PrintOptions print_options(const Design& design) {
-    const Print& print = design.print;
-    layout::PrintOptions options;
-    options.paper = layout::paper_named(print.paper).value();
-    options.margin_mm = layout::margin_for(print.printer, options.paper, print.margin_mm);
-    options.overlap_mm = print.overlap_mm;
-    options.inches = design.units == Units::inches;
-    options.turn = print.turn;
-    options.title = design.title;
-    if (!print.printer.none())
-        options.remark = "corrected for this printer";
-    return options;
-}
 
 /// The pieces as they are printed: mirrored where the design asks for that.
 std::vector<WorkPiece> printed_pieces(const Commission& commission) {

@@ -18,15 +18,6 @@ struct Reader {
     Caster<Plane> caster;
 };
 
-/// Day of the mean year, from 1 January 0 h UT.
-double day_of_year(Instant at, const MeanYear& year) {
-    using namespace std::chrono;
-    const auto midnight = floor<days>(at);
-    const year_month_day date{midnight};
-    const double hours = duration<double, std::ratio<3600>>(at - midnight).count();
-    return year.day_of(date.month() / date.day(), hours);
-}
-
 std::string reading_json(std::optional<double> hours) {
     return hours ? '"' + say_clock(*hours) + '"' : "null";
 }
@@ -36,6 +27,14 @@ std::string reading_text(std::optional<double> hours) {
 }
 
 } // namespace
+
+double mean_day_of(Instant at, const MeanYear& year) {
+    using namespace std::chrono;
+    const auto midnight = floor<days>(at);
+    const year_month_day date{midnight};
+    const double hours = duration<double, std::ratio<3600>>(at - midnight).count();
+    return year.day_of(date.month() / date.day(), hours);
+}
 
 std::vector<ShadowReport> shadow_reports(const Commission& commission, std::span<const Instant> instants,
                                          std::optional<std::size_t> face) {
@@ -60,7 +59,7 @@ std::vector<ShadowReport> shadow_reports(const Commission& commission, std::span
                 report.lit = true;
                 report.shadow = cast->point;
                 const DialPlan& dial = readers[k].plan->dial;
-                const double day = day_of_year(report.at, commission.year);
+                const double day = mean_day_of(report.at, commission.year);
                 report.reads_h = reading_of(dial, dial.hours.time, commission.year, report.sky, day);
                 for (const HourPlan& more : dial.more_hours)
                     report.also_reads_h.push_back(reading_of(dial, more.time, commission.year, report.sky, day));

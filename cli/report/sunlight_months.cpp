@@ -109,12 +109,16 @@ std::string face_heading(const LightYear& year) {
 }
 
 const std::vector<layout::Flow::Column>& month_columns() {
-    static const std::vector<layout::Flow::Column> k_columns{
-        {"", Align::left},           {"Sun up h", Align::right},
-        {"facing h", Align::right},  {"skyline takes h", Align::right},
-        {"lit h", Align::right},     {"a day", Align::right},
-        {"of Sun up", Align::right}, {"days lit", Align::right},
-        {"first light", Align::right},     {"last light", Align::right}};
+    static const std::vector<layout::Flow::Column> k_columns{{"", Align::left},
+                                                             {"Sun up h", Align::right},
+                                                             {"facing h", Align::right},
+                                                             {"skyline takes h", Align::right},
+                                                             {"lit h", Align::right},
+                                                             {"a day", Align::right},
+                                                             {"of Sun up", Align::right},
+                                                             {"days lit", Align::right},
+                                                             {"first light", Align::right},
+                                                             {"last light", Align::right}};
     return k_columns;
 }
 
