@@ -21,11 +21,11 @@ int run_calibrate(const CalibrateOptions& options) {
     auto print = asked_print(options.sheet, nullptr);
     if (!print)
         return k_error;
-    print->inches = options.inches;
-    const bool made = write_pdf(options.sheet.file, [&] {
+    print->options.inches = options.inches;
+    const bool made = write_pdf(options.sheet.file, *print, [&] {
         return layout::SheetBook{"Calibration of the printer",
                                  "A page to measure a printer with",
-                                 {layout::calibration_sheet(*print)},
+                                 {layout::calibration_sheet(print->options)},
                                  false};
     });
     if (!made)
