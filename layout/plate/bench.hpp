@@ -1,7 +1,7 @@
 // SPDX-License-Identifier: MIT
 #pragma once
 
-#include "layout/lettering/lettering.hpp"
+#include "layout/lettering/plate_lettering.hpp"
 #include "layout/plate/clear_map.hpp"
 #include "layout/plate/face.hpp"
 #include "layout/plate/points.hpp"
@@ -20,7 +20,7 @@ struct Bench {
     Rings rings;
     std::vector<Outline> keep_out; ///< the border round the centre, and labels that lines stop for
     Point up;                      ///< unit, the reader's
-    Lettering lettering;
+    PlateLettering lettering;
     ClearMap clear;
 
     std::vector<Mark> marks;
@@ -39,6 +39,8 @@ struct Bench {
 
     void engrave(const Polyline& line, double width_mm, std::string name);
     void add_line(const DialLine& line, const Polyline& piece, std::string label, double width_mm);
+    /// Filled outlines, or strokes of the tool's own line.
+    void add_letters(std::vector<Path> paths, std::string name);
     void add_filled(std::vector<Path> paths, std::string name, Layer layer = Layer::engrave);
     [[nodiscard]] Polyline to_work(const PlatePolyline& piece) const;
 };

@@ -316,14 +316,14 @@ class FieldDrawer {
         if (std::abs(sagitta) < 0.02 * cap_mm_) {
             const Point along = unit(chord);
             const double lead = text.ink.left_mm;
-            bench_.add_filled(set_straight(text, place.start - lead * along, turn_of(along)), name);
+            bench_.add_letters(set_straight(text, place.start - lead * along, turn_of(along)), name);
             return;
         }
         const double half = length(chord) / 2;
         const double radius = (half * half + sagitta * sagitta) / (2 * std::abs(sagitta));
         const Point towards_centre = (sagitta > 0 ? -1.0 : 1.0) * left_of(unit(chord));
         const Point centre = place.middle + radius * towards_centre;
-        bench_.add_filled(set_on_circle(text, centre, radius, turn_of(place.middle - centre), sagitta < 0), name);
+        bench_.add_letters(set_on_circle(text, centre, radius, turn_of(place.middle - centre), sagitta < 0), name);
     }
 
     Bench& bench_;
