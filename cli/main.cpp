@@ -44,6 +44,7 @@ int main(int count, char** words) {
     add_sun(app, status);
     add_sunlight(app, status);
     add_fix(app, status);
+    add_accuracy(app, status);
     if (const std::string wrong = count > 1 ? no_command(app, words[1]) : std::string{}; !wrong.empty()) {
         std::cerr << "dialwright: " << wrong << '\n';
         return k_error;

@@ -16,5 +16,6 @@ void add_calibrate(CLI::App& app, int& status);
 void add_sun(CLI::App& app, int& status);
 void add_sunlight(CLI::App& app, int& status);
 void add_fix(CLI::App& app, int& status);
+void add_accuracy(CLI::App& app, int& status);
 
 } // namespace dialwright::cli

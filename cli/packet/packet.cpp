@@ -9,6 +9,8 @@
 #include "cli/packet/print_options.hpp"
 #include "cli/packet/work_pieces.hpp"
 #include "cli/plan/feasible.hpp"
+#include "cli/report/accuracy.hpp"
+#include "cli/report/fixing.hpp"
 #include "cli/report/numbers.hpp"
 #include "cli/report/say.hpp"
 #include "layout/export/pdf.hpp"
@@ -61,6 +63,9 @@ class Book {
         add(gnomon_pages(commission_, pieces_, options_));
         for (std::size_t i = 0; i < commission_.faces.size(); ++i)
             add(setting_out_pages(commission_, i, options_));
+        add(accuracy_sheets(commission_, accuracy_of(commission_), options_));
+        if (design_.fixing.first)
+            add(fixing_sheets(fixing_of(commission_, *design_.fixing.first, *design_.fixing.last), options_));
         add(owner_card(commission_, options_));
         for (const WorkPiece& piece : pieces_)
             if (is_correction(piece)) {

@@ -1,12 +1,12 @@
 # SPDX-License-Identifier: MIT
-"""The commands that are asked of a place: sun, sunlight."""
+"""The commands that are asked of a place: sun, sunlight, fix."""
 import csv
 import io
 import unittest
 
 import fitz
 
-from program import ERROR, FINE, LEVEL, TWO_FACES, WALL, Bench, run, strict_json
+from program import DESIGNS, ERROR, FINE, LEVEL, TWO_FACES, WALL, WITH_WARNINGS, Bench, run, strict_json
 
 MOOR = ("--latitude", "54° 12' N", "--longitude", "-1.9", "--zone", "Europe/London")
 
@@ -138,6 +138,69 @@ class Sunlight(Bench):
         for words, parts in cases.items():
             with self.subTest(words):
                 status, out, err = run("sunlight", *words)
+                self.assertEqual((status, out), (ERROR, ""))
+                for part in parts:
+                    self.assertIn(part, err)
+
+
+class Fix(Bench):
+    def test_two_pages_at_most_for_every_design(self):
+        for design in DESIGNS:
+            for dates in (("--on", "2027-06-14"), ("--on", "2027-03-25", "--to", "2027-04-20")):
+                with self.subTest(design.name, dates=dates):
+                    sheet = self.folder / "fix.pdf"
+                    status, out, err = run("fix", design, *dates, "--sheet", sheet)
+                    self.assertEqual((status, err), (FINE, ""))
+                    self.assertNotIn("nan", out)
+                    pages = [page.get_text() for page in fitz.open(sheet)]
+                    self.assertTrue(1 <= len(pages) <= 2)
+                    for words in ("Fixing: ", "North by shadows", "Level and plumb", "Never look at the Sun"):
+                        self.assertIn(words, "".join(pages))
+
+    def test_summer_time_is_in_the_clock(self):
+        dates = strict_json(run("fix", self.design(LEVEL), "--on", "2027-03-27", "--to", "2027-03-28", "--json")[1])["dates"]
+        self.assertEqual([date["noon"][11:16] for date in dates], ["12:13", "13:12"])
+        self.assertEqual([date["noon"][-6:] for date in dates], ["+00:00", "+01:00"])
+
+    def test_answers_are_what_the_plate_does(self):
+        """A level plate laid with its east edge down is the plate of a place farther west: 4 minutes a degree at the equator."""
+        text = LEVEL.replace("54.2", "0.001")
+        answers = strict_json(run("fix", self.design(text), "--on", "2027-03-21", "--json")[1])["answers"]
+        for answer in answers:
+            self.assertAlmostEqual(answer["roll_min_per_deg"], 4, delta=0.001)
+        # An equatorial plate turns about the Earth's axis in its own plane: clockwise as seen from the pole's side.
+        equatorial = LEVEL.replace("level", "equatorial")
+        answers = strict_json(run("fix", self.design(equatorial), "--on", "2027-06-21", "--json")[1])["answers"]
+        for answer in answers:
+            self.assertAlmostEqual(answer["roll_min_per_deg"], -4, delta=0.001)
+
+    def test_csv_and_json_say_the_same(self):
+        words = ("fix", self.design(TWO_FACES), "--on", "2027-06-21")
+        rows = list(csv.DictReader(io.StringIO(run(*words, "--csv")[1])))
+        dates = strict_json(run(*words, "--json")[1])["dates"]
+        self.assertEqual([(row["clock"], row["face"], row["reads"]) for row in rows], [(row["clock"], row["face"], row["reads"]) for row in dates[0]["rows"]])
+        self.assertEqual([row["on_plate"] == "yes" for row in rows], [row["on_plate"] for row in dates[0]["rows"]])
+
+    def test_the_packet_has_it_where_the_design_names_days(self):
+        for text, there in ((WALL, False), (WALL + "fixing: {on: 2027-06-14}\n", True)):
+            packet = self.folder / f"packet-{there}"
+            status, _, err = run("make", self.design(text), "--to", packet)
+            self.assertIn(status, (FINE, WITH_WARNINGS), err)
+            pages = "".join(page.get_text() for page in fitz.open(packet / "sheets.pdf"))
+            self.assertEqual("Fixing: " in pages, there)
+
+    def test_wrong_words(self):
+        wall = self.design(WALL)
+        cases = {
+            (wall,): ["--on"],
+            (wall, "--on", "soon"): ["--on", "not a date"],
+            (wall, "--on", "2027-06-14", "--to", "2027-08-14"): ["--to", "at most 31 days"],
+            (self.folder / "none.yaml", "--on", "2027-06-14"): ["no such file"],
+            (self.design(WALL.replace("23°", "123°"), "bad.yaml"), "--on", "2027-06-14"): ["dial: facing"],
+        }
+        for words, parts in cases.items():
+            with self.subTest(words):
+                status, out, err = run("fix", *words)
                 self.assertEqual((status, out), (ERROR, ""))
                 for part in parts:
                     self.assertIn(part, err)

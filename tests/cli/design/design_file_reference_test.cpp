@@ -134,6 +134,8 @@ Sections design_around(const Row& row) {
         design["hours"] = {{"time", "since sunrise"}};
     if (row.section == "correction" && (key == "diameter" || key == "dates"))
         design["correction"] = {{"form", key == "dates" ? "table" : "ring"}};
+    if (row.section == "fixing" && key == "to")
+        design["fixing"] = {{"on", "2027-06-14"}};
     if (row.section == "also: noon at")
         design["also"]["noon at"] = key == "name" ? "[{longitude: 5° E, name: " + row.example + "}]"
                                                   : "[{name: x, longitude: " + row.example + "}]";
