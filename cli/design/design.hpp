@@ -55,6 +55,11 @@ struct Dial {
     Faces faces = Faces::upper;         ///< of a slab: of an equatorial plate, a wall or a leaning slab
 };
 
+/// A width, or a share of the tool's own line; neither: by the order of weight.
+struct LineWeight {
+    double width_mm = 0.0, share = 0.0;
+    [[nodiscard]] double of(double line_width_mm) const { return width_mm > 0 ? width_mm : share * line_width_mm; }
+};
 struct Hours {
     HourTime time = HourTime::sun;
     std::optional<double> first_h, last_h; ///< on the dial's own time; not given: all that are ever lit
@@ -63,6 +68,7 @@ struct Hours {
     int count = 12;                    ///< 12 or 24
     HalfYear curves = HalfYear::whole; ///< of clock time
     NumeralStand stand = NumeralStand::along_border;
+    LineWeight weight;
     bool noon_mark = true;
     HourExtent reach = HourExtent::style;
     bool summer_numerals = false; ///< a second row, an hour on, for the zone's summer time
@@ -70,15 +76,22 @@ struct Hours {
 };
 
 /// Lines drawn on the field beside the hours of the chapter ring.
+/// How a family of lines is drawn, where the design says.
+struct FamilyLook {
+    LineWeight weight;
+    std::optional<std::pair<std::chrono::month_day, std::chrono::month_day>> between; ///< from day to day
+};
 struct MoreHours {
     HourTime time = HourTime::unequal;
     std::optional<double> first_h, last_h; ///< whole hours; not given: all that are ever lit
     HalfYear curves = HalfYear::whole;
+    FamilyLook look;
 };
 struct Also {
     std::vector<MoreHours> hours; ///< each time at most once, in the order of the file
     std::vector<Angle> altitudes, azimuths;
     std::vector<PlaceNoon> noons;
+    FamilyLook altitude_look, azimuth_look, noon_look;
 };
 
 struct NamedDay {
@@ -89,6 +102,7 @@ struct Dates {
     bool solstices = true, equinoxes = true, signs = false, months = false;
     std::vector<NamedDay> days;
     bool labels = true;
+    LineWeight weight;
 };
 
 /// The plate that says how to come from the dial to the clock.
