@@ -64,8 +64,8 @@ TEST_CASE("an equatorial plate's slips can be told by hand", "[engine][accuracy]
         const Angle declination = mean_year().obliquity();
         // Source: the Sun's width, 32' (common almanacs' mean); an hour angle of 1° is 4 minutes.
         CHECK_THAT(*slip(june, SlipKind::half_shadow), WithinAbs(4 * 16.0 / 60.0 / cos(declination), 1e-3));
-        // Half a millimetre at 100 mm is 0.2865°.
-        CHECK_THAT(*slip(june, SlipKind::marking), WithinAbs(4 * 0.5 / 100 * 180 / M_PI, 2e-3));
+        // Half a millimetre at 100 mm is 0.2865°, and the worse way of two a two-hundredth more at most.
+        CHECK_THAT(*slip(june, SlipKind::marking), WithinAbs(4 * 0.5 / 100 * 180 / M_PI, 6e-3));
         CHECK_THAT(*slip(june, SlipKind::position), WithinAbs(0.04, 0.01));
         CHECK_FALSE(slip(june, SlipKind::level));
         CHECK(*slip(june, SlipKind::equation) < 0.3);
@@ -73,8 +73,8 @@ TEST_CASE("an equatorial plate's slips can be told by hand", "[engine][accuracy]
         for (const auto& minutes : june.minutes)
             squares += minutes.value_or(0) * minutes.value_or(0);
         CHECK_THAT(june.total_min, WithinAbs(std::sqrt(squares), 1e-12));
-        CHECK_THAT(*june.minutes[static_cast<std::size_t>(june.most)],
-                   WithinAbs(*std::max_element(june.minutes.begin(), june.minutes.end()), 0));
+        for (const auto& minutes : june.minutes)
+            CHECK(minutes.value_or(0) <= *slip(june, june.most));
     }
     // At noon, turned about the plumb line by 1°: hour angle by sin H cos δ = sin(1°) cos a.
     const AccuracyCell& noon = *lines[6].at[0];
