@@ -157,6 +157,13 @@ class Fix(Bench):
                     for words in ("Fixing: ", "North by shadows", "Level and plumb", "Never look at the Sun"):
                         self.assertIn(words, "".join(pages))
 
+    def test_the_same_words_give_the_same_bytes(self):
+        design, sheets = self.design(WALL), [self.folder / name for name in ("a.pdf", "b.pdf")]
+        said = [run("fix", design, "--on", "2027-06-14", "--sheet", sheet, env={"TZ": tz, "PATH": "/usr/bin", "HOME": str(self.folder)})
+                for sheet, tz in zip(sheets, ("Pacific/Auckland", "America/Lima"))]
+        self.assertEqual(said[0], said[1])
+        self.assertEqual(sheets[0].read_bytes(), sheets[1].read_bytes())
+
     def test_summer_time_is_in_the_clock(self):
         dates = strict_json(run("fix", self.design(LEVEL), "--on", "2027-03-27", "--to", "2027-03-28", "--json")[1])["dates"]
         self.assertEqual([date["noon"][11:16] for date in dates], ["12:13", "13:12"])
