@@ -130,7 +130,7 @@ bool write_pdf(const std::string& file, const AskedPrint& print, const std::func
     try {
         std::error_code trouble;
         if (path.filename().empty() || std::filesystem::is_directory(path, trouble)) {
-            std::cerr << fmt::format("--sheet: {} is a folder: give the name of a file in it\n", file);
+            std::cerr << fmt::format("{} is a folder: give the name of a file in it\n", file);
             return false;
         }
         layout::SheetBook book = make();
@@ -142,7 +142,7 @@ bool write_pdf(const std::string& file, const AskedPrint& print, const std::func
     } catch (const WriteError& trouble) {
         std::cerr << trouble.what() << "; nothing was changed there\n";
     } catch (const layout::ExportError& trouble) {
-        std::cerr << "--sheet: " << trouble.what() << '\n';
+        std::cerr << file << ": " << trouble.what() << '\n';
     }
     return false;
 }
