@@ -69,6 +69,18 @@ void add_lettering(Drawing& drawing, const GaugePlan& plan, const Shape& shape) 
                                   degrees_minutes(plan.angle)));
 }
 
+/// How far the lettering is from a point.
+double clear_of_letters(const Drawing& drawing, Point from) {
+    double least = 1e300;
+    for (const Mark& mark : drawing.marks)
+        if (mark.layer == Layer::engrave) {
+            const Box box = bounds_of(mark);
+            least = std::min(least, distance(from, {std::clamp(from.x_mm, box.left_mm, box.right_mm),
+                                                    std::clamp(from.y_mm, box.bottom_mm, box.top_mm)}));
+        }
+    return least;
+}
+
 } // namespace
 
 Gauge gauge_of(const GaugePlan& plan) {
@@ -85,7 +97,8 @@ Gauge gauge_of(const GaugePlan& plan) {
     drawing.marks.push_back(
         {Layer::guide, {polyline({{-5, 0}, {shape.right_mm + 5, 0}})}, k_thin_mm, false, "face, along the base"});
     drawing.marks.push_back(cross_mark(Layer::guide, {}, 2.0, "centre"));
-    const double r = std::min(0.3 * edge, 40.0);
+    add_lettering(drawing, plan, shape);
+    const double r = std::min({0.3 * edge, 40.0, 0.9 * clear_of_letters(drawing, shape.corner)});
     drawing.marks.push_back(
         {Layer::guide,
          {Path{shape.corner + Point{r, 0},
@@ -94,7 +107,6 @@ Gauge gauge_of(const GaugePlan& plan) {
          k_thin_mm,
          false,
          "angle " + degrees_minutes(plan.angle)});
-    add_lettering(drawing, plan, shape);
     drawing.marks.push_back({Layer::cut, {rounded_polygon(shape.corners)}, k_cut_mm, false, "gauge"});
     gauge.part.drawings.push_back(std::move(drawing));
     gauge.part.particulars = {{"Gauge", plan.words},
@@ -109,13 +121,15 @@ Gauge gauge_of(const GaugePlan& plan) {
     return gauge;
 }
 
-Gauge substyle_gauge(Angle from_noon, GaugePlan plan) {
-    plan.angle = abs(from_noon);
+Gauge substyle_gauge(Angle turn, SubstyleFrom from, GaugePlan plan) {
+    const bool noon = from == SubstyleFrom::noon_line;
+    plan.angle = abs(turn);
     plan.under_mm = 0;
-    plan.words = from_noon < Angle{} ? "from noon to substyle, anticlockwise" : "from noon to substyle, clockwise";
+    plan.words = fmt::format("from {} to substyle, {}", noon ? "noon" : "upright",
+                             turn < Angle{} ? "anticlockwise" : "clockwise");
     Gauge gauge = gauge_of(plan);
     gauge.part.drawings.front().name = "substyle gauge";
-    if (from_noon > Angle{}) {
+    if (turn > Angle{}) {
         // Its edge lies clockwise of its base: the outline is turned over (y → −y), and each line of lettering is turned
         // half round, so that it keeps its place and is read with the base below.
         const Placing over{Angle::degrees(180), {}, 1.0, 1.0, true};
@@ -128,8 +142,9 @@ Gauge substyle_gauge(Angle from_noon, GaugePlan plan) {
         gauge.edge_from = over(gauge.edge_from);
         gauge.edge_to = over(gauge.edge_to);
     }
-    gauge.part.notes = {
-        "Lay it on the face with its corner at the centre and its base along the noon line: its edge is the substyle."};
+    gauge.part.notes = {fmt::format(
+        "Lay it on the face with its corner at the centre and its base along the {}: its edge is the substyle.",
+        noon ? "noon line" : "upright through it, the way that the substyle runs")};
     gauge.part.cautions.clear();
     return gauge;
 }

@@ -29,10 +29,14 @@ struct Gauge {
 /// @throws LetteringError
 [[nodiscard]] Gauge gauge_of(const GaugePlan& plan);
 
-/// For a plate whose substyle is not its noon line: lies on the face, base along the noon line, edge along the substyle.
-/// @param from_noon  turn from the noon line to the substyle, clockwise positive as the reader sees it; the gauge is
-///                   turned over for a turn the other way, and its words say which
+/// What the substyle is turned from: the noon line, or where none is drawn the plate's upright (its line of steepest slope).
+enum class SubstyleFrom { noon_line, upright };
+
+/// For a plate whose substyle is not its noon line: lies on the face, base along that or along the upright, edge along the
+/// substyle.
+/// @param turn  from the base to the substyle, clockwise positive as the reader sees it; the gauge is turned over for a
+///              turn the other way, and its words say which
 /// @return as gauge_of; throws where the turn is under 1° or over 89°, either way
-[[nodiscard]] Gauge substyle_gauge(Angle from_noon, GaugePlan plan);
+[[nodiscard]] Gauge substyle_gauge(Angle turn, SubstyleFrom from, GaugePlan plan);
 
 } // namespace dialwright::layout

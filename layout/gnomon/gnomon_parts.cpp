@@ -36,12 +36,14 @@ void add_gauges(std::vector<Part>& parts, const Face& face, const FaceSpec& spec
     plan.under_mm = spec.gnomon.kind == GnomonKind::rod ? spec.gnomon.thickness_mm / 2 : 0.0;
     if (style.height >= k_least_gauge && style.height <= k_most_gauge)
         add(gauge_of(plan).part, "The gauge for the style's height");
-    const auto noon = noon_direction(face);
-    if (!noon || !style.centre)
+    if (!style.centre)
         return;
-    const Angle between = style.substyle - *noon, turn = arc_tangent(sin(between), cos(between));
+    const auto noon = noon_direction(face);
+    const Angle upright = cos(style.substyle) < 0 ? Angle::degrees(180) : Angle{};
+    const Angle between = style.substyle - noon.value_or(upright), turn = arc_tangent(sin(between), cos(between));
     if (abs(turn) >= k_least_gauge && abs(turn) <= k_most_gauge)
-        add(substyle_gauge(turn, plan).part, "The gauge for the substyle");
+        add(substyle_gauge(turn, noon ? SubstyleFrom::noon_line : SubstyleFrom::upright, plan).part,
+            "The gauge for the substyle");
 }
 
 } // namespace

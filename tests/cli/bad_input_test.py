@@ -167,6 +167,62 @@ class BadFolders(Bench):
         self.refused(disk / "new", "cannot write", "No space left")
         self.assertFalse((disk / "new").exists())
 
+    def disk(self, options):
+        """A small disk of its own, or the test ends here."""
+        disk = self.folder / "small disk"
+        disk.mkdir(exist_ok=True)
+        done = subprocess.run(["mount", "-t", "tmpfs", "-o", options, "tmpfs", disk], capture_output=True)
+        if done.returncode != 0:
+            self.skipTest(f"no small disk can be mounted here: {done.stderr.decode().strip()}")
+        return disk
+
+    def test_a_disk_that_fills_at_any_file_of_the_packet(self):
+        """Whichever file it is that has no room, none is there afterwards; with room for all, all are."""
+        design = self.design(WALL.replace("750 mm", "750 mm, thickness: 12 mm") + "gnomon: {thickness: 6 mm, joint: tenons}\ncorrection: {width: 300 mm, height: 170 mm}\n"
+                             "lettering: {motto: Lux umbra Dei}\n", "every part.yaml")
+        status, _, err = run("make", design, "--to", self.folder / "whole")
+        self.assertIn(status, (FINE, WITH_WARNINGS), err)
+        whole = contents_of(self.folder / "whole")
+        self.assertGreater(len(whole), 14)
+        listed = [words[0] for words in map(str.split, whole["contents.txt"].decode().splitlines()) if words and words[0] in whole]
+        rooms, kilobytes = {}, 0  # up to the end of each, as they are written: on a disk of pages of 4 kB
+        for name in [*listed, "contents.txt"]:
+            kilobytes += 4 * -(-len(whole[name]) // 4096)
+            rooms[name] = kilobytes
+        self.assertEqual(rooms.keys(), whole.keys())
+        for name, room in rooms.items():
+            disk = self.disk(f"size={room - 4}k")
+            try:
+                status, out, err = run("make", design, "--to", disk)
+                self.assertEqual((status, out), (ERROR, ""), name)
+                self.assertIn("No space left", err)
+                self.assertEqual(contents_of(disk), {})
+                self.assertIn(f"{disk}/.{name}.", err)
+            finally:
+                subprocess.run(["umount", disk], check=True)
+        for options in (f"size={kilobytes + 100}k,nr_inodes=6", f"size={kilobytes + 100}k"):
+            disk = self.disk(options)
+            try:
+                status, out, err = run("make", design, "--to", disk)
+                self.assertIn(status, (ERROR,) if "inodes" in options else (FINE, WITH_WARNINGS), err)
+                self.same({} if status == ERROR else whole, contents_of(disk))
+            finally:
+                subprocess.run(["umount", disk], check=True)
+
+    def test_a_disk_that_can_only_be_read(self):
+        disk = self.disk("size=4m")
+        self.addCleanup(subprocess.run, ["umount", disk], check=True)
+        run("make", self.dial, "--to", disk / "packet")
+        before = contents_of(disk)
+        subprocess.run(["mount", "-o", "remount,ro", disk], check=True)
+        for words in (["make", self.changed, "--to", disk / "packet"], ["make", self.changed, "--to", disk / "new"], ["make", self.changed, "--sheet", "A1", "--to", disk / "packet"],
+                      ["make", self.changed, "--layers", "cut", "--to", disk / "packet"], ["calibrate", disk / "page.pdf"]):
+            status, out, err = run(*words)
+            self.assertEqual((status, out), (ERROR, ""), err)
+            self.assertIn("cannot write", err)
+            self.assertIn("Read-only file system", err)
+        self.same(before, contents_of(disk))
+
     def test_a_file_size_limit(self):
         """As a full disk, for those who may not mount one: no file may grow beyond 100 kB."""
         def limited():

@@ -9,6 +9,9 @@ import unittest
 from program import (DESIGNS, ERROR, FINE, LEVEL, TWO_FACES, WALL, WITH_WARNINGS, Bench, contents_of, faces_of,
                      numbers_of, run, strict_json)
 
+EVERY_PART = (WALL.replace("750 mm", "750 mm, thickness: 12 mm") + "gnomon: {thickness: 4 mm, joint: flange, flange width: 40 mm}\n"
+              "cutting: {tool: v cutter, letters: single strokes, kerf: 0.2 mm, arcs: no}\nprint: {layers: in the viewer, across feed: [180 mm, 179.5 mm]}\n"
+              "correction: {width: 300 mm, height: 170 mm}\nhours: {time: zone, summer numerals: yes}\n")
 COMMANDS = ("make", "numbers", "shadow", "check")
 
 
@@ -225,7 +228,10 @@ class Make(Bench):
         made = subprocess.run(["localedef", "-i", "de_DE", "-f", "UTF-8", german / "de_DE.UTF-8"], capture_output=True)
         if made.returncode not in (0, 1):  # 1: made with warnings
             print("no German locale could be made here; LC_ALL names one that is not there:", made.stderr.decode().strip())
-        for design in DESIGNS:
+        else:  # where a program that asks for it gets a decimal comma
+            self.assertEqual(subprocess.run(["/usr/bin/printf", "%.1f", "2,5"], capture_output=True, env=env).stdout, b"2,5")
+        parts = set()
+        for design in [*DESIGNS, self.design(EVERY_PART, "every part.yaml"), self.design(LEVEL + "gnomon: {kind: disc}\n", "disc.yaml")]:
             packets = [self.folder / name / design.stem for name in ("one", "two", "three")]
             for packet, more in zip(packets, ({}, {}, {"env": env, "cwd": "/"})):
                 status, _, err = run("make", design, "--to", packet, **more)
@@ -233,6 +239,14 @@ class Make(Bench):
             first, *others = map(contents_of, packets)
             for other in others:
                 self.same(first, other)
+            parts |= first.keys()
+        for stem in ("plate", "plate-front", "plate-upper", "gnomon", "gnomon-flange", "disc", "gauge", "substyle-gauge", "correction-graph", "correction-ring", "correction-table"):
+            self.assertLessEqual({f"{stem}.svg", f"{stem}.dxf"}, parts)
+        for words in (["make", self.folder / "every part.yaml", "--sheet", "B2", "--to"], ["make", self.folder / "every part.yaml", "--layers", "cut,score", "--to"]):
+            for name, more in (("four", {}), ("five", {"env": env})):
+                self.assertIn(run(*words, self.folder / name, **more)[0], (FINE, WITH_WARNINGS))
+        self.assertEqual(len(contents_of(self.folder / "four")), 2)
+        self.same(contents_of(self.folder / "four"), contents_of(self.folder / "five"))
 
     def test_other_files_in_the_folder_stay(self):
         packet = self.folder / "packet"

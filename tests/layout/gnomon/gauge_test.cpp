@@ -64,7 +64,8 @@ TEST_CASE("a gauge's edge stands at its angle to its base", "[gnomon]") {
 
 TEST_CASE("a substyle gauge turns the way its words say", "[gnomon]") {
     for (const double degrees : {-70.0, -25.3, 12.0, 48.0}) {
-        const Gauge gauge = substyle_gauge(Angle::degrees(degrees), {});
+        const auto from = degrees > 0 ? SubstyleFrom::noon_line : SubstyleFrom::upright;
+        const Gauge gauge = substyle_gauge(Angle::degrees(degrees), from, {});
         const Drawing& drawing = gauge.part.drawings.front();
         const auto ring = flattened(outline(drawing, "gauge"), 0.01);
         CHECK(stands_clear_of_itself(ring));
