@@ -2,6 +2,7 @@
 #include "cli/packet/machine_files.hpp"
 
 #include "layout/drawing/kerf.hpp"
+#include "layout/drawing/machine_order.hpp"
 #include "layout/export/dxf.hpp"
 #include "layout/export/part_list.hpp"
 #include "layout/export/svg.hpp"
@@ -39,7 +40,7 @@ void add_machine_files(Packet& packet, const Commission& commission, const std::
         if (!piece.for_machine)
             continue;
         const auto drawing = for_machine(piece, machine, packet);
-        const layout::Box frame = layout::bounds_of(*drawing);
+        const layout::Box frame = layout::bounds_for_machine(*drawing);
         dxf.origin = {frame.left_mm, frame.bottom_mm}; // the same corner as the SVG's
         packet.items.push_back({{piece.stem + hand + ".svg", layout::svg_of(*drawing, frame, svg)},
                                 piece.title + " for a machine, full scale" + said});

@@ -46,6 +46,14 @@ std::vector<Mark> inner_first(std::vector<Mark> marks) {
 
 } // namespace
 
+Box bounds_for_machine(const Drawing& drawing) {
+    Box box;
+    for (const Mark& mark : drawing.marks)
+        if (mark.layer != Layer::guide)
+            box.add(bounds_of(mark));
+    return box;
+}
+
 MachineWork ready_for_machine(const Drawing& drawing, bool with_guides) {
     for (const Mark& mark : drawing.marks) {
         if (!is_finite(mark))

@@ -13,6 +13,9 @@ namespace dialwright::layout {
 inline constexpr std::array k_machine_order = {Layer::guide, Layer::engrave, Layer::fill,
                                                Layer::score, Layer::drill,   Layer::cut};
 
+/// The box round what a machine works: all but the guides.
+[[nodiscard]] Box bounds_for_machine(const Drawing& drawing);
+
 /// A drawing made ready for a machine.
 struct MachineWork {
     Drawing drawing;
