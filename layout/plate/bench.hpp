@@ -25,6 +25,7 @@ struct Bench {
 
     std::vector<Mark> marks;
     std::vector<DrawnLine> lines;
+    std::vector<Lettered> lettered;
     std::vector<std::string> warnings;
 
     /// Widths in their order of weight.
@@ -40,7 +41,8 @@ struct Bench {
     void engrave(const Polyline& line, double width_mm, std::string name);
     void add_line(const DialLine& line, const Polyline& piece, std::string label, double width_mm);
     /// Filled outlines, or strokes of the tool's own line.
-    void add_letters(std::vector<Path> paths, std::string name);
+    /// @param kind  "label"; the mark is named by it and by the text, if that is not empty
+    void add_letters(std::vector<Path> paths, const std::string& kind, const std::string& text, double capital_mm);
     void add_filled(std::vector<Path> paths, std::string name, Layer layer = Layer::engrave);
     [[nodiscard]] Polyline to_work(const PlatePolyline& piece) const;
 };

@@ -3,6 +3,7 @@
 
 #include "layout/plate/bench.hpp"
 #include "layout/plate/numerals.hpp"
+#include "layout/plate/tool_check.hpp"
 
 #include <algorithm>
 #include <fmt/format.h>
@@ -116,12 +117,14 @@ double Bench::field_line_width(Family family, int set) const {
                          : set > 0 && std::size_t(set) <= widths.more_hours_mm.size()
                              ? widths.more_hours_mm[std::size_t(set) - 1]
                              : widths.hours_mm;
-    return asked > 0 ? asked : (family == Family::date ? 0.6 : 0.5) * spec.cutting.line_width_mm;
+    return std::max(asked > 0 ? asked : (family == Family::date ? 0.6 : 0.5) * spec.cutting.line_width_mm,
+                    thinnest_line_mm(spec.cutting));
 }
 
 double Bench::width_of_step(int step_min) const {
     const double tool = spec.widths.hours_mm > 0 ? spec.widths.hours_mm : spec.cutting.line_width_mm;
-    return step_min >= 60 ? tool : step_min >= 30 ? 0.8 * tool : step_min >= 15 ? 0.65 * tool : 0.5 * tool;
+    const double weight = step_min >= 60 ? 1.0 : step_min >= 30 ? 0.8 : step_min >= 15 ? 0.65 : 0.5;
+    return std::max(weight * tool, thinnest_line_mm(spec.cutting));
 }
 
 double Bench::division_band_mm() const {
@@ -150,13 +153,17 @@ void Bench::add_line(const DialLine& line, const Polyline& piece, std::string la
     drawn_line.hour_angle = line.hour_angle;
     drawn_line.direction = line.direction;
     drawn_line.declination = line.declination;
+    drawn_line.width_mm = width_mm;
     for (const Point& p : piece)
         drawn_line.points.push_back(to_plate(p, foot));
     lines.push_back(std::move(drawn_line));
     engrave(piece, width_mm, name_of_family(line.family) + label);
 }
 
-void Bench::add_letters(std::vector<Path> paths, std::string name) {
+void Bench::add_letters(std::vector<Path> paths, const std::string& kind, const std::string& text, double capital_mm) {
+    std::string name = text.empty() ? kind : kind + " " + text;
+    if (!paths.empty())
+        lettered.push_back({marks.size(), kind, capital_mm});
     if (!lettering.single_strokes())
         add_filled(std::move(paths), std::move(name));
     else if (!paths.empty())
@@ -208,6 +215,12 @@ Face draw_face(DialPlan plan, const MeanYear& year, const FaceSpec& spec) {
     face.drawing.name = spec.name.empty() ? "plate" : spec.name;
     for (const Mark& mark : bench.marks)
         face.drawing.marks.push_back(spec.reader_up == Angle{} ? mark : turn(mark));
+    for (Mark& mark : face.drawing.marks) // ornaments and strokes, too, are no finer than what the tool leaves
+        if (mark.layer == Layer::engrave && !mark.filled)
+            mark.width_mm = std::max(mark.width_mm, thinnest_line_mm(spec.cutting));
+    face.lettering = std::move(bench.lettered);
+    for (std::string& sentence : tool_warnings(face, spec))
+        face.warnings.push_back(std::move(sentence));
     return face;
 }
 

@@ -61,7 +61,15 @@ struct DrawnLine {
     Angle hour_angle;
     std::optional<Angle> direction;
     std::optional<Angle> declination;
+    double width_mm = 0.0;
     std::vector<PlatePoint> points; ///< plate frame, mm, before the page is turned
+};
+
+/// A mark of lettering.
+struct Lettered {
+    std::size_t mark = 0;    ///< in Face::drawing
+    std::string kind;        ///< "numeral", "label", "motto": how the mark's name begins
+    double capital_mm = 0.0; ///< height of the capitals, as cut
 };
 
 /// What the name of a line of the family begins with: "hour line ", "date line ".
@@ -75,6 +83,7 @@ struct Face {
     double gnomon_foot_mm = 0.0;  ///< length of the gnomon's foot along the substyle
     std::vector<DrawnLine> lines; ///< hours by time, then dates
     Drawing drawing;              ///< turned so that the reader's up is the page's
+    std::vector<Lettered> lettering;
     std::vector<std::string> warnings;
 };
 

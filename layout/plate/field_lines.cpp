@@ -80,7 +80,6 @@ class FieldDrawer {
                     place_label(*line);
             tell_unlabelled();
         }
-        tell_close_dates(lines);
         for (const DialLine& line : bench_.delineation.lines)
             if (in_ring(line) && line.step_min >= 60)
                 for (const Polyline& part : on_field(line))
@@ -198,22 +197,6 @@ class FieldDrawer {
         bench_.warnings.push_back(fmt::format("one line serves for {}: it is cut once", all));
     }
 
-    /// Date lines that run closer together than the tool can cut.
-    void tell_close_dates(const std::vector<const DialLine*>& lines) {
-        std::vector<const DialLine*> dates;
-        for (const DialLine* line : lines)
-            if (line->family == Family::date)
-                dates.push_back(line);
-        std::sort(dates.begin(), dates.end(),
-                  [](const DialLine* a, const DialLine* b) { return *a->declination < *b->declination; });
-        const double wanted = bench_.spec.cutting.least_gap_mm + bench_.field_line_width(Family::date, 0);
-        for (std::size_t i = 0; i + 1 < dates.size(); ++i)
-            if (const double gap = least_distance(*dates[i], *dates[i + 1]); gap < wanted)
-                bench_.warnings.push_back(fmt::format("the date lines \"{}\" and \"{}\" come within {:.1f} mm of each "
-                                                      "other, middle to middle: the tool wants {:.1f} mm",
-                                                      dates[i]->label, dates[i + 1]->label, gap, wanted));
-    }
-
     /// A line's parts on the field, as they are before labels stand in their way.
     [[nodiscard]] const std::vector<Polyline>& on_field(const DialLine& line) const { return parts_.at(&line); }
 
@@ -225,21 +208,6 @@ class FieldDrawer {
                 for (Polyline& part : clipped(bench_.to_work(piece), field))
                     parts.push_back(std::move(part));
         }
-    }
-
-    [[nodiscard]] double least_distance(const DialLine& a, const DialLine& b) const {
-        double least = 1e300;
-        const auto& parts_b = on_field(b);
-        for (const Polyline& part_a : on_field(a))
-            for (const Point& p : part_a)
-                for (const Polyline& part_b : parts_b)
-                    for (std::size_t i = 0; i + 1 < part_b.size(); ++i) {
-                        const Point run = part_b[i + 1] - part_b[i];
-                        const double along =
-                            dot(run, run) > 0 ? std::clamp(dot(p - part_b[i], run) / dot(run, run), 0.0, 1.0) : 0.0;
-                        least = std::min(least, distance(p, part_b[i] + along * run));
-                    }
-        return least;
     }
 
     void tell_unlabelled() {
@@ -310,20 +278,20 @@ class FieldDrawer {
     }
 
     void set(const std::string& label, const LetteredLine& text, const LabelPlace& place) {
-        const std::string name = "label " + label;
         const Point chord = place.end - place.start;
         const double sagitta = cross(unit(chord), place.middle - place.start); // + bulges to the left: heads outward
         if (std::abs(sagitta) < 0.02 * cap_mm_) {
             const Point along = unit(chord);
             const double lead = text.ink.left_mm;
-            bench_.add_letters(set_straight(text, place.start - lead * along, turn_of(along)), name);
+            bench_.add_letters(set_straight(text, place.start - lead * along, turn_of(along)), "label", label, cap_mm_);
             return;
         }
         const double half = length(chord) / 2;
         const double radius = (half * half + sagitta * sagitta) / (2 * std::abs(sagitta));
         const Point towards_centre = (sagitta > 0 ? -1.0 : 1.0) * left_of(unit(chord));
         const Point centre = place.middle + radius * towards_centre;
-        bench_.add_letters(set_on_circle(text, centre, radius, turn_of(place.middle - centre), sagitta < 0), name);
+        bench_.add_letters(set_on_circle(text, centre, radius, turn_of(place.middle - centre), sagitta < 0), "label",
+                           label, cap_mm_);
     }
 
     Bench& bench_;

@@ -140,19 +140,18 @@ class NumeralDrawer {
 
     void set(const Numeral& n, double height) {
         const LetteredLine line = bench_.lettering.line(n.text, height, 0.06 * height);
-        const std::string name = row_.name + " " + n.text;
         if (row_.middle.is_round() && !upright()) {
             const double radius = row_.middle.radius_mm() + (heads_out_ ? -height / 2 : height / 2);
             bench_.add_letters(
                 set_on_circle(line, row_.middle.centre(), radius, turn_of(n.at - row_.middle.centre()), !heads_out_),
-                name);
+                row_.name, n.text, height);
             return;
         }
         const TurnedBox box = box_of(n, height);
         const Point along{cos(box.turn), sin(box.turn)};
         const double ink_middle = (line.ink.left_mm + line.ink.right_mm) / 2;
         bench_.add_letters(set_straight(line, box.middle - ink_middle * along - height / 2 * left_of(along), box.turn),
-                           name);
+                           row_.name, n.text, height);
     }
 
     Bench& bench_;
