@@ -203,6 +203,8 @@ std::vector<DesignError> what_cannot_be_lettered(const Design& design, const std
         try_text("lettering: place line", design.lettering.place_line);
         for (const NamedDay& day : design.dates.days)
             try_text("dates: days", day.label);
+        if (design.dates.signs)
+            try_text("dates: signs", "♈");
     } catch (const layout::LetteringError& trouble) {
         errors.push_back(error_at(design, "lettering: font", trouble.what(), ""));
     }

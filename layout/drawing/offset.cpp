@@ -244,7 +244,7 @@ std::vector<Path> offset_by_chords(const Path& path, double by_mm) {
 
 DiscFit fit_of_disc(const std::vector<Path>& shapes, double radius_mm) {
     constexpr double k_square = k_scale * k_scale, k_near = 0.45;
-    const double fine_mm = radius_mm / 20;
+    const double fine_mm = radius_mm / 15;
     ClipperLib::Clipper clipper;
     for (const Path& shape : shapes)
         clipper.AddPath(ring_of(shape, fine_mm), ClipperLib::ptSubject, true);

@@ -31,7 +31,7 @@ struct DiscFit {
 
 /// @param shapes  closed; non-zero winding over them all, holes run the other way
 /// @param radius_mm  > 0
-/// Accuracy: 1/20 of the radius.
+/// Accuracy: 1/15 of the radius.
 [[nodiscard]] DiscFit fit_of_disc(const std::vector<Path>& shapes, double radius_mm);
 
 } // namespace dialwright::layout

@@ -14,6 +14,8 @@
 namespace dialwright::layout {
 namespace {
 
+constexpr double k_meet_mm = 0.02; ///< lines that come so near each other meet
+
 double to_segment(Point p, Point a, Point b) {
     const Point run = b - a;
     const double square = dot(run, run);
@@ -128,7 +130,7 @@ class LineCheck {
         if (s.line == t.line)
             return;
         const Nearest here = between_segments(s, t);
-        if (here.first >= near_mm_)
+        if (here.first >= near_mm_ || (here.first >= k_meet_mm && ends_across(s, t)))
             return;
         const auto pair = std::minmax(s.line, t.line);
         const auto [it, added] = nearest_.try_emplace({pair.first, pair.second}, here);
@@ -136,8 +138,15 @@ class LineCheck {
             it->second = here;
     }
 
+    /// Lines that are nearest to each other at more than 30° are so where one ends, and no long sliver is left there.
+    [[nodiscard]] bool ends_across(const Segment& s, const Segment& t) const {
+        const Point a = s.b - s.a, b = t.b - t.a;
+        const bool ring = lines_[s.line].of_ring && lines_[t.line].of_ring;
+        return !ring && std::abs(cross(a, b)) > 0.5 * length(a) * length(b);
+    }
+
     [[nodiscard]] std::optional<CloseLines> told(const WholeLine& a, const WholeLine& b, const Nearest& nearest) const {
-        constexpr double k_meet_mm = 0.02, k_rounding_mm = 0.005;
+        constexpr double k_rounding_mm = 0.005;
         const bool ring = a.of_ring && b.of_ring && a.first->family == Family::hour && b.first->family == Family::hour;
         if (ring ? std::lround(a.first->time_h * 60) == std::lround(b.first->time_h * 60) : nearest.first < k_meet_mm)
             return std::nullopt;

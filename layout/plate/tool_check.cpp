@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "layout/plate/tool_check.hpp"
 
+#include "layout/drawing/measures.hpp"
 #include "layout/drawing/offset.hpp"
 
 #include <algorithm>
@@ -24,6 +25,30 @@ std::string place_text(Point at) {
                        part(at.y_mm, "up from", "down from"));
 }
 
+using Letter = std::vector<Path>;
+
+/// The contours that belong together: those whose boxes meet. Mostly one letter, or the mark on one.
+std::vector<Letter> letters_of(const Mark& mark) {
+    std::vector<Letter> letters;
+    std::vector<Box> boxes;
+    for (const Path& path : mark.paths) {
+        Letter letter{path};
+        Box box = bounds_of(path);
+        for (std::size_t i = 0; i < letters.size();)
+            if (boxes[i].meets(box)) {
+                box.add(boxes[i]);
+                letter.insert(letter.end(), letters[i].begin(), letters[i].end());
+                letters.erase(letters.begin() + std::ptrdiff_t(i));
+                boxes.erase(boxes.begin() + std::ptrdiff_t(i));
+            } else {
+                ++i;
+            }
+        letters.push_back(std::move(letter));
+        boxes.push_back(box);
+    }
+    return letters;
+}
+
 /// The lettering of one kind and height.
 class LetterCheck {
   public:
@@ -31,57 +56,73 @@ class LetterCheck {
         : cutting_{&cutting}, kind_{std::move(kind)}, capital_mm_{capital_mm} {}
 
     void add(const Mark& mark) {
-        if (!seen_.insert(mark.name).second)
-            return; // the same letters in another place
         if (!mark.filled) {
-            if (capital_mm_ < k_stroke_widths * mark.width_mm) {
+            if (capital_mm_ < k_stroke_widths * mark.width_mm)
                 stroke_mm_ = mark.width_mm;
-                troubled_.push_back(&mark);
-            }
             return;
         }
-        const DiscFit fit = fit_of_disc(mark.paths, thinnest_line_mm(*cutting_) / 2);
-        if (spoilt(fit))
-            troubled_.push_back(&mark);
-        const double share = fit.missed_mm2 / fit.area_mm2;
-        if (spoilt(fit) && share >= worst_share_) {
-            worst_share_ = share;
-            worst_ = &mark;
-            at_ = fit.worst;
-        }
-        lost_eyes_ += fit.lost_eyes;
+        for (Letter& letter : letters_of(mark))
+            if (is_new(letter))
+                look_at(std::move(letter), mark.name);
     }
-    [[nodiscard]] bool trouble() const { return !troubled_.empty(); }
+    [[nodiscard]] bool trouble() const { return !troubled_.empty() || stroke_mm_ > 0; }
     [[nodiscard]] double share() const { return stroke_mm_ > 0 ? 1.0 : worst_share_; }
     [[nodiscard]] const std::string& kind() const { return kind_; }
 
     [[nodiscard]] std::string sentence() const {
         if (stroke_mm_ > 0)
-            return fmt::format("the {} has capitals of {:.1f} mm, which fill up when they are cut {:.2f} mm wide: "
+            return fmt::format("letters ({}) with capitals of {:.1f} mm fill up when they are cut {:.2f} mm wide: "
                                "{:.1f} mm would do",
                                kind_, capital_mm_, stroke_mm_, k_stroke_widths * stroke_mm_);
-        std::string eyes;
-        if (lost_eyes_ > 0)
-            eyes = fmt::format(" and breaks out {} of its eyes", lost_eyes_);
-        const std::string which =
-            worst_->name == kind_ ? std::string{} : fmt::format(", most of all \"{}\"", worst_->name);
         return fmt::format(
-            "the tool leaves no line finer than {:.2f} mm: of the {} (capitals {:.1f} mm) it misses up to "
-            "{:.0f} %{}{}, {}; {}\"cutting: letters: single strokes\" suits it",
-            thinnest_line_mm(*cutting_), kind_, capital_mm_, std::ceil(100 * worst_share_), eyes, which,
-            place_text(at_), remedy());
+            "the tool leaves no line finer than {:.2f} mm, and letters ({}) with capitals of {:.1f} mm "
+            "are finer: it misses up to {:.0f} % of one{}, first in " {} ", {}; {}" cutting:letters
+            : "
+              "single strokes" suits it ",
+              thinnest_line_mm(*cutting_),
+              kind_, capital_mm_, std::min(100.0, std::ceil(100 * worst_share_)),
+              lost_eyes_ > 0 ? " and breaks eyes out" : "", worst_name_, place_text(at_), remedy());
     }
 
   private:
     [[nodiscard]] static bool spoilt(const DiscFit& fit) {
         return fit.missed_mm2 > k_may_miss * fit.area_mm2 || fit.lost_eyes > 0;
     }
+
+    /// A letter that stands in another place, turned, has the same pieces and the same area.
+    bool is_new(const Letter& letter) {
+        std::size_t pieces = 0;
+        double area = 0;
+        for (const Path& path : letter) {
+            pieces += path.pieces.size();
+            area += area_of(path);
+        }
+        return seen_.insert({pieces, std::lround(1e5 * area / (capital_mm_ * capital_mm_))}).second;
+    }
+
+    void look_at(Letter letter, const std::string& name) {
+        const DiscFit fit = fit_of_disc(letter, thinnest_line_mm(*cutting_) / 2);
+        if (!spoilt(fit))
+            return;
+        lost_eyes_ += fit.lost_eyes;
+        const double share = fit.missed_mm2 / fit.area_mm2;
+        if (troubled_.empty() || share > worst_share_) {
+            worst_share_ = share;
+            worst_name_ = name;
+            Box box;
+            for (const Path& path : letter)
+                box.add(bounds_of(path));
+            at_ = share > 0 ? fit.worst : box.middle();
+        }
+        troubled_.push_back(std::move(letter));
+    }
+
     /// Larger letters under the same tool are these letters under a smaller one.
     [[nodiscard]] std::string remedy() const {
         constexpr double k_step = 1.08, k_most = 12;
         double factor = 1;
-        for (const Mark* mark : troubled_)
-            while (factor < k_most && spoilt(fit_of_disc(mark->paths, thinnest_line_mm(*cutting_) / 2 / factor)))
+        for (const Letter& letter : troubled_)
+            while (factor < k_most && spoilt(fit_of_disc(letter, thinnest_line_mm(*cutting_) / 2 / factor)))
                 factor *= k_step;
         return factor < k_most
                    ? fmt::format("capitals of {:.1f} mm would do, or ", std::ceil(factor * capital_mm_ * 2) / 2)
@@ -91,9 +132,9 @@ class LetterCheck {
     const Cutting* cutting_;
     std::string kind_;
     double capital_mm_;
-    std::set<std::string> seen_;
-    std::vector<const Mark*> troubled_;
-    const Mark* worst_ = nullptr;
+    std::set<std::pair<std::size_t, long>> seen_;
+    std::vector<Letter> troubled_;
+    std::string worst_name_;
     double worst_share_ = 0, stroke_mm_ = 0;
     Point at_;
     std::size_t lost_eyes_ = 0;
