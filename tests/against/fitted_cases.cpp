@@ -1,0 +1,87 @@
+// SPDX-License-Identifier: MIT
+//
+// Reads cases of readings that another program's Sun made, and prints what is found from them, for comparison with what
+// was put in. A case is a line with its kind and figures, a line a reading, and "end".
+//   wall LATITUDE LONGITUDE PEG PEG_GIVE FOOT_GIVE LEVEL_GIVE CLOCK_GIVE | INSTANT RIGHT DOWN
+#include "engine/survey/wall_survey.hpp"
+#include "engine/time/instant_text.hpp"
+
+#include <fmt/format.h>
+
+#include <iostream>
+#include <sstream>
+#include <stdexcept>
+#include <string>
+
+namespace {
+
+using namespace dialwright;
+
+Instant instant_in(std::istream& in) {
+    std::string text;
+    in >> text;
+    const auto instant = read_instant(text);
+    if (!instant)
+        throw std::runtime_error("not an instant: " + text);
+    return *instant;
+}
+
+/// Each line up to "end".
+template <class Take>
+void take_readings(Take&& take) {
+    for (std::string line; std::getline(std::cin, line) && line != "end";) {
+        std::istringstream in{line};
+        take(in);
+        if (!in)
+            throw std::runtime_error("not a reading: " + line);
+    }
+}
+
+void print(const Found& found) {
+    fmt::print(" {:.6f} {:.6f} {}", found.value, found.range, found.told ? 1 : 0);
+}
+
+void wall(std::istream& in) {
+    WallReadings readings;
+    double latitude = 0, longitude = 0, level_give = 0;
+    in >> latitude >> longitude >> readings.peg_mm >> readings.peg_give_mm >> readings.foot_give_mm >> level_give >>
+        readings.clock_give_s;
+    readings.site = {Angle::degrees(latitude), Angle::degrees(longitude)};
+    readings.level_give = Angle::degrees(level_give);
+    take_readings([&](std::istream& line) {
+        PegShadow shadow;
+        shadow.at = instant_in(line);
+        line >> shadow.right_mm >> shadow.down_mm;
+        readings.shadows.push_back(shadow);
+    });
+    const WallSurvey survey = survey_wall(readings);
+    fmt::print("wall {} {} {}", survey.answers.size(), survey.checked ? 1 : 0, survey.too_scattered ? 1 : 0);
+    for (const WallAnswer& answer : survey.answers) {
+        fmt::print(" | {}", int(answer.fault));
+        for (const Found& found : {answer.facing_deg, answer.lean_deg, answer.clock_s, answer.level_deg})
+            print(found);
+        fmt::print(" ");
+        for (const bool stray : answer.stray)
+            fmt::print("{}", stray ? 1 : 0);
+    }
+    fmt::print("\n");
+}
+
+} // namespace
+
+int main() {
+    try {
+        for (std::string line; std::getline(std::cin, line);) {
+            std::istringstream in{line};
+            std::string kind;
+            in >> kind;
+            if (kind == "wall")
+                wall(in);
+            else
+                throw std::runtime_error("no such kind: " + line);
+        }
+    } catch (const std::exception& trouble) {
+        fmt::print(stderr, "{}\n", trouble.what());
+        return 2;
+    }
+}
