@@ -3,6 +3,7 @@
 
 #include "cli/design/read_design.hpp"
 #include "cli/plan/face_plans.hpp"
+#include "layout/gnomon/gnomon_parts.hpp"
 
 #include <filesystem>
 #include <optional>
@@ -13,8 +14,11 @@ namespace dialwright::cli {
 struct Commission {
     Design design;
     MeanYear year;
-    std::vector<FacePlan> plans;     ///< the nodus' height filled in
-    std::vector<layout::Face> faces; ///< beside their plans
+    std::vector<FacePlan> plans;                    ///< the nodus' height filled in
+    std::vector<layout::Face> faces;                ///< beside their plans
+    std::vector<std::vector<layout::Part>> gnomons; ///< the parts of each face's gnomon, beside their plans
+    std::optional<Correction> correction;           ///< from the dial to the clock; nothing where hours have none
+    std::optional<layout::CorrectionPlate> correction_plate; ///< where the design asks for one
 };
 
 /// A commission, or what is wrong with its design: one or the other, never both, never neither.

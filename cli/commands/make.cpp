@@ -4,6 +4,7 @@
 #include "cli/exit_status.hpp"
 #include "cli/packet/packet.hpp"
 
+#include <algorithm>
 #include <fmt/format.h>
 #include <iostream>
 #include <memory>
@@ -14,7 +15,27 @@ namespace {
 struct MakeOptions {
     std::string design;
     std::string folder;
+    std::string sheet;
+    std::vector<std::string> layers;
 };
+
+/// The layers that are asked for by name; nothing after an unknown one has been told.
+std::optional<std::vector<layout::Layer>> layers_named(const std::vector<std::string>& names) {
+    std::vector<layout::Layer> layers;
+    for (const std::string& name : names) {
+        const auto found = std::find_if(std::begin(layout::k_layers), std::end(layout::k_layers),
+                                        [&](layout::Layer layer) { return layout::name_of(layer) == name; });
+        if (found == std::end(layout::k_layers)) {
+            std::cerr << fmt::format(
+                "--layers: \"{}\" is no layer: give some of cut, engrave, fill, drill, score, guide, "
+                "as in --layers cut,drill\n",
+                name);
+            return std::nullopt;
+        }
+        layers.push_back(*found);
+    }
+    return layers;
+}
 
 int run_make(const MakeOptions& options) {
     const auto commission = take_commission(options.design);
@@ -24,9 +45,19 @@ int run_make(const MakeOptions& options) {
         options.folder.empty()
             ? std::filesystem::path{std::filesystem::path{options.design}.stem().string() + "-packet"}
             : std::filesystem::path{options.folder};
-    const auto packet = take_packet(*commission);
+    const auto layers = layers_named(options.layers);
+    if (!layers)
+        return k_error;
+    const auto packet = take_packet(*commission, {*layers, options.sheet});
     if (!packet)
         return k_error;
+    if (packet->items.empty()) {
+        std::cerr << fmt::format(
+            "nothing is printed: no sheet {} of this design has anything on it; the first page of its "
+            "packet shows the sheets and their names\n",
+            options.sheet);
+        return k_error;
+    }
     std::vector<OutputFile> files;
     for (const Packet::Item& item : packet->items)
         files.push_back(item.file);
@@ -52,6 +83,9 @@ void add_make(CLI::App& app, int& status) {
         app.add_subcommand("make", "Write the packet: full-scale sheets, the plate for a machine, and all numbers");
     command->add_option("DESIGN", options->design, "the design file")->required();
     command->add_option("--to", options->folder, "folder for the packet [the design's name with -packet, here]");
+    command->add_option("--sheet", options->sheet, "one sheet again, by its name, such as B2");
+    command->add_option("--layers", options->layers, "sheets with these layers alone, such as cut,drill")
+        ->delimiter(',');
     command->callback([options, &status] { status = run_make(*options); });
 }
 

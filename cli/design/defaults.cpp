@@ -91,6 +91,26 @@ std::string_view thickness_why(GnomonKind kind) {
     return {};
 }
 
+void fill_joint(Gnomon& gnomon, bool equatorial, Filler& filler, double s) {
+    if (gnomon.kind != GnomonKind::edge)
+        return;
+    const FootKind kind = gnomon.joint.kind;
+    if (!equatorial)
+        filler.note_unless_given("gnomon: joint", "plain",
+                                 "it stands on the face; how it is fixed is the maker's choice");
+    if (kind == FootKind::plain)
+        filler.note_unless_given("gnomon: holes", "0", "how it is fixed is the maker's choice");
+    const bool screwed = (kind == FootKind::plain && gnomon.joint.count > 0) || kind == FootKind::flange;
+    if (!screwed)
+        return;
+    const double by_plate = std::clamp(0.014 * s, 2.0, 6.0), half = gnomon.thickness_mm / 2;
+    if (kind == FootKind::plain && half > 0 && half < by_plate)
+        filler.fill(gnomon.joint.hole_mm, "gnomon: hole diameter", std::floor(10 * half) / 10,
+                    "half of the gnomon's thickness, into whose edge it goes");
+    else
+        filler.fill_tidy(gnomon.joint.hole_mm, "gnomon: hole diameter", by_plate, "1/70 of the plate");
+}
+
 void fill_gnomon_and_cutting(Design& design, Filler& filler, double s) {
     Gnomon& gnomon = design.gnomon;
     filler.note_unless_given("gnomon: kind", "edge", "a plate of metal, whose top edge is the style");
@@ -98,17 +118,20 @@ void fill_gnomon_and_cutting(Design& design, Filler& filler, double s) {
     filler.note_unless_given("gnomon: nodus", k_nodi[static_cast<std::size_t>(gnomon.nodus)],
                              "as such a gnomon commonly has it");
     filler.fill(gnomon.thickness_mm, "gnomon: thickness", 0.0, thickness_why(gnomon.kind));
-    if (gnomon.kind == GnomonKind::edge)
-        filler.note_unless_given("gnomon: holes", "0", "how it is fixed is the maker's choice");
-    if (gnomon.holes > 0)
-        filler.fill_tidy(gnomon.hole_diameter_mm, "gnomon: hole diameter", std::clamp(0.014 * s, 2.0, 6.0),
-                         "1/70 of the plate");
+    fill_joint(gnomon, design.dial.kind == DialKind::equatorial, filler, s);
     Cutting& cutting = design.cutting;
     const double line = std::clamp(0.0016 * s, 0.3, 3.0), sixty_fourth = 25.4 / 64.0;
-    filler.fill(cutting.line_width_mm, "cutting: line width",
-                filler.inches() ? std::max(1.0, std::round(line / sixty_fourth)) * sixty_fourth
-                                : std::round(line * 10.0) / 10.0,
-                "1/600 of the plate: reads from where the plate is read");
+    const bool tool_says = cutting.diameter_mm > 0 || (cutting.tool != Tool::any && !filler.wants("cutting: depth"));
+    if (tool_says && filler.wants("cutting: line width"))
+        filler.note("cutting: line width", length_text(cutting.line_width_mm, design.units), "what the tool leaves");
+    else
+        filler.fill(cutting.line_width_mm, "cutting: line width",
+                    filler.inches() ? std::max(1.0, std::round(line / sixty_fourth)) * sixty_fourth
+                                    : std::round(line * 10.0) / 10.0,
+                    "1/600 of the plate: reads from where the plate is read");
+    if ((cutting.tool == Tool::v_cutter || cutting.tool == Tool::chisel) && filler.wants("cutting: depth"))
+        cutting.depth_mm =
+            std::max(0.0, cutting.line_width_mm - cutting.flat_mm) / (2 * tan(cutting.point_angle / 2)); // it follows
     filler.fill(cutting.least_gap_mm, "cutting: least gap", 2.0 * cutting.line_width_mm, "twice the line width");
 }
 
@@ -150,6 +173,28 @@ void note_hours_and_dates(Design& design, Filler& filler) {
                              "the Sun's mean path over five leap cycles");
 }
 
+void fill_correction(Design& design, Filler& filler) {
+    CorrectionMade& made = design.correction;
+    if (!made.wanted)
+        return;
+    filler.note_unless_given("correction: form", "graph", "it shows every day, and what lies between");
+    if (made.form == CorrectionForm::ring) {
+        filler.fill_tidy(made.width_mm, "correction: diameter",
+                         std::clamp(0.7 * design.plate.width_mm, 180.0, k_largest_plate_mm), "7/10 of the plate");
+        made.height_mm = made.width_mm;
+    } else {
+        filler.fill_tidy(made.width_mm, "correction: width",
+                         std::clamp(0.75 * design.plate.width_mm, 180.0, k_largest_plate_mm), "3/4 of the plate");
+        filler.fill_tidy(made.height_mm, "correction: height", 0.55 * made.width_mm, "a little over half of its width");
+    }
+    filler.fill_tidy(made.letter_height_mm, "correction: letter height",
+                     std::max(made.form == CorrectionForm::ring ? made.width_mm / 75 : made.height_mm / 45,
+                              layout::least_letter_mm(design.cutting)),
+                     made.form == CorrectionForm::ring ? "1/75 of the ring" : "1/45 of its height");
+    if (made.form == CorrectionForm::table)
+        filler.note_unless_given("correction: dates", "as close as its letters have room", "no dates are named");
+}
+
 void fill_print(Design& design, Filler& filler) {
     Print& print = design.print;
     const bool inches = filler.inches();
@@ -186,6 +231,7 @@ void fill_defaults(Design& design, const ReadingState& state) {
     fill_borders_and_letters(design, filler, s);
     fill_gnomon_and_cutting(design, filler, s);
     note_hours_and_dates(design, filler);
+    fill_correction(design, filler);
     fill_print(design, filler);
 }
 

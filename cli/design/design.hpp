@@ -2,7 +2,10 @@
 #pragma once
 
 #include "engine/dial/dial_plan.hpp"
+#include "layout/correction/correction_plate.hpp"
+#include "layout/export/layer_table.hpp"
 #include "layout/plate/plate_spec.hpp"
+#include "layout/sheet/compensation.hpp"
 
 #include <chrono>
 #include <map>
@@ -16,9 +19,12 @@ using dialwright::HalfYear;
 using dialwright::HourExtent;
 using dialwright::HourTime;
 using layout::Borders;
+using layout::CorrectionForm;
 using layout::Cutting;
+using layout::FootKind;
 using layout::Gnomon;
 using layout::GnomonKind;
+using layout::JointOptions;
 using layout::LetteringChoice;
 using layout::NodusKind;
 using layout::Numerals;
@@ -26,6 +32,8 @@ using layout::NumeralStand;
 using layout::Plate;
 using layout::PlatePointMm;
 using layout::PlateShape;
+using layout::TableSteps;
+using layout::Tool;
 
 /// What a design file says, with what it leaves open filled in by the trade's habit (each such filling is in `assumed`).
 /// Lengths are millimetres. One struct a section of the file; docs/design-file.md describes each key.
@@ -83,14 +91,44 @@ struct Dates {
     bool labels = true;
 };
 
+/// The plate that says how to come from the dial to the clock.
+struct CorrectionMade {
+    bool wanted = false; ///< the section is there: a plate is made
+    CorrectionForm form = CorrectionForm::graph;
+    double width_mm = 0.0, height_mm = 0.0; ///< a ring: both its diameter
+    double letter_height_mm = 0.0;
+    std::optional<TableSteps> dates; ///< of a table; nothing: the closest for which its letters have room
+};
+
 struct Years {
     int first = 2027, last = 2046;
+};
+
+/// What files for machines are like.
+struct Machine {
+    double kerf_mm = 0.0; ///< whole width of the cut
+    bool arcs = true;     ///< false: chords in their place
+    double flatten_mm = 0.01;
+    std::optional<double> hairline_mm; ///< of all strokes in an SVG
+    bool mirrored = false;
+    layout::LayerTable layers = layout::usual_layers();
+};
+
+/// How workshop layers come on paper.
+enum class PrintedLayers {
+    together,
+    one_by_one, ///< sheets for each
+    in_viewer   ///< the viewer can switch them
 };
 
 struct Print {
     std::string paper = "A4";
     double margin_mm = 8.0, overlap_mm = 10.0;
     bool own_size = true; ///< one page of the work's own size as well
+    layout::PaperTurn turn = layout::PaperTurn::fewest_sheets;
+    layout::Compensation printer;
+    bool mirrored = false;
+    PrintedLayers layers = PrintedLayers::together;
 };
 
 enum class Units { millimetres, inches };
@@ -117,9 +155,11 @@ struct Design {
     Hours hours;
     Also also;
     Dates dates;
+    CorrectionMade correction;
     Years years;
     LetteringChoice lettering;
     Cutting cutting;
+    Machine machine;
     Print print;
     Units units = Units::millimetres;
     std::vector<Assumption> assumed;

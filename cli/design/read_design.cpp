@@ -44,6 +44,14 @@ class Agreement {
         fits("lettering", "numeral height", design_.lettering.numeral_height_mm, s / 2);
         fits("lettering", "label height", design_.lettering.label_height_mm, s / 4);
         fits("lettering", "motto height", design_.lettering.motto_height_mm, s / 4);
+        const CorrectionMade& correction = design_.correction;
+        if (state_.gives("correction: letter height") && correction.width_mm > 0 && correction.height_mm > 0 &&
+            correction.letter_height_mm > 0.1 * std::min(correction.width_mm, correction.height_mm))
+            report({"letter height"}, "correction",
+                   fmt::format("letters of {} are too large for a correction plate of {} by {}",
+                               shown(correction.letter_height_mm), shown(correction.width_mm),
+                               shown(correction.height_mm)),
+                   fmt::format("give at most {}", shown(0.1 * std::min(correction.width_mm, correction.height_mm))));
         fits("gnomon", "thickness", design_.gnomon.thickness_mm, s / 4);
         fits("cutting", "line width", design_.cutting.line_width_mm, s / 10);
     }
@@ -88,6 +96,7 @@ void read_sections(Design& design, const Node& root, ReadingState& state) {
     read_hours(design, top);
     read_also(design, top);
     read_dates(design, top);
+    read_correction(design, top);
     read_lettering(design, top);
     read_cutting(design, top);
     read_print(design, top);

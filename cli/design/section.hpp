@@ -98,6 +98,11 @@ class Section {
 
     /// Millimetres from `least_mm` to `most_mm`.
     [[nodiscard]] std::optional<double> length(std::string_view key, double least_mm, double most_mm) const;
+    /// Leaves `target` alone when there is no good value.
+    void length_into(double& target, std::string_view key, double least_mm, double most_mm) const {
+        if (const auto mm = length(key, least_mm, most_mm))
+            target = *mm;
+    }
     [[nodiscard]] std::optional<int> count(std::string_view key, int least, int most) const;
 
     template <class T>

@@ -21,6 +21,7 @@ void read_gnomon(Design& design, const Section& top);
 void read_hours(Design& design, const Section& top);
 void read_also(Design& design, const Section& top); ///< after the hours: no time is drawn twice
 void read_dates(Design& design, const Section& top);
+void read_correction(Design& design, const Section& top); ///< after the hours, which it corrects
 void read_lettering(Design& design, const Section& top);
 void read_cutting(Design& design, const Section& top);
 void read_print(Design& design, const Section& top);
@@ -45,6 +46,9 @@ inline constexpr double k_smallest_plate_mm = 20.0;
 [[nodiscard]] bool draws_any(const Design& design, std::initializer_list<HourTime> times);
 /// The dial draws hour lines that are straight: these can run on with the style's shadow.
 [[nodiscard]] bool draws_straight_hours(const Design& design);
+/// The kind of time by which a reading of the dial becomes clock time with minutes that depend on the date alone: that
+/// of the chapter ring, else of hours drawn beside it. Nothing if the dial shows no such hours.
+[[nodiscard]] std::optional<HourTime> corrected_time(const Design& design);
 /// The dial draws hours that count from the Sun's rising or setting.
 [[nodiscard]] bool counts_from_the_horizon(const Design& design);
 

@@ -180,6 +180,8 @@ void read_plate(Design& design, const Section& top) {
         design.plate.centre = read_point(centre->value, "plate: centre", k_largest_plate_mm, top.state());
     if (const auto material = plate.line("material", 200))
         design.plate.material = *material;
+    if (const auto mm = plate.length("thickness", 0.3, 1000.0))
+        design.plate.thickness_mm = *mm;
 }
 
 } // namespace dialwright::cli

@@ -1,8 +1,7 @@
 // SPDX-License-Identifier: MIT
-// What is put on the plate and how it is cut: borders, gnomon, lettering, cutting, print.
+// What is put on the plate and how it is cut: borders, gnomon, lettering.
 #include "cli/design/nearest.hpp"
 #include "cli/design/sections.hpp"
-#include "layout/sheet/paper.hpp"
 
 #include <fmt/format.h>
 
@@ -14,31 +13,9 @@ namespace dialwright::cli {
 
 namespace {
 
-/// Leaves `target` alone when there is no good value.
-void length_into(double& target, const Section& section, std::string_view key, double least_mm, double most_mm) {
-    if (const auto mm = section.length(key, least_mm, most_mm))
-        target = *mm;
-}
-
 void line_into(std::string& target, const Section& section, std::string_view key, std::size_t most) {
     if (const auto text = section.line(key, most))
         target = *text;
-}
-
-void read_paper(Design& design, const Section& print) {
-    const std::optional<std::string> name = print.line("paper", 100);
-    if (!name)
-        return;
-    design.print.paper = *name;
-    if (layout::paper_named(*name))
-        return;
-    std::vector<std::string> names = layout::paper_names();
-    std::erase_if(names, [](const std::string& one) { return one.starts_with("roll"); }); // examples, not names
-    const std::vector<std::string_view> candidates{names.begin(), names.end()};
-    const std::string_view near = nearest(*name, candidates);
-    print.error("paper", in_quotes(*name) + " is not a paper that is known here",
-                near.empty() ? "give A4, A3, Letter, Tabloid, or a roll by its width from 100 mm, as in \"roll 610 mm\""
-                             : fmt::format("did you mean {}?", near));
 }
 
 constexpr std::array<Choice<GnomonKind>, 5> k_gnomons = {{{"edge", GnomonKind::edge},
@@ -89,32 +66,112 @@ void check_gnomon_kind(const Design& design, const Section& gnomon) {
     if (dial.kind == DialKind::equatorial && (kind == GnomonKind::upright_pin || kind == GnomonKind::disc))
         gnomon.error("kind", "the gnomon of an equatorial dial stands square through its plate",
                      "give edge, rod or pin");
+    if (dial.kind == DialKind::equatorial)
+        gnomon.refuse({"joint"}, "the gnomon of an equatorial dial stands square through its plate, in one hole",
+                      "leave it out");
     if (kind != GnomonKind::edge)
-        gnomon.refuse({"foot", "holes", "hole diameter"}, "only an edge has a foot along the substyle",
-                      "leave it out, or make the gnomon \"kind: edge\"");
+        gnomon.refuse({"foot", "holes", "hole diameter", "joint", "tenons", "tenon length", "proud", "fit", "hook",
+                       "keel", "flange width", "flange thickness"},
+                      "only an edge has a foot along the substyle", "leave it out, or make the gnomon \"kind: edge\"");
+    if (kind == GnomonKind::edge || kind == GnomonKind::disc)
+        gnomon.refuse({"socket"}, "only a rod or a pin stands in a socket", "leave it out");
+    if (kind != GnomonKind::rod)
+        gnomon.refuse({"strut"}, "only a rod is held by a strut", "leave it out, or make the gnomon \"kind: rod\"");
+    if (kind == GnomonKind::rod || kind == GnomonKind::disc)
+        gnomon.refuse({"rounding"}, "a rod's tip is always round, and a disc has none", "leave it out");
+    if (design.gnomon.nodus != NodusKind::ball)
+        gnomon.refuse({"ball"}, "the nodus is no ball", "leave it out, or give \"nodus: ball\"");
+    if (design.gnomon.ball_mm > 0 && design.gnomon.ball_mm <= design.gnomon.thickness_mm && kind != GnomonKind::edge)
+        gnomon.error("ball",
+                     fmt::format("a ball of {} does not show on a gnomon of {}",
+                                 length_text(design.gnomon.ball_mm, design.units),
+                                 length_text(design.gnomon.thickness_mm, design.units)),
+                     "three times the gnomon's thickness shows well");
+}
+
+constexpr std::array<Choice<FootKind>, 5> k_joints = {{{"plain", FootKind::plain},
+                                                       {"tenons", FootKind::tenons},
+                                                       {"hooked tenons", FootKind::hooked_tenons},
+                                                       {"flange", FootKind::flange},
+                                                       {"halving", FootKind::halving}}};
+
+bool goes_through(FootKind kind) {
+    return kind == FootKind::tenons || kind == FootKind::hooked_tenons || kind == FootKind::halving;
 }
 
 /// Holes that fit in the foot.
-void read_fixing(Design& design, const Section& gnomon) {
-    Gnomon& made = design.gnomon;
-    if (const auto mm = gnomon.length("foot", 1.0, k_largest_plate_mm))
-        made.foot_mm = *mm;
-    made.holes = gnomon.count("holes", 0, 20).value_or(0);
-    length_into(made.hole_diameter_mm, gnomon, "hole diameter", 0.2, 100.0);
-    if (gnomon.has("hole diameter") && !gnomon.has("holes"))
+void check_holes(const Design& design, const Section& gnomon) {
+    const Gnomon& made = design.gnomon;
+    const double hole_mm = made.joint.hole_mm;
+    if (gnomon.has("hole diameter") && !gnomon.has("holes") && made.joint.kind != FootKind::flange)
         gnomon.error("hole diameter", "there are no holes to have it", "say how many, as in \"holes: 2\"");
-    if (made.foot_mm && made.hole_diameter_mm >= *made.foot_mm)
+    if (made.foot_mm && hole_mm >= *made.foot_mm)
         gnomon.error("hole diameter",
-                     fmt::format("a hole of {} does not fit in a foot of {}",
-                                 length_text(made.hole_diameter_mm, design.units),
+                     fmt::format("a hole of {} does not fit in a foot of {}", length_text(hole_mm, design.units),
                                  length_text(*made.foot_mm, design.units)),
                      "make the holes smaller or the foot longer");
-    else if (made.foot_mm && made.holes * made.hole_diameter_mm >= *made.foot_mm)
+    else if (made.foot_mm && made.joint.count * hole_mm >= *made.foot_mm)
         gnomon.error("holes",
-                     fmt::format("{} holes of {} do not fit in a foot of {}", made.holes,
-                                 length_text(made.hole_diameter_mm, design.units),
-                                 length_text(*made.foot_mm, design.units)),
+                     fmt::format("{} holes of {} do not fit in a foot of {}", made.joint.count,
+                                 length_text(hole_mm, design.units), length_text(*made.foot_mm, design.units)),
                      "make fewer or smaller holes");
+}
+
+/// Keys that belong to one joint are wrong beside another.
+void refuse_other_joints(const Section& gnomon, FootKind kind) {
+    const auto only = [&](bool belongs, std::initializer_list<std::string_view> keys, const char* of) {
+        if (!belongs)
+            gnomon.refuse(keys, fmt::format("this joint has no such thing: it goes with {}", of),
+                          "leave it out, or name the joint that has it");
+    };
+    only(kind == FootKind::plain || kind == FootKind::flange, {"holes", "hole diameter"},
+         "\"joint: plain\" or \"joint: flange\"");
+    only(kind == FootKind::tenons || kind == FootKind::hooked_tenons, {"tenons", "tenon length"},
+         "\"joint: tenons\" or \"joint: hooked tenons\"");
+    only(kind == FootKind::tenons, {"proud"}, "\"joint: tenons\"");
+    only(goes_through(kind), {"fit"}, "a joint that goes through the plate");
+    only(kind == FootKind::hooked_tenons, {"hook"}, "\"joint: hooked tenons\"");
+    only(kind == FootKind::hooked_tenons || kind == FootKind::halving, {"keel"},
+         "\"joint: hooked tenons\" or \"joint: halving\"");
+    only(kind == FootKind::flange, {"flange width", "flange thickness"}, "\"joint: flange\"");
+}
+
+/// What a joint through the plate, or one that holds the gnomon by its thickness, must know.
+void check_joint_thickness(const Design& design, const Section& gnomon) {
+    const FootKind kind = design.gnomon.joint.kind;
+    if (kind == FootKind::plain)
+        return;
+    if (design.gnomon.thickness_mm <= 0 && !gnomon.state().faulty("gnomon: thickness"))
+        gnomon.error("joint", "this joint is cut to the gnomon's thickness, which the design does not say",
+                     "measure the sheet and give it, as in \"thickness: 5 mm\"");
+    if (goes_through(kind) && design.plate.thickness_mm <= 0 && !gnomon.state().faulty("plate: thickness"))
+        gnomon.error("joint", "this joint goes through the plate, whose thickness the design does not say",
+                     "measure the plate and give it under \"plate\", as in \"thickness: 12 mm\"");
+}
+
+void read_joint(Design& design, const Section& gnomon) {
+    Gnomon& made = design.gnomon;
+    JointOptions& joint = made.joint;
+    if (const auto mm = gnomon.length("foot", 1.0, k_largest_plate_mm))
+        made.foot_mm = *mm;
+    joint.kind = gnomon.choice<FootKind>("joint", k_joints).value_or(FootKind::plain);
+    const bool tenons = joint.kind == FootKind::tenons || joint.kind == FootKind::hooked_tenons;
+    joint.count = tenons ? gnomon.count("tenons", 1, 10).value_or(2)
+                         : gnomon.count("holes", joint.kind == FootKind::flange ? 1 : 0, 20)
+                               .value_or(joint.kind == FootKind::flange ? 2 : 0);
+    if (joint.kind == FootKind::halving)
+        joint.count = 1;
+    gnomon.length_into(joint.hole_mm, "hole diameter", 0.2, 100.0);
+    gnomon.length_into(joint.tenon_mm, "tenon length", 1.0, k_largest_plate_mm);
+    gnomon.length_into(joint.proud_mm, "proud", 0.0, 100.0);
+    gnomon.length_into(joint.fit_mm, "fit", -0.5, 2.0); // below zero where it is pressed in
+    gnomon.length_into(joint.hook_mm, "hook", 0.5, 200.0);
+    gnomon.length_into(joint.keel_mm, "keel", 1.0, 500.0);
+    gnomon.length_into(joint.flange_width_mm, "flange width", 2.0, k_largest_plate_mm);
+    gnomon.length_into(joint.flange_thickness_mm, "flange thickness", 0.3, 100.0);
+    refuse_other_joints(gnomon, joint.kind);
+    check_holes(design, gnomon);
+    check_joint_thickness(design, gnomon);
 }
 
 constexpr double k_least_letter_mm = 0.5;
@@ -125,9 +182,9 @@ constexpr double k_largest_letter_mm = 1000.0;
 void read_borders(Design& design, const Section& top) {
     const Section borders{top.entry("borders"), "borders", top.state()};
     Borders& made = design.borders;
-    length_into(made.margin_mm, borders, "margin", 0.0, k_largest_plate_mm / 2);
-    length_into(made.chapter_ring_mm, borders, "chapter ring", 0.0, k_largest_plate_mm / 2);
-    length_into(made.inner_mm, borders, "inner border", 0.0, k_largest_plate_mm / 2);
+    borders.length_into(made.margin_mm, "margin", 0.0, k_largest_plate_mm / 2);
+    borders.length_into(made.chapter_ring_mm, "chapter ring", 0.0, k_largest_plate_mm / 2);
+    borders.length_into(made.inner_mm, "inner border", 0.0, k_largest_plate_mm / 2);
 }
 
 void read_gnomon(Design& design, const Section& top) {
@@ -137,9 +194,13 @@ void read_gnomon(Design& design, const Section& top) {
     read_nodus(design, gnomon);
     if (const auto mm = gnomon.length("nodus height", 1.0, k_largest_plate_mm))
         made.nodus_height_mm = *mm;
-    length_into(made.thickness_mm, gnomon, "thickness", 0.0, k_largest_plate_mm);
+    gnomon.length_into(made.thickness_mm, "thickness", 0.0, k_largest_plate_mm);
+    gnomon.length_into(made.rounding_mm, "rounding", 0.0, 200.0);
+    gnomon.length_into(made.ball_mm, "ball", 1.0, 500.0);
+    gnomon.length_into(made.socket_mm, "socket", 1.0, k_largest_plate_mm);
+    gnomon.length_into(made.strut_mm, "strut", 1.0, k_largest_plate_mm);
     if (made.kind == GnomonKind::edge)
-        read_fixing(design, gnomon);
+        read_joint(design, gnomon);
     check_gnomon_kind(design, gnomon);
 }
 
@@ -147,10 +208,10 @@ void read_lettering(Design& design, const Section& top) {
     const Section lettering{top.entry("lettering"), "lettering", top.state()};
     LetteringChoice& made = design.lettering;
     line_into(made.family, lettering, "font", 100);
-    length_into(made.numeral_height_mm, lettering, "numeral height", k_least_letter_mm, k_largest_letter_mm);
-    length_into(made.label_height_mm, lettering, "label height", k_least_letter_mm, k_largest_letter_mm);
+    lettering.length_into(made.numeral_height_mm, "numeral height", k_least_letter_mm, k_largest_letter_mm);
+    lettering.length_into(made.label_height_mm, "label height", k_least_letter_mm, k_largest_letter_mm);
     line_into(made.motto, lettering, "motto", 200);
-    length_into(made.motto_height_mm, lettering, "motto height", k_least_letter_mm, k_largest_letter_mm);
+    lettering.length_into(made.motto_height_mm, "motto height", k_least_letter_mm, k_largest_letter_mm);
     if (lettering.has("motto height") && !lettering.has("motto"))
         lettering.error("motto height", "there is no motto to have it", "give the motto, or leave this out");
     line_into(made.place_line, lettering, "place line", 200);
@@ -161,20 +222,6 @@ void read_lettering(Design& design, const Section& top) {
     const std::string where =
         latitude_text(design.place.site.latitude) + "  " + longitude_text(design.place.site.longitude);
     made.place_line = !*wanted ? std::string{} : (design.place.name.empty() ? where : design.place.name + "  " + where);
-}
-
-void read_cutting(Design& design, const Section& top) {
-    const Section cutting{top.entry("cutting"), "cutting", top.state()};
-    length_into(design.cutting.line_width_mm, cutting, "line width", 0.05, 10.0);
-    length_into(design.cutting.least_gap_mm, cutting, "least gap", 0.05, 50.0);
-}
-
-void read_print(Design& design, const Section& top) {
-    const Section print{top.entry("print"), "print", top.state()};
-    read_paper(design, print);
-    length_into(design.print.margin_mm, print, "margin", 0.0, 50.0);
-    length_into(design.print.overlap_mm, print, "overlap", 0.0, 100.0);
-    print.read_into(design.print.own_size, "own size", yes_or_no);
 }
 
 } // namespace dialwright::cli

@@ -1,14 +1,19 @@
 // SPDX-License-Identifier: MIT
 #include "cli/packet/packet.hpp"
 
+#include "cli/packet/bench_pages.hpp"
+#include "cli/packet/contents.hpp"
+#include "cli/packet/cover_words.hpp"
+#include "cli/packet/machine_files.hpp"
+#include "cli/packet/owner_card.hpp"
+#include "cli/packet/work_pieces.hpp"
 #include "cli/plan/feasible.hpp"
 #include "cli/report/numbers.hpp"
 #include "cli/report/say.hpp"
 #include "layout/export/pdf.hpp"
-#include "layout/export/svg.hpp"
-#include "layout/plate/numerals.hpp"
 #include "layout/sheet/cover.hpp"
 
+#include <algorithm>
 #include <fmt/format.h>
 #include <future>
 
@@ -18,180 +23,192 @@ namespace {
 using layout::Drawing;
 using layout::Sheet;
 
-const char* time_text(HourTime time) {
-    switch (time) {
-    case HourTime::sun:
-        return "the Sun's own, at this place";
-    case HourTime::zone:
-        return "by the Sun, corrected for longitude to the zone";
-    case HourTime::clock:
-        return "the zone's clock, by yearly curves (summer time not added)";
-    case HourTime::since_sunrise:
-        return "equal hours since the Sun rose";
-    case HourTime::since_sunset:
-        return "equal hours since the last sunset";
-    case HourTime::to_sunset:
-        return "equal hours left until sunset";
-    case HourTime::unequal:
-        break;
-    }
-    return "unequal hours, twelve from sunrise to sunset";
-}
-
-std::string hours_text(const layout::Face& face) {
-    double first = 24, last = 0;
-    for (const layout::DrawnLine& line : face.lines)
-        if (line.set == 0 && is_hour(line.family)) {
-            first = std::min(first, line.time_h);
-            last = std::max(last, line.time_h);
-        }
-    return first > last ? "none" : layout::time_label(first) + " to " + layout::time_label(last);
-}
-
-std::vector<std::pair<std::string, std::string>> key_numbers(const Commission& commission, std::size_t i) {
-    const Design& design = commission.design;
-    const bool inches = design.units == Units::inches;
-    const layout::Face& face = commission.faces[i];
-    const Style& style = face.delineation.style;
-    std::vector<std::pair<std::string, std::string>> rows;
-    rows.emplace_back("Place",
-                      say_latitude(design.place.site.latitude) + ", " + say_longitude(design.place.site.longitude));
-    rows.emplace_back("Zone", design.place.zone);
-    rows.emplace_back("Plate", say_attitude(commission.plans[i].dial.attitude));
-    rows.emplace_back("Size", fmt::format("{} × {}", say_length(design.plate.width_mm, inches),
-                                          say_length(design.plate.height_mm, inches)));
-    if (!design.plate.material.empty())
-        rows.emplace_back("Material", design.plate.material);
-    rows.emplace_back("Style height", degrees_minutes(style.height));
-    if (style.height < Angle::degrees(89.99))
-        rows.emplace_back("Substyle", degrees_minutes(style.substyle) + " clockwise from " +
-                                          (design.dial.kind == DialKind::level ? "north" : "up"));
-    static constexpr const char* k_nodi[] = {"notch", "ball", "tip", "hole"};
-    rows.emplace_back("Nodus", std::string{k_nodi[static_cast<std::size_t>(design.gnomon.nodus)]} + ", " +
-                                   say_length(face.placement.nodus_height_mm, inches) + " above the plate");
-    if (design.gnomon.thickness_mm > 0)
-        rows.emplace_back("Gnomon", say_length(design.gnomon.thickness_mm, inches) + " thick");
-    if (face.gnomon_foot_mm > 0)
-        rows.emplace_back("Its foot", say_length(face.gnomon_foot_mm, inches) + " along the substyle");
-    rows.emplace_back("Shows", time_text(design.hours.time));
-    rows.emplace_back("Hours", hours_text(face));
-    rows.emplace_back("Date lines", fmt::format("mean of {} to {}", design.years.first, design.years.last));
-    return rows;
-}
-
-/// Common practice, no source, where no other is named.
-std::vector<std::string> cautions(const Design& design) {
-    std::vector<std::string> list{"Never look at the Sun to align a dial, not even for a moment and not through dark "
-                                  "glass: work from the shadow.",
-                                  "The gnomon's tip and edges can wound, at face height and at child height above all: "
-                                  "round them, or guard them.",
-                                  "Dust of stone and metal harms the lungs, silica from slate and sandstone gravely: "
-                                  "cut wet or with extraction, and wear a fitted mask."};
-    if (design.dial.kind == DialKind::wall || design.dial.kind == DialKind::leaning)
-        list.push_back("A slab on a wall needs lifting gear and a fixing into sound masonry that a mason or engineer "
-                       "answers for. A listed building or a public place needs consent first: ask the authority.");
-    else
-        list.push_back("A slab of stone is heavier than it looks: lift with help or gear, and fix it so that nobody "
-                       "can pull it over. A public place needs consent first.");
-    list.push_back("Fumes of lasers, acids and soldering need extraction; metal in the Sun grows hot enough to burn. "
-                   "Local codes and licensed trades come before this sheet.");
-    return list;
-}
-
-std::vector<std::string> steps(const Design& design, bool has_tiles) {
-    std::vector<std::string> list{
-        "Measure the two bars on every sheet with a steel rule. If one is off, stop, and print again at 100 %.",
-    };
-    if (has_tiles)
-        list.push_back("Join the sheets by their crosses, flat and straight, and measure across the joins.");
-    list.push_back("Check the plate: the outline is cut, what is black is engraved, holes are drilled; ochre marks are "
-                   "scored lightly, pale ones only help to set out.");
-    if (design.dial.kind == DialKind::level)
-        list.push_back("Fix the plate level, with its north to true north (not the compass needle's).");
-    if (design.dial.kind == DialKind::equatorial)
-        list.push_back("Fix the plate in the plane of the equator, with its pin towards the pole, and the noon line in "
-                       "the meridian.");
-    if (design.dial.kind == DialKind::wall || design.dial.kind == DialKind::leaning)
-        list.push_back("Check which way the wall faces and how it leans before you cut: the lines are right for this "
-                       "attitude alone.");
-    if (design.dial.kind == DialKind::equatorial)
-        list.push_back("Set the pin square through the plate, and prove it from two sides before the fixing sets.");
-    else
-        list.push_back(has_style(design.gnomon.kind)
-                           ? "Set the style at its height over the substyle, and prove it before the fixing sets."
-                           : "Set the nodus at its height over its foot, and prove it before the fixing sets.");
-    return list;
-}
-
-std::shared_ptr<const Drawing> shared(const Drawing& drawing) {
-    return {std::shared_ptr<void>{}, &drawing};
-}
-
-std::string face_suffix(const Commission& commission, std::size_t i) {
-    return commission.plans[i].name.empty() ? "" : "-" + commission.plans[i].name;
-}
-
-/// A PDF's page has a largest size: a larger work goes on tiles alone, and the maker is told.
-void add_own_size(std::vector<Sheet>& sheets, const std::shared_ptr<const Drawing>& drawing,
-                  const layout::PrintOptions& options, std::vector<std::string>& warnings) {
-    try {
-        sheets.push_back(layout::own_size_sheet(drawing, options));
-    } catch (const layout::ExportError& trouble) {
-        warnings.push_back(std::string{"no page of the work's own size: "} + trouble.what());
-    }
-}
-
-layout::SheetBook book_of(const Commission& commission, Packet& packet) {
-    const Design& design = commission.design;
+layout::PrintOptions print_options(const Design& design) {
+    const Print& print = design.print;
     layout::PrintOptions options;
-    options.paper = layout::paper_named(design.print.paper).value();
-    options.margin_mm = design.print.margin_mm;
-    options.overlap_mm = design.print.overlap_mm;
+    options.paper = layout::paper_named(print.paper).value();
+    options.margin_mm = layout::margin_for(print.printer, options.paper, print.margin_mm);
+    options.overlap_mm = print.overlap_mm;
     options.inches = design.units == Units::inches;
-
-    std::vector<layout::Tiling> tilings;
-    std::vector<layout::CoverFace> covers;
-    std::vector<Sheet> own_sizes;
-    for (std::size_t i = 0; i < commission.faces.size(); ++i) {
-        const auto drawing = shared(commission.faces[i].drawing);
-        const std::string& name = commission.plans[i].spec.name;
-        options.title = name.empty() ? design.title : design.title + ", " + name;
-        tilings.push_back(layout::tile(drawing, options));
-        if (design.print.own_size)
-            add_own_size(own_sizes, drawing, options, packet.warnings);
-        covers.push_back({name, drawing, key_numbers(commission, i), nullptr});
-    }
-    bool has_tiles = false;
-    for (std::size_t i = 0; i < tilings.size(); ++i) {
-        covers[i].tiling = &tilings[i];
-        has_tiles = has_tiles || tilings[i].sheets.size() > 1;
-    }
+    options.turn = print.turn;
     options.title = design.title;
-    layout::SheetBook book;
-    book.title = design.title;
-    book.subject = "Full-scale templates of a sundial";
-    const std::string where = design.place.name.empty() ? say_latitude(design.place.site.latitude) : design.place.name;
-    book.sheets = layout::cover_sheets({design.title, "Full-scale templates for a sundial at " + where,
-                                        steps(design, has_tiles), packet.cautions, packet.warnings},
-                                       covers, options);
-    for (layout::Tiling& tiling : tilings)
-        for (Sheet& sheet : tiling.sheets)
-            book.sheets.push_back(std::move(sheet));
-    for (Sheet& sheet : own_sizes)
-        book.sheets.push_back(std::move(sheet));
-    return book;
+    if (!print.printer.none())
+        options.remark = "corrected for this printer";
+    return options;
+}
+
+/// The pieces as they are printed: mirrored where the design asks for that.
+std::vector<WorkPiece> printed_pieces(const Commission& commission) {
+    std::vector<WorkPiece> pieces = work_pieces(commission);
+    if (commission.design.print.mirrored)
+        for (WorkPiece& piece : pieces) {
+            piece.drawing = mirrored(*piece.drawing);
+            piece.title += " (MIRRORED)";
+        }
+    return pieces;
+}
+
+/// The marks of some layers, and nothing else.
+std::shared_ptr<const Drawing> only(const Drawing& drawing, const std::vector<layout::Layer>& layers) {
+    auto made = std::make_shared<Drawing>();
+    made->name = drawing.name;
+    for (const layout::Mark& mark : drawing.marks)
+        if (std::find(layers.begin(), layers.end(), mark.layer) != layers.end())
+            made->marks.push_back(mark);
+    return made;
+}
+
+/// The sheets of the book while they are gathered.
+class Book {
+  public:
+    Book(const Commission& commission, Packet& packet)
+        : commission_{commission}, design_{commission.design}, packet_{packet}, options_{print_options(design_)},
+          pieces_{printed_pieces(commission)} {}
+
+    [[nodiscard]] layout::SheetBook whole() {
+        const auto tilings = plate_tilings();
+        add(cover(tilings));
+        for (const auto& of_piece : tilings)
+            for (const layout::Tiling& tiling : of_piece)
+                add(tiling.sheets);
+        add(gnomon_pages(commission_, pieces_, options_));
+        for (std::size_t i = 0; i < commission_.faces.size(); ++i)
+            add(setting_out_pages(commission_, i, options_));
+        add(owner_card(commission_, options_));
+        for (const WorkPiece& piece : pieces_)
+            if (is_correction(piece)) {
+                add(layout::tile(piece.drawing, options_of(piece)).sheets);
+                if (design_.print.own_size)
+                    add_own_size(piece);
+            }
+        for (const WorkPiece& piece : pieces_)
+            if (design_.print.own_size && piece.is_plate)
+                add_own_size(piece);
+        return finished();
+    }
+
+    [[nodiscard]] layout::SheetBook chosen(const PrintChoice& choice) {
+        for (const WorkPiece& piece : pieces_) {
+            layout::PrintOptions options = options_of(piece);
+            auto drawing = piece.drawing;
+            if (!choice.layers.empty()) {
+                options.frame = layout::bounds_of(*piece.drawing);
+                drawing = only(*piece.drawing, choice.layers);
+                if (drawing->marks.empty())
+                    continue;
+            }
+            for (const Sheet& sheet : layout::tile(drawing, options).sheets)
+                if (choice.sheet.empty() || sheet.label == choice.sheet)
+                    add({sheet});
+        }
+        return finished();
+    }
+
+  private:
+    [[nodiscard]] static bool is_correction(const WorkPiece& piece) { return !piece.is_plate && piece.part == nullptr; }
+
+    [[nodiscard]] layout::PrintOptions options_of(const WorkPiece& piece) const {
+        layout::PrintOptions options = options_;
+        options.title = design_.title + ", " + piece.title;
+        options.part = piece.title;
+        return options;
+    }
+
+    /// One for each plate, or one for each of its layers.
+    [[nodiscard]] std::vector<std::vector<layout::Tiling>> plate_tilings() const {
+        std::vector<std::vector<layout::Tiling>> all;
+        for (const WorkPiece& piece : pieces_) {
+            if (!piece.is_plate)
+                continue;
+            all.emplace_back();
+            layout::PrintOptions options = options_of(piece);
+            if (design_.print.layers != PrintedLayers::one_by_one) {
+                all.back().push_back(layout::tile(piece.drawing, options));
+                continue;
+            }
+            options.frame = layout::bounds_of(*piece.drawing);
+            for (const layout::Layer layer : layout::k_layers) {
+                const auto drawing = only(*piece.drawing, {layer});
+                if (drawing->marks.empty())
+                    continue;
+                const std::string name = fmt::format("{}, layer {}", piece.title, layout::name_of(layer));
+                options.title = design_.title + ", " + name;
+                options.part = name;
+                all.back().push_back(layout::tile(drawing, options));
+            }
+        }
+        return all;
+    }
+
+    [[nodiscard]] std::vector<Sheet> cover(const std::vector<std::vector<layout::Tiling>>& tilings) const {
+        std::vector<layout::CoverFace> faces;
+        bool has_tiles = false;
+        for (std::size_t i = 0; i < tilings.size(); ++i) {
+            const layout::Tiling& tiling = tilings[i].front();
+            faces.push_back({commission_.plans[i].spec.name, pieces_[i].drawing, key_numbers(commission_, i), &tiling});
+            has_tiles = has_tiles || tiling.sheets.size() > 1;
+        }
+        const std::string where =
+            design_.place.name.empty() ? say_latitude(design_.place.site.latitude) : design_.place.name;
+        return layout::cover_sheets({design_.title, "Full-scale templates for a sundial at " + where,
+                                     steps(design_, has_tiles), packet_.cautions, packet_.warnings},
+                                    faces, options_);
+    }
+
+    /// A PDF's page has a largest size: a larger work goes on tiles alone, and the maker is told. Never stretched: it
+    /// goes to another printer.
+    void add_own_size(const WorkPiece& piece) {
+        layout::PrintOptions options = options_of(piece);
+        options.part = piece.title + ", own size";
+        options.margin_mm = design_.print.margin_mm;
+        options.remark.clear();
+        try {
+            sheets_.push_back(layout::own_size_sheet(piece.drawing, options));
+        } catch (const layout::ExportError& trouble) {
+            packet_.warnings.push_back(std::string{"no page of the work's own size: "} + trouble.what());
+        }
+    }
+
+    void add(std::vector<Sheet> sheets) {
+        for (Sheet& sheet : sheets) {
+            layout::compensate(sheet, design_.print.printer, options_.paper.roll);
+            sheets_.push_back(std::move(sheet));
+        }
+    }
+
+    [[nodiscard]] layout::SheetBook finished() {
+        layout::SheetBook book;
+        book.title = design_.title;
+        book.subject = "Full-scale templates of a sundial";
+        book.layers = design_.print.layers == PrintedLayers::in_viewer;
+        book.sheets = std::move(sheets_);
+        return book;
+    }
+
+    const Commission& commission_;
+    const Design& design_;
+    Packet& packet_;
+    layout::PrintOptions options_;
+    std::vector<WorkPiece> pieces_;
+    std::vector<Sheet> sheets_;
+};
+
+std::string hand_of(const Design& design) {
+    return design.print.mirrored ? "-mirrored" : "";
 }
 
 } // namespace
 
-std::optional<Packet> take_packet(const Commission& commission) {
+std::optional<Packet> take_packet(const Commission& commission, const PrintChoice& choice) {
+    const bool all = choice.layers.empty() && choice.sheet.empty();
     try {
-        return make_packet(commission);
+        return all ? make_packet(commission) : chosen_sheets(commission, choice);
     } catch (const layout::ExportError& trouble) {
         const Design& design = commission.design;
-        tell({error_at(design,
-                       first_given(design, {"print: margin", "print: overlap", "print: paper", "print", "plate"}),
-                       trouble.what(), "")});
+        tell({error_at(
+            design,
+            first_given(design, {"cutting: kerf", "print: margin", "print: overlap", "print: paper", "print", "plate"}),
+            trouble.what(), "")});
         return std::nullopt;
     }
 }
@@ -203,22 +220,46 @@ Packet make_packet(const Commission& commission) {
             packet.warnings.push_back(
                 commission.plans[i].spec.name.empty() ? warning : commission.plans[i].spec.name + ": " + warning);
 
+    if (commission.correction_plate)
+        packet.warnings.insert(packet.warnings.end(), commission.correction_plate->warnings.begin(),
+                               commission.correction_plate->warnings.end());
     packet.cautions = cautions(commission.design);
-    const layout::SheetBook book = book_of(commission, packet);
-    packet.sheets = book.sheets.size();
+    Book book{commission, packet};
+    const layout::SheetBook sheets = book.whole();
+    packet.sheets = sheets.sheets.size();
     auto pdf =
-        std::async(std::launch::async, [&book] { return layout::pdf_of(book); }); // the longest: beside all others
-    packet.items.push_back({{"sheets.pdf", {}}, "full-scale sheets: print this, and read its first page"});
+        std::async(std::launch::async, [&sheets] { return layout::pdf_of(sheets); }); // the longest: beside all others
+    packet.items.push_back({{"sheets" + hand_of(commission.design) + ".pdf", {}},
+                            "full-scale sheets: print this, and read its first page"});
+    add_machine_files(packet, commission, work_pieces(commission));
     for (std::size_t i = 0; i < commission.faces.size(); ++i) {
-        const Drawing& drawing = commission.faces[i].drawing;
-        packet.items.push_back(
-            {{"plate" + face_suffix(commission, i) + ".svg", layout::svg_of(drawing, layout::bounds_of(drawing))},
-             "the plate for a machine, full scale, layers by process"});
+        const std::string& name = commission.plans[i].name;
+        packet.items.push_back({{"setting-out" + (name.empty() ? "" : "-" + name) + ".csv",
+                                 layout::csv_of(setting_out_of(commission, i, true))},
+                                "every point, for setting out by rule, square and dividers"});
     }
     packet.items.push_back({{"hour-lines.csv", hour_lines_csv(commission)}, "angles and ends of the hour lines"});
     packet.items.push_back({{"numbers.txt", numbers_text(commission)}, "all numbers, to read"});
     packet.items.push_back({{"numbers.json", numbers_json(commission)}, "all numbers, for programs"});
+    packet.items.push_back(
+        {{"contents.txt", contents_of(commission, packet)}, "what each file is for, and in which order"});
     packet.items.front().file.bytes = pdf.get();
+    return packet;
+}
+
+Packet chosen_sheets(const Commission& commission, const PrintChoice& choice) {
+    Packet packet;
+    Book book{commission, packet};
+    const layout::SheetBook sheets = book.chosen(choice);
+    packet.sheets = sheets.sheets.size();
+    if (sheets.sheets.empty())
+        return packet;
+    std::string name = "sheets" + hand_of(commission.design);
+    for (const layout::Layer layer : choice.layers)
+        name += "-" + std::string{layout::name_of(layer)};
+    if (!choice.sheet.empty())
+        name += "-" + choice.sheet;
+    packet.items.push_back({{name + ".pdf", layout::pdf_of(sheets)}, "the sheets that were asked for"});
     return packet;
 }
 

@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "cli/report/numbers.hpp"
 #include "cli/report/say.hpp"
+#include "layout/correction/words.hpp"
 
 #include <cmath>
 #include <fmt/format.h>
@@ -128,6 +129,38 @@ Json equation_json(const MeanYear& year) {
     return list;
 }
 
+std::string day_code(std::chrono::month_day date) {
+    return fmt::format("{:02}-{:02}", unsigned(date.month()), unsigned(date.day()));
+}
+
+Json summer_json(const SummerTime& summer, bool summer_numerals) {
+    static constexpr const char* k_kinds[] = {"none", "yearly", "irregular"};
+    const bool yearly = summer.kind == SummerTime::Kind::yearly;
+    return {{"kind", k_kinds[static_cast<std::size_t>(summer.kind)]},
+            {"ahead_min", number(double(summer.ahead.count()) / 60)},
+            {"begins", yearly ? Json(layout::say_day(summer.begins)) : Json(nullptr)},
+            {"ends", yearly ? Json(layout::say_day(summer.ends)) : Json(nullptr)},
+            {"since", summer.since},
+            {"words", layout::say_summer(summer, summer_numerals)}};
+}
+
+Json correction_json(const Commission& commission) {
+    if (!commission.correction)
+        return nullptr;
+    const Correction& correction = *commission.correction;
+    const auto spread = correction.spread();
+    Json out{{"time", say_time(correction.time())},
+             {"longitude_min", number(correction.longitude_min())},
+             {"words", layout::say_rule(correction, 1e-9)},
+             {"summer_time", summer_json(correction.summer(), commission.design.hours.summer_numerals)},
+             {"spread_s", number(spread.seconds)},
+             {"spread_date", day_code(spread.date)},
+             {"days", Json::array()}};
+    for (const std::chrono::month_day date : dates_of_year())
+        out["days"].push_back({{"date", day_code(date)}, {"add_min", number(correction.add_min(date))}});
+    return out;
+}
+
 } // namespace
 
 std::string numbers_json(const Commission& commission) {
@@ -154,6 +187,7 @@ std::string numbers_json(const Commission& commission) {
             out["faces"].push_back(std::move(face));
         }
     }
+    out["correction"] = correction_json(commission);
     out["equation_of_time"] = equation_json(commission.year);
     std::string text;
     write(out, text);

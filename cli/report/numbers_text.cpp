@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "cli/report/numbers.hpp"
 #include "cli/report/say.hpp"
+#include "layout/correction/words.hpp"
 
 #include <cmath>
 #include <fmt/format.h>
@@ -121,6 +122,35 @@ void list_equation(Text& text, const MeanYear& year) {
     }
 }
 
+void say_correction(Text& text, const Commission& commission) {
+    text.gap();
+    if (!commission.correction) {
+        text.line("Correction: none; these hours become clock time by no minutes of a date");
+        return;
+    }
+    const Correction& correction = *commission.correction;
+    text.line("Correction, from the dial to the clock, the mean of the years, at noon");
+    text.line("  {}", layout::say_rule(correction, 1e-9));
+    const std::string summer = layout::say_summer(correction.summer(), commission.design.hours.summer_numerals);
+    text.line("  {}", summer.empty() ? "The zone keeps no summer time." : summer);
+    for (const std::string& limit : layout::say_limits(correction))
+        text.line("  {}", limit);
+    if (!correction.is_needed())
+        return;
+    const auto spread = correction.spread();
+    text.line("  A single year differs from this by at most {} s, about {}.", fixed(spread.seconds, 0),
+              layout::say_date(spread.date));
+    for (unsigned month = 1; month <= 12; ++month) {
+        std::string row = fmt::format("  {:.3}", layout::month_name(month));
+        for (const unsigned day : {1U, 11U, 21U})
+            row += fmt::format(
+                "  {:>2}: {:<18}", day,
+                layout::add_or_take_exactly(correction.add_min(std::chrono::month{month} / std::chrono::day{day})));
+        row.erase(row.find_last_not_of(' ') + 1);
+        text.line("{}", row);
+    }
+}
+
 } // namespace
 
 std::string numbers_text(const Commission& commission) {
@@ -135,6 +165,7 @@ std::string numbers_text(const Commission& commission) {
         say_lines(text, commission.faces[i]);
         say_more_lines(text, commission.faces[i]);
     }
+    say_correction(text, commission);
     list_equation(text, commission.year);
     return text.taken();
 }

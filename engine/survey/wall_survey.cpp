@@ -203,6 +203,7 @@ WallReadings swapped(WallReadings readings, WallSurvey::Swap swap) {
 WallSurvey survey_wall(const WallReadings& readings) {
     using Fault = WallAnswer::Fault;
     constexpr double k_rare = 0.001, k_tells = 9.0; // −2 log likelihood: e^(9/2), some ninety to one
+    constexpr double k_shows = 2.5;                 // ranges: what is so far off passes the two tests nearly always
     const Survey survey{readings};
     WallSurvey made;
     made.sun_span = survey.sun_span();
@@ -238,7 +239,7 @@ WallSurvey survey_wall(const WallReadings& readings) {
         const bool clock = way.fault == Fault::clock;
         const int unknown = clock ? k_clock : k_turn;
         const double thought_to = as_said.task.unknowns[std::size_t(unknown)].known_to;
-        (clock ? made.clock_told_s : made.level_told_deg) = way.fit.spread(unknown).range_95;
+        (clock ? made.clock_told_s : made.level_told_deg) = k_shows * way.fit.spread(unknown).range_95;
         if (chance_of(way.fit, unknown, thought_to) < k_rare && way.fit.misfit < as_said.fit.misfit - k_tells)
             good.push_back(&way);
         least = std::min(least, good.back()->fit.misfit);

@@ -63,12 +63,12 @@ std::string field(const std::string& text) {
 
 } // namespace
 
-std::string part_list_of(const std::vector<Part>& parts) {
+std::string part_list_of(const std::vector<ListedPart>& parts) {
     std::string csv = "part,count,processes,width_mm,height_mm,cut_mm,engraved_mm,scored_mm,drilled,area_mm2\n";
-    for (const Part& part : parts) {
+    for (const ListedPart& part : parts) {
         const Measured sum = measured(*part.drawing);
         const Box& box = sum.cut.empty() ? sum.all : sum.cut;
-        csv += field(part.drawing->name) + ',' + std::to_string(part.count) + ',';
+        csv += field(part.name.empty() ? part.drawing->name : part.name) + ',' + std::to_string(part.count) + ',';
         bool first = true;
         for (const Layer layer : k_machine_order) {
             if (!sum.layers.contains(layer))

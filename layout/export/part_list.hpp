@@ -9,9 +9,10 @@
 namespace dialwright::layout {
 
 /// One kind of piece that the workshop makes.
-struct Part {
-    const Drawing* drawing = nullptr; ///< as it is drawn, without the kerf; its name is the part's
+struct ListedPart {
+    const Drawing* drawing = nullptr; ///< as it is drawn, without the kerf
     int count = 1;
+    std::string name{}; ///< empty: the drawing's own
 };
 
 /// The parts as CSV (RFC 4180, from memory; lines end in "\n"), a row each under
@@ -21,6 +22,6 @@ struct Part {
 /// the outlines less their holes, empty where nothing is cut.
 /// @throws ExportError  a number is not finite
 /// Accuracy: 0.05 mm and 0.5 mm² as written.
-[[nodiscard]] std::string part_list_of(const std::vector<Part>& parts);
+[[nodiscard]] std::string part_list_of(const std::vector<ListedPart>& parts);
 
 } // namespace dialwright::layout

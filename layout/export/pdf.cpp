@@ -2,6 +2,7 @@
 #include "layout/export/pdf.hpp"
 
 #include "layout/export/pdf_font.hpp"
+#include "layout/export/pdf_layers.hpp"
 #include "layout/export/pdf_page.hpp"
 
 #include <fmt/format.h>
@@ -9,6 +10,7 @@
 #include <cmath>
 #include <map>
 #include <memory>
+#include <optional>
 #include <set>
 
 namespace dialwright::layout {
@@ -151,7 +153,7 @@ void draw_window(PdfPage& page, const Window& window, BoxesOfMarks& boxes) {
     page.close();
 }
 
-void add_sheet(PdfDocument& document, const Sheet& sheet, BoxesOfMarks& boxes) {
+void add_sheet(PdfDocument& document, const Sheet& sheet, BoxesOfMarks& boxes, PdfLayers* layers) {
     const auto fits = [](double side) { return side >= 5.0 && side <= 5080.0; };
     if (!fits(sheet.width_mm) || !fits(sheet.height_mm)) {
         throw ExportError(fmt::format("A sheet of {:.1f} × {:.1f} mm is no PDF page: each side takes 5 to 5080 mm.",
@@ -162,9 +164,19 @@ void add_sheet(PdfDocument& document, const Sheet& sheet, BoxesOfMarks& boxes) {
     HPDF_Page_SetWidth(page, static_cast<HPDF_REAL>(sheet.width_mm * 72.0 / 25.4));
     HPDF_Page_SetHeight(page, static_cast<HPDF_REAL>(sheet.height_mm * 72.0 / 25.4));
     PdfPage paper{page};
+    const auto sound = [](double stretch) { return stretch > 0.5 && stretch < 2.0; };
+    if (!sound(sheet.stretch_x) || !sound(sheet.stretch_y)) {
+        throw ExportError("A sheet is stretched to less than half or more than double, so no PDF was made.");
+    }
+    paper.stretch(sheet.stretch_x, sheet.stretch_y, sheet.width_mm, sheet.height_mm);
+    if (layers != nullptr) {
+        layers->use_on(page);
+        paper.use_layers(true);
+    }
     for (const Window& window : sheet.windows) {
         draw_window(paper, window, boxes);
     }
+    paper.use_layers(false); // bars, names and notes are on every print
     const Box whole{0, 0, sheet.width_mm, sheet.height_mm};
     for (const Mark& mark : sheet.furniture) {
         require_finite(mark);
@@ -200,8 +212,12 @@ std::string pdf_of(const SheetBook& book) {
     }
     document.check();
     document.load_fonts(book);
+    std::optional<PdfLayers> layers;
+    if (book.layers) {
+        layers.emplace(document.get());
+    }
     for (const Sheet& sheet : book.sheets) {
-        add_sheet(document, sheet, boxes);
+        add_sheet(document, sheet, boxes, layers ? &*layers : nullptr);
     }
     return document.bytes();
 }

@@ -2,6 +2,7 @@
 #include "layout/export/pdf_page.hpp"
 
 #include "layout/drawing/clipping.hpp"
+#include "layout/export/pdf_layers.hpp"
 #include "layout/sheet/export_error.hpp"
 #include "layout/sheet/note_width.hpp"
 
@@ -181,6 +182,11 @@ void PdfPage::mark(const Mark& mark, const Box& opening) {
     if (!opening.meets(box)) {
         return;
     }
+    if (layered_) {
+        text_ += "/OC /";
+        text_ += pdf_name_of(mark.layer);
+        text_ += " BDC\n";
+    }
     if (mark.filled) {
         fill_style(tone_of(mark.layer));
         fill_inside(mark, box, opening);
@@ -188,6 +194,19 @@ void PdfPage::mark(const Mark& mark, const Box& opening) {
         stroke_style(tone_of(mark.layer), mark.width_mm);
         stroke_inside(mark, box, opening);
     }
+    if (layered_) {
+        text_ += "EMC\n";
+    }
+}
+
+void PdfPage::stretch(double x, double y, double width_mm, double height_mm) {
+    if (x == 1.0 && y == 1.0) {
+        return;
+    }
+    // More decimals than a coordinate has: over a long page a coarse factor would be seen.
+    text_ += fmt::format("{:.7f} 0 0 {:.7f} ", x, y);
+    point({(1 - x) * width_mm / 2, (1 - y) * height_mm / 2});
+    text_ += "cm\n";
 }
 
 void PdfPage::open(const Box& opening) {

@@ -20,6 +20,11 @@ class PdfPage {
   public:
     explicit PdfPage(HPDF_Page page) : page_{page} { text_.reserve(1U << 16U); }
 
+    /// What follows comes out this much larger about the page's middle.
+    void stretch(double x, double y, double width_mm, double height_mm);
+    /// From here on, marks are (or are not) told to the viewer as contents of their workshop layer.
+    void use_layers(bool yes) { layered_ = yes; }
+
     /// @param opening  nothing of the mark is drawn outside
     void mark(const Mark& mark, const Box& opening);
     void note(const Note& note, const PdfFont& font);
@@ -46,6 +51,7 @@ class PdfPage {
     std::optional<Tone> stroke_tone_, fill_tone_;
     double width_mm_ = -1;
     bool joins_set_ = false;
+    bool layered_ = false;
 };
 
 } // namespace dialwright::layout

@@ -19,7 +19,7 @@ namespace {
 constexpr double k_on_face_mm = 1e-6; ///< a style that passes the foot's start this close to the face meets it there
 
 [[noreturn]] void refuse(const std::string& why) {
-    throw std::invalid_argument(why);
+    throw GnomonError(why);
 }
 
 class Maker {
@@ -258,7 +258,8 @@ class Maker {
         add("Nodus above the face", say(nodus_.y_mm));
         add("Nodus from the foot's start, along the style", say(distance(nodus_, front_top_)));
         add("Foot", say(joint_.foot_mm));
-        add("Sheet", fmt::format("{} thick", say(joint_.thickness_mm)));
+        add("Sheet", joint_.thickness_mm > 0 ? fmt::format("{} thick", say(joint_.thickness_mm))
+                                             : std::string{"as thin as is stiff: the lines are those of a thin edge"});
         if (width_ > 0)
             add(plan_.nodus == NodusMark::v_notch ? "Notch" : "Round seat",
                 fmt::format("{} wide, {} deep", say(width_), say(depth_)));
@@ -317,8 +318,7 @@ EdgeGnomon edge_gnomon(const EdgeGnomonPlan& plan) {
     return Maker{plan}.made();
 }
 
-std::optional<EdgeGnomonPlan> edge_gnomon_plan(const DialPlan& plan, const Face& face, const FaceSpec& spec,
-                                               double plate_thickness_mm, const JointOptions& joint) {
+std::optional<EdgeGnomonPlan> edge_gnomon_plan(const DialPlan& plan, const Face& face, const FaceSpec& spec) {
     const auto seat = seat_of(face, spec);
     if (!seat || spec.gnomon.kind != GnomonKind::edge)
         return std::nullopt;
@@ -328,11 +328,18 @@ std::optional<EdgeGnomonPlan> edge_gnomon_plan(const DialPlan& plan, const Face&
     made.nodus_along_mm = seat->nodus_along_mm;
     made.foot_mm = seat->foot_mm;
     made.thickness_mm = spec.gnomon.thickness_mm;
-    made.plate_thickness_mm = plate_thickness_mm;
+    made.plate_thickness_mm = spec.plate.thickness_mm;
     made.least_style_mm = least_style_mm(plan, face, spec);
-    made.joint = joint;
-    if (made.joint.behind_mm == 0)
-        made.joint.behind_mm = seat->behind_mm;
+    made.rounding_mm = spec.gnomon.rounding_mm;
+    made.joint = joint_on(*seat, spec.gnomon, spec.plate.thickness_mm).options;
+    if (spec.gnomon.nodus == NodusKind::ball) {
+        made.nodus = NodusMark::round_seat;
+        made.notch_width_mm = spec.gnomon.ball_mm;
+    } else if (spec.gnomon.nodus == NodusKind::tip) {
+        made.nodus = NodusMark::none;
+        made.style_end_mm = made.nodus_along_mm;
+        made.rounding_mm = 0;
+    }
     return made;
 }
 

@@ -40,14 +40,13 @@ struct EdgeGnomon {
     Point nodus, style_start, style_end; ///< of the straight edge: its lower and upper end
 };
 
-/// @throws std::invalid_argument  with a message for the maker: a style height outside 0° to 89°, a nodus that is not on
+/// @throws GnomonError  with a message for the maker: a style height outside 0° to 89°, a nodus that is not on
 ///                                the gnomon, a notch deeper than half of it, a foot's joint that does not fit, …
 [[nodiscard]] EdgeGnomon edge_gnomon(const EdgeGnomonPlan& plan);
 
 /// The plan of a face's own gnomon, long enough for its shadow to reach the border at every hour.
 /// @return nothing where the face has no edge gnomon
 [[nodiscard]] std::optional<EdgeGnomonPlan> edge_gnomon_plan(const DialPlan& plan, const Face& face,
-                                                             const FaceSpec& spec, double plate_thickness_mm,
-                                                             const JointOptions& joint);
+                                                             const FaceSpec& spec);
 
 } // namespace dialwright::layout

@@ -65,18 +65,17 @@ void add_lettering(Drawing& drawing, const GaugePlan& plan, const Shape& shape) 
         set(words, words_left, words_up, "words");
         return;
     }
-    throw std::invalid_argument(fmt::format("the gauge for {} is too small for its lettering: make its edge longer",
-                                            degrees_minutes(plan.angle)));
+    throw GnomonError(fmt::format("the gauge for {} is too small for its lettering: make its edge longer",
+                                  degrees_minutes(plan.angle)));
 }
 
 } // namespace
 
 Gauge gauge_of(const GaugePlan& plan) {
     if (!(plan.angle >= Angle::degrees(1)) || plan.angle > Angle::degrees(89))
-        throw std::invalid_argument(
-            fmt::format("a gauge proves angles from 1° to 89°, not {}", degrees_minutes(plan.angle)));
+        throw GnomonError(fmt::format("a gauge proves angles from 1° to 89°, not {}", degrees_minutes(plan.angle)));
     if (!(plan.edge_mm >= 0 && plan.under_mm >= 0 && plan.rounding_mm >= 0 && plan.letter_mm > 0))
-        throw std::invalid_argument("a length of the gauge is below zero");
+        throw GnomonError("a length of the gauge is below zero");
     const double edge = plan.edge_mm > 0 ? plan.edge_mm : std::max(120.0, std::min(30.0 / sin(plan.angle), 500.0));
     const Shape shape = shape_of(plan, edge);
     Gauge gauge;

@@ -1,7 +1,7 @@
 // SPDX-License-Identifier: MIT
 #pragma once
 
-#include "layout/gnomon/part.hpp"
+#include "layout/gnomon/joint.hpp"
 
 namespace dialwright::layout {
 
@@ -25,7 +25,7 @@ struct Gauge {
     Point edge_from, edge_to; ///< of the straight edge that proves the angle, before its corners are rounded
 };
 
-/// @throws std::invalid_argument  an angle outside 1° to 89°, or a gauge too small for its lettering
+/// @throws GnomonError  an angle outside 1° to 89°, or a gauge too small for its lettering
 /// @throws LetteringError
 [[nodiscard]] Gauge gauge_of(const GaugePlan& plan);
 

@@ -12,7 +12,7 @@ constexpr double k_least_bridge_mm = 2.0; ///< of plate between two slots
 constexpr double k_run_out_mm = 0.5;      ///< by which an open slot's cut runs past the plate's edge
 
 [[noreturn]] void refuse(const std::string& why) {
-    throw std::invalid_argument(why);
+    throw GnomonError(why);
 }
 
 /// Replaces what is left open.
@@ -24,7 +24,7 @@ void settle(double& value, double found) {
 void check(const JointOptions& o, double foot_mm, double thickness_mm, double plate_mm) {
     if (!(foot_mm > 0))
         refuse("the gnomon has no foot: give its length along the substyle");
-    if (!(thickness_mm > 0))
+    if (!(thickness_mm > 0) && o.kind != FootKind::plain)
         refuse("the gnomon has no thickness: measure the sheet that it is cut from");
     const bool through = o.kind == FootKind::tenons || o.kind == FootKind::hooked_tenons || o.kind == FootKind::halving;
     if (through && !(plate_mm > 0))
@@ -86,7 +86,7 @@ void lay_screws(Joint& joint) {
                 "a flange {:.1f} mm wide leaves {:.1f} mm beside the gnomon, and holes of {:.1f} mm want {:.1f} mm",
                 o.flange_width_mm, ledge, o.hole_mm, 2 * o.hole_mm));
         aside = joint.thickness_mm / 2 + ledge / 2;
-    } else if (o.hole_mm > 0.6 * joint.thickness_mm) {
+    } else if (joint.thickness_mm > 0 && o.hole_mm > 0.6 * joint.thickness_mm) {
         refuse(fmt::format("screw holes of {:.1f} mm are too wide for an edge {:.1f} mm thick: at most {:.1f} mm",
                            o.hole_mm, joint.thickness_mm, 0.6 * joint.thickness_mm));
     }
@@ -157,7 +157,9 @@ std::vector<Point> foot_corners(const Joint& joint, double start_mm) {
 std::vector<Mark> plate_marks_of(const Joint& joint) {
     std::vector<Mark> marks;
     const double side = joint.thickness_mm / 2, half = joint.slot_width_mm() / 2;
-    marks.push_back({Layer::score, {rectangle({0, -side, joint.foot_mm, side})}, k_thin_mm, false, "gnomon's foot"});
+    if (side > 0)
+        marks.push_back(
+            {Layer::score, {rectangle({0, -side, joint.foot_mm, side})}, k_thin_mm, false, "gnomon's foot"});
     for (std::size_t i = 0; i < joint.slots.size(); ++i) {
         const Span& slot = joint.slots[i];
         if (joint.options.kind == FootKind::halving) {

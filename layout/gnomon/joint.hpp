@@ -3,7 +3,14 @@
 
 #include "layout/gnomon/part.hpp"
 
+#include <stdexcept>
+
 namespace dialwright::layout {
+
+/// A gnomon, a joint or a gauge that can't be made as it is asked for. The text is for the maker.
+struct GnomonError : std::invalid_argument {
+    using std::invalid_argument::invalid_argument;
+};
 
 /// How an edge gnomon is fixed to its plate. One set of numbers gives the gnomon's foot and the plate's slots and holes.
 enum class FootKind {
@@ -50,7 +57,8 @@ struct Joint {
 /// The middles of `count` places that share the foot evenly: where fixing holes and tenons stand.
 [[nodiscard]] std::vector<double> stations(double foot_mm, int count);
 
-/// @throws std::invalid_argument  with a message for the maker: tenons longer than the foot, a fit that is wider than
+/// @param thickness_mm  of the gnomon's sheet; 0 where it is not known, which a plain foot bears with
+/// @throws GnomonError  with a message for the maker: tenons longer than the foot, a fit that is wider than
 ///                                the slot's material, holes wider than the edge that they go into, …
 [[nodiscard]] Joint joint_of(const JointOptions& options, double foot_mm, double thickness_mm,
                              double plate_thickness_mm);

@@ -12,7 +12,9 @@ namespace dialwright::layout {
 /// One piece of the gnomon, or a tool to make or check it, at full scale. Side views have x along the substyle from the
 /// start of the gnomon's foot and y above the plate's face; the plate's own marks are in the seat frame (seat.hpp).
 struct Part {
+    std::string title;             ///< "The gnomon", for its sheet
     std::vector<Drawing> drawings; ///< the first is the part; then what belongs to it
+    bool from_sheet = false;       ///< its cut lines are outlines for a machine; else they are the sides of solid work
     std::vector<Mark> plate_marks; ///< slots and holes that the plate gets for it: seat frame
     std::vector<std::pair<std::string, std::string>> particulars; ///< name and value, for the sheet's table
     std::vector<std::string> cautions;

@@ -15,20 +15,21 @@ constexpr Angle k_square = Angle::degrees(89.99);
 
 void check(const PinPlan& plan) {
     if (!(plan.nodus_height_mm > 0))
-        throw std::invalid_argument("the pin's tip must stand above the plate's face");
+        throw GnomonError("the pin's tip must stand above the plate's face");
     if (!(plan.diameter_mm > 0))
-        throw std::invalid_argument("the pin has no diameter");
+        throw GnomonError("the pin has no diameter");
     if (!(plan.to_face >= Angle::degrees(10)) || plan.to_face > Angle::degrees(90.001))
-        throw std::invalid_argument(
-            fmt::format("a plumb pin would stand only {} to this face: take a pin square on the plate",
-                        degrees_minutes(plan.to_face)));
+        throw GnomonError(fmt::format("a plumb pin would stand only {} to this face: take a pin square on the plate",
+                                      degrees_minutes(plan.to_face)));
     if (!(plan.embedment_mm >= 0) || !(plan.plate_thickness_mm >= 0))
-        throw std::invalid_argument("a length of the pin is below zero");
+        throw GnomonError("a length of the pin is below zero");
 }
 
 void add_words(Part& part, const PinPlan& plan, bool square) {
     part.notes.push_back(
         "The tip is the nodus: file it to its height with the pin set in the plate, and measure from the face.");
+    if (plan.beyond_mm > 0 && plan.plate_thickness_mm == 0)
+        part.notes.push_back("One pin goes through both faces: add the plate's thickness to its whole length.");
     if (!square)
         part.notes.push_back("Prove the pin with a plumb line before the cement sets.");
     part.cautions.push_back(
@@ -47,17 +48,17 @@ Pin pin_of(const PinPlan& plan) {
     Pin pin;
     pin.above_mm = plan.nodus_height_mm / along.y_mm;
     pin.nodus = pin.above_mm * along;
-    pin.embedment_mm = plan.embedment_mm > 0         ? plan.embedment_mm
+    pin.embedment_mm = plan.beyond_mm > 0            ? through + plan.beyond_mm
+                       : plan.embedment_mm > 0       ? plan.embedment_mm
                        : plan.plate_thickness_mm > 0 ? std::min(through, 4 * plan.diameter_mm)
                                                      : 4 * plan.diameter_mm;
-    if (plan.plate_thickness_mm > 0 && pin.embedment_mm > through + 1e-9)
-        throw std::invalid_argument(
+    if (plan.plate_thickness_mm > 0 && plan.beyond_mm == 0 && pin.embedment_mm > through + 1e-9)
+        throw GnomonError(
             fmt::format("a pin set {:.1f} mm deep comes out of the plate, which it has crossed after {:.1f} mm",
                         pin.embedment_mm, through));
     if (plan.rounded && pin.above_mm < plan.diameter_mm / 2 / along.y_mm)
-        throw std::invalid_argument(
-            fmt::format("a pin of {:.1f} mm is too thick to have a round tip {:.1f} mm above the face",
-                        plan.diameter_mm, plan.nodus_height_mm));
+        throw GnomonError(fmt::format("a pin of {:.1f} mm is too thick to have a round tip {:.1f} mm above the face",
+                                      plan.diameter_mm, plan.nodus_height_mm));
     pin.length_mm = pin.above_mm + pin.embedment_mm;
 
     Drawing drawing{"pin", {}};
@@ -75,7 +76,8 @@ Pin pin_of(const PinPlan& plan) {
                                       "dimension: nodus height " + say_length(plan.nodus_height_mm, plan.inches)));
     drawing.marks.push_back(cross_mark(Layer::guide, pin.nodus, 2.0, "nodus"));
     drawing.marks.push_back({Layer::cut,
-                             {bar_outline(-pin.embedment_mm * along, pin.nodus, plan.diameter_mm, false, plan.rounded)},
+                             {bar_outline(-pin.embedment_mm * along, pin.nodus, plan.diameter_mm,
+                                          plan.beyond_mm > 0 && plan.rounded, plan.rounded)},
                              k_cut_mm,
                              false,
                              "pin"});
@@ -88,7 +90,10 @@ Pin pin_of(const PinPlan& plan) {
     add("Nodus above the face", plan.nodus_height_mm);
     add("Pin, diameter", plan.diameter_mm);
     add("Pin, above the face", pin.above_mm);
-    add("Pin, in the plate", pin.embedment_mm);
+    if (plan.beyond_mm > 0)
+        add("Pin, above the other face", plan.beyond_mm);
+    else
+        add("Pin, in the plate", pin.embedment_mm);
     add("Pin, whole length", pin.length_mm);
     if (!square)
         pin.part.particulars.emplace_back("Pin to the face", degrees_minutes(plan.to_face));

@@ -1,7 +1,7 @@
 // SPDX-License-Identifier: MIT
 #pragma once
 
-#include "layout/gnomon/part.hpp"
+#include "layout/gnomon/joint.hpp"
 
 namespace dialwright::layout {
 
@@ -14,7 +14,8 @@ struct PinPlan {
     double diameter_mm = 0.0, plate_thickness_mm = 0.0;
     double embedment_mm =
         0.0; ///< along the pin; found: through a plate that it crosses in four diameters, else four diameters
-    bool rounded = true; ///< the tip a half round that ends at the nodus
+    double beyond_mm = 0.0; ///< how far it stands out behind the plate, a second nodus at its end
+    bool rounded = true;    ///< the tip a half round that ends at the nodus
     bool inches = false;
 };
 
@@ -25,7 +26,7 @@ struct Pin {
     Point nodus;
 };
 
-/// @throws std::invalid_argument  with a message for the maker
+/// @throws GnomonError  with a message for the maker
 [[nodiscard]] Pin pin_of(const PinPlan& plan);
 
 } // namespace dialwright::layout

@@ -17,7 +17,7 @@ constexpr Angle k_skids =
     Angle::degrees(35); ///< common practice, no source: a twist drill at a flatter angle wanders off
 
 [[noreturn]] void refuse(const std::string& why) {
-    throw std::invalid_argument(why);
+    throw GnomonError(why);
 }
 
 class Maker {

@@ -1,7 +1,7 @@
 // SPDX-License-Identifier: MIT
 #pragma once
 
-#include "layout/gnomon/part.hpp"
+#include "layout/gnomon/joint.hpp"
 
 namespace dialwright::layout {
 
@@ -37,7 +37,7 @@ struct RodGnomon {
     std::vector<Strut> struts;
 };
 
-/// @throws std::invalid_argument  with a message for the maker: a rod that ends before its nodus, a socket deeper than the
+/// @throws GnomonError  with a message for the maker: a rod that ends before its nodus, a socket deeper than the
 ///                                plate, a style too flat for a socket, …
 [[nodiscard]] RodGnomon rod_gnomon(const RodPlan& plan);
 

@@ -19,33 +19,43 @@ std::optional<Point> centre_on_field(const Face& face, const Rings& rings) {
 
 } // namespace
 
-std::optional<GnomonSeat> seat_of(const Face& face, const FaceSpec& spec) {
-    const Style& style = face.delineation.style;
-    if (!has_style(spec.gnomon.kind) || style.height > k_square)
-        return std::nullopt;
-    const Rings rings = Rings::of(spec);
-    const auto centre = centre_on_field(face, rings);
+GnomonSeat seat_on(const Rings& rings, std::optional<Point> centre, Point foot, const Style& style, double foot_mm,
+                   double nodus_height_mm) {
     GnomonSeat seat;
     seat.along = clockwise_from_up(style.substyle);
-    seat.nodus_height_mm = face.placement.nodus_height_mm;
+    seat.nodus_height_mm = nodus_height_mm;
     seat.style_height = style.height;
     seat.centre_on_plate = centre.has_value();
-    seat.foot_mm = face.gnomon_foot_mm;
-    if (seat.foot_mm <= 0 && spec.gnomon.kind == GnomonKind::edge)
-        seat.foot_mm = std::max(1.0, std::round(3 * seat.nodus_height_mm) / 2);
-    seat.start = centre ? *centre : face.placement.foot - seat.foot_mm / 2 * seat.along;
-    seat.nodus_along_mm = dot(face.placement.foot - seat.start, seat.along);
+    seat.foot_mm = foot_mm > 0 ? foot_mm : std::max(1.0, std::round(3 * nodus_height_mm) / 2);
+    seat.start = centre ? *centre : foot - seat.foot_mm / 2 * seat.along;
+    seat.nodus_along_mm = dot(foot - seat.start, seat.along);
     if (const auto edge = rings.edge.exit(seat.start, -1.0 * seat.along))
         seat.behind_mm = distance(seat.start, edge->at);
     return seat;
 }
 
-std::vector<Mark> on_plate(const std::vector<Mark>& marks, const GnomonSeat& seat, Angle reader_up) {
-    const Placing place{turn_of(seat.along), seat.start, 1.0, 1.0, false}, turn{reader_up, {}, 1.0, 1.0, false};
+std::optional<GnomonSeat> seat_of(const Face& face, const FaceSpec& spec) {
+    const Style& style = face.delineation.style;
+    if (!has_style(spec.gnomon.kind) || style.height > k_square)
+        return std::nullopt;
+    const Rings rings = Rings::of(spec);
+    return seat_on(rings, centre_on_field(face, rings), face.placement.foot, style, face.gnomon_foot_mm,
+                   face.placement.nodus_height_mm);
+}
+
+std::vector<Mark> on_plate(const std::vector<Mark>& marks, const GnomonSeat& seat) {
+    const Placing place{turn_of(seat.along), seat.start, 1.0, 1.0, false};
     std::vector<Mark> placed;
     for (const Mark& mark : marks)
-        placed.push_back(turn(place(mark)));
+        placed.push_back(place(mark));
     return placed;
+}
+
+Joint joint_on(const GnomonSeat& seat, const Gnomon& gnomon, double plate_thickness_mm) {
+    JointOptions options = gnomon.joint;
+    if (options.behind_mm == 0)
+        options.behind_mm = seat.behind_mm;
+    return joint_of(options, seat.foot_mm, gnomon.thickness_mm, plate_thickness_mm);
 }
 
 double least_style_mm(DialPlan plan, const Face& face, const FaceSpec& spec) {

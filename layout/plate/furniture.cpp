@@ -1,6 +1,9 @@
 // SPDX-License-Identifier: MIT
 #include "layout/plate/bench.hpp"
 
+#include "layout/gnomon/gnomon_parts.hpp"
+#include "layout/gnomon/seat.hpp"
+
 #include <algorithm>
 #include <cmath>
 #include <fmt/format.h>
@@ -14,17 +17,6 @@ std::optional<Point> substyle_direction(const Bench& bench) {
     if (bench.delineation.style.height > k_square)
         return std::nullopt;
     return clockwise_from_up(bench.delineation.style.substyle);
-}
-
-void add_hole(Bench& bench, Point at, double diameter_mm, const std::string& name) {
-    const double arm = 0.9 * diameter_mm;
-    bench.marks.push_back({Layer::drill, {circle(at, diameter_mm / 2)}, 0.15, false, name});
-    bench.marks.push_back(
-        {Layer::drill,
-         {polyline({at - Point{arm, 0}, at + Point{arm, 0}}), polyline({at - Point{0, arm}, at + Point{0, arm}})},
-         0.1,
-         false,
-         name + " centre"});
 }
 
 } // namespace
@@ -73,27 +65,50 @@ Point foot_of_plumb_pin(const Bench& bench, double nodus_height_mm) {
     return bench.foot - down * Point{frame.u.z(), frame.v.z()};
 }
 
-void draw_edge_seat(Bench& bench, Point along, double foot_mm) {
-    const Gnomon& gnomon = bench.spec.gnomon;
-    const Point start = bench.centre ? *bench.centre : bench.foot - foot_mm / 2 * along;
-    const Polyline substyle{start, start + std::max(foot_mm, 1.0) * along};
-    bench.marks.push_back({Layer::guide, {polyline(substyle)}, 0.15, false, "substyle"});
-    bench.clear.block(substyle);
-    if (foot_mm <= 0)
-        return;
-    if (gnomon.thickness_mm > 0) {
-        const Point side = gnomon.thickness_mm / 2 * left_of(along);
-        const Point end = start + foot_mm * along;
-        bench.marks.push_back({Layer::score,
-                               {polyline({start - side, end - side, end + side, start + side}, true)},
-                               0.15,
-                               false,
-                               "gnomon's foot"});
-        bench.clear.block(TurnedBox{between(start, end, 0.5), foot_mm / 2, gnomon.thickness_mm / 2, turn_of(along)});
+/// Puts the marks of a part's own frame on the plate, and keeps labels off them.
+void add_part_marks(Bench& bench, const std::vector<Mark>& marks, const Placing& place) {
+    for (const Mark& mark : marks) {
+        bench.marks.push_back(place(mark));
+        for (const Path& path : bench.marks.back().paths)
+            bench.clear.block(flattened(path, 0.2));
     }
-    for (int i = 0; i < gnomon.holes; ++i)
-        add_hole(bench, start + foot_mm * (i + 0.5) / gnomon.holes * along, gnomon.hole_diameter_mm,
-                 fmt::format("fixing hole {}", i + 1));
+}
+
+void draw_substyle(Bench& bench, const Polyline& line) {
+    bench.marks.push_back({Layer::guide, {polyline(line)}, 0.15, false, "substyle"});
+    bench.clear.block(line);
+}
+
+void draw_edge_seat(Bench& bench, const GnomonSeat& seat, double foot_mm) {
+    const Gnomon& gnomon = bench.spec.gnomon;
+    const Point end = seat.start + std::max(seat.foot_mm, 1.0) * seat.along;
+    draw_substyle(bench, {seat.start, end});
+    if (foot_mm <= 0 && gnomon.joint.kind == FootKind::plain && gnomon.joint.count == 0)
+        return;
+    const Joint joint = joint_on(seat, gnomon, bench.spec.plate.thickness_mm);
+    add_part_marks(bench, plate_marks_of(joint), {turn_of(seat.along), seat.start, 1.0, 1.0, false});
+    const double width =
+        std::max(gnomon.thickness_mm, joint.options.kind == FootKind::flange ? joint.options.flange_width_mm : 0.0);
+    if (width > 0)
+        bench.clear.block(TurnedBox{between(seat.start, end, 0.5), seat.foot_mm / 2, width / 2, turn_of(seat.along)});
+}
+
+void draw_rod_seat(Bench& bench, const GnomonSeat& seat) {
+    const Point nodus_foot = seat.start + seat.nodus_along_mm * seat.along;
+    draw_substyle(bench, {seat.start, nodus_foot + 5.0 * seat.along});
+    if (bench.spec.gnomon.thickness_mm > 0)
+        add_part_marks(bench, rod_gnomon(rod_plan(seat, bench.spec)).part.plate_marks,
+                       {turn_of(seat.along), seat.start, 1.0, 1.0, false});
+}
+
+/// A pin in the plate at the nodus' foot, or where a plumb one enters it.
+void draw_pin_seat(Bench& bench, double nodus_height_mm) {
+    const auto plan = pin_plan(bench.delineation.frame, nodus_height_mm, bench.spec);
+    if (!plan)
+        return;
+    const Point at =
+        bench.spec.gnomon.kind == GnomonKind::upright_pin ? foot_of_plumb_pin(bench, nodus_height_mm) : bench.foot;
+    add_part_marks(bench, pin_of(*plan).part.plate_marks, {{}, at, 1.0, 1.0, false});
 }
 
 } // namespace
@@ -108,26 +123,16 @@ void draw_gnomon_seat(Bench& bench, double foot_mm, double nodus_height_mm) {
                            0.15,
                            false,
                            "nodus' foot"});
-    const double bore = gnomon.thickness_mm > 0 ? gnomon.thickness_mm : gnomon.hole_diameter_mm;
-    const bool square_style = has_style(gnomon.kind) && !along;
-    if (gnomon.kind == GnomonKind::pin || square_style) {
-        if (bore > 0)
-            add_hole(bench, bench.foot, bore, "hole for the pin");
-    } else if (gnomon.kind == GnomonKind::upright_pin) {
-        if (bore > 0)
-            add_hole(bench, foot_of_plumb_pin(bench, nodus_height_mm), bore, "hole for the plumb pin");
-    } else if (gnomon.kind == GnomonKind::rod) {
-        const Point start = bench.centre.value_or(bench.foot);
-        bench.marks.push_back({Layer::guide,
-                               {polyline({start, between(start, bench.foot, 1.0) + 5.0 * *along})},
-                               0.15,
-                               false,
-                               "substyle"});
-        if (bench.centre && bore > 0)
-            add_hole(bench, start, bore, "hole for the rod, drilled at the style height along the substyle");
-    } else if (gnomon.kind == GnomonKind::edge) {
-        draw_edge_seat(bench, *along, foot_mm);
+    if (!has_style(gnomon.kind) || !along) {
+        draw_pin_seat(bench, nodus_height_mm);
+        return;
     }
+    const GnomonSeat seat =
+        seat_on(bench.rings, bench.centre, bench.foot, bench.delineation.style, foot_mm, nodus_height_mm);
+    if (gnomon.kind == GnomonKind::rod)
+        draw_rod_seat(bench, seat);
+    else
+        draw_edge_seat(bench, seat, foot_mm);
 }
 
 void draw_compass(Bench& bench) {

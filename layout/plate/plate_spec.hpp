@@ -1,6 +1,8 @@
 // SPDX-License-Identifier: MIT
 #pragma once
 
+#include "layout/gnomon/joint.hpp"
+
 #include <optional>
 #include <string>
 #include <vector>
@@ -20,6 +22,7 @@ struct Plate {
     std::optional<PlatePointMm> centre;     ///< where the dial's centre (or the nodus' foot where there is none) stands
                                             ///< from the middle of the plate's box
     std::string material;
+    double thickness_mm = 0.0; ///< 0: not known
 };
 
 struct Borders {
@@ -49,9 +52,12 @@ struct Gnomon {
     NodusKind nodus = NodusKind::notch;
     std::optional<double> nodus_height_mm;
     double thickness_mm = 0.0;
-    std::optional<double> foot_mm; ///< length of the foot along the substyle, from the centre
-    int holes = 0;                 ///< fixing holes, evenly along the foot
-    double hole_diameter_mm = 0.0;
+    std::optional<double> foot_mm;          ///< length of the foot along the substyle, from the centre
+    JointOptions joint{FootKind::plain, 0}; ///< of an edge; its count is that of holes or tenons
+    double rounding_mm = 3.0; ///< of an edge's tip and corners; a pin's tip is a half round unless it is 0
+    double ball_mm = 0.0;     ///< diameter of the ball at the nodus; 0: found
+    double socket_mm = 0.0;   ///< of a rod or a pin, along it in the plate; 0: found
+    double strut_mm = 0.0;    ///< where a strut holds the rod, along the substyle; 0: none
 };
 
 enum class Numerals { roman, roman_iiii, arabic };
@@ -65,9 +71,24 @@ struct LetteringChoice {
     std::string place_line; ///< empty: none
 };
 
+/// What the lines are cut with.
+enum class Tool {
+    any,      ///< not said: nothing is checked against it
+    v_cutter, ///< a pointed cutter that turns: width = flat + 2 · depth · tan(angle / 2)
+    end_mill,
+    laser,
+    chisel ///< by hand: the line is a V of the chisel's own angle
+};
+
 struct Cutting {
-    double line_width_mm = 0.4; ///< the tool's own line: hour lines; finer ones are never thinner than half of it
-    double least_gap_mm = 0.8;  ///< clear material between two lines
+    Tool tool = Tool::any;
+    Angle point_angle;           ///< between the two sides of a V
+    double depth_mm = 0.0;       ///< of the lines
+    double flat_mm = 0.0;        ///< at a V cutter's point
+    double diameter_mm = 0.0;    ///< of an end mill or a laser's spot
+    bool single_strokes = false; ///< lettering for an engraving point, in place of outlines
+    double line_width_mm = 0.4;  ///< the tool's own line: hour lines; finer ones are never thinner than half of it
+    double least_gap_mm = 0.8;   ///< clear material between two lines
 };
 
 } // namespace dialwright::layout

@@ -31,8 +31,12 @@ struct Window {
 /// One sheet of paper, origin at its lower left corner.
 struct Sheet {
     double width_mm = 210.0, height_mm = 297.0;
-    std::string paper;           ///< "A4", "own size 420 × 420 mm"
-    std::string title;           ///< the page's label and bookmark
+    std::string paper; ///< "A4", "own size 420 × 420 mm"
+    std::string title; ///< the page's label and bookmark
+    std::string label; ///< of a tile: "B3"
+    /// What is drawn comes to paper this much larger, about the page's middle, so that a printer that is off brings it out
+    /// true: 1 / (measured / printed). Everything else here is in true millimetres.
+    double stretch_x = 1.0, stretch_y = 1.0;
     Box printable;               ///< nothing may be drawn outside it
     std::vector<Window> windows; ///< the work
     std::vector<Mark> furniture; ///< bars, crosses, frames, pictures, tables' rules: page millimetres
@@ -44,6 +48,7 @@ struct SheetBook {
     std::string title;
     std::string subject;
     std::vector<Sheet> sheets;
+    bool layers = false; ///< each workshop layer can be shown and printed by itself in the viewer
 };
 
 } // namespace dialwright::layout

@@ -94,6 +94,10 @@ std::vector<Plan> plans_for(const Box& work, bool one_sheet, const PrintOptions&
             if (lying && (options.paper.roll || width == height)) {
                 continue;
             }
+            if (!options.paper.roll && width != height &&
+                options.turn == (lying ? PaperTurn::upright : PaperTurn::lying)) {
+                continue;
+            }
             if (auto plan = plan_on(width, height, turned, one_sheet, work, options)) {
                 if (options.paper.roll) {
                     shorten(*plan, work, one_sheet, options);
@@ -135,8 +139,8 @@ std::optional<Plan> one_sheet_plan(const Box& work, const PrintOptions& options)
                     std::max(0.0, opening.top_mm - opening.bottom_mm), options.overlap_mm, k_least_opening_mm));
 }
 
-Plan best_tiles(const FlatDrawing& drawing, const PrintOptions& options) {
-    std::vector<Plan> plans = plans_for(drawing.box(), false, options);
+Plan best_tiles(const FlatDrawing& drawing, const Box& work, const PrintOptions& options) {
+    std::vector<Plan> plans = plans_for(work, false, options);
     if (plans.empty()) {
         refuse_room(options);
     }
@@ -148,8 +152,8 @@ Plan best_tiles(const FlatDrawing& drawing, const PrintOptions& options) {
     if (all(*fewest) > k_most_sheets) {
         throw ExportError(fmt::format("The work of {:.0f} × {:.0f} mm would take {:.0f} sheets of {}: choose a larger "
                                       "paper, at most {} sheets are made.",
-                                      drawing.box().width_mm(), drawing.box().height_mm(), all(*fewest),
-                                      options.paper.name, k_most_sheets));
+                                      work.width_mm(), work.height_mm(), all(*fewest), options.paper.name,
+                                      k_most_sheets));
     }
     const Plan* best = nullptr;
     const auto cost = [&](const Plan& plan) {
@@ -261,14 +265,16 @@ void JoiningMarks::neighbours() {
     neighbour(row_, column_ + 1, {o.right_mm + 1.3, middle.y_mm}, Angle::degrees(-90), "↑ ", " ↑");
 }
 
-Sheet sheet_of(const Plan& plan, const std::shared_ptr<const Drawing>& drawing, const Box& tile, double margin_mm,
-               const SheetWords& words, const std::string& paper_name) {
+Sheet sheet_of(const Plan& plan, const std::shared_ptr<const Drawing>& drawing, const Box& tile,
+               const PrintOptions& options, const SheetWords& words, const std::string& paper_name) {
     Sheet sheet;
     sheet.width_mm = plan.width_mm;
     sheet.height_mm = plan.height_mm;
     sheet.paper = paper_name;
-    sheet.title = !words.label.empty() ? "Sheet " + words.label : words.title.empty() ? "Full size" : words.title;
-    sheet.printable = Box{0, 0, plan.width_mm, plan.height_mm}.grown(-margin_mm);
+    const std::string part = options.part.empty() ? "Full size" : options.part;
+    sheet.title = words.label.empty() ? part : part + ", sheet " + words.label;
+    sheet.printable = Box{0, 0, plan.width_mm, plan.height_mm}.grown(-options.margin_mm);
+    sheet.label = words.label;
     sheet.windows.push_back({drawing, placing_on(plan, tile), plan.opening});
     furnish(sheet, plan.opening, plan.surround, words);
     return sheet;
@@ -287,17 +293,20 @@ void require_options(const PrintOptions& options) {
 
 std::string paper_words(const PrintOptions& options, double width_mm, double height_mm) {
     const std::string mm = fmt::format("{:.4g} × {:.4g} mm", width_mm, height_mm);
-    return options.inches
-               ? fmt::format("{}, {:.4g} × {:.4g} in ({})", options.paper.name, width_mm / 25.4, height_mm / 25.4, mm)
-               : options.paper.name + ", " + mm;
+    const std::string remark = options.remark.empty() ? "" : ", " + options.remark;
+    return (options.inches
+                ? fmt::format("{}, {:.4g} × {:.4g} in ({})", options.paper.name, width_mm / 25.4, height_mm / 25.4, mm)
+                : options.paper.name + ", " + mm) +
+           remark;
 }
 
 Tiling tile(std::shared_ptr<const Drawing> drawing, const PrintOptions& options) {
     require_options(options);
     require_work(*drawing);
     const FlatDrawing flat{*drawing};
-    const std::optional<Plan> single = one_sheet_plan(flat.box(), options);
-    const Plan plan = single ? *single : best_tiles(flat, options);
+    const Box work = options.frame.value_or(flat.box());
+    const std::optional<Plan> single = one_sheet_plan(work, options);
+    const Plan plan = single ? *single : best_tiles(flat, work, options);
     Tiling tiling;
     tiling.rows = plan.grid.rows;
     tiling.columns = plan.grid.columns;
@@ -311,7 +320,7 @@ Tiling tile(std::shared_ptr<const Drawing> drawing, const PrintOptions& options)
             words.label = single ? "" : tile_label(row, column);
             ++words.number;
             tiling.sheets.push_back(
-                sheet_of(plan, drawing, plan.grid.box(row, column), options.margin_mm, words, options.paper.name));
+                sheet_of(plan, drawing, plan.grid.box(row, column), options, words, options.paper.name));
             if (!single) {
                 JoiningMarks{tiling.sheets.back(), plan, row, column}.add();
             }
@@ -324,7 +333,7 @@ Tiling tile(std::shared_ptr<const Drawing> drawing, const PrintOptions& options)
 Sheet own_size_sheet(std::shared_ptr<const Drawing> drawing, const PrintOptions& options) {
     require_options(options);
     require_work(*drawing);
-    const Box work = bounds_of(*drawing);
+    const Box work = options.frame.value_or(bounds_of(*drawing));
     Plan plan;
     SheetWords words{"own size", options.title, "", 1, 1};
     // Wide enough for the bar in x; then as high as the notes and the bar in y ask for.
@@ -350,7 +359,7 @@ Sheet own_size_sheet(std::shared_ptr<const Drawing> drawing, const PrintOptions&
     named();
     plan.opening = opening_of(plan.width_mm, plan.height_mm, options.margin_mm, plan.surround);
     const TileGrid grid = grid_over(work, plan.opening.width_mm(), plan.opening.height_mm(), 0.0);
-    return sheet_of(plan, drawing, grid.box(0, 0), options.margin_mm, words, words.paper);
+    return sheet_of(plan, drawing, grid.box(0, 0), options, words, words.paper);
 }
 
 } // namespace dialwright::layout

@@ -6,10 +6,14 @@
 #include "layout/sheet/sheet.hpp"
 
 #include <memory>
+#include <optional>
 #include <string>
 #include <vector>
 
 namespace dialwright::layout {
+
+/// How the paper lies. A roll always lies across the page.
+enum class PaperTurn { fewest_sheets, upright, lying };
 
 struct PrintOptions {
     Paper paper;
@@ -17,6 +21,12 @@ struct PrintOptions {
     double overlap_mm = 10.0; ///< of the work on neighbouring sheets
     bool inches = false;      ///< the bars carry inches too
     std::string title;        ///< on every sheet
+    std::string part;         ///< what of the work the sheets show, for their bookmarks
+    PaperTurn turn = PaperTurn::fewest_sheets;
+    /// What the sheets cover, where the drawing is one layer of more: the box of them all, so that the sheets of each
+    /// layer fall on each other. Nothing: the drawing's own box.
+    std::optional<Box> frame;
+    std::string remark; ///< after the paper's size on every sheet: "corrected for this printer"
 };
 
 /// The paper and its size, for people: "A4, 210 × 297 mm", "Letter, 8.5 × 11 in (215.9 × 279.4 mm)".

@@ -55,7 +55,8 @@ void wall(std::istream& in) {
         readings.shadows.push_back(shadow);
     });
     const WallSurvey survey = survey_wall(readings);
-    fmt::print("wall {} {} {}", survey.answers.size(), survey.checked ? 1 : 0, survey.too_scattered ? 1 : 0);
+    fmt::print("wall {} {} {:.3f} {:.3f}", survey.checked ? 1 : 0, survey.too_scattered ? 1 : 0, survey.clock_told_s,
+               survey.level_told_deg);
     for (const WallAnswer& answer : survey.answers) {
         fmt::print(" | {}", int(answer.fault));
         for (const Found& found : {answer.facing_deg, answer.lean_deg, answer.clock_s, answer.level_deg})

@@ -43,6 +43,8 @@ CASES = {
     "margins that leave no room on the paper": (LEVEL + "print:\n  paper: A6\n  margin: 50 mm\n", "6:11", ["print: margin", "A6 leaves no room"]),
     "an overlap that leaves no room on the paper": (LEVEL + "print:\n  overlap: 100 mm\n  paper: A5\n", "5:12", ["print: overlap", "A5 leaves no room"]),
     "too many sheets": (LEVEL.replace("360 mm", "5 m") + "print: {paper: A6}\n", "4:", ["print: paper", "sheets"]),
+    "a correction plate too small to be cut": (LEVEL + "correction:\n  form: table\n  width: 50 mm\n  height: 40 mm\n", "6:10", ["correction: width", "too small for its heading", "larger"]),
+    "a ring too small to be cut": (LEVEL + "cutting: {line width: 2 mm}\ncorrection:\n  form: ring\n  diameter: 80 mm\n", "7:13", ["correction: diameter", "too small for", "finer line"]),
     "not a design": (b"%PDF-1.4\n%\xe2\xe3\xcf\xd3\n", "", ["UTF-8"]),
     "nothing at all": (b"", "1:1", ["nothing in it"]),
     "a nodus among other faults": (TWO_FACES + "dail: {}\nprint: {paper: A99}\n", "4:1", ['did you mean "dial"?']),

@@ -209,7 +209,8 @@ class Make(Bench):
         self.assertEqual(status == WITH_WARNINGS, "note: " in err)
         packet = self.folder / "two faces-packet"
         files = contents_of(packet)
-        self.assertEqual(files.keys(), {"sheets.pdf", "plate-upper.svg", "plate-lower.svg", "hour-lines.csv", "numbers.txt", "numbers.json"})
+        self.assertEqual(files.keys(), {"sheets.pdf", "plate-upper.svg", "plate-upper.dxf", "plate-lower.svg", "plate-lower.dxf", "parts.csv", "setting-out-upper.csv",
+                                        "setting-out-lower.csv", "hour-lines.csv", "numbers.txt", "numbers.json", "contents.txt"})
         for name in files:
             self.assertIn(f"two faces-packet/{name}", out)
         self.assertEqual(files["numbers.json"].decode(), run("numbers", design, "--json")[1])

@@ -30,9 +30,10 @@ class RandomDesign {
         std::string text = place() + skyline(); // one after the other: the plate's size bounds what follows
         text += dial();
         text += plate();
-        for (const auto section : {&RandomDesign::borders, &RandomDesign::gnomon, &RandomDesign::hours,
-                                   &RandomDesign::also, &RandomDesign::dates, &RandomDesign::lettering,
-                                   &RandomDesign::cutting, &RandomDesign::print, &RandomDesign::years})
+        for (const auto section :
+             {&RandomDesign::borders, &RandomDesign::gnomon, &RandomDesign::hours, &RandomDesign::also,
+              &RandomDesign::dates, &RandomDesign::correction, &RandomDesign::lettering, &RandomDesign::cutting,
+              &RandomDesign::print, &RandomDesign::years})
             text += (this->*section)();
         return text;
     }
@@ -115,6 +116,20 @@ class RandomDesign {
                some(0.25, fmt::format("centre: [{:.1f} mm, {:.1f} mm]", number(-0.8, 0.8) * smaller_mm_,
                                       number(-0.8, 0.8) * smaller_mm_)) +
                some(0.3, "material: Welsh slate, 25 mm");
+    }
+    std::string correction() {
+        if (!chance(0.25))
+            return "";
+        const std::string form = one_of(std::array{"graph", "ring", "table"});
+        std::string text = "correction:\n  form: " + form + "\n";
+        if (form == "ring")
+            text += some(0.5, "diameter: " + mm(60, 600));
+        else
+            text += some(0.5, "width: " + mm(60, 600)) + some(0.5, "height: " + mm(60, 600));
+        if (form == "table")
+            text += some(0.5, std::string{"dates: "} +
+                                  one_of(std::array{"each 5 days", "each 10 days", "each 15 days", "whole minutes"}));
+        return text;
     }
     std::string borders() {
         return "borders:\n  margin: " + mm(0.5, 0.05 * smaller_mm_ + 0.6) + "\n" +
@@ -260,7 +275,10 @@ std::string outcome(const std::string& text) {
         REQUIRE(packet.items.front().file.bytes.substr(0, 5) == "%PDF-");
         for (const Packet::Item& item : packet.items)
             REQUIRE_FALSE(item.file.bytes.empty());
-        REQUIRE_NOTHROW(nlohmann::json::parse(packet.items.back().file.bytes));
+        const auto numbers = std::find_if(packet.items.begin(), packet.items.end(),
+                                          [](const Packet::Item& item) { return item.file.name == "numbers.json"; });
+        REQUIRE(numbers != packet.items.end());
+        REQUIRE_NOTHROW(nlohmann::json::parse(numbers->file.bytes));
     } catch (const layout::ExportError& trouble) {
         return trouble.what(); // told at the design's key by take_packet
     }

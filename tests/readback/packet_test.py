@@ -175,9 +175,8 @@ class Packets(Bench):
             titles = re.findall(r'(?m)^\S\s+"(.*?)"\s', outline)
             self.assertEqual(len(titles), sheets)
             faces = faces_of(numbers)
-            own_size = len(pages) - len(faces)
-            tile = next(i for i, title in enumerate(titles) if title.startswith("Sheet ")) if any(t.startswith("Sheet ") for t in titles) else own_size
-            for number, (name, face) in enumerate(faces):
+            for name, face in faces:
+                part = f"Plate, {name} face" if name else "Plate"
                 svg = self.svg_of(folder, name)
                 lines = self.lines_on(svg, numbers, face, level)
                 points = np.concatenate([along(line) for line in lines])
@@ -187,25 +186,24 @@ class Packets(Bench):
                     for line in lines:  # and each as one run, from end to end
                         self.assertTrue(any(max(math.dist(run[0], line[0]), math.dist(run[-1], line[-1])) < CLOSE_MM for run in drawn))
                 with self.subTest(design.name, face=name, on="own size"):
-                    size, runs = pages[own_size + number]
+                    size, runs = pages[titles.index(f"{part}, own size")]
                     edge = max(runs, key=lambda run: np.ptp(run, axis=0).prod() if np.abs(np.ptp(run, axis=0) - np.ptp(svg.edge, axis=0)).max() < 0.02 else 0)
                     self.assertLess(np.abs(np.ptp(edge, axis=0) - np.ptp(svg.edge, axis=0)).max(), 0.02)
                     shift = (edge.min(axis=0) + edge.max(axis=0)) / 2 - (svg.edge.min(axis=0) + svg.edge.max(axis=0)) / 2
                     self.assertLess(farthest(points + shift, segments_of(runs)), CLOSE_MM)
-                tile = self.on_tiles(design, name, svg, points, pages, titles, tile, setting(design, "overlap", checked))
+                self.on_tiles(design, name, part, svg, points, pages, titles, setting(design, "overlap", checked))
 
-    def on_tiles(self, design, name, svg, points, pages, titles, first, overlap):
+    def on_tiles(self, design, name, part, svg, points, pages, titles, overlap):
         """Rows from the top and columns from the left, each a step from the last; the whole about the work's middle."""
-        cells = []
-        for title in titles[first:]:
-            found = re.fullmatch(r"Sheet ([A-Z])(\d+)", title)
-            cell = found and (ord(found[1]) - ord("A"), int(found[2]) - 1)
-            if not cell or (cells and cell <= cells[-1]):
-                break
-            cells.append(cell)
+        found = [re.fullmatch(re.escape(part) + r", sheet ([A-Z])(\d+)", title) for title in titles]
+        first = next((i for i, title in enumerate(found) if title), None)
+        if first is None:
+            self.assertIn(part, titles)  # on one sheet, whose page is that of its own size but for the paper
+            return
+        cells = [(ord(title[1]) - ord("A"), int(title[2]) - 1) for title in found if title]
         last = first + len(cells)
-        if not cells:
-            return first
+        self.assertEqual(cells, sorted(set(cells)))
+        self.assertTrue(all(found[first:last]))
         openings = [self.opening(runs) for _, runs in pages[first:last]]
         left, bottom, width, height = openings[0]
         rows, columns = (1 + max(cell[k] for cell in cells) for k in (0, 1))
@@ -226,7 +224,6 @@ class Packets(Bench):
             worst, count = min(seen.values())
             self.assertLess(worst, CLOSE_MM)
             self.assertGreaterEqual(count, 0.9 * len(points))
-        return last
 
     def opening(self, runs):
         """The frame of a tile: the largest upright rectangle of five points."""

@@ -72,6 +72,30 @@ Reference reference() {
 
 using Sections = std::map<std::string, std::map<std::string, std::string>>;
 
+/// Which gnomon and which joint have a key of the gnomon's.
+void call_for_joint(Sections& design, const std::string& key) {
+    const auto is = [&](std::initializer_list<const char*> keys) {
+        return std::any_of(keys.begin(), keys.end(), [&](const char* one) { return key == one; });
+    };
+    auto& gnomon = design["gnomon"];
+    if (is({"joint", "tenons", "tenon length", "proud", "fit", "hook", "keel", "flange width", "flange thickness"})) {
+        gnomon["thickness"] = "6 mm";
+        design["plate"]["thickness"] = "12 mm";
+    }
+    if (is({"tenons", "tenon length", "proud", "fit"}))
+        gnomon["joint"] = "tenons";
+    if (is({"hook", "keel"}))
+        gnomon["joint"] = "hooked tenons";
+    if (is({"flange width", "flange thickness"}))
+        gnomon["joint"] = "flange";
+    if (key == "ball")
+        gnomon["nodus"] = "ball";
+    if (is({"socket", "strut"})) {
+        gnomon["kind"] = "rod";
+        gnomon["thickness"] = "8 mm";
+    }
+}
+
 /// A good design around one key, with what that key calls for.
 Sections design_around(const Row& row) {
     Sections design{{"place", {{"latitude", "54° 14' N"}, {"longitude", "1° 52' W"}, {"zone", "Europe/London"}}},
@@ -90,15 +114,26 @@ Sections design_around(const Row& row) {
         design["lettering"] = {{"motto", "Sine sole sileo"}};
     if (key == "hole diameter")
         design["gnomon"] = {{"holes", "2"}};
+    if (row.section == "gnomon")
+        call_for_joint(design, key);
+    if (row.section == "cutting" && (key == "point angle" || key == "depth" || key == "flat"))
+        design["cutting"] = {{"tool", "v cutter"}};
+    if (row.section == "cutting" && key == "diameter")
+        design["cutting"] = {{"tool", "end mill"}};
     if (row.section == "hours" && key == "curves")
         design["hours"] = {{"time", "clock"}};
     if ((row.section == "hours" && key == "summer numerals") || (row.section == "also" && key == "sun"))
         design["hours"] = {{"time", "zone"}};
     if (row.section == "hours" && key == "rise and set")
         design["hours"] = {{"time", "since sunrise"}};
+    if (row.section == "correction" && (key == "diameter" || key == "dates"))
+        design["correction"] = {{"form", key == "dates" ? "table" : "ring"}};
     if (row.section == "also: noon at")
         design["also"]["noon at"] = key == "name" ? "[{longitude: 5° E, name: " + row.example + "}]"
                                                   : "[{name: x, longitude: " + row.example + "}]";
+    else if (row.section == "cutting: layers")
+        design["cutting"]["layers"] =
+            key == "layer" ? "[{layer: " + row.example + "}]" : "[{layer: cut, " + key + ": " + row.example + "}]";
     else if (row.section == "dates: days")
         design["dates"]["days"] =
             key == "on" ? "[{on: " + row.example + "}]" : "[{on: 14 June, label: " + row.example + "}]";
@@ -154,7 +189,10 @@ TEST_CASE("every example of the reference is read", "[cli]") {
 
 TEST_CASE("the long example of the reference gives every key that can stand together", "[cli]") {
     // What its wall and its rectangle exclude.
-    const std::set<std::string> others = {"plate: diameter", "plate: across", "plate: corners"};
+    const std::set<std::string> others = {
+        "plate: diameter",      "plate: across",  "plate: corners", "correction: diameter", "gnomon: tenons",
+        "gnomon: tenon length", "gnomon: proud",  "gnomon: fit",    "gnomon: hook",         "gnomon: keel",
+        "gnomon: ball",         "gnomon: socket", "gnomon: strut",  "cutting: depth",       "cutting: diameter"};
     const DesignReading reading = read_design(reference().blocks.at(1), "long.yaml");
     REQUIRE(reading.design);
     CHECK(reading.design->assumed.empty());

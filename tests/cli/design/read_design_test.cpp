@@ -110,7 +110,7 @@ TEST_CASE("what is assumed, written out, gives the same design and leaves nothin
         CHECK_THAT(second.lettering.label_height_mm, WithinAbs(first.lettering.label_height_mm, 1e-9));
         CHECK_THAT(second.lettering.motto_height_mm, WithinAbs(first.lettering.motto_height_mm, 1e-9));
         CHECK_THAT(second.gnomon.thickness_mm, WithinAbs(first.gnomon.thickness_mm, 1e-9));
-        CHECK_THAT(second.gnomon.hole_diameter_mm, WithinAbs(first.gnomon.hole_diameter_mm, 1e-9));
+        CHECK_THAT(second.gnomon.joint.hole_mm, WithinAbs(first.gnomon.joint.hole_mm, 1e-9));
         CHECK_THAT(second.cutting.line_width_mm, WithinAbs(first.cutting.line_width_mm, 1e-9));
         CHECK_THAT(second.cutting.least_gap_mm, WithinAbs(first.cutting.least_gap_mm, 1e-9));
         CHECK_THAT(second.print.overlap_mm, WithinAbs(first.print.overlap_mm, 1e-9));

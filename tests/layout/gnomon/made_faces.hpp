@@ -38,8 +38,9 @@ inline FaceSpec face_spec(PlateShape shape, double width_mm, double height_mm, d
     spec.borders = {8, 40, 12};
     spec.gnomon.kind = GnomonKind::edge;
     spec.gnomon.thickness_mm = thickness_mm;
-    spec.gnomon.holes = 3;
-    spec.gnomon.hole_diameter_mm = 3;
+    spec.plate.thickness_mm = 10;
+    spec.gnomon.joint.count = 3;
+    spec.gnomon.joint.hole_mm = 3;
     spec.lettering.numeral_height_mm = 12;
     spec.lettering.label_height_mm = 5;
     spec.divide_min = 30;

@@ -13,14 +13,12 @@ TEST_CASE("the plate's own holes and foot are those of the gnomon", "[gnomon]") 
         const auto seat = seat_of(made.face, made.spec);
         REQUIRE(seat);
         CHECK(seat->centre_on_plate);
-        JointOptions joint;
-        joint.kind = FootKind::plain;
-        joint.count = made.spec.gnomon.holes;
-        joint.hole_mm = made.spec.gnomon.hole_diameter_mm;
-        const auto plan = edge_gnomon_plan(made.plan, made.face, made.spec, 10, joint);
+        const auto plan = edge_gnomon_plan(made.plan, made.face, made.spec);
         REQUIRE(plan);
         const EdgeGnomon gnomon = edge_gnomon(*plan);
-        const Drawing placed{"", on_plate(gnomon.part.plate_marks, *seat, made.spec.reader_up)};
+        Drawing placed{"", on_plate(gnomon.part.plate_marks, *seat)};
+        for (Mark& one : placed.marks) // the face's drawing is turned for its reader
+            one = Placing{made.spec.reader_up, {}, 1.0, 1.0, false}(one);
         const auto of_gnomon = holes(placed.marks), of_plate = holes(made.face.drawing.marks);
         REQUIRE(of_gnomon.size() == 3);
         REQUIRE(of_plate.size() == 3);
@@ -49,7 +47,7 @@ TEST_CASE("the plate's own holes and foot are those of the gnomon", "[gnomon]") 
 
 TEST_CASE("the nodus stands over the nodus' foot of the plate", "[gnomon]") {
     for (const Made& made : {made_faces::level_round(), made_faces::wall_oblong(), made_faces::great_decliner()}) {
-        const auto plan = edge_gnomon_plan(made.plan, made.face, made.spec, 10, {});
+        const auto plan = edge_gnomon_plan(made.plan, made.face, made.spec);
         REQUIRE(plan);
         const auto seat = seat_of(made.face, made.spec);
         const Point on_work = seat->start + plan->nodus_along_mm * seat->along;
