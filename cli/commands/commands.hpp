@@ -12,5 +12,6 @@ void add_make(CLI::App& app, int& status);
 void add_numbers(CLI::App& app, int& status);
 void add_shadow(CLI::App& app, int& status);
 void add_check(CLI::App& app, int& status);
+void add_survey(CLI::App& app, int& status);
 
 } // namespace dialwright::cli

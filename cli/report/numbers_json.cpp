@@ -1,49 +1,13 @@
 // SPDX-License-Identifier: MIT
+#include "cli/report/json_text.hpp"
 #include "cli/report/numbers.hpp"
 #include "cli/report/say.hpp"
 #include "layout/correction/words.hpp"
 
-#include <cmath>
 #include <fmt/format.h>
-#include <nlohmann/json.hpp>
 
 namespace dialwright::cli {
 namespace {
-
-using Json = nlohmann::ordered_json;
-
-/// Null where there is no number.
-Json number(double value) {
-    if (!std::isfinite(value))
-        return nullptr;
-    return value;
-}
-/// Numbers to the millionth, without exponents, "-0" or noise in the last digits; all else as the library writes it.
-void write(const Json& json, std::string& text) {
-    const auto write_list = [&](char open, char close, const auto& write_item) {
-        text += open;
-        for (auto item = json.begin(); item != json.end(); ++item) {
-            if (item != json.begin())
-                text += ',';
-            write_item(item);
-        }
-        text += close;
-    };
-    if (json.is_object()) {
-        write_list('{', '}', [&](const auto& item) {
-            text += Json(item.key()).dump() + ':';
-            write(item.value(), text);
-        });
-    } else if (json.is_array()) {
-        write_list('[', ']', [&](const auto& item) { write(*item, text); });
-    } else if (json.is_number_float()) {
-        std::string number = fixed(json.get<double>(), 6);
-        number.erase(number.find_last_not_of('0') + 1);
-        text += number.ends_with('.') ? number + '0' : number;
-    } else {
-        text += json.dump(-1, ' ', false, Json::error_handler_t::replace);
-    }
-}
 
 Json point(PlatePoint p) {
     return Json::array({number(p.u_mm), number(p.v_mm)});
@@ -189,9 +153,7 @@ std::string numbers_json(const Commission& commission) {
     }
     out["correction"] = correction_json(commission);
     out["equation_of_time"] = equation_json(commission.year);
-    std::string text;
-    write(out, text);
-    return text + "\n";
+    return json_text(out);
 }
 
 std::string hour_lines_csv(const Commission& commission) {

@@ -1,4 +1,5 @@
 // SPDX-License-Identifier: MIT
+#include "cli/report/lines_of_text.hpp"
 #include "cli/report/numbers.hpp"
 #include "cli/report/say.hpp"
 #include "layout/correction/words.hpp"
@@ -10,20 +11,7 @@
 namespace dialwright::cli {
 namespace {
 
-class Text {
-  public:
-    template <class... Parts>
-    void line(fmt::format_string<Parts...> form, Parts&&... parts) {
-        fmt::format_to(std::back_inserter(text_), form, std::forward<Parts>(parts)...);
-        text_ += '\n';
-    }
-    void gap() { text_ += '\n'; }
-    [[nodiscard]] std::string taken() { return std::move(text_); }
-
-  private:
-    std::string text_;
-};
-
+using Text = LinesOfText;
 std::string point_text(PlatePoint p) {
     return fmt::format("{:>8} {:>8}", fixed(p.u_mm, 1), fixed(p.v_mm, 1));
 }

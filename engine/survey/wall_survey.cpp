@@ -6,6 +6,8 @@
 #include "engine/fit/chance.hpp"
 #include "engine/surface/plane.hpp"
 
+#include <Eigen/Dense>
+
 #include <algorithm>
 #include <cmath>
 
@@ -39,13 +41,7 @@ class Survey {
     [[nodiscard]] bool residuals(const VectorXd& x, VectorXd& r) const {
         if (std::abs(x[k_lean]) > 89.5 || readings_.peg_mm + x[k_peg] < readings_.peg_mm / 2)
             return false;
-        const Attitude attitude{Angle::degrees(x[k_facing]), Angle::degrees(x[k_lean])};
-        const PlateFrame wall = frame_of(attitude);
-        const double turn_sine = sin(Angle::degrees(x[k_turn])), turn_cosine = cos(Angle::degrees(x[k_turn]));
-        const PlateFrame board{turn_cosine * wall.u - turn_sine * wall.v, turn_sine * wall.u + turn_cosine * wall.v,
-                               wall.n};
-        const double peg_mm = readings_.peg_mm + x[k_peg];
-        const Plane plane{board, peg_mm};
+        const Plane plane{board_of(x), readings_.peg_mm + x[k_peg]};
         int row = 0;
         for (std::size_t i = 0; i < readings_.shadows.size(); ++i, row += 2) {
             const SiteDirection sun = sun_of(i, x[k_clock]);
@@ -73,7 +69,8 @@ class Survey {
         FitTask task;
         task.readings = int(readings_.shadows.size());
         task.width = 2;
-        task.known_rows = int(readings_.grazings.size()) + (readings_.bearing_deg ? 1 : 0) + (readings_.lean_deg ? 1 : 0);
+        task.known_rows =
+            int(readings_.grazings.size()) + (readings_.bearing_deg ? 1 : 0) + (readings_.lean_deg ? 1 : 0);
         task.residuals = [this](const VectorXd& x, VectorXd& r) { return residuals(x, r); };
         task.unknowns.resize(k_unknowns);
         const auto set = [&](Index i, double step, double known_to) {
@@ -122,6 +119,43 @@ class Survey {
         return answer;
     }
 
+    /// The time of the last reading's day at which one more shadow would narrow the facing most.
+    [[nodiscard]] std::optional<NextReading> next(const Fit& fit, const FitTask& task) const {
+        const Instant last = suns_.back().at;
+        std::vector<Instant> times;
+        for (int quarter = -48; quarter < 48; ++quarter)
+            times.push_back(std::chrono::round<std::chrono::minutes>(last) + quarter * std::chrono::minutes{15});
+        const std::vector<RealSun> suns = real_suns(readings_.site, times);
+        const Eigen::MatrixXd covariance = fit.from_readings + fit.from_known;
+        std::optional<NextReading> best;
+        for (std::size_t i = 0; i < times.size(); ++i) {
+            if (!measurable(suns[i], fit.values))
+                continue;
+            Eigen::MatrixXd slopes(2, k_unknowns);
+            VectorXd x = fit.values;
+            for (int k = 0; k < k_unknowns; ++k) {
+                const double step = task.unknowns[std::size_t(k)].step;
+                x[k] = fit.values[k] + step;
+                const PlatePoint ahead = shadow_at(suns[i], x);
+                x[k] = fit.values[k] - step;
+                const PlatePoint behind = shadow_at(suns[i], x);
+                x[k] = fit.values[k];
+                slopes(0, k) = (ahead.u_mm - behind.u_mm) / (2 * step);
+                slopes(1, k) = (ahead.v_mm - behind.v_mm) / (2 * step);
+            }
+            const PlatePoint at = shadow_at(suns[i], x);
+            const double deviation_mm = fit.noise * nominal_mm({times[i], at.u_mm, -at.v_mm});
+            const Eigen::Matrix2d spread =
+                slopes * covariance * slopes.transpose() + deviation_mm * deviation_mm * Eigen::Matrix2d::Identity();
+            const Eigen::Vector2d along = slopes * covariance.col(k_facing);
+            const double left = covariance(k_facing, k_facing) - along.dot(spread.inverse() * along);
+            const double range = student_95(std::max(2.0, fit.freedom + 2)) * std::sqrt(std::max(0.0, left));
+            if (!best || range < best->facing_range_deg)
+                best = NextReading{times[i], range};
+        }
+        return best;
+    }
+
     [[nodiscard]] Angle sun_span() const {
         double least_cosine = 1.0;
         for (std::size_t i = 0; i < readings_.shadows.size(); ++i)
@@ -131,6 +165,26 @@ class Survey {
     }
 
   private:
+    [[nodiscard]] PlateFrame board_of(const VectorXd& x) const {
+        const PlateFrame wall = frame_of({Angle::degrees(x[k_facing]), Angle::degrees(x[k_lean])});
+        const double sine = sin(Angle::degrees(x[k_turn])), cosine = cos(Angle::degrees(x[k_turn]));
+        return {cosine * wall.u - sine * wall.v, sine * wall.u + cosine * wall.v, wall.n};
+    }
+
+    /// A shadow that a maker can mark: not far out, the Sun not low.
+    [[nodiscard]] bool measurable(const RealSun& sun, const VectorXd& x) const {
+        const SiteDirection seen = sun.seen(latitude_, x[k_clock]);
+        constexpr double k_low = 0.14, k_flat = 0.25; // sines
+        return seen.enu.z() > k_low && seen.enu.dot(board_of(x).n) > k_flat;
+    }
+
+    /// Of a Sun that is measurable.
+    [[nodiscard]] PlatePoint shadow_at(const RealSun& sun, const VectorXd& x) const {
+        const Plane plane{board_of(x), readings_.peg_mm + x[k_peg]};
+        return plane.shadow_of_nodus(sun.seen(latitude_, x[k_clock]), {x[k_foot_right], x[k_foot_up]})
+            .value_or(PlatePoint{});
+    }
+
     [[nodiscard]] SiteDirection sun_of(std::size_t i, double clock_s) const {
         return clock_s == 0.0 ? seen_[i] : suns_[i].seen(latitude_, clock_s);
     }
@@ -249,6 +303,9 @@ WallSurvey survey_wall(const WallReadings& readings) {
     for (const Way* way : good)
         if (way->fit.misfit < least + k_tells)
             made.answers.push_back(survey.answer(way->fit, way->task, way->fault));
+
+    if (made.checked)
+        made.next = survey.next(good.front()->fit, good.front()->task);
 
     // Far too scattered for any wall: offsets with a wrong sign?
     constexpr double k_scattered = 10, k_far_better = 5;

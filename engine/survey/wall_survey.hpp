@@ -2,9 +2,9 @@
 #pragma once
 
 #include "engine/fit/least_squares.hpp"
+#include "engine/surface/plate_frame.hpp"
 #include "engine/survey/known.hpp"
 #include "engine/survey/real_sun.hpp"
-#include "engine/surface/plate_frame.hpp"
 
 #include <optional>
 #include <vector>
@@ -51,11 +51,17 @@ struct WallAnswer {
     enum class Fault { none, clock, level };
     Fault fault = Fault::none;
     Found facing_deg, lean_deg;
-    Found clock_s;   ///< the clock was slow by this
-    Found level_deg; ///< the board's top was turned to the right by this, as its reader sees it
+    Found clock_s;           ///< the clock was slow by this
+    Found level_deg;         ///< the board's top was turned to the right by this, as its reader sees it
     double scatter_mm = 0.0; ///< of the tip's shadow either way, at the foot of the peg; 0 where nothing checks it
     std::vector<double> off_right_mm, off_down_mm; ///< measured less computed, a figure a shadow
     std::vector<bool> stray;                       ///< left out, a flag a shadow
+};
+
+/// What one more reading would do.
+struct NextReading {
+    Instant at;
+    double facing_range_deg = 0.0; ///< what would be left of the facing's ±
 };
 
 struct WallSurvey {
@@ -65,9 +71,10 @@ struct WallSurvey {
     bool checked = false;            ///< readings enough for their scatter to be known
     bool too_scattered = false;      ///< the readings fit no wall
     Swap swap = Swap::none;
-    Angle sun_span;        ///< between the two Suns that stood farthest apart
+    Angle sun_span;            ///< between the two Suns that stood farthest apart
     double clock_told_s = 0.0; ///< a wrong clock shows (by shadows alone) from about this on
     double level_told_deg = 0.0;
+    std::optional<NextReading> next; ///< the best time, on the day of the last reading, for one more shadow
 };
 
 /// Fits facing and lean, and beside them the clock, the board's plumb line, the peg's length and foot as far as their ± go.

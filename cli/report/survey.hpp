@@ -1,0 +1,27 @@
+// SPDX-License-Identifier: MIT
+#pragma once
+
+#include "cli/readings/survey_readings.hpp"
+
+#include <string>
+#include <utility>
+#include <vector>
+
+namespace dialwright::cli {
+
+/// What a survey is good for.
+struct SurveyVerdict {
+    std::vector<DesignError> errors; ///< the readings give no answer
+    std::vector<std::string> notes;  ///< there is one, and the maker should know this
+    bool good_to_cut = false;        ///< one answer, near enough for a dial
+};
+[[nodiscard]] SurveyVerdict verdict_on(const SurveyFile& file, const WallSurvey& survey);
+
+/// Keys of a design's `dial` and their values, from the likeliest answer; the lean only where the readings tell it.
+[[nodiscard]] std::vector<std::pair<std::string, std::string>> dial_values(const WallSurvey& survey);
+
+[[nodiscard]] std::string survey_text(const SurveyFile& file, const WallSurvey& survey, const SurveyVerdict& verdict);
+/// docs/output-formats.md.
+[[nodiscard]] std::string survey_json(const SurveyFile& file, const WallSurvey& survey, const SurveyVerdict& verdict);
+
+} // namespace dialwright::cli
