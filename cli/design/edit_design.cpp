@@ -85,9 +85,12 @@ class Editor {
         const Entry* dial = root.find("dial"); // the design is readable: the section is there, with its kind
         in_braces_ = text_[bytes_.at(dial->value.at)] == '{';
         const Entry* kind = dial->value.find("kind");
+        const Entry* above = kind; // a new key stands below the one before it
         for (const auto& [key, value] : values) {
             const Entry* entry = dial->value.find(key);
-            const bool good = entry != nullptr ? exchange(*entry, value) : add(*kind, key, value);
+            const bool good = entry != nullptr ? exchange(*entry, value) : add(*above, key, value);
+            if (entry != nullptr)
+                above = entry;
             if (!good) {
                 const Position at = (entry != nullptr ? entry : kind)->value.at;
                 return {{},
@@ -117,15 +120,15 @@ class Editor {
         return end.has_value();
     }
 
-    bool add(const Entry& kind, const std::string& key, const std::string& value) {
+    bool add(const Entry& above, const std::string& key, const std::string& value) {
         if (in_braces_) {
-            const auto end = end_of_value(text_, bytes_.at(kind.value.at), true);
+            const auto end = end_of_value(text_, bytes_.at(above.value.at), true);
             if (end)
                 changes_.push_back({*end, *end, ", " + key + ": " + value});
             return end.has_value();
         }
-        const std::size_t end = bytes_.end_of_line(kind.value.at.line);
-        const std::string indent(std::size_t(kind.at.column) - 1, ' ');
+        const std::size_t end = bytes_.end_of_line(above.value.at.line);
+        const std::string indent(std::size_t(above.at.column) - 1, ' ');
         changes_.push_back({end, end, std::string{bytes_.line_end()} + indent + key + ": " + value});
         return true;
     }

@@ -17,7 +17,7 @@ struct DesignEdit {
 };
 
 /// Writes the values of keys of `dial` into a design file's text. A key that is there gets its value exchanged, one that is not is
-/// added below `kind`; every other byte stays, comments and line ends included.
+/// added below the one before it, or below `kind`; every other byte stays, comments and line ends included.
 /// @param values  keys and their values as the design file has them, in the order in which new ones are added
 /// An error for a text that is no readable design before or after, or whose dial can't have such keys.
 [[nodiscard]] DesignEdit with_dial_values(std::string_view text, const std::string& file,

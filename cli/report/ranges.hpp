@@ -1,7 +1,8 @@
 // SPDX-License-Identifier: MIT
 #pragma once
 
-#include "engine/survey/wall_survey.hpp"
+#include "engine/base/angle.hpp"
+#include "engine/survey/found.hpp"
 
 #include <string>
 

@@ -6,7 +6,6 @@
 #include "engine/time/instant_text.hpp"
 #include "engine/time/zone.hpp"
 
-#include <chrono>
 #include <fmt/format.h>
 #include <iterator>
 
@@ -18,15 +17,6 @@ struct Reader {
     const FacePlan* plan;
     Caster<Plane> caster;
 };
-
-/// Day of the mean year, from 1 January 0 h UT.
-double day_of_year(Instant at, const MeanYear& year) {
-    using namespace std::chrono;
-    const auto midnight = floor<days>(at);
-    const year_month_day date{midnight};
-    const double hours = duration<double, std::ratio<3600>>(at - midnight).count();
-    return year.day_of(date.month() / date.day(), hours);
-}
 
 std::string clock_of(const Zone& zone, Instant at) {
     const auto offset = zone.at(at);
@@ -67,7 +57,7 @@ std::vector<ShadowReport> shadow_reports(const Commission& commission, std::span
                 report.lit = true;
                 report.shadow = cast->point;
                 const DialPlan& dial = readers[k].plan->dial;
-                const double day = day_of_year(report.at, commission.year);
+                const double day = commission.year.day_of(report.at);
                 report.reads_h = reading_of(dial, dial.hours.time, commission.year, report.sky, day);
                 for (const HourPlan& more : dial.more_hours)
                     report.also_reads_h.push_back(reading_of(dial, more.time, commission.year, report.sky, day));

@@ -260,6 +260,12 @@ Spread Fit::spread(int unknown) const {
     return spread(Eigen::VectorXd(Eigen::VectorXd::Unit(values.size(), unknown)));
 }
 
+double Fit::chance_of(int unknown, double thought_to) const {
+    const Spread found = spread(unknown);
+    const double out = values[unknown] / std::hypot(found.deviation, thought_to);
+    return fisher_above(out * out, 1.0, std::max(0.5, found.freedom));
+}
+
 double Fit::untold(int unknown, const FitTask& task) const {
     const double beforehand = task.unknowns[std::size_t(unknown)].known_to;
     return (from_readings(unknown, unknown) + from_known(unknown, unknown)) / (beforehand * beforehand);

@@ -55,6 +55,8 @@ struct Fit {
     /// Of one unknown, or of a quantity by its slope over each.
     [[nodiscard]] Spread spread(int unknown) const;
     [[nodiscard]] Spread spread(const Eigen::VectorXd& slopes) const;
+    /// The chance that an unknown comes out so far from 0 where it is 0 but for `thought_to` (one standard deviation).
+    [[nodiscard]] double chance_of(int unknown, double thought_to) const;
     /// How much of what was known beforehand is left of an unknown's variance: near 1, the readings tell nothing of it.
     [[nodiscard]] double untold(int unknown, const FitTask& task) const;
 };

@@ -235,14 +235,6 @@ class Survey {
     std::vector<SiteDirection> seen_; ///< by a right clock
 };
 
-/// The chance that a figure lies so far from where it was thought to be.
-double chance_of(const Fit& fit, int unknown, double thought_to) {
-    const Spread spread = fit.spread(unknown);
-    const double deviation = std::hypot(spread.deviation, thought_to);
-    const double out = fit.values[unknown] / deviation;
-    return fisher_above(out * out, 1.0, std::max(0.5, spread.freedom));
-}
-
 WallReadings swapped(WallReadings readings, WallSurvey::Swap swap) {
     for (PegShadow& shadow : readings.shadows)
         if (swap == WallSurvey::Swap::left_for_right)
@@ -294,7 +286,7 @@ WallSurvey survey_wall(const WallReadings& readings) {
         const int unknown = clock ? k_clock : k_turn;
         const double thought_to = as_said.task.unknowns[std::size_t(unknown)].known_to;
         (clock ? made.clock_told_s : made.level_told_deg) = k_shows * way.fit.spread(unknown).range_95;
-        if (chance_of(way.fit, unknown, thought_to) < k_rare && way.fit.misfit < as_said.fit.misfit - k_tells)
+        if (way.fit.chance_of(unknown, thought_to) < k_rare && way.fit.misfit < as_said.fit.misfit - k_tells)
             good.push_back(&way);
         least = std::min(least, good.back()->fit.misfit);
     }

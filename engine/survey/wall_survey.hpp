@@ -3,6 +3,7 @@
 
 #include "engine/fit/least_squares.hpp"
 #include "engine/surface/plate_frame.hpp"
+#include "engine/survey/found.hpp"
 #include "engine/survey/known.hpp"
 #include "engine/survey/real_sun.hpp"
 
@@ -36,13 +37,6 @@ struct WallReadings {
     std::vector<Grazing> grazings;
     std::optional<Known> bearing_deg; ///< from true north through east, by a compass and its variation
     std::optional<Known> lean_deg;    ///< by plumb line and rule, back positive
-};
-
-/// An angle or a time with the range that holds 19 times in 20.
-struct Found {
-    double value = 0.0;
-    double range = 0.0;
-    bool told = true; ///< the readings say something of it beyond what was known beforehand
 };
 
 /// One way in which the readings hang together.

@@ -2,7 +2,9 @@
 //
 // Reads cases of readings that another program's Sun made, and prints what is found from them, for comparison with what
 // was put in. A case is a line with its kind and figures, a line a reading, and "end".
+//   dial LATITUDE LONGITUDE ZONE_MERIDIAN TIME NORMAL_AZIMUTH NORMAL_ALTITUDE CLOCK_GIVE | INSTANT READS_H
 //   wall LATITUDE LONGITUDE PEG PEG_GIVE FOOT_GIVE LEVEL_GIVE CLOCK_GIVE | INSTANT RIGHT DOWN
+#include "engine/survey/dial_adjust.hpp"
 #include "engine/survey/wall_survey.hpp"
 #include "engine/time/instant_text.hpp"
 
@@ -68,16 +70,54 @@ void wall(std::istream& in) {
     fmt::print("\n");
 }
 
+void print(const AdjustAnswer& answer) {
+    fmt::print(" | {}", int(answer.fault));
+    for (const Found& found :
+         {answer.turn, answer.top, answer.right, answer.style_height, answer.style_right, answer.clock_s})
+        print(found);
+    fmt::print(" ");
+    for (const bool stray : answer.stray)
+        fmt::print("{}", stray ? 1 : 0);
+}
+
+void dial(std::istream& in, const MeanYear& year) {
+    DialReadings readings;
+    double latitude = 0, longitude = 0, meridian = 0, azimuth = 0, altitude = 0;
+    std::string time;
+    in >> latitude >> longitude >> meridian >> time >> azimuth >> altitude >> readings.clock_give_s;
+    readings.plan.site = {Angle::degrees(latitude), Angle::degrees(longitude)};
+    readings.plan.zone_meridian = Angle::degrees(meridian);
+    readings.plan.attitude = {Angle::degrees(azimuth), Angle::degrees(altitude)};
+    readings.plan.nodus_height_mm = 100;
+    readings.plan.hours.time = time == "zone" ? HourTime::zone : HourTime::sun;
+    take_readings([&](std::istream& line) {
+        DialReading one;
+        one.at = instant_in(line);
+        line >> one.reads_h;
+        readings.readings.push_back(one);
+    });
+    const DialAdjustment made = adjust_dial(readings, year);
+    fmt::print("dial {} {} {:.4f}", made.checked ? 1 : 0, made.if_level ? 1 : 0, made.style_told_deg);
+    for (const AdjustAnswer& answer : made.answers)
+        print(answer);
+    if (made.if_level)
+        print(*made.if_level);
+    fmt::print("\n");
+}
+
 } // namespace
 
 int main() {
     try {
+        const MeanYear year{2025, 2044};
         for (std::string line; std::getline(std::cin, line);) {
             std::istringstream in{line};
             std::string kind;
             in >> kind;
             if (kind == "wall")
                 wall(in);
+            else if (kind == "dial")
+                dial(in, year);
             else
                 throw std::runtime_error("no such kind: " + line);
         }
