@@ -99,4 +99,15 @@ CommissionTaking take_commission(DesignReading reading) {
             {}};
 }
 
+std::optional<std::size_t> face_named(const Commission& commission, const std::string& name) {
+    for (std::size_t i = 0; i < commission.plans.size(); ++i)
+        if (commission.plans[i].name == name)
+            return i;
+    std::cerr << fmt::format("--face {}: this design has no such face{}\n", name,
+                             commission.plans.size() > 1
+                                 ? "; it has " + commission.plans[0].name + " and " + commission.plans[1].name
+                                 : std::string{" (it has only one)"});
+    return std::nullopt;
+}
+
 } // namespace dialwright::cli

@@ -41,6 +41,7 @@ int main(int count, char** words) {
     add_shadow(app, status);
     add_check(app, status);
     add_survey(app, status);
+    add_adjust(app, status);
     if (const std::string wrong = count > 1 ? no_command(app, words[1]) : std::string{}; !wrong.empty()) {
         std::cerr << "dialwright: " << wrong << '\n';
         return k_error;

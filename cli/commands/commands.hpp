@@ -13,5 +13,6 @@ void add_numbers(CLI::App& app, int& status);
 void add_shadow(CLI::App& app, int& status);
 void add_check(CLI::App& app, int& status);
 void add_survey(CLI::App& app, int& status);
+void add_adjust(CLI::App& app, int& status);
 
 } // namespace dialwright::cli

@@ -5,9 +5,10 @@
 // The style's shadow runs from the centre along D = b p − a s' (engine/style/style.cpp); what the dial shows is the hour
 // of the half-plane through p' that holds −D. Where p = p', that is the hour angle of s'.
 #include "engine/survey/dial_adjust.hpp"
+#include "engine/fit/chance.hpp"
 #include "engine/survey/real_sun.hpp"
 
-#include <Eigen/Geometry>
+#include <Eigen/Dense>
 
 #include <algorithm>
 #include <cmath>
@@ -35,8 +36,8 @@ Vector3d turned(const Vector3d& vector, const Vector3d& axis, double degrees) {
 }
 
 Matrix3d turn_of(const PlateFrame& frame, const Misfixing& misfixing) {
-    const Vector3d axis = Angle::degrees(1).in_radians() * (misfixing.turn_deg * frame.n + misfixing.top_deg * frame.u -
-                                                            misfixing.right_deg * frame.v);
+    const Vector3d axis = Angle::degrees(1).in_radians() *
+                          (misfixing.turn_deg * frame.n + misfixing.top_deg * frame.u - misfixing.right_deg * frame.v);
     const double size = axis.norm();
     if (size < 1e-15)
         return Matrix3d::Identity();
@@ -61,13 +62,14 @@ struct Plate {
     }
 };
 
-std::optional<double> reading(const DialPlan& plan, const MeanYear& year, const Plate& plate, const Misfixing& misfixing,
-                              const SiteDirection& sun, double day) {
+std::optional<double> reading(const DialPlan& plan, const MeanYear& year, const Plate& plate,
+                              const Misfixing& misfixing, const SiteDirection& sun, double day) {
     const PlateFrame& frame = plate.frame;
     Vector3d seen = turn_of(frame, misfixing).transpose() * sun.enu;
     if ((misfixing.style_height_deg != 0.0 || misfixing.style_right_deg != 0.0) && plate.style_told(plan)) {
         const Vector3d straight = plate.style.towards_nodus;
-        const Vector3d right = frame.n.dot(straight) > 0.999999 ? frame.u : Vector3d(straight.cross(frame.n).normalized());
+        const Vector3d right =
+            frame.n.dot(straight) > 0.999999 ? frame.u : Vector3d(straight.cross(frame.n).normalized());
         Vector3d style = turned(straight, right, misfixing.style_height_deg);
         style = turned(style, style.cross(right), misfixing.style_right_deg);
         const Vector3d along = frame.n.dot(seen) * style - frame.n.dot(style) * seen;
@@ -91,8 +93,8 @@ class Adjuster {
     /// Read less computed, minutes. 1000 where the dial would show nothing.
     [[nodiscard]] double off_min(std::size_t i, const Misfixing& misfixing, double clock_s) const {
         const RealSun& sun = suns_[i];
-        const auto shows = reading(readings_.plan, year_, plate_, misfixing, sun.seen(latitude_, clock_s),
-                                   year_.day_of(sun.at));
+        const auto shows =
+            reading(readings_.plan, year_, plate_, misfixing, sun.seen(latitude_, clock_s), year_.day_of(sun.at));
         if (!shows)
             return 1000;
         const double round_h = counts_from_noon(readings_.plan.hours.time) ? 12.0 : 24.0;
@@ -104,7 +106,8 @@ class Adjuster {
         task.readings = int(readings_.readings.size());
         const std::optional<Known>* const known[] = {&readings_.turn, &readings_.top, &readings_.right,
                                                      &readings_.style_height, &readings_.style_right};
-        task.known_rows = int(std::count_if(std::begin(known), std::end(known), [](const auto* k) { return k->has_value(); }));
+        task.known_rows =
+            int(std::count_if(std::begin(known), std::end(known), [](const auto* k) { return k->has_value(); }));
         task.residuals = [this, known](const VectorXd& x, VectorXd& r) {
             int row = 0;
             for (std::size_t i = 0; i < suns_.size(); ++i)
@@ -137,12 +140,15 @@ class Adjuster {
         constexpr double k_told = 0.15; // of the variance beforehand: else what was thought beforehand still shows
         AdjustAnswer answer;
         answer.fault = fault;
-        Found* const found[] = {&answer.turn, &answer.top, &answer.right, &answer.style_height, &answer.style_right,
-                                &answer.clock_s};
+        Found* const found[] = {&answer.turn,         &answer.top,         &answer.right,
+                                &answer.style_height, &answer.style_right, &answer.clock_s};
         for (int i = 0; i < k_unknowns; ++i)
             *found[i] = {fit.values[i], fit.spread(i).range_95, fit.untold(i, task) < k_told};
         if (!style_told())
             answer.style_height.told = answer.style_right.told = false;
+        const Vector3d off = fit.values.head(k_style_height);
+        const Matrix3d spread = (fit.from_readings + fit.from_known).topLeftCorner<3, 3>();
+        answer.right_chance = fisher_above(off.dot(spread.inverse() * off) / 3, 3, std::max(0.5, fit.freedom));
         answer.scatter_min = fit.checked() ? fit.noise * k_reading_min : 0.0;
         for (int i = 0; i < task.readings; ++i)
             answer.off_min.push_back(fit.residuals[i] * k_reading_min);
@@ -174,7 +180,7 @@ std::optional<double> reading_of_misfixed(const DialPlan& plan, const MeanYear& 
 }
 
 DialAdjustment adjust_dial(const DialReadings& readings, const MeanYear& year) {
-    constexpr double k_rare = 0.001, k_tells = 9.0, k_scattered = 10, k_once_in = 100;
+    constexpr double k_rare = 0.001, k_tells = 9.0, k_scattered = 10, k_once_in = 100, k_as_good = 6.0;
     const Adjuster adjuster{readings, year};
     DialAdjustment made;
     made.style_asked = adjuster.style_told();
@@ -211,18 +217,21 @@ DialAdjustment adjust_dial(const DialReadings& readings, const MeanYear& year) {
         const bool off = std::min(way.fit.chance_of(k_style_height, k_gauge_deg),
                                   way.fit.chance_of(k_style_right, k_gauge_deg)) < k_rare;
         // Both at once only where neither alone will do.
-        const double best = std::min_element(good.begin(), good.end(), [](const Way* a, const Way* b) {
-                                return a->fit.misfit < b->fit.misfit;
-                            })[0]->fit.misfit;
+        const double best =
+            std::min_element(good.begin(), good.end(),
+                             [](const Way* a, const Way* b) { return a->fit.misfit < b->fit.misfit; })[0]
+                ->fit.misfit;
         if (off && way.fit.misfit < best + (way.fault == Fault::style ? k_tells : -k_tells))
             good.push_back(&way);
     }
-    std::stable_sort(good.begin(), good.end(), [](const Way* a, const Way* b) { return a->fit.misfit < b->fit.misfit; });
+    std::stable_sort(good.begin(), good.end(),
+                     [](const Way* a, const Way* b) { return a->fit.misfit < b->fit.misfit; });
     for (const Way* way : good)
         if (way->fit.misfit < good.front()->fit.misfit + k_tells)
             made.answers.push_back(adjuster.answer(way->fit, way->task, way->fault));
     const AdjustAnswer& first = made.answers.front();
-    if (ways.back().fault == Fault::level && !(first.turn.told && first.top.told && first.right.told))
+    const bool told = first.turn.told && first.top.told && first.right.told;
+    if (ways.back().fault == Fault::level && (!told || ways.back().fit.misfit < good.front()->fit.misfit + k_as_good))
         made.if_level = adjuster.answer(ways.back().fit, ways.back().task, Fault::level);
     return made;
 }

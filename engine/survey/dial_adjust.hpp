@@ -24,7 +24,8 @@ struct Misfixing {
     double top_deg = 0.0;          ///< its top stands out (is high) by
     double right_deg = 0.0;        ///< its right edge stands out (is high) by
     double style_height_deg = 0.0; ///< the style stands up from the plate too much by
-    double style_right_deg = 0.0;  ///< the style leans to the right of the substyle by, for who looks along it from the centre
+    double style_right_deg =
+        0.0; ///< the style leans to the right of the substyle by, for who looks along it from the centre
 };
 
 /// All that was read of a dial.
@@ -47,26 +48,29 @@ struct AdjustAnswer {
     Fault fault = Fault::fixing;
     Found turn, top, right, style_height, style_right; ///< degrees, as in Misfixing
     Found clock_s;
-    double scatter_min = 0.0; ///< of a reading; 0 where nothing checks it
+    double right_chance = 1.0;   ///< that readings of a dial which stands right come out so
+    double scatter_min = 0.0;    ///< of a reading; 0 where nothing checks it
     std::vector<double> off_min; ///< what the dial read, less what it would read so, a figure a reading
     std::vector<bool> stray;
 };
 
 struct DialAdjustment {
     std::vector<AdjustAnswer> answers; ///< the likeliest first; several where the readings can't tell them apart
-    std::optional<AdjustAnswer> if_level; ///< where tilts are not told: what the turn is if level or plumb line find none
+    /// Where tilts are not told, or the readings do as well without them: what the turn is if level or plumb line find none.
+    std::optional<AdjustAnswer> if_level;
     bool checked = false;
     bool too_scattered = false;
-    bool style_asked = false;     ///< the dial is one of which readings can tell something of the style
-    double style_told_deg = 0.0;  ///< an error of the style's height shows from about this on
+    bool style_asked = false;            ///< the dial is one of which readings can tell something of the style
+    double style_told_deg = 0.0;         ///< an error of the style's height shows from about this on
     std::vector<double> as_designed_min; ///< what the dial read, less what it should read
 };
 
 /// What a dial shows that stands so, at a Sun.
 /// @param sun  as the air shows it, site frame
 /// @return hours on the dial's own time, [0, 24); nothing where it shows none
-[[nodiscard]] std::optional<double> reading_of_misfixed(const DialPlan& plan, const MeanYear& year, const Misfixing& misfixing,
-                                                        const SiteDirection& sun, double day_of_year);
+[[nodiscard]] std::optional<double> reading_of_misfixed(const DialPlan& plan, const MeanYear& year,
+                                                        const Misfixing& misfixing, const SiteDirection& sun,
+                                                        double day_of_year);
 
 /// Fits how the dial stands to its readings. Turning it about the pole moves all readings alike and all year; tilts
 /// across that show only while the Sun is away from the equator, so that readings near an equinox leave them open.
