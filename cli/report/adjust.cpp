@@ -61,14 +61,17 @@ Json answer_json(const AdjustAnswer& answer, const AdjustWords& words) {
             {"steps", words.steps}};
 }
 
-std::string heading_of(std::string text) {
-    if (!text.empty() && text[0] >= 'a' && text[0] <= 'z')
-        text[0] = static_cast<char>(text[0] - 'a' + 'A');
-    return text;
+std::string heading_of(const std::string& text) {
+    std::string made = text;
+    if (!made.empty() && made[0] >= 'a' && made[0] <= 'z')
+        made[0] = static_cast<char>(made[0] - 'a' + 'A');
+    return made;
 }
 
-std::string sentence(std::string text) {
-    return heading_of(std::move(text)) + '.';
+std::string sentence(const std::string& text) {
+    std::string made = heading_of(text);
+    made += '.';
+    return made;
 }
 
 } // namespace

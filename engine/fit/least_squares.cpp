@@ -22,7 +22,11 @@ using Eigen::VectorXd;
 class Fitter {
   public:
     explicit Fitter(const FitTask& task) : task_{task}, n_{int(task.unknowns.size())} {
-        scattered_ = task.readings * task.width;
+        for (int i = 0; i < task.readings; ++i) {
+            first_.push_back(scattered_);
+            width_.push_back(task.widths.empty() ? task.width : task.widths[std::size_t(i)]);
+            scattered_ += width_.back();
+        }
         rows_ = scattered_ + task.known_rows;
         x_.resize(n_);
         known_.resize(n_);
@@ -37,7 +41,7 @@ class Fitter {
         counts_ = VectorXd::Ones(rows_);
         for (int i = 0; i < task.readings && !task.left_out.empty(); ++i)
             if (task.left_out[std::size_t(i)])
-                counts_.segment(i * task.width, task.width).setZero();
+                counts_.segment(first_[std::size_t(i)], width_[std::size_t(i)]).setZero();
         counted_ = int(std::lround(counts_.head(scattered_).sum()));
     }
 
@@ -62,12 +66,13 @@ class Fitter {
         for (int round = 0; round < k_rounds; ++round) {
             (void)climb_down();
             for (int i = 0; i < task_.readings; ++i)
-                sizes[std::size_t(i)] = r_.segment(i * task_.width, task_.width).norm() / std::sqrt(task_.width);
+                sizes[std::size_t(i)] = rows_of(r_, i).norm() / std::sqrt(width_[std::size_t(i)]);
             const double usual = std::max(task_.least_noise, middle_of(sizes));
             noise_ = usual;
             for (int i = 0; i < task_.readings; ++i) {
                 const double out = sizes[std::size_t(i)] / (2 * usual);
-                counts_.segment(i * task_.width, task_.width).setConstant(1.0 / (1.0 + out * out * out * out));
+                counts_.segment(first_[std::size_t(i)], width_[std::size_t(i)])
+                    .setConstant(1.0 / (1.0 + out * out * out * out));
             }
         }
         return sizes;
@@ -156,6 +161,10 @@ class Fitter {
         return false;
     }
 
+    [[nodiscard]] VectorXd rows_of(const VectorXd& rows, int reading) const {
+        return rows.segment(first_[std::size_t(reading)], width_[std::size_t(reading)]);
+    }
+
     [[nodiscard]] MatrixXd covariance() const {
         MatrixXd normal = slopes_.transpose() * row_weights().asDiagonal() * slopes_;
         normal.diagonal() += weight_;
@@ -191,8 +200,7 @@ class Fitter {
         fit.from_readings = c * (counting.transpose() * counting) * c / (noise_ * noise_);
         fit.from_known = c - fit.from_readings;
         fit.misfit = counted_ * std::log(std::max(noise_ * noise_, 1e-12)) + (x_ - known_).cwiseAbs2().dot(weight_) +
-                     (counted_ > 0 ? sum_ / (noise_ * noise_) : 0.0) +
-                     r_.tail(task_.known_rows).cwiseAbs2().sum();
+                     (counted_ > 0 ? sum_ / (noise_ * noise_) : 0.0) + r_.tail(task_.known_rows).cwiseAbs2().sum();
         fit.doubt = doubts(c);
         return fit;
     }
@@ -201,14 +209,14 @@ class Fitter {
     /// width and (freedom − width) degrees of freedom. For one left out, the prediction's own spread is added.
     [[nodiscard]] std::vector<double> doubts(const MatrixXd& c) const {
         std::vector<double> doubts(std::size_t(task_.readings), 1.0);
-        const int w = task_.width;
         for (int i = 0; i < task_.readings; ++i) {
-            const MatrixXd own = slopes_.middleRows(i * w, w);
-            const VectorXd r = r_.segment(i * w, w);
-            const bool counts = counts_[i * w] > 0;
+            const int w = width_[std::size_t(i)], first = first_[std::size_t(i)];
+            const MatrixXd own = slopes_.middleRows(first, w);
+            const VectorXd r = rows_of(r_, i);
+            const bool counts = counts_[first] > 0;
             const MatrixXd leverage = own * c * own.transpose() / (noise_ * noise_);
-            const MatrixXd free = counts ? MatrixXd(MatrixXd::Identity(w, w) - leverage)
-                                         : MatrixXd(MatrixXd::Identity(w, w) + leverage);
+            const MatrixXd free =
+                counts ? MatrixXd(MatrixXd::Identity(w, w) - leverage) : MatrixXd(MatrixXd::Identity(w, w) + leverage);
             const double freedom = counts ? freedom_ - w : freedom_;
             if (freedom < 0.5)
                 continue;
@@ -222,6 +230,7 @@ class Fitter {
     }
 
     const FitTask& task_;
+    std::vector<int> first_, width_; ///< each reading's rows
     int n_ = 0, scattered_ = 0, rows_ = 0, counted_ = 0;
     VectorXd x_, known_, weight_, counts_, r_;
     MatrixXd slopes_;
@@ -244,8 +253,8 @@ std::vector<bool> far_out(const FitTask& task, int most) {
 
 } // namespace
 
-Spread Fit::spread(const Eigen::VectorXd& slopes) const {
-    const double scatter = slopes.dot(from_readings * slopes), rest = slopes.dot(from_known * slopes);
+Spread Fit::spread(const Eigen::VectorXd& slopes, double besides) const {
+    const double scatter = slopes.dot(from_readings * slopes), rest = slopes.dot(from_known * slopes) + besides;
     Spread spread;
     spread.deviation = std::sqrt(std::max(0.0, scatter + rest));
     // Satterthwaite: what is known beforehand has no scatter to estimate.

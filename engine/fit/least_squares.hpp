@@ -23,10 +23,11 @@ struct FitTask {
     std::vector<Unknown> unknowns;
     int readings = 0;
     int width = 1;
+    std::vector<int> widths; ///< of each reading, where they differ; else empty
     int known_rows = 0;
     /// Fills readings · width + known_rows residuals (observed less computed). False where the unknowns can't be.
     std::function<bool(const Eigen::VectorXd& unknowns, Eigen::VectorXd& residuals)> residuals;
-    double least_noise = 0.1; ///< the scatter is never taken for less than this part of its nominal size
+    double least_noise = 0.1;   ///< the scatter is never taken for less than this part of its nominal size
     std::vector<bool> left_out; ///< a flag a reading, or empty: readings that do not count
 };
 
@@ -41,9 +42,9 @@ struct Spread {
 /// model to be straight across the range.
 struct Fit {
     Eigen::VectorXd values;
-    Eigen::VectorXd residuals; ///< of all rows, left out or not, in nominal deviations
+    Eigen::VectorXd residuals;                 ///< of all rows, left out or not, in nominal deviations
     Eigen::MatrixXd from_readings, from_known; ///< parts of the covariance: by scatter that was estimated, and the rest
-    double noise = 1.0;   ///< scatter of the readings, in nominal deviations
+    double noise = 1.0;                        ///< scatter of the readings, in nominal deviations
     double freedom = 0.0; ///< degrees of freedom of `noise`; under 0.5 nothing checks the readings, and noise is 1
     double misfit = 0.0;  ///< −2 log likelihood but for a constant, for choosing between tasks with the same readings
     bool settled = false; ///< the iteration came to rest
@@ -54,7 +55,8 @@ struct Fit {
     [[nodiscard]] bool checked() const { return freedom >= 0.5; }
     /// Of one unknown, or of a quantity by its slope over each.
     [[nodiscard]] Spread spread(int unknown) const;
-    [[nodiscard]] Spread spread(const Eigen::VectorXd& slopes) const;
+    /// @param besides  variance of what else the quantity hangs on
+    [[nodiscard]] Spread spread(const Eigen::VectorXd& slopes, double besides = 0.0) const;
     /// The chance that an unknown comes out so far from 0 where it is 0 but for `thought_to` (one standard deviation).
     [[nodiscard]] double chance_of(int unknown, double thought_to) const;
     /// How much of what was known beforehand is left of an unknown's variance: near 1, the readings tell nothing of it.

@@ -170,7 +170,7 @@ def level_ones(program, rng):
         value, give, _ = figures[0:3] if flat else figures[6:9]
         told += 1
         held += abs(value - (dial.turn if flat else dial.right)) <= give
-    return share("turn of a level or plumb dial", held, told, 0)
+    return share("turn of a level or plumb dial", held, told, 0, 200)
 
 
 def bent_ones(program, rng):

@@ -113,10 +113,10 @@ def signed(degrees):
     return (degrees + 180) % 360 - 180
 
 
-def share(name, held, of, bad):
+def share(name, held, of, bad, least=300):
     """Prints a coverage and says whether it is outside 92 to 98 %."""
     percent = 100 * held / of if of else 0.0
-    good = of >= 300 and 92 <= percent <= 98
+    good = of >= least and 92 <= percent <= 98
     print(f"{name}: the range holds the truth in {held} of {of}, {percent:.1f} % (92 to 98 wanted)")
     return bad if good else bad + 1
 

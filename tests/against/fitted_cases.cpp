@@ -3,8 +3,10 @@
 // Reads cases of readings that another program's Sun made, and prints what is found from them, for comparison with what
 // was put in. A case is a line with its kind and figures, a line a reading, and "end".
 //   dial LATITUDE LONGITUDE ZONE_MERIDIAN TIME NORMAL_AZIMUTH NORMAL_ALTITUDE CLOCK_GIVE | INSTANT READS_H
+//   plate KIND(directions, centre or points) LATITUDE LATITUDE_GIVE | HOUR DIRECTION, or HOUR U V [U V]
 //   wall LATITUDE LONGITUDE PEG PEG_GIVE FOOT_GIVE LEVEL_GIVE CLOCK_GIVE | INSTANT RIGHT DOWN
 #include "engine/survey/dial_adjust.hpp"
+#include "engine/survey/plate_restore.hpp"
 #include "engine/survey/wall_survey.hpp"
 #include "engine/time/instant_text.hpp"
 
@@ -105,6 +107,50 @@ void dial(std::istream& in, const MeanYear& year) {
     fmt::print("\n");
 }
 
+void plate(std::istream& in) {
+    PlateReadings readings;
+    PlateFacts facts;
+    std::string kind;
+    double latitude = 0, give = 0;
+    in >> kind >> latitude >> give;
+    facts.latitude_deg = Known{latitude, give};
+    readings.origin_is_centre = kind == "centre";
+    take_readings([&](std::istream& line) {
+        PlateLine one;
+        double hour = 0;
+        line >> hour;
+        one.hour_h = hour;
+        if (kind == "directions") {
+            double direction = 0;
+            line >> direction;
+            one.direction_deg = direction;
+        } else {
+            for (int i = 0; i < (kind == "points" ? 2 : 1); ++i) {
+                PlatePoint p;
+                line >> p.u_mm >> p.v_mm;
+                one.points.push_back(p);
+            }
+        }
+        readings.lines.push_back(one);
+    });
+    const auto figure = figure_of(readings);
+    if (!figure) {
+        fmt::print("plate 0 0\n");
+        return;
+    }
+    fmt::print("plate 1 {} {:.6f} {:.6f}", figure->fit.checked() ? 1 : 0, figure->style_height_deg.value,
+               figure->style_height_deg.range);
+    for (const PlateSolution& one : solutions_of(*figure, true, facts)) {
+        fmt::print(" | {}", int(one.fact));
+        for (const Found& found : {one.latitude_deg, one.facing_deg.value_or(Found{0, 0, false}), one.lean_deg, one.ahead_min})
+            print(found);
+        fmt::print(" ");
+        for (const bool stray : figure->stray)
+            fmt::print("{}", stray ? 1 : 0);
+    }
+    fmt::print("\n");
+}
+
 } // namespace
 
 int main() {
@@ -118,6 +164,8 @@ int main() {
                 wall(in);
             else if (kind == "dial")
                 dial(in, year);
+            else if (kind == "plate")
+                plate(in);
             else
                 throw std::runtime_error("no such kind: " + line);
         }
