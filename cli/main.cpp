@@ -42,6 +42,7 @@ int main(int count, char** words) {
     add_check(app, status);
     add_survey(app, status);
     add_adjust(app, status);
+    add_restore(app, status);
     if (const std::string wrong = count > 1 ? no_command(app, words[1]) : std::string{}; !wrong.empty()) {
         std::cerr << "dialwright: " << wrong << '\n';
         return k_error;

@@ -14,5 +14,6 @@ void add_shadow(CLI::App& app, int& status);
 void add_check(CLI::App& app, int& status);
 void add_survey(CLI::App& app, int& status);
 void add_adjust(CLI::App& app, int& status);
+void add_restore(CLI::App& app, int& status);
 
 } // namespace dialwright::cli
