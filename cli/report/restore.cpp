@@ -165,6 +165,8 @@ std::string recut_design(const RestoreFile& file, const RestoreWay& way) {
         longitude = (meridian - Angle::degrees(one.ahead_min.value / 4)).signed_turn();
     LinesOfText text;
     text.line("# Cut again from the lines of an old plate, {}.", supposed(file, one.fact));
+    if (way.for_this_place)
+        text.line("# The latitude is that of the lines; that of the place is {}.", latitude_text(file.place->site.latitude));
     if (!own_time)
         text.line("# The longitude is the one that the lines are shifted for, counted from the zone's meridian.");
     if (!file.title.empty())

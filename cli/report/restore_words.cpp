@@ -150,6 +150,12 @@ RestoreReport report_on(const RestoreFile& file, const std::optional<PlateFigure
     std::stable_sort(report.ways.begin(), report.ways.end(), [](const RestoreWay& a, const RestoreWay& b) {
         return std::pair{a.supposed_known, a.signs} > std::pair{b.supposed_known, b.signs};
     });
+    // What is known to be so leaves out what speaks for nothing; and nobody reads a tenth way.
+    constexpr std::size_t k_most_ways = 6;
+    if (!report.ways.empty() && report.ways.front().supposed_known)
+        std::erase_if(report.ways, [](const RestoreWay& way) { return !way.supposed_known && way.signs == 0; });
+    if (report.ways.size() > k_most_ways)
+        report.ways.resize(k_most_ways);
     if (report.ways.empty()) {
         fail(file, report, "these lines fit no plate of which anything is known here", k_check);
         return report;

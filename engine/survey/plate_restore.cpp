@@ -14,6 +14,7 @@
 
 #include <algorithm>
 #include <cmath>
+#include <tuple>
 
 namespace dialwright {
 namespace {
@@ -250,22 +251,28 @@ std::vector<Counted> counted_lines(const PlateReadings& readings) {
     return counted;
 }
 
-/// The sign of (k + x σ) over most of the plate: on which side of the style's foot its lines lie, and with σ the sense.
-double side_of(const Plate& plate, const PlateReadings& readings, const VectorXd& x) {
+/// The sign of (k + x σ) over most of the plate: on which side of the style's foot its lines lie, and with σ the sense;
+/// and whether that is plain.
+std::pair<double, bool> side_of(const Plate& plate, const PlateReadings& readings, const VectorXd& x) {
     const double sine = sin(Angle::degrees(x[k_height]));
-    double side = 0;
+    if (const auto& known = readings.substyle_deg)
+        return {cos(Angle::degrees(known->value - x[k_substyle])) * sine < 0 ? -1.0 : 1.0, true};
+    double side = 0, count = 0;
     for (const PlateLine& line : readings.lines) {
         if (!line.direction_deg && !readings.origin_is_centre) {
             for (const PlatePoint& p : line.points) {
                 const double along =
                     p.u_mm * sin(Angle::degrees(x[k_substyle])) + p.v_mm * cos(Angle::degrees(x[k_substyle]));
                 side += x[k_over] + along * sine > 0 ? 1 : -1;
+                count += 1;
             }
         } else if (const auto direction = plate.direction_deg(line)) {
             side += cos(Angle::degrees(*direction - x[k_substyle])) * (sine > 0 ? 1 : -1);
+            count += 1;
         }
     }
-    return side < 0 ? -1.0 : 1.0;
+    constexpr double k_plain = 0.5; // most hours lie within six of the substyle's
+    return {side < 0 ? -1.0 : 1.0, std::abs(side) > k_plain * count};
 }
 
 } // namespace
@@ -306,7 +313,7 @@ std::optional<PlateFigure> figure_of(const PlateReadings& readings) {
             std::tie(figure.off_deg[i], figure.off_mm[i]) = plate.off(x, {i, hour_deg});
         }
     const double height = x[k_height];
-    figure.side = side_of(plate, readings, x);
+    std::tie(figure.side, figure.side_told) = side_of(plate, readings, x);
     figure.centre_told = std::abs(height) > best->spread(k_height).range_95;
     figure.clockwise = figure.centre_told ? height > 0 : figure.side > 0;
     figure.style_height_deg = {std::abs(height), best->spread(k_height).range_95, true};

@@ -35,6 +35,7 @@ struct PlateReadings {
 /// substyle's hour stands in the style's plane.
 struct PlateFigure {
     Fit fit;                ///< unknowns: substyle, style height with its sense, substyle's hour (degrees), …
+    bool side_told = true;  ///< false: the style's foot may be at either end of the substyle
     double side = 1.0;      ///< of the north pole along the substyle as the fit has it
     bool clockwise = true;  ///< the hours run clockwise: the style points to the north pole
     Found style_height_deg; ///< 0 to 90

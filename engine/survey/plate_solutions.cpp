@@ -117,36 +117,39 @@ std::optional<PlateSolution> solution(const PlateFigure& figure, Fact fact, cons
 } // namespace
 
 std::vector<PlateSolution> solutions_of(const PlateFigure& figure, bool up_known, const PlateFacts& facts) {
-    const double side = figure.side;
     std::vector<PlateSolution> made;
     const auto add = [&](Fact fact, const Known& known, const Stands& stands) {
         if (auto one = solution(figure, fact, known, stands))
             made.push_back(std::move(*one));
     };
-    const Stands by_lean = [side](const Shape& shape, double lean) { return stand_of(shape, side, lean); };
     const Known upright{0.0, 0.5}; // a wall's plumb: common practice, no source
     add(Fact::level, {90, 0.5}, [](const Shape& shape, double) { return level_stand(shape); });
-    if (!up_known) {
-        // Upright with its own place's time: XII is plumb, up or down from the centre.
-        for (const double turn : {180.0, 0.0})
-            add(Fact::upright, upright, [side, turn](const Shape& shape, double lean) {
-                const double sine = std::sin(shape[1] * k_degree), hour = -shape[2] * k_degree;
-                const double noon = shape[0] + std::atan2(sine * std::sin(hour), std::cos(hour)) / k_degree;
-                return stand_of({shape[0] - noon - turn, shape[1], shape[2]}, side, lean);
-            });
-        return made;
+    for (const double side : {figure.side, -figure.side}) {
+        if (side != figure.side && figure.side_told)
+            break;
+        if (!up_known) {
+            // Upright with its own place's time: XII is plumb, up or down from the centre.
+            for (const double turn : {180.0, 0.0})
+                add(Fact::upright, upright, [side, turn](const Shape& shape, double lean) {
+                    const double sine = std::sin(shape[1] * k_degree), hour = -shape[2] * k_degree;
+                    const double noon = shape[0] + std::atan2(sine * std::sin(hour), std::cos(hour)) / k_degree;
+                    return stand_of({shape[0] - noon - turn, shape[1], shape[2]}, side, lean);
+                });
+            continue;
+        }
+        const Stands by_lean = [side](const Shape& shape, double lean) { return stand_of(shape, side, lean); };
+        add(Fact::upright, upright, by_lean);
+        if (facts.lean_deg)
+            add(Fact::lean, *facts.lean_deg, by_lean);
+        if (facts.latitude_deg)
+            for (const bool second : {false, true})
+                add(Fact::latitude, *facts.latitude_deg, [side, second](const Shape& shape, double latitude) {
+                    const auto lean = lean_for_latitude(shape, side, latitude, second);
+                    return lean ? std::optional{stand_of(shape, side, *lean)} : std::nullopt;
+                });
+        add(Fact::sun_time, {0, 1e-9},
+            [side](const Shape& shape, double) { return stand_of(shape, side, lean_for_sun_time(shape, side)); });
     }
-    add(Fact::upright, upright, by_lean);
-    if (facts.lean_deg)
-        add(Fact::lean, *facts.lean_deg, by_lean);
-    if (facts.latitude_deg)
-        for (const bool second : {false, true})
-            add(Fact::latitude, *facts.latitude_deg, [side, second](const Shape& shape, double latitude) {
-                const auto lean = lean_for_latitude(shape, side, latitude, second);
-                return lean ? std::optional{stand_of(shape, side, *lean)} : std::nullopt;
-            });
-    add(Fact::sun_time, {0, 1e-9},
-        [side](const Shape& shape, double) { return stand_of(shape, side, lean_for_sun_time(shape, side)); });
     return made;
 }
 

@@ -127,6 +127,7 @@ class Survey {
             times.push_back(std::chrono::round<std::chrono::minutes>(last) + quarter * std::chrono::minutes{15});
         const std::vector<RealSun> suns = real_suns(readings_.site, times);
         const Eigen::MatrixXd covariance = fit.from_readings + fit.from_known;
+        const double range_now = fit.spread(k_facing).range_95;
         std::optional<NextReading> best;
         for (std::size_t i = 0; i < times.size(); ++i) {
             if (!measurable(suns[i], fit.values))
@@ -149,7 +150,7 @@ class Survey {
                 slopes * covariance * slopes.transpose() + deviation_mm * deviation_mm * Eigen::Matrix2d::Identity();
             const Eigen::Vector2d along = slopes * covariance.col(k_facing);
             const double left = covariance(k_facing, k_facing) - along.dot(spread.inverse() * along);
-            const double range = student_95(std::max(2.0, fit.freedom + 2)) * std::sqrt(std::max(0.0, left));
+            const double range = range_now * std::sqrt(std::max(0.0, left / covariance(k_facing, k_facing)));
             if (!best || range < best->facing_range_deg)
                 best = NextReading{times[i], range};
         }
