@@ -40,6 +40,11 @@ int main(int count, char** words) {
     add_numbers(app, status);
     add_shadow(app, status);
     add_check(app, status);
+    add_calibrate(app, status);
+    add_sun(app, status);
+    add_sunlight(app, status);
+    add_fix(app, status);
+    add_accuracy(app, status);
     add_survey(app, status);
     add_adjust(app, status);
     add_restore(app, status);

@@ -1,13 +1,11 @@
 // SPDX-License-Identifier: MIT
 #include "cli/report/adjust.hpp"
+#include "cli/commands/asked.hpp"
 #include "cli/commands/commands.hpp"
 #include "cli/commands/said.hpp"
 #include "cli/design/plain_text.hpp"
 #include "cli/design/quantity.hpp"
-#include "cli/packet/write_files.hpp"
-#include "layout/export/pdf.hpp"
 
-#include <filesystem>
 #include <fmt/format.h>
 #include <iostream>
 #include <memory>
@@ -19,7 +17,7 @@ struct AdjustOptions {
     std::string design, readings;
     std::string face;
     std::string latitude, longitude, zone;
-    std::string sheet;
+    SheetOptions sheet;
     bool json = false;
 };
 
@@ -65,22 +63,13 @@ int run_moved(const AdjustOptions& options, const Commission& commission, const 
 
 bool write_sheet(const AdjustOptions& options, const AdjustFile& file, const AdjustReport& report,
                  const Commission& commission) {
-    try {
-        layout::PrintOptions print;
-        print.paper = layout::paper_named(commission.design.print.paper).value_or(layout::Paper{});
-        print.margin_mm = commission.design.print.margin_mm;
-        print.title = commission.design.title;
-        const std::filesystem::path path{options.sheet};
-        write_files(path.has_parent_path() ? path.parent_path() : std::filesystem::path{"."},
-                    {{path.filename().string(), layout::pdf_of({"Adjusting the dial", commission.design.title,
-                                                                adjust_sheets(file, report, commission, print)})}});
-        return true;
-    } catch (const layout::ExportError& trouble) {
-        std::cerr << "--sheet: " << trouble.what() << '\n';
-    } catch (const WriteError& trouble) {
-        std::cerr << trouble.what() << "; nothing was changed there\n";
-    }
-    return false;
+    const auto print = asked_print(options.sheet, &commission.design);
+    return print && write_pdf(options.sheet.file, *print, [&] {
+               layout::PrintOptions on = print->options;
+               on.title = commission.design.title;
+               return layout::SheetBook{"Adjusting the dial", commission.design.title,
+                                        adjust_sheets(file, report, commission, on)};
+           });
 }
 
 int run_adjust(const AdjustOptions& options) {
@@ -107,7 +96,7 @@ int run_adjust(const AdjustOptions& options) {
     tell(report.errors);
     if (!report.errors.empty())
         return k_error;
-    if (!options.sheet.empty() && !write_sheet(options, *reading.adjust, report, *commission))
+    if (options.sheet.asked() && !write_sheet(options, *reading.adjust, report, *commission))
         return k_error;
     std::cout << (options.json ? adjust_json(*reading.adjust, found, report, *commission)
                                : adjust_text(*reading.adjust, found, report, *commission));
@@ -128,7 +117,7 @@ void add_adjust(CLI::App& app, int& status) {
     command->add_option("--latitude", options->latitude, "instead of readings: the latitude where it is to serve");
     command->add_option("--longitude", options->longitude, "the longitude where it is to serve");
     command->add_option("--zone", options->zone, "the zone of the clocks there [the design's]");
-    command->add_option("--sheet", options->sheet, "also write what to do as PDF, for the fitter");
+    options->sheet.add_to(*command);
     command->add_flag("--json", options->json, "for programs (docs/output-formats.md)");
     command->callback([options, &status] { status = run_adjust(*options); });
 }

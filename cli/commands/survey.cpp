@@ -1,12 +1,12 @@
 // SPDX-License-Identifier: MIT
 #include "cli/report/survey.hpp"
+#include "cli/commands/asked.hpp"
 #include "cli/commands/commands.hpp"
 #include "cli/commands/said.hpp"
 #include "cli/commission.hpp"
 #include "cli/design/edit_design.hpp"
 #include "cli/design/file_text.hpp"
 #include "cli/packet/write_files.hpp"
-#include "layout/export/pdf.hpp"
 #include "layout/survey/board.hpp"
 
 #include <filesystem>
@@ -21,7 +21,7 @@ struct SurveyOptions {
     std::string readings;
     std::string into;
     std::string board;
-    std::string paper = "A4";
+    std::string paper;
     bool json = false;
 };
 
@@ -38,23 +38,16 @@ bool write_one(const std::filesystem::path& path, std::string bytes) {
 }
 
 int write_board(const SurveyOptions& options) {
-    const auto paper = layout::paper_named(options.paper);
-    if (!paper || paper->roll) {
-        std::cerr << fmt::format("--paper {}: not a sheet of paper that is known: give A4, A3, Letter and so on\n",
-                                 options.paper);
+    const auto print = asked_print({options.board, options.paper}, nullptr);
+    if (!print)
         return k_error;
-    }
-    layout::PrintOptions print;
-    print.paper = *paper;
-    print.title = "Survey of a wall";
-    try {
-        std::string bytes = layout::pdf_of({"Survey board", "for the shadow of a peg", layout::survey_board(print)});
-        if (!write_one(options.board, std::move(bytes)))
-            return k_error;
-    } catch (const layout::ExportError& trouble) {
-        std::cerr << "--board: " << trouble.what() << '\n';
+    const auto make = [&] {
+        layout::PrintOptions on = print->options;
+        on.title = "Survey of a wall";
+        return layout::SheetBook{"Survey board", "for the shadow of a peg", layout::survey_board(on)};
+    };
+    if (!write_pdf(options.board, *print, make, "--board"))
         return k_error;
-    }
     std::cout << fmt::format("{}: the board at full scale; print it at 100 % and measure its bars\n", options.board);
     return k_fine;
 }

@@ -55,6 +55,11 @@ struct Dial {
     Faces faces = Faces::upper;         ///< of a slab: of an equatorial plate, a wall or a leaning slab
 };
 
+/// A width, or a share of the tool's own line; neither: by the order of weight.
+struct LineWeight {
+    double width_mm = 0.0, share = 0.0;
+    [[nodiscard]] double of(double line_width_mm) const { return width_mm > 0 ? width_mm : share * line_width_mm; }
+};
 struct Hours {
     HourTime time = HourTime::sun;
     std::optional<double> first_h, last_h; ///< on the dial's own time; not given: all that are ever lit
@@ -63,6 +68,7 @@ struct Hours {
     int count = 12;                    ///< 12 or 24
     HalfYear curves = HalfYear::whole; ///< of clock time
     NumeralStand stand = NumeralStand::along_border;
+    LineWeight weight;
     bool noon_mark = true;
     HourExtent reach = HourExtent::style;
     bool summer_numerals = false; ///< a second row, an hour on, for the zone's summer time
@@ -70,15 +76,22 @@ struct Hours {
 };
 
 /// Lines drawn on the field beside the hours of the chapter ring.
+/// How a family of lines is drawn, where the design says.
+struct FamilyLook {
+    LineWeight weight;
+    std::optional<std::pair<std::chrono::month_day, std::chrono::month_day>> between; ///< from day to day
+};
 struct MoreHours {
     HourTime time = HourTime::unequal;
     std::optional<double> first_h, last_h; ///< whole hours; not given: all that are ever lit
     HalfYear curves = HalfYear::whole;
+    FamilyLook look;
 };
 struct Also {
     std::vector<MoreHours> hours; ///< each time at most once, in the order of the file
     std::vector<Angle> altitudes, azimuths;
     std::vector<PlaceNoon> noons;
+    FamilyLook altitude_look, azimuth_look, noon_look;
 };
 
 struct NamedDay {
@@ -89,6 +102,7 @@ struct Dates {
     bool solstices = true, equinoxes = true, signs = false, months = false;
     std::vector<NamedDay> days;
     bool labels = true;
+    LineWeight weight;
 };
 
 /// The plate that says how to come from the dial to the clock.
@@ -119,6 +133,22 @@ enum class PrintedLayers {
     together,
     one_by_one, ///< sheets for each
     in_viewer   ///< the viewer can switch them
+};
+
+/// The dates for which the packet gets a fixing sheet.
+struct FixingDates {
+    std::optional<std::chrono::year_month_day> first, last; ///< both or none
+};
+
+/// How well the work can be done: what the accuracy page reckons with. Each is how far off the thing may be, either way.
+struct Tolerances {
+    double marking_mm = 0.5;                  ///< a line beside its place
+    Angle style_height = Angle::degrees(0.5); ///< of a pin: how far it leans up or down the plate
+    Angle substyle = Angle::degrees(0.5);     ///< of a pin: how far it leans to a side
+    Angle facing = Angle::degrees(1);         ///< of a level plate: how it is turned
+    Angle lean = Angle::degrees(0.5);         ///< from upright, from the slope, from level
+    double print_mm = 0.2;                    ///< of a 100 mm bar, one way of the paper against the other
+    Angle position = Angle::degrees(0.01);    ///< on the map, in latitude and in longitude
 };
 
 struct Print {
@@ -156,6 +186,8 @@ struct Design {
     Also also;
     Dates dates;
     CorrectionMade correction;
+    FixingDates fixing;
+    Tolerances tolerances;
     Years years;
     LetteringChoice lettering;
     Cutting cutting;

@@ -50,6 +50,10 @@ class Read {
 [[nodiscard]] Read<Angle> plain_angle(std::string_view text);
 /// "14 June", "June 14", "14th Jun", "06-14". 29 February is a day; 31 June is not.
 [[nodiscard]] Read<std::chrono::month_day> day_of_year(std::string_view text);
+/// A day of one year: "2027-06-14", "14 June 2027", "14th Jun 2027", from 1901 to 2099.
+[[nodiscard]] Read<std::chrono::year_month_day> calendar_date(std::string_view text);
+/// The name of a zone of the time zone database: "Europe/London".
+[[nodiscard]] Read<std::string> zone_name(std::string_view text);
 /// Hours after midnight, 0 to 24, from "5", "5:30", "17:00", "5 am", "5:30 pm", "noon". 12 am is 0:00, 12 pm is noon.
 [[nodiscard]] Read<double> hour_of_day(std::string_view text);
 /// The same on a dial's own time: hours that count from the Sun's rising or setting have no am, pm or noon, and unequal

@@ -116,6 +116,65 @@ Read<std::chrono::month_day> day_of_year(std::string_view text) {
     return checked_day(month.number, day.number, text);
 }
 
+namespace {
+
+constexpr const char* k_date_hint = "write it as in 2027-06-14 or 14 June 2027";
+
+/// "2027-06-14": the year's own day, where the scanner stands before the year.
+Read<std::chrono::year_month_day> date_of_figures(Scanner& scan, std::string_view text) {
+    using namespace std::chrono;
+    const Scrap year_read = scan.take();
+    scan.take_sign("-");
+    if (!scan.number_next())
+        return Trouble{in_quotes(text) + " is not a date", k_date_hint};
+    const Scrap month_read = scan.take();
+    if (!scan.take_sign("-") || !scan.number_next())
+        return Trouble{in_quotes(text) + " is not a date", k_date_hint};
+    const Scrap day_read = scan.take();
+    if (!scan.at_end() || !year_read.whole || !month_read.whole || !day_read.whole || year_read.number > 9999)
+        return Trouble{in_quotes(text) + " is not a date", k_date_hint};
+    const Read<month_day> in_year = checked_day(month_read.number, day_read.number, text);
+    if (!in_year)
+        return Trouble{in_year.trouble().message, k_date_hint};
+    return year_month_day{year{static_cast<int>(year_read.number)}, in_year->month(), in_year->day()};
+}
+
+/// "14 June 2027": the year stands last.
+Read<std::chrono::year_month_day> date_of_words(std::string_view text) {
+    using namespace std::chrono;
+    const std::size_t end = text.find_last_not_of(" \t");
+    const std::size_t gap = end == std::string_view::npos ? end : text.find_last_of(" \t", end);
+    const std::string_view last = gap == std::string_view::npos ? text : text.substr(gap + 1, end - gap);
+    const Read<int> in = whole_number(last);
+    if (gap == std::string_view::npos || !in || *in < 100) {
+        const bool day_alone = static_cast<bool>(day_of_year(text));
+        return Trouble{in_quotes(text) + (day_alone ? " has no year" : " is not a date"), k_date_hint};
+    }
+    const Read<month_day> in_year = day_of_year(text.substr(0, gap));
+    if (!in_year)
+        return Trouble{in_year.trouble().message, k_date_hint};
+    return year_month_day{year{*in}, in_year->month(), in_year->day()};
+}
+
+} // namespace
+
+Read<std::chrono::year_month_day> calendar_date(std::string_view text) {
+    Read<Scanner> read = Scanner::over(text);
+    if (!read)
+        return read.trouble();
+    Scanner scan = *read;
+    const bool figures = scan.number_next() && scan.sign_next("-", 1);
+    const Read<std::chrono::year_month_day> date = figures ? date_of_figures(scan, text) : date_of_words(text);
+    if (!date)
+        return date;
+    const int in = static_cast<int>(date->year());
+    if (in < k_first_year || in > k_last_year)
+        return Trouble{fmt::format("{} is outside {} to {}", in_quotes(text), k_first_year, k_last_year), k_date_hint};
+    if (!date->ok())
+        return Trouble{fmt::format("{}: {} has no 29 February", in_quotes(text), in), "give 28 February or 1 March"};
+    return date;
+}
+
 Read<double> hour_of_day(std::string_view text) {
     Read<Scanner> read = Scanner::over(text);
     if (!read)

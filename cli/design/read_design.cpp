@@ -92,7 +92,10 @@ void read_sections(Design& design, const Node& root, ReadingState& state) {
     read_hours(design, top);
     read_also(design, top);
     read_dates(design, top);
+    read_looks(design, top);
     read_correction(design, top);
+    read_fixing(design, top);
+    read_accuracy(design, top);
     read_lettering(design, top);
     read_cutting(design, top);
     read_print(design, top);

@@ -21,7 +21,10 @@ void read_gnomon(Design& design, const Section& top);
 void read_hours(Design& design, const Section& top);
 void read_also(Design& design, const Section& top); ///< after the hours: no time is drawn twice
 void read_dates(Design& design, const Section& top);
+void read_looks(Design& design, const Section& top);      ///< weights and extents; after all lines
 void read_correction(Design& design, const Section& top); ///< after the hours, which it corrects
+void read_fixing(Design& design, const Section& top);
+void read_accuracy(Design& design, const Section& top);
 void read_lettering(Design& design, const Section& top);
 void read_cutting(Design& design, const Section& top);
 void read_print(Design& design, const Section& top);

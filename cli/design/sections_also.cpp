@@ -61,7 +61,7 @@ void read_more_hours(Design& design, const Section& also, std::string_view key, 
         return;
     }
     const HalfYear curves = time == HourTime::clock ? design.hours.curves : HalfYear::whole;
-    design.also.hours.push_back({time, (*asked)->first_h, (*asked)->last_h, curves});
+    design.also.hours.push_back({time, (*asked)->first_h, (*asked)->last_h, curves, {}});
 }
 
 /// A family of lines that stand at angles: how it is named and what may be given.

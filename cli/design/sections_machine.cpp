@@ -155,6 +155,11 @@ void read_feed(double& factor, const Section& print, std::string_view key) {
     if (entry == nullptr)
         return;
     const std::string name = fmt::format("print: {}", key);
+    if (entry->value.kind != Node::Kind::list && entry->value.kind != Node::Kind::refused) {
+        print.error(key, "one length stands where two are wanted",
+                    "give what is printed beside the bar and what you measured, as in [180 mm, 179.4 mm]");
+        return;
+    }
     const auto pair = read_point(entry->value, name, k_largest_plate_mm, print.state());
     if (!pair)
         return;
@@ -187,8 +192,9 @@ void read_paper(Design& design, const Section& print) {
     const std::vector<std::string_view> candidates{names.begin(), names.end()};
     const std::string_view near = nearest(*name, candidates);
     print.error("paper", in_quotes(*name) + " is not a paper that is known here",
-                near.empty() ? "give A4, A3, Letter, Tabloid, or a roll by its width from 100 mm, as in \"roll 610 mm\""
-                             : fmt::format("did you mean {}?", near));
+                near.empty()
+                    ? "give A4, A3, Letter, Tabloid, or a roll by its width from 100 mm to 5 m, as in \"roll 610 mm\""
+                    : fmt::format("did you mean {}?", near));
 }
 
 } // namespace

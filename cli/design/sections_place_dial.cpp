@@ -1,7 +1,5 @@
 // SPDX-License-Identifier: MIT
-#include "cli/design/nearest.hpp"
 #include "cli/design/sections.hpp"
-#include "engine/time/zone.hpp"
 
 #include <fmt/format.h>
 
@@ -30,26 +28,6 @@ constexpr std::array<Choice<Faces>, 3> k_faces_of_a_slab = {
 constexpr double k_most_wall_lean_deg = 45.0;
 constexpr double k_most_overhang_deg = 80.0;
 constexpr std::size_t k_most_marks = 360;
-
-void read_zone(Design& design, const Section& place) {
-    const std::optional<std::string> name = place.line("zone", 100);
-    if (!name)
-        return;
-    design.place.zone = *name;
-    if (Zone::find(*name))
-        return;
-    std::string hint = "write it as in Europe/London";
-    std::vector<std::string> near = nearest_zone_names(*name, 3);
-    // Of the nearest names, those that are near: in whole, or by the city alone.
-    std::erase_if(near, [&](const std::string& zone) {
-        const std::string_view whole = zone;
-        const std::array<std::string_view, 2> spellings = {whole, whole.substr(whole.rfind('/') + 1)};
-        return nearest(*name, spellings).empty();
-    });
-    if (!near.empty())
-        hint = "did you mean " + one_of(std::vector<std::string_view>{near.begin(), near.end()}) + "?";
-    place.error("zone", in_quotes(*name) + " is not a time zone", hint);
-}
 
 /// A mark of the skyline, with its azimuth as the file says it.
 struct ReadMark {
@@ -205,7 +183,7 @@ void read_place(Design& design, const Section& top) {
         design.place.name = *name;
     place.read_into(design.place.site.latitude, "latitude", latitude);
     place.read_into(design.place.site.longitude, "longitude", longitude);
-    read_zone(design, place);
+    place.read_into(design.place.zone, "zone", zone_name);
     read_skyline(design, place);
     if (!place.has("latitude"))
         place.missing("latitude", "write it as in \"latitude: 54° 14' N\"");

@@ -6,8 +6,11 @@
 #include "cli/packet/cover_words.hpp"
 #include "cli/packet/machine_files.hpp"
 #include "cli/packet/owner_card.hpp"
+#include "cli/packet/print_options.hpp"
 #include "cli/packet/work_pieces.hpp"
 #include "cli/plan/feasible.hpp"
+#include "cli/report/accuracy.hpp"
+#include "cli/report/fixing.hpp"
 #include "cli/report/numbers.hpp"
 #include "cli/report/say.hpp"
 #include "layout/export/pdf.hpp"
@@ -22,20 +25,6 @@ namespace {
 
 using layout::Drawing;
 using layout::Sheet;
-
-layout::PrintOptions print_options(const Design& design) {
-    const Print& print = design.print;
-    layout::PrintOptions options;
-    options.paper = layout::paper_named(print.paper).value();
-    options.margin_mm = layout::margin_for(print.printer, options.paper, print.margin_mm);
-    options.overlap_mm = print.overlap_mm;
-    options.inches = design.units == Units::inches;
-    options.turn = print.turn;
-    options.title = design.title;
-    if (!print.printer.none())
-        options.remark = "corrected for this printer";
-    return options;
-}
 
 /// The pieces as they are printed: mirrored where the design asks for that.
 std::vector<WorkPiece> printed_pieces(const Commission& commission) {
@@ -74,6 +63,9 @@ class Book {
         add(gnomon_pages(commission_, pieces_, options_));
         for (std::size_t i = 0; i < commission_.faces.size(); ++i)
             add(setting_out_pages(commission_, i, options_));
+        add(accuracy_sheets(commission_, accuracy_of(commission_), options_));
+        if (design_.fixing.first)
+            add(fixing_sheets(fixing_of(commission_, *design_.fixing.first, *design_.fixing.last), options_));
         add(owner_card(commission_, options_));
         for (const WorkPiece& piece : pieces_)
             if (is_correction(piece)) {

@@ -82,11 +82,39 @@ std::string face_name(const Design& design, bool first_face) {
 HourPlan hour_plan(const Design& design) {
     const Hours& hours = design.hours;
     const bool ring_time = hours.time == HourTime::sun || hours.time == HourTime::zone;
-    return {hours.time, hours.first_h, hours.last_h, ring_time ? hours.divide_min : 60, hours.curves, hours.reach};
+    return {hours.time,   hours.first_h, hours.last_h, ring_time ? hours.divide_min : 60,
+            hours.curves, hours.reach,   std::nullopt};
 }
 
-HourPlan hour_plan(const MoreHours& more) {
-    return {more.time, more.first_h, more.last_h, 60, more.curves, HourExtent::nodus};
+/// The Sun's declinations on the days of a part of the year, which may pass the year's end.
+std::optional<Season> declinations(const FamilyLook& look, const Design& design, const MeanYear& year) {
+    if (!look.between)
+        return std::nullopt;
+    const double local_noon_ut_h = 12.0 - design.place.site.longitude.in_hours();
+    const double first = year.day_of(look.between->first, local_noon_ut_h);
+    double last = year.day_of(look.between->second, local_noon_ut_h);
+    if (last < first)
+        last += year.length_days();
+    Season season{Angle::degrees(90), Angle::degrees(-90)};
+    const auto add = [&](double day) {
+        const Angle declination = year.at(day).declination;
+        season.least = std::min(season.least, declination);
+        season.greatest = std::max(season.greatest, declination);
+    };
+    for (double day = first; day < last; day += 0.5) // fine enough for a solstice between: 0.1″
+        add(day);
+    add(last);
+    return season;
+}
+
+HourPlan hour_plan(const MoreHours& more, const Design& design, const MeanYear& year) {
+    return {more.time,
+            more.first_h,
+            more.last_h,
+            60,
+            more.curves,
+            HourExtent::nodus,
+            declinations(more.look, design, year)};
 }
 
 /// How far the zone's summer time is ahead of its standard time, in hours; 0 where it has none.
@@ -128,11 +156,14 @@ FacePlan plan_of(const Design& design, const MeanYear& year, bool upper_face) {
         dial.skyline = Skyline{design.place.skyline};
     dial.hours = hour_plan(design);
     for (const MoreHours& more : design.also.hours)
-        dial.more_hours.push_back(hour_plan(more));
+        dial.more_hours.push_back(hour_plan(more, design, year));
     dial.horizon = design.hours.seen_rise ? k_seen_horizon : Angle{};
     dial.altitudes = design.also.altitudes;
     dial.azimuths = design.also.azimuths;
     dial.noons = design.also.noons;
+    dial.altitudes_between = declinations(design.also.altitude_look, design, year);
+    dial.azimuths_between = declinations(design.also.azimuth_look, design, year);
+    dial.noons_between = declinations(design.also.noon_look, design, year);
     dial.dates = date_plan(design, year);
     if (equatorial) // the Sun stands on this face's side of the equator, or never lights it
         std::erase_if(dial.dates.lines, [&](const DatePlan::Line& line) {
@@ -147,6 +178,15 @@ FacePlan plan_of(const Design& design, const MeanYear& year, bool upper_face) {
     spec.gnomon = design.gnomon;
     spec.lettering = design.lettering;
     spec.cutting = design.cutting;
+    const double tool_mm = design.cutting.line_width_mm;
+    spec.widths = {design.hours.weight.of(tool_mm),
+                   design.dates.weight.of(tool_mm),
+                   design.also.altitude_look.weight.of(tool_mm),
+                   design.also.azimuth_look.weight.of(tool_mm),
+                   design.also.noon_look.weight.of(tool_mm),
+                   {}};
+    for (const MoreHours& more : design.also.hours)
+        spec.widths.more_hours_mm.push_back(more.look.weight.of(tool_mm));
     spec.numerals = design.hours.numerals;
     spec.stand = design.hours.stand;
     spec.numeral_count = design.hours.count;
@@ -194,6 +234,14 @@ DatePlan date_plan(const Design& design, const MeanYear& year) {
     for (const NamedDay& day : design.dates.days)
         lines.add_day(day.day, day.label);
     return std::move(lines.plan);
+}
+
+std::vector<FaceAttitude> face_attitudes(const Design& design) {
+    std::vector<FaceAttitude> faces;
+    for (const bool upper : {true, false})
+        if (has_two_faces(design) || design.dial.faces == (upper ? Faces::upper : Faces::lower))
+            faces.push_back({face_name(design, upper), attitude_of(design, upper)});
+    return faces;
 }
 
 std::vector<FacePlan> face_plans(const Design& design, const MeanYear& year) {

@@ -20,6 +20,14 @@ struct FacePlan {
 /// @param design  with a zone that the time zone database knows
 [[nodiscard]] std::vector<FacePlan> face_plans(const Design& design, const MeanYear& year);
 
+/// A face's name, as FacePlan has it, and which way it looks.
+struct FaceAttitude {
+    std::string name;
+    Attitude attitude;
+};
+/// The same faces, for what is asked of a wall before there is a dial.
+[[nodiscard]] std::vector<FaceAttitude> face_attitudes(const Design& design);
+
 /// "21 Jun".
 [[nodiscard]] std::string date_text(std::chrono::month_day day);
 

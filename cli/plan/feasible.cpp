@@ -2,7 +2,7 @@
 #include "cli/plan/feasible.hpp"
 
 #include "cli/report/say.hpp"
-#include "layout/lettering/lettering.hpp"
+#include "layout/lettering/plate_lettering.hpp"
 #include "layout/plate/numerals.hpp"
 
 #include <algorithm>
@@ -190,7 +190,7 @@ std::vector<DesignError> what_cannot_be(const Design& design, const MeanYear& ye
 std::vector<DesignError> what_cannot_be_lettered(const Design& design, const std::string& otherwise) {
     std::vector<DesignError> errors;
     try {
-        const layout::Lettering lettering{design.lettering.family};
+        const layout::PlateLettering lettering{design.lettering.family, design.cutting.single_strokes};
         const auto try_text = [&](const std::string& key, const std::string& text) {
             try {
                 if (!text.empty())

@@ -44,7 +44,7 @@ bool check_lit(const Section& reading, const DialPlan& plan, Instant at, const Z
     constexpr double k_far_behind = -0.14; // sine: a dial is not tilted by more than 8°
     if (sun.enu.dot(frame_of(plan.attitude).n) > k_far_behind)
         return true;
-    reading.error("at", fmt::format("at {} the Sun was behind this dial", clock_words(at, zone)),
+    reading.error("at", fmt::format("at {} the Sun was behind this dial", say_moment(zone, at)),
                   "check the time, the zone, and whether a.m. and p.m. are confused");
     return false;
 }

@@ -3,7 +3,6 @@
 #include "cli/design/plain_text.hpp"
 #include "cli/design/scanner.hpp"
 #include "engine/sun/apparent_sun.hpp"
-#include "engine/time/instant_text.hpp"
 
 #include <fmt/format.h>
 
@@ -124,19 +123,6 @@ Read<Instant> in_zone(std::string_view text, ClockReading reading, const std::st
 
 } // namespace
 
-Read<year_month_day> calendar_day(std::string_view text) {
-    Read<Scanner> read = Scanner::over(text);
-    if (!read)
-        return read.trouble();
-    Scanner scan = *read;
-    const auto day = scan_day(scan, text);
-    if (!day)
-        return day.trouble();
-    if (!*day || !scan.at_end())
-        return Trouble{in_quotes(text) + " is not a day of the calendar", "write it as in 2027-05-03 or 3 May 2027"};
-    return **day;
-}
-
 Read<Instant> clock_instant(std::string_view text, std::optional<year_month_day> day, const Zone& zone) {
     Read<Scanner> read = Scanner::over(text);
     if (!read)
@@ -174,19 +160,6 @@ Read<Instant> clock_instant(std::string_view text, std::optional<year_month_day>
         }
     }
     return Trouble{in_quotes(text) + " goes on after the time", k_hint};
-}
-
-std::string clock_time(Instant at, const Zone& zone) {
-    const auto local = Instant{zone.to_clock(at).time_since_epoch()};
-    const std::string text = write_instant(round<seconds>(local)).substr(11, 8);
-    return text.ends_with(":00") ? text.substr(0, 5) : text;
-}
-
-std::string clock_words(Instant at, const Zone& zone) {
-    const auto local = Instant{zone.to_clock(at).time_since_epoch()};
-    const year_month_day day{floor<days>(round<seconds>(local))};
-    return fmt::format("{} {} {} {}", day_text(day.month() / day.day()), int(day.year()), clock_time(at, zone),
-                       zone.at(at).abbreviation);
 }
 
 } // namespace dialwright::cli

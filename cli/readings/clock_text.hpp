@@ -7,23 +7,14 @@
 
 #include <chrono>
 #include <optional>
-#include <string>
 #include <string_view>
 
 namespace dialwright::cli {
-
-/// "2027-05-03", "3 May 2027": a day of the calendar, 1800 to 2199.
-[[nodiscard]] Read<std::chrono::year_month_day> calendar_day(std::string_view text);
 
 /// When the clocks of `zone` showed "2027-05-03 10:12:30", "3 May 2027 10:12", "10:12 am" (on `day`). After the time may stand
 /// "Z" or "UTC", an offset (+01:00), or the zone's own letters (BST), which settle an hour that the clocks show twice.
 /// Trouble for a time that the clocks jumped over, and for one that they showed twice where nothing settles it.
 [[nodiscard]] Read<Instant> clock_instant(std::string_view text, std::optional<std::chrono::year_month_day> day,
                                           const Zone& zone);
-
-/// "3 May 2027 10:12:30 BST"; seconds only where there are some.
-[[nodiscard]] std::string clock_words(Instant at, const Zone& zone);
-/// "10:12:30".
-[[nodiscard]] std::string clock_time(Instant at, const Zone& zone);
 
 } // namespace dialwright::cli

@@ -2,6 +2,7 @@
 #include "cli/readings/readings.hpp"
 #include "cli/readings/clock_text.hpp"
 #include "cli/report/ranges.hpp"
+#include "cli/report/say.hpp"
 #include "engine/survey/real_sun.hpp"
 
 #include <fmt/format.h>
@@ -13,7 +14,7 @@
 namespace dialwright::cli {
 
 std::optional<std::chrono::year_month_day> read_day(const Section& top) {
-    return top.read("day", calendar_day);
+    return top.read("day", calendar_date);
 }
 
 std::optional<Instant> read_time(const Section& reading, std::string_view key,
@@ -37,11 +38,11 @@ bool check_sun_up(const Section& reading, std::string_view key, const Site& site
     std::string hint = "check the day, the time and the zone";
     for (const std::size_t i : {1, 2})
         if (altitude(i) > Angle{}) {
-            hint = fmt::format("a.m. and p.m. confused? At {} it was up", clock_words(times[i], zone));
+            hint = fmt::format("a.m. and p.m. confused? At {} it was up", say_moment(zone, times[i]));
             break;
         }
     reading.error(key,
-                  fmt::format("at {} the Sun was {} below the horizon there", clock_words(at, zone),
+                  fmt::format("at {} the Sun was {} below the horizon there", say_moment(zone, at),
                               say_arc(altitude(0).in_degrees())),
                   hint);
     return false;

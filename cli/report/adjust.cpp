@@ -1,6 +1,6 @@
 // SPDX-License-Identifier: MIT
 #include "cli/report/adjust.hpp"
-#include "cli/readings/clock_text.hpp"
+#include "cli/design/quantity.hpp"
 #include "cli/report/json_text.hpp"
 #include "cli/report/lines_of_text.hpp"
 #include "cli/report/ranges.hpp"
@@ -33,7 +33,7 @@ std::vector<std::vector<std::string>> reading_rows(const AdjustFile& file, const
     const AdjustAnswer& first = found.answers.front();
     for (std::size_t i = 0; i < file.readings.readings.size(); ++i) {
         const DialReading& reading = file.readings.readings[i];
-        rows.push_back({std::to_string(i + 1), clock_words(reading.at, *file.zone), reads_text(reading.reads_h),
+        rows.push_back({std::to_string(i + 1), say_moment(*file.zone, reading.at), reads_text(reading.reads_h),
                         signed_minutes(found.as_designed_min[i]), signed_minutes(first.off_min[i]),
                         first.stray[i] ? "left out" : ""});
     }
@@ -46,7 +46,7 @@ const char* fault_name(Fault fault) {
 }
 
 Json found_json(const Found& found) {
-    return {{"value", number(found.value)}, {"range", number(found.range)}, {"told", found.told}};
+    return {{"value", json_number(found.value)}, {"range", json_number(found.range)}, {"told", found.told}};
 }
 
 Json answer_json(const AdjustAnswer& answer, const AdjustWords& words) {
@@ -57,7 +57,7 @@ Json answer_json(const AdjustAnswer& answer, const AdjustWords& words) {
             {"style_height_deg", found_json(answer.style_height)},
             {"style_side_deg", found_json(answer.style_right)},
             {"clock_slow_s", found_json(answer.clock_s)},
-            {"scatter_min", answer.scatter_min > 0 ? number(answer.scatter_min) : Json{}},
+            {"scatter_min", answer.scatter_min > 0 ? json_number(answer.scatter_min) : Json{}},
             {"steps", words.steps}};
 }
 
@@ -109,13 +109,13 @@ std::string adjust_json(const AdjustFile& file, const DialAdjustment& found, con
         answers.push_back(answer_json(found.answers[i], report.ways[i]));
     out["answers"] = std::move(answers);
     out["if_level"] = found.if_level ? answer_json(*found.if_level, report.ways.back()) : Json{};
-    out["style_shows_from_deg"] = found.style_asked && found.checked ? number(found.style_told_deg) : Json{};
+    out["style_shows_from_deg"] = found.style_asked && found.checked ? json_number(found.style_told_deg) : Json{};
     Json readings = Json::array();
     for (std::size_t i = 0; i < file.readings.readings.size(); ++i)
         readings.push_back({{"at", write_instant(file.readings.readings[i].at)},
-                            {"reads_h", number(file.readings.readings[i].reads_h)},
-                            {"off_min", number(found.as_designed_min[i])},
-                            {"left_min", number(found.answers.front().off_min[i])},
+                            {"reads_h", json_number(file.readings.readings[i].reads_h)},
+                            {"off_min", json_number(found.as_designed_min[i])},
+                            {"left_min", json_number(found.answers.front().off_min[i])},
                             {"left_out", bool(found.answers.front().stray[i])}});
     out["readings"] = std::move(readings);
     out["notes"] = report.notes;
@@ -214,14 +214,14 @@ std::string moved_json(const Commission& commission, const DialPlan& plan, const
     const MovedWords words = moved_words(commission, plan, made);
     const Json out{{"format", 1},
                    {"title", commission.design.title},
-                   {"latitude_deg", number(there.latitude.in_degrees())},
-                   {"longitude_deg", number(there.longitude.in_degrees())},
-                   {"turn_deg", number(made.turn.in_degrees())},
-                   {"wedge_deg", number(made.wedge.in_degrees())},
-                   {"wedge_towards_deg", number(made.wedge_towards.in_degrees())},
-                   {"rise_mm", number(words.rise_mm)},
-                   {"normal_azimuth_deg", number(made.attitude.normal_azimuth.in_degrees())},
-                   {"normal_altitude_deg", number(made.attitude.normal_altitude.in_degrees())}};
+                   {"latitude_deg", json_number(there.latitude.in_degrees())},
+                   {"longitude_deg", json_number(there.longitude.in_degrees())},
+                   {"turn_deg", json_number(made.turn.in_degrees())},
+                   {"wedge_deg", json_number(made.wedge.in_degrees())},
+                   {"wedge_towards_deg", json_number(made.wedge_towards.in_degrees())},
+                   {"rise_mm", json_number(words.rise_mm)},
+                   {"normal_azimuth_deg", json_number(made.attitude.normal_azimuth.in_degrees())},
+                   {"normal_altitude_deg", json_number(made.attitude.normal_altitude.in_degrees())}};
     return json_text(out);
 }
 

@@ -2,7 +2,6 @@
 //
 // From how a dial stands to what its fitter does. A dial is put right by the opposite of what is wrong with it: what is turned
 // anticlockwise goes back clockwise, and what stands out too far at the top is packed out at the bottom.
-#include "cli/readings/clock_text.hpp"
 #include "cli/report/adjust.hpp"
 #include "cli/report/ranges.hpp"
 #include "cli/report/say.hpp"
@@ -133,7 +132,7 @@ void note_strays(const AdjustFile& file, const AdjustAnswer& answer, AdjustRepor
             report.notes.push_back(
                 fmt::format("reading {} ({}, line {}) is {} min from what the others say and was left out: "
                             "look at it again",
-                            i + 1, clock_words(file.readings.readings[i].at, *file.zone), file.at_readings[i].line,
+                            i + 1, say_moment(*file.zone, file.readings.readings[i].at), file.at_readings[i].line,
                             fixed(std::abs(answer.off_min[i]), 0)));
 }
 

@@ -1,13 +1,14 @@
 // SPDX-License-Identifier: MIT
 #include "cli/report/json_text.hpp"
-#include "cli/report/say.hpp"
+
+#include "layout/text/figures.hpp"
 
 #include <cmath>
 
 namespace dialwright::cli {
 namespace {
 
-/// Numbers to the millionth, without exponents, "-0" or noise in the last digits; all else as the library writes it.
+/// Floating numbers fixed to the millionth; all else as the library writes it.
 void write(const Json& json, std::string& text) {
     const auto write_list = [&](char open, char close, const auto& write_item) {
         text += open;
@@ -26,7 +27,7 @@ void write(const Json& json, std::string& text) {
     } else if (json.is_array()) {
         write_list('[', ']', [&](const auto& item) { write(*item, text); });
     } else if (json.is_number_float()) {
-        std::string number = fixed(json.get<double>(), 6);
+        std::string number = layout::fixed(json.get<double>(), 6);
         number.erase(number.find_last_not_of('0') + 1);
         text += number.ends_with('.') ? number + '0' : number;
     } else {
@@ -36,7 +37,7 @@ void write(const Json& json, std::string& text) {
 
 } // namespace
 
-Json number(double value) {
+Json json_number(double value) {
     if (!std::isfinite(value))
         return nullptr;
     return value;
@@ -45,7 +46,7 @@ Json number(double value) {
 std::string json_text(const Json& json) {
     std::string text;
     write(json, text);
-    return text + '\n';
+    return text + "\n";
 }
 
 } // namespace dialwright::cli

@@ -9,6 +9,10 @@
 namespace dialwright::cli {
 namespace {
 
+Json number(double value) {
+    return json_number(value);
+}
+
 Json point(PlatePoint p) {
     return Json::array({number(p.u_mm), number(p.v_mm)});
 }

@@ -81,7 +81,7 @@ void say_lines(LinesOfText& text, const RestoreFile& file, const PlateFigure& fi
 }
 
 Json found_json(const Found& found) {
-    return {{"value", number(found.value)}, {"range", number(found.range)}, {"told", found.told}};
+    return {{"value", json_number(found.value)}, {"range", json_number(found.range)}, {"told", found.told}};
 }
 
 Json way_json(const RestoreWay& way) {
@@ -130,13 +130,13 @@ std::string restore_text(const RestoreFile& file, const PlateFigure& figure, con
 
 std::string restore_json(const RestoreFile& file, const PlateFigure& figure, const RestoreReport& report) {
     Json out{{"format", 1}, {"title", file.title}, {"checked", figure.fit.checked()}};
-    out["figure"] = {{"style_height_deg", found_json(figure.style_height_deg)},
-                     {"substyle_deg", found_json(figure.substyle_deg)},
-                     {"substyle_hour_h", found_json(figure.substyle_hour_h)},
-                     {"clockwise", figure.clockwise},
-                     {"centre_mm", figure.centre
-                                       ? Json::array({number(figure.centre->u_mm), number(figure.centre->v_mm)})
-                                       : Json{}}};
+    out["figure"] = {
+        {"style_height_deg", found_json(figure.style_height_deg)},
+        {"substyle_deg", found_json(figure.substyle_deg)},
+        {"substyle_hour_h", found_json(figure.substyle_hour_h)},
+        {"clockwise", figure.clockwise},
+        {"centre_mm",
+         figure.centre ? Json::array({json_number(figure.centre->u_mm), json_number(figure.centre->v_mm)}) : Json{}}};
     Json ways = Json::array();
     for (const RestoreWay& way : report.ways)
         ways.push_back(way_json(way));
@@ -145,9 +145,9 @@ std::string restore_json(const RestoreFile& file, const PlateFigure& figure, con
     Json lines = Json::array();
     for (std::size_t i = 0; i < file.names.size(); ++i)
         lines.push_back({{"hour", file.names[i]},
-                         {"hour_h", figure.hour_h[i] ? number(*figure.hour_h[i]) : Json{}},
-                         {"off_deg", number(figure.off_deg[i])},
-                         {"off_mm", figure.off_mm[i] != 0.0 ? number(figure.off_mm[i]) : Json{}},
+                         {"hour_h", figure.hour_h[i] ? json_number(*figure.hour_h[i]) : Json{}},
+                         {"off_deg", json_number(figure.off_deg[i])},
+                         {"off_mm", figure.off_mm[i] != 0.0 ? json_number(figure.off_mm[i]) : Json{}},
                          {"left_out", bool(figure.stray[i])}});
     out["lines"] = std::move(lines);
     out["notes"] = report.notes;
@@ -166,7 +166,8 @@ std::string recut_design(const RestoreFile& file, const RestoreWay& way) {
     LinesOfText text;
     text.line("# Cut again from the lines of an old plate, {}.", supposed(file, one.fact));
     if (way.for_this_place)
-        text.line("# The latitude is that of the lines; that of the place is {}.", latitude_text(file.place->site.latitude));
+        text.line("# The latitude is that of the lines; that of the place is {}.",
+                  latitude_text(file.place->site.latitude));
     if (!own_time)
         text.line("# The longitude is the one that the lines are shifted for, counted from the zone's meridian.");
     if (!file.title.empty())

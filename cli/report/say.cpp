@@ -1,6 +1,8 @@
 // SPDX-License-Identifier: MIT
 #include "cli/report/say.hpp"
 
+#include "engine/time/instant_text.hpp"
+
 #include <cmath>
 #include <fmt/format.h>
 
@@ -104,6 +106,53 @@ const char* say_family(Family family) {
 std::string say_clock(double hours) {
     const long seconds = ((std::lround(hours * 3600) % 86400) + 86400) % 86400;
     return fmt::format("{:02}:{:02}:{:02}", seconds / 3600, seconds / 60 % 60, seconds % 60);
+}
+
+namespace {
+
+/// The reading of the zone's clocks, written as an instant of their own.
+std::string local_text(const Zone& zone, Instant at) {
+    const Instant whole = std::chrono::round<std::chrono::seconds>(at);
+    return write_instant(whole + zone.at(at).from_utc);
+}
+
+} // namespace
+
+std::string say_moment(const Zone& zone, Instant at) {
+    return local_text(zone, at).substr(0, 19) + ' ' + zone.at(at).abbreviation;
+}
+
+std::string say_clock(const Zone& zone, Instant at) {
+    return local_text(zone, at).substr(11, 8);
+}
+
+std::string iso_clock(const Zone& zone, Instant at) {
+    const long offset = zone.at(at).from_utc.count(), size = std::abs(offset);
+    const std::string seconds =
+        size % 60 != 0 ? fmt::format(":{:02}", size % 60) : ""; // before zones kept whole minutes
+    return fmt::format("{}{}{:02}:{:02}{}", local_text(zone, at).substr(0, 19), offset < 0 ? '-' : '+', size / 3600,
+                       size / 60 % 60, seconds);
+}
+
+std::string say_duration(std::chrono::microseconds length) {
+    const auto minutes = std::chrono::round<std::chrono::minutes>(length).count();
+    return fmt::format("{} h {:02} m", minutes / 60, minutes % 60);
+}
+
+std::string say_date(std::chrono::year_month_day date) {
+    static constexpr const char* k_months[] = {"Jan", "Feb", "Mar", "Apr", "May", "Jun",
+                                               "Jul", "Aug", "Sep", "Oct", "Nov", "Dec"};
+    return fmt::format("{} {} {}", unsigned(date.day()), k_months[unsigned(date.month()) - 1], int(date.year()));
+}
+
+std::string say_weekday_date(std::chrono::year_month_day date) {
+    static constexpr const char* k_days[] = {"Sunday",   "Monday", "Tuesday", "Wednesday",
+                                             "Thursday", "Friday", "Saturday"};
+    return std::string{k_days[std::chrono::weekday{std::chrono::sys_days{date}}.c_encoding()]} + ' ' + say_date(date);
+}
+
+std::string iso_date(std::chrono::year_month_day date) {
+    return fmt::format("{:04}-{:02}-{:02}", int(date.year()), unsigned(date.month()), unsigned(date.day()));
 }
 
 } // namespace dialwright::cli

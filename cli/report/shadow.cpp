@@ -4,7 +4,6 @@
 
 #include "engine/sun/almanac.hpp"
 #include "engine/time/instant_text.hpp"
-#include "engine/time/zone.hpp"
 
 #include <fmt/format.h>
 #include <iterator>
@@ -17,12 +16,6 @@ struct Reader {
     const FacePlan* plan;
     Caster<Plane> caster;
 };
-
-std::string clock_of(const Zone& zone, Instant at) {
-    const auto offset = zone.at(at);
-    const auto local = at + offset.from_utc;
-    return write_instant(local).substr(0, 19) + " " + offset.abbreviation;
-}
 
 std::string reading_json(std::optional<double> hours) {
     return hours ? '"' + say_clock(*hours) + '"' : "null";
@@ -108,7 +101,7 @@ std::string shadow_text(const Commission& commission, const std::vector<ShadowRe
                    "decl.", "hour ang.", "u mm", "v mm", "reads", several ? " face" : "");
     for (const ShadowReport& r : reports) {
         const auto degrees = [](Angle a) { return fixed(a.in_degrees(), 3) + "°"; };
-        fmt::format_to(put, "{:<26} {:>9} {:>9} {:>9} {:>10}  ", zone ? clock_of(*zone, r.at) : write_instant(r.at),
+        fmt::format_to(put, "{:<26} {:>9} {:>9} {:>9} {:>10}  ", zone ? say_moment(*zone, r.at) : write_instant(r.at),
                        degrees(r.towards_sun.altitude()), degrees(r.towards_sun.azimuth()), degrees(r.sky.declination),
                        degrees(r.sky.hour_angle));
         if (r.shadow)

@@ -1,6 +1,5 @@
 // SPDX-License-Identifier: MIT
 #include "cli/report/survey.hpp"
-#include "cli/readings/clock_text.hpp"
 #include "cli/report/json_text.hpp"
 #include "cli/report/lines_of_text.hpp"
 #include "cli/report/ranges.hpp"
@@ -39,7 +38,7 @@ std::string next_words(const SurveyFile& file, const WallSurvey& survey) {
         return "take more readings, with the Sun as far to the other side of the wall as it comes";
     return fmt::format(
         "one more shadow would help most at about {} on such a day: the facing would then be known to {}",
-        clock_time(survey.next->at, *file.zone), say_give(survey.next->facing_range_deg));
+        say_clock(*file.zone, survey.next->at), say_give(survey.next->facing_range_deg));
 }
 
 void judge_clock_and_level(const WallSurvey& survey, SurveyVerdict& verdict) {
@@ -68,7 +67,7 @@ void judge_strays(const SurveyFile& file, const WallAnswer& answer, SurveyVerdic
         if (answer.stray[i])
             verdict.notes.push_back(fmt::format("shadow {} ({}, line {}) lies {} mm from where the others put it and "
                                                 "was left out: look at its figures again",
-                                                i + 1, clock_words(file.readings.shadows[i].at, *file.zone),
+                                                i + 1, say_moment(*file.zone, file.readings.shadows[i].at),
                                                 file.at_shadows[i].line,
                                                 fixed(std::hypot(answer.off_right_mm[i], answer.off_down_mm[i]), 1)));
 }
@@ -82,7 +81,7 @@ std::string signed_mm(double mm) {
 }
 
 Json found_json(const Found& found) {
-    return {{"value", number(found.value)}, {"range", number(found.range)}, {"told", found.told}};
+    return {{"value", json_number(found.value)}, {"range", json_number(found.range)}, {"told", found.told}};
 }
 
 const char* fault_name(Fault fault) {
@@ -97,7 +96,7 @@ void say_readings(LinesOfText& text, const SurveyFile& file, const WallAnswer& a
               "off down");
     for (std::size_t i = 0; i < file.readings.shadows.size(); ++i) {
         const PegShadow& shadow = file.readings.shadows[i];
-        text.line("  {:>3}  {:<30} {:>9} {:>9} {:>10} {:>10}{}", i + 1, clock_words(shadow.at, *file.zone),
+        text.line("  {:>3}  {:<30} {:>9} {:>9} {:>10} {:>10}{}", i + 1, say_moment(*file.zone, shadow.at),
                   fixed(shadow.right_mm, 1), fixed(shadow.down_mm, 1), signed_mm(answer.off_right_mm[i]),
                   signed_mm(answer.off_down_mm[i]), answer.stray[i] ? "  left out" : "");
     }
@@ -202,8 +201,8 @@ std::string survey_text(const SurveyFile& file, const WallSurvey& survey, const 
 
 std::string survey_json(const SurveyFile& file, const WallSurvey& survey, const SurveyVerdict& verdict) {
     Json out{{"format", 1}, {"title", file.title}};
-    out["site"] = {{"latitude_deg", number(file.place.site.latitude.in_degrees())},
-                   {"longitude_deg", number(file.place.site.longitude.in_degrees())},
+    out["site"] = {{"latitude_deg", json_number(file.place.site.latitude.in_degrees())},
+                   {"longitude_deg", json_number(file.place.site.longitude.in_degrees())},
                    {"zone", file.place.zone}};
     out["good_to_cut"] = verdict.good_to_cut;
     out["checked"] = survey.checked;
@@ -214,21 +213,21 @@ std::string survey_json(const SurveyFile& file, const WallSurvey& survey, const 
                  {"lean_deg", found_json(answer.lean_deg)},
                  {"clock_slow_s", found_json(answer.clock_s)},
                  {"board_turned_deg", found_json(answer.level_deg)},
-                 {"scatter_mm", survey.checked ? number(answer.scatter_mm) : Json{}}};
+                 {"scatter_mm", survey.checked ? json_number(answer.scatter_mm) : Json{}}};
         Json shadows = Json::array();
         for (std::size_t i = 0; i < answer.stray.size(); ++i)
             shadows.push_back({{"at", write_instant(file.readings.shadows[i].at)},
-                               {"off_right_mm", number(answer.off_right_mm[i])},
-                               {"off_down_mm", number(answer.off_down_mm[i])},
+                               {"off_right_mm", json_number(answer.off_right_mm[i])},
+                               {"off_down_mm", json_number(answer.off_down_mm[i])},
                                {"left_out", bool(answer.stray[i])}});
         one["shadows"] = std::move(shadows);
         answers.push_back(std::move(one));
     }
     out["answers"] = std::move(answers);
-    out["shows_from"] = {{"clock_s", survey.checked ? number(survey.clock_told_s) : Json{}},
-                         {"board_deg", survey.checked ? number(survey.level_told_deg) : Json{}}};
+    out["shows_from"] = {{"clock_s", survey.checked ? json_number(survey.clock_told_s) : Json{}},
+                         {"board_deg", survey.checked ? json_number(survey.level_told_deg) : Json{}}};
     out["next"] = survey.next ? Json{{"at", write_instant(survey.next->at)},
-                                     {"facing_range_deg", number(survey.next->facing_range_deg)}}
+                                     {"facing_range_deg", json_number(survey.next->facing_range_deg)}}
                               : Json{};
     out["notes"] = verdict.notes;
     return json_text(out);

@@ -62,9 +62,11 @@ class Delineator {
             add_hours(plan_.more_hours[i], int(i) + 1);
         add_noons();
         for (const Angle& altitude : plan_.altitudes)
-            add_level(Family::altitude, altitude, altitude_path(altitude, plan_.site.latitude, made_.season));
+            add_level(Family::altitude, altitude,
+                      altitude_path(altitude, plan_.site.latitude, within(plan_.altitudes_between)));
         for (const Angle& azimuth : plan_.azimuths)
-            add_level(Family::azimuth, azimuth, azimuth_path(azimuth, plan_.site.latitude, made_.season));
+            add_level(Family::azimuth, azimuth,
+                      azimuth_path(azimuth, plan_.site.latitude, within(plan_.azimuths_between)));
         for (const DatePlan::Line& date : plan_.dates.lines)
             add_date(date);
         return std::move(made_);
@@ -92,33 +94,67 @@ class Delineator {
     /// @return whether the hour is ever lit
     bool add_pieces(DialLine& line, const HourPlan& hours) {
         if (line.family != Family::hour && line.family != Family::clock_hour)
-            return add_curve(line, day_path(hours.time, line.time_h));
+            return add_curve(line, day_path(hours.time, line.time_h, within(hours.between)));
         line.hour_angle = hour_angle_of(hours.time, line.time_h, plan_.site, plan_.zone_meridian);
         if (line.family == Family::hour)
-            return add_straight_pieces(line, hours.extent);
-        const DayStretch days = stretch_of(hours.half_year, year_);
-        return add_curve(line, mean_time_path(line.hour_angle, year_, days.first, days.last));
+            return add_straight_pieces(line, hours.extent, hours.between);
+        bool lit = false;
+        for (const DayStretch& days : stretches_of(hours))
+            lit = add_curve(line, mean_time_path(line.hour_angle, year_, days.first, days.last)) || lit;
+        return lit;
+    }
+
+    /// The days of a clock-time curve: one stretch, or in each half of the year those between two declinations.
+    [[nodiscard]] std::vector<DayStretch> stretches_of(const HourPlan& hours) const {
+        if (!hours.between)
+            return {stretch_of(hours.half_year, year_)};
+        const Season season = within(hours.between);
+        std::vector<DayStretch> stretches;
+        for (const HalfYear half : {HalfYear::december_to_june, HalfYear::june_to_december}) {
+            if (hours.half_year != HalfYear::whole && hours.half_year != half)
+                continue;
+            const bool north = half == HalfYear::december_to_june;
+            const DayStretch all = stretch_of(half, year_);
+            const auto day_in = [&](Angle declination, double otherwise) {
+                double day = year_.day_of_declination(declination, north).value_or(otherwise);
+                day += day > all.last + 1 ? -year_.length_days() : 0.0;
+                return std::clamp(day, all.first, all.last);
+            };
+            const double first = day_in(north ? season.least : season.greatest, all.first),
+                         last = day_in(north ? season.greatest : season.least, all.last);
+            if (first < last)
+                stretches.push_back({first, last});
+        }
+        return stretches;
+    }
+
+    /// The season, or what of it a family of lines is drawn for.
+    [[nodiscard]] Season within(const std::optional<Season>& between) const {
+        return between ? Season{std::max(made_.season.least, between->least),
+                                std::min(made_.season.greatest, between->greatest)}
+                       : made_.season;
     }
 
     /// An hour that counts from the Sun's rising or setting.
-    [[nodiscard]] SunPath day_path(HourTime time, double time_h) const {
+    [[nodiscard]] SunPath day_path(HourTime time, double time_h, const Season& season) const {
         const Angle latitude = plan_.site.latitude, count = Angle::hours(time_h);
         switch (time) {
         case HourTime::since_sunrise:
-            return rise_path(count, latitude, made_.season, plan_.horizon);
+            return rise_path(count, latitude, season, plan_.horizon);
         case HourTime::to_sunset:
-            return set_path(count, latitude, made_.season, plan_.horizon);
+            return set_path(count, latitude, season, plan_.horizon);
         case HourTime::since_sunset:
-            return set_path(Angle::hours(24) - count, latitude, made_.season, plan_.horizon);
+            return set_path(Angle::hours(24) - count, latitude, season, plan_.horizon);
         default:
-            return unequal_hour_path(time_h / 12.0, latitude, made_.season, plan_.horizon);
+            return unequal_hour_path(time_h / 12.0, latitude, season, plan_.horizon);
         }
     }
 
     /// @return whether any Sun of the path lights the plate
     bool add_curve(DialLine& line, const SunPath& path) {
-        line.pieces = pieces_of(path);
-        if (!line.pieces.empty())
+        const std::vector<PlatePolyline> pieces = pieces_of(path);
+        line.pieces.insert(line.pieces.end(), pieces.begin(), pieces.end());
+        if (!pieces.empty())
             return true;
         for (int i = 0; i <= path.steps; ++i)
             if (const auto sky = path.at(path.first + (path.last - path.first) * i / path.steps);
@@ -128,12 +164,12 @@ class Delineator {
     }
 
     /// @return whether the hour is ever lit
-    bool add_straight_pieces(DialLine& line, HourExtent extent) {
+    bool add_straight_pieces(DialLine& line, HourExtent extent, const std::optional<Season>& between) {
         if (!caster_.ever_lit(line.hour_angle, made_.season))
             return false;
         line.direction = hour_line_direction(made_.frame, made_.style, plan_.site.latitude, line.hour_angle);
-        SunPath path = extent == HourExtent::style ? hour_path_of_style(line.hour_angle)
-                                                   : hour_path_of_nodus(line.hour_angle, made_.season);
+        SunPath path = extent == HourExtent::style && !between ? hour_path_of_style(line.hour_angle)
+                                                               : hour_path_of_nodus(line.hour_angle, within(between));
         if (!caster_.edges().both_cast(
                 line.hour_angle)) // one edge casts the hour, up to the pole, where its Sun tells no more
             path.edge = caster_.edges().casting(line.hour_angle);
@@ -175,7 +211,7 @@ class Delineator {
             line.label = noon.name;
             line.hour_angle = (plan_.site.longitude - noon.longitude).signed_turn();
             line.time_h = time_of(plan_.hours.time, line.hour_angle, plan_.site, plan_.zone_meridian);
-            add_straight_pieces(line, plan_.hours.extent);
+            add_straight_pieces(line, plan_.hours.extent, plan_.noons_between);
             keep_or_list(std::move(line), noon.name);
         }
     }

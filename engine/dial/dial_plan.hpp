@@ -36,6 +36,7 @@ struct HourPlan {
     int divide_min = 60;                   ///< a divisor of 60
     HalfYear half_year = HalfYear::whole;
     HourExtent extent = HourExtent::style;
+    std::optional<Season> between; ///< only Suns of these declinations: a part of each line
 };
 
 /// Noon at another place, shown by an hour line of this dial.
@@ -65,6 +66,7 @@ struct DialPlan {
     Angle horizon; ///< the Sun's altitude at rising and setting, for hours that count from them: 0° or −50′
     std::vector<Angle> altitudes, azimuths;
     std::vector<PlaceNoon> noons;
+    std::optional<Season> altitudes_between, azimuths_between, noons_between; ///< as HourPlan::between
     DatePlan dates;
 };
 

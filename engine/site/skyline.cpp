@@ -25,9 +25,10 @@ Angle Skyline::altitude_at(Angle azimuth) const {
         return Angle{};
     const Angle turn = Angle::degrees(360);
     const Angle from_first = (azimuth - marks_.front().azimuth).positive_turn();
-    const auto next = std::find_if(marks_.begin() + 1, marks_.end(), [&](const Mark& mark) {
-        return mark.azimuth - marks_.front().azimuth > from_first;
-    });
+    const auto next =
+        std::upper_bound(marks_.begin() + 1, marks_.end(), from_first, [&](Angle turned, const Mark& mark) {
+            return turned < mark.azimuth - marks_.front().azimuth;
+        });
     const Mark& before = *(next - 1);
     const Mark after = next != marks_.end() ? *next : Mark{marks_.front().azimuth + turn, marks_.front().altitude};
     const double part = (from_first - (before.azimuth - marks_.front().azimuth)) / (after.azimuth - before.azimuth);

@@ -23,6 +23,8 @@ class Skyline {
 
     [[nodiscard]] bool flat() const { return marks_.empty(); }
     [[nodiscard]] Angle altitude_at(Angle azimuth) const;
+    /// Sine of its highest mark's altitude: a Sun above this is seen.
+    [[nodiscard]] double highest_sine() const { return highest_sine_; }
     /// True where the Sun stands above the skyline. No refraction. A Sun on the skyline itself, as at every moment of the
     /// hour 0 from sunrise, is not seen, however its sines round.
     [[nodiscard]] bool sees(const SiteDirection& sun) const {

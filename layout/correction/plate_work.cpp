@@ -31,18 +31,6 @@ void PlateWork::cut(Path path) {
     marks.push_back({Layer::cut, {std::move(path)}, 0.2, false, "outline"});
 }
 
-PlateWork::Letters::Letters(const CorrectionSpec& wanted) {
-    if (wanted.cutting.single_strokes)
-        strokes_.emplace();
-    else
-        outlines_.emplace(wanted.family);
-}
-
-LetteredLine PlateWork::Letters::line(const std::string& text, double height_mm) const {
-    const double tracking = k_tracking * height_mm;
-    return strokes_ ? strokes_->line(text, height_mm, tracking) : outlines_->line(text, height_mm, tracking);
-}
-
 void PlateWork::add_letters(std::vector<Path> paths, std::string name) {
     marks.push_back({Layer::engrave, std::move(paths), middle_mm(), !spec.cutting.single_strokes, std::move(name)});
 }
@@ -50,12 +38,12 @@ void PlateWork::add_letters(std::vector<Path> paths, std::string name) {
 double PlateWork::width_mm(const std::string& text, double height_mm) const {
     auto found = width_at_1_.find(text);
     if (found == width_at_1_.end())
-        found = width_at_1_.emplace(text, letters_.line(text, 1.0).ink.width_mm()).first;
+        found = width_at_1_.emplace(text, letters_.line(text, 1.0, k_tracking).ink.width_mm()).first;
     return found->second * height_mm;
 }
 
 void PlateWork::letter(const std::string& text, double height_mm, Point middle, Angle turn, std::string name) {
-    const LetteredLine line = letters_.line(text, height_mm);
+    const LetteredLine line = letters_.line(text, height_mm, k_tracking * height_mm);
     const Point along{cos(turn), sin(turn)};
     const double ink_middle = (line.ink.left_mm + line.ink.right_mm) / 2;
     add_letters(set_straight(line, middle - ink_middle * along - height_mm / 2 * left_of(along), turn),
@@ -64,7 +52,7 @@ void PlateWork::letter(const std::string& text, double height_mm, Point middle, 
 
 void PlateWork::letter_round(const std::string& text, double height_mm, double radius_mm, Angle clockwise,
                              std::string name) {
-    const LetteredLine line = letters_.line(text, height_mm);
+    const LetteredLine line = letters_.line(text, height_mm, k_tracking * height_mm);
     const bool below = cos(clockwise) < -1e-9;
     add_letters(
         set_on_circle(line, {}, radius_mm + (below ? 0.5 : -0.5) * height_mm, Angle::degrees(90) - clockwise, below),
@@ -173,7 +161,7 @@ CorrectionPlate draw_correction(const Correction& correction, const CorrectionSp
     // Letters shrink until everything has room.
     CorrectionSpec tried = spec;
     const double least = std::min(least_letter_mm(spec.cutting), spec.letter_height_mm);
-    const PlateWork::Letters letters{spec};
+    const PlateLettering letters{spec.family, spec.cutting.single_strokes};
     while (true) {
         PlateWork work{correction, tried, letters};
         try {

@@ -3,7 +3,7 @@
 
 #include "layout/correction/correction_plate.hpp"
 #include "layout/correction/words.hpp"
-#include "layout/lettering/stroke_lettering.hpp"
+#include "layout/lettering/plate_lettering.hpp"
 #include "layout/plate/outline.hpp"
 #include "layout/plate/points.hpp"
 
@@ -16,18 +16,7 @@ namespace dialwright::layout {
 /// A correction plate while it is being drawn: lettering, line widths in their order of weight, and the marks so far.
 class PlateWork {
   public:
-    /// Letters of a plate: outlines of a font, or single strokes for an engraving point.
-    class Letters {
-      public:
-        explicit Letters(const CorrectionSpec& wanted);
-        [[nodiscard]] LetteredLine line(const std::string& text, double height_mm) const;
-
-      private:
-        std::optional<Lettering> outlines_;
-        std::optional<StrokeLettering> strokes_;
-    };
-
-    PlateWork(const Correction& of, const CorrectionSpec& wanted, const Letters& letters)
+    PlateWork(const Correction& of, const CorrectionSpec& wanted, const PlateLettering& letters)
         : correction{of}, spec{wanted}, letters_{letters} {}
 
     const Correction& correction;
@@ -76,7 +65,7 @@ class PlateWork {
   private:
     void add_letters(std::vector<Path> paths, std::string name);
 
-    const Letters& letters_;
+    const PlateLettering& letters_;
     mutable std::map<std::string, double> width_at_1_;
 };
 

@@ -1,7 +1,7 @@
 // SPDX-License-Identifier: MIT
 #pragma once
 
-#include "layout/lettering/lettering.hpp"
+#include "layout/lettering/plate_lettering.hpp"
 #include "layout/plate/clear_map.hpp"
 #include "layout/plate/face.hpp"
 #include "layout/plate/points.hpp"
@@ -20,7 +20,7 @@ struct Bench {
     Rings rings;
     std::vector<Outline> keep_out; ///< the border round the centre, and labels that lines stop for
     Point up;                      ///< unit, the reader's
-    Lettering lettering;
+    PlateLettering lettering;
     ClearMap clear;
 
     std::vector<Mark> marks;
@@ -29,9 +29,8 @@ struct Bench {
 
     /// Widths in their order of weight.
     [[nodiscard]] double width_of_step(int step_min) const;
-    [[nodiscard]] double field_line_width(Family family) const {
-        return (family == Family::date ? 0.6 : 0.5) * spec.cutting.line_width_mm;
-    }
+    /// @param set  as DialLine::set
+    [[nodiscard]] double field_line_width(Family family, int set) const;
     /// How far into the field the marks of half and quarter hours reach from its border.
     [[nodiscard]] double half_hour_reach_mm() const;
     [[nodiscard]] double quarter_hour_reach_mm() const;
@@ -40,6 +39,8 @@ struct Bench {
 
     void engrave(const Polyline& line, double width_mm, std::string name);
     void add_line(const DialLine& line, const Polyline& piece, std::string label, double width_mm);
+    /// Filled outlines, or strokes of the tool's own line.
+    void add_letters(std::vector<Path> paths, std::string name);
     void add_filled(std::vector<Path> paths, std::string name, Layer layer = Layer::engrave);
     [[nodiscard]] Polyline to_work(const PlatePolyline& piece) const;
 };

@@ -97,8 +97,9 @@ Rings Rings::of(const FaceSpec& spec) {
 
 Bench::Bench(const FaceSpec& face_spec, const Delineation& delineated, const Placement& placed)
     : spec{face_spec}, delineation{delineated}, foot{placed.foot}, rings{Rings::of(face_spec)},
-      up{clockwise_from_up(face_spec.reader_up)}, lettering{face_spec.lettering.family}, clear{rings.divisions,
-                                                                                               cell_for(face_spec)} {
+      up{clockwise_from_up(face_spec.reader_up)},
+      lettering{face_spec.lettering.family, face_spec.cutting.single_strokes}, clear{rings.divisions,
+                                                                                     cell_for(face_spec)} {
     if (delineated.style.centre && has_style(face_spec.gnomon.kind)) {
         const Point at = layout::to_work(*delineated.style.centre, foot);
         if (rings.divisions.contains(at))
@@ -106,8 +107,20 @@ Bench::Bench(const FaceSpec& face_spec, const Delineation& delineated, const Pla
     }
 }
 
+double Bench::field_line_width(Family family, int set) const {
+    const LineWidths& widths = spec.widths;
+    const double asked = family == Family::date         ? widths.dates_mm
+                         : family == Family::altitude   ? widths.altitudes_mm
+                         : family == Family::azimuth    ? widths.azimuths_mm
+                         : family == Family::place_noon ? widths.noons_mm
+                         : set > 0 && std::size_t(set) <= widths.more_hours_mm.size()
+                             ? widths.more_hours_mm[std::size_t(set) - 1]
+                             : widths.hours_mm;
+    return asked > 0 ? asked : (family == Family::date ? 0.6 : 0.5) * spec.cutting.line_width_mm;
+}
+
 double Bench::width_of_step(int step_min) const {
-    const double tool = spec.cutting.line_width_mm;
+    const double tool = spec.widths.hours_mm > 0 ? spec.widths.hours_mm : spec.cutting.line_width_mm;
     return step_min >= 60 ? tool : step_min >= 30 ? 0.8 * tool : step_min >= 15 ? 0.65 * tool : 0.5 * tool;
 }
 
@@ -141,6 +154,13 @@ void Bench::add_line(const DialLine& line, const Polyline& piece, std::string la
         drawn_line.points.push_back(to_plate(p, foot));
     lines.push_back(std::move(drawn_line));
     engrave(piece, width_mm, name_of_family(line.family) + label);
+}
+
+void Bench::add_letters(std::vector<Path> paths, std::string name) {
+    if (!lettering.single_strokes())
+        add_filled(std::move(paths), std::move(name));
+    else if (!paths.empty())
+        marks.push_back({Layer::engrave, std::move(paths), 0.7 * spec.cutting.line_width_mm, false, std::move(name)});
 }
 
 void Bench::add_filled(std::vector<Path> paths, std::string name, Layer layer) {

@@ -18,6 +18,7 @@ struct FaceSpec {
     Gnomon gnomon;
     LetteringChoice lettering;
     Cutting cutting;
+    LineWidths widths;
     Numerals numerals = Numerals::roman;
     NumeralStand stand = NumeralStand::along_border;
     int numeral_count = 12;

@@ -168,7 +168,7 @@ class FieldDrawer {
                 }
                 straight_.push_back({&line, part});
             }
-            const double width = bench_.field_line_width(line.family);
+            const double width = bench_.field_line_width(line.family, line.set);
             std::vector<Polyline> pieces = clipped(part, {{}, bench_.keep_out});
             drop_scraps(pieces, width);
             for (const Polyline& piece : pieces)
@@ -206,7 +206,7 @@ class FieldDrawer {
                 dates.push_back(line);
         std::sort(dates.begin(), dates.end(),
                   [](const DialLine* a, const DialLine* b) { return *a->declination < *b->declination; });
-        const double wanted = bench_.spec.cutting.least_gap_mm + bench_.field_line_width(Family::date);
+        const double wanted = bench_.spec.cutting.least_gap_mm + bench_.field_line_width(Family::date, 0);
         for (std::size_t i = 0; i + 1 < dates.size(); ++i)
             if (const double gap = least_distance(*dates[i], *dates[i + 1]); gap < wanted)
                 bench_.warnings.push_back(fmt::format("the date lines \"{}\" and \"{}\" come within {:.1f} mm of each "
@@ -316,14 +316,14 @@ class FieldDrawer {
         if (std::abs(sagitta) < 0.02 * cap_mm_) {
             const Point along = unit(chord);
             const double lead = text.ink.left_mm;
-            bench_.add_filled(set_straight(text, place.start - lead * along, turn_of(along)), name);
+            bench_.add_letters(set_straight(text, place.start - lead * along, turn_of(along)), name);
             return;
         }
         const double half = length(chord) / 2;
         const double radius = (half * half + sagitta * sagitta) / (2 * std::abs(sagitta));
         const Point towards_centre = (sagitta > 0 ? -1.0 : 1.0) * left_of(unit(chord));
         const Point centre = place.middle + radius * towards_centre;
-        bench_.add_filled(set_on_circle(text, centre, radius, turn_of(place.middle - centre), sagitta < 0), name);
+        bench_.add_letters(set_on_circle(text, centre, radius, turn_of(place.middle - centre), sagitta < 0), name);
     }
 
     Bench& bench_;

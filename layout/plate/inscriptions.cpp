@@ -57,7 +57,7 @@ class Inscriber {
                 const Point towards = near_side ? -1.0 * bench_.up : bench_.up;
                 if (!arc_is_clear(field.centre(), outer, inner, turn_of(towards), half_turn, 0.45 * height))
                     continue;
-                bench_.add_filled(set_on_circle(line, field.centre(), base, turn_of(towards), near_side), name);
+                bench_.add_letters(set_on_circle(line, field.centre(), base, turn_of(towards), near_side), name);
                 block_arc(field.centre(), outer + 0.35 * height, inner - 0.35 * height, turn_of(towards), half_turn);
                 return true;
             }
@@ -120,7 +120,7 @@ class Inscriber {
             return false;
         const Point start =
             best.middle - (line.ink.left_mm + line.ink.width_mm() / 2) * right_ - height / 2 * bench_.up;
-        bench_.add_filled(set_straight(line, start, turn_of(right_)), name);
+        bench_.add_letters(set_straight(line, start, turn_of(right_)), name);
         bench_.clear.block(best);
         return true;
     }

@@ -91,4 +91,10 @@ struct Cutting {
     double least_gap_mm = 0.8;   ///< clear material between two lines
 };
 
+/// Widths that the maker names for families of lines; 0: by the order of weight.
+struct LineWidths {
+    double hours_mm = 0.0, dates_mm = 0.0, altitudes_mm = 0.0, azimuths_mm = 0.0, noons_mm = 0.0;
+    std::vector<double> more_hours_mm; ///< beside the plan's more_hours
+};
+
 } // namespace dialwright::layout

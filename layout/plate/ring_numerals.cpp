@@ -143,7 +143,7 @@ class NumeralDrawer {
         const std::string name = row_.name + " " + n.text;
         if (row_.middle.is_round() && !upright()) {
             const double radius = row_.middle.radius_mm() + (heads_out_ ? -height / 2 : height / 2);
-            bench_.add_filled(
+            bench_.add_letters(
                 set_on_circle(line, row_.middle.centre(), radius, turn_of(n.at - row_.middle.centre()), !heads_out_),
                 name);
             return;
@@ -151,8 +151,8 @@ class NumeralDrawer {
         const TurnedBox box = box_of(n, height);
         const Point along{cos(box.turn), sin(box.turn)};
         const double ink_middle = (line.ink.left_mm + line.ink.right_mm) / 2;
-        bench_.add_filled(set_straight(line, box.middle - ink_middle * along - height / 2 * left_of(along), box.turn),
-                          name);
+        bench_.add_letters(set_straight(line, box.middle - ink_middle * along - height / 2 * left_of(along), box.turn),
+                           name);
     }
 
     Bench& bench_;

@@ -2,7 +2,6 @@
 #include "layout/sheet/compensation.hpp"
 
 #include "layout/sheet/measuring.hpp"
-#include "layout/text/figures.hpp"
 
 #include <algorithm>
 #include <cmath>
@@ -11,19 +10,19 @@
 namespace dialwright::layout {
 namespace {
 
-constexpr double k_step_mm = 10, k_text_mm = 3.4, k_line_mm = 5.0;
+constexpr double k_text_mm = 3.4, k_line_mm = 5.0;
 
-/// A line between two points with a tick across each 10 mm, the end ticks long and hair thin.
-void add_long_bar(Sheet& sheet, Point from, bool upright, double length_mm) {
+/// A line with a tick across each step, the end ticks long and hair thin.
+void add_long_bar(Sheet& sheet, Point from, bool upright, double length_mm, double step_mm) {
     Mark line{Layer::engrave, {}, 0.15, false, upright ? "long bar, along" : "long bar, across"};
     const auto at = [&](double along, double aside) {
         return upright ? Point{from.x_mm + aside, from.y_mm + along} : Point{from.x_mm + along, from.y_mm + aside};
     };
     line.paths.push_back(polyline({at(0, 0), at(length_mm, 0)}));
-    const int ticks = int(std::lround(length_mm / k_step_mm));
+    const int ticks = int(std::lround(length_mm / step_mm));
     for (int i = 0; i <= ticks; ++i) {
         const double half = i == 0 || i == ticks ? 6.0 : i % 5 == 0 ? 3.0 : 1.5;
-        line.paths.push_back(polyline({at(i * k_step_mm, -half), at(i * k_step_mm, half)}));
+        line.paths.push_back(polyline({at(i * step_mm, -half), at(i * step_mm, half)}));
     }
     sheet.furniture.push_back(std::move(line));
 }
@@ -51,16 +50,21 @@ Sheet calibration_sheet(const PrintOptions& options) {
     sheet.title = "Calibration of the printer";
     sheet.printable = Box{0, 0, sheet.width_mm, sheet.height_mm}.grown(-options.margin_mm);
     const double left = 14, below = 14; // room for the ticks and the figures
-    const auto whole = [](double mm) { return std::floor(mm / k_step_mm) * k_step_mm; };
+    // What stands in the design must be the bar's very length: bars of half inches where inches are measured.
+    const double step = options.inches ? 12.7 : 10.0;
+    const auto whole = [step](double mm) { return std::floor(mm / step) * step; };
     const double across = whole(sheet.printable.width_mm() - left - 8),
                  along = whole(sheet.printable.height_mm() - below - 8);
     if (across < 50 || along < 50)
         throw ExportError(fmt::format(
             "{} leaves no room for bars to measure: choose a larger paper or a smaller margin.", options.paper.name));
     const Point corner{sheet.printable.left_mm + left, sheet.printable.bottom_mm + below};
-    add_long_bar(sheet, corner, false, across);
-    add_long_bar(sheet, corner, true, along);
-    const auto name = [&](double mm) { return say_length(mm, options.inches) + " printed"; };
+    add_long_bar(sheet, corner, false, across, step);
+    add_long_bar(sheet, corner, true, along, step);
+    const auto length = [&](double mm) {
+        return options.inches ? fmt::format("{:.1f} in", mm / 25.4) : fmt::format("{:.0f} mm", mm);
+    };
+    const auto name = [&](double mm) { return length(mm) + " printed"; };
     sheet.notes.push_back({{corner.x_mm + across / 2, corner.y_mm - 11},
                            name(across) + ", across the feed",
                            3.2,
@@ -88,7 +92,7 @@ Sheet calibration_sheet(const PrintOptions& options) {
          false},
         {"3.  Write what is printed and what you measured into the design:", false},
         {fmt::format("        print:\n          across feed: [{0}, ________]\n          along feed: [{1}, ________]",
-                     say_length(across, options.inches), say_length(along, options.inches)),
+                     length(across), length(along)),
          false},
         {"4.  Make the packet again. Its sheets are then stretched against the printer's error, and their own bars "
          "prove "

@@ -118,6 +118,12 @@ Sections design_around(const Row& row) {
         call_for_joint(design, key);
     if (row.section == "cutting" && (key == "point angle" || key == "depth" || key == "flat"))
         design["cutting"] = {{"tool", "v cutter"}};
+    if ((row.section == "weights" || row.section == "extents") && key != "hours" && key != "dates") {
+        design["hours"] = {{"time", key == "since sunrise" ? "unequal" : "since sunrise"}};
+        design["also"][key] = key == "altitudes" || key == "azimuths" ? "each 15°"
+                              : key == "noon at"                      ? "[{name: x, longitude: 5° E}]"
+                                                                      : "9 to 11";
+    }
     if (row.section == "cutting" && key == "diameter")
         design["cutting"] = {{"tool", "end mill"}};
     if (row.section == "hours" && key == "curves")
@@ -128,6 +134,8 @@ Sections design_around(const Row& row) {
         design["hours"] = {{"time", "since sunrise"}};
     if (row.section == "correction" && (key == "diameter" || key == "dates"))
         design["correction"] = {{"form", key == "dates" ? "table" : "ring"}};
+    if (row.section == "fixing" && key == "to")
+        design["fixing"] = {{"on", "2027-06-14"}};
     if (row.section == "also: noon at")
         design["also"]["noon at"] = key == "name" ? "[{longitude: 5° E, name: " + row.example + "}]"
                                                   : "[{name: x, longitude: " + row.example + "}]";

@@ -183,6 +183,23 @@ TEST_CASE("leans and plain angles", "[cli]") {
     check_refused(plain_angle, {"", "5 mm", "°", "5° 5° "});
 }
 
+TEST_CASE("dates of one year", "[cli][quantity]") {
+    using namespace std::chrono;
+    for (const char* text : {"2027-06-14", "14 June 2027", "14th Jun 2027", "June 14 2027", " 2027-06-14 "}) {
+        CAPTURE(text);
+        const auto date = calendar_date(text);
+        REQUIRE(date);
+        CHECK(*date == 2027y / 6 / 14);
+    }
+    CHECK(*calendar_date("2028-02-29") == 2028y / 2 / 29);
+    check_refused(calendar_date, {"", "2027", "2027-06", "2027-13-01", "2027-06-31", "2027-02-29", "14 June",
+                                  "14-06-2027", "1900-12-31", "2100-01-01", "2027-06-14 x", "2027-6.5-14",
+                                  "14 Jnue 2027", "2027/06/14", "next Monday", "14 June 27", "99999-06-14"});
+    CHECK_THAT(calendar_date("14 June").trouble().message, Catch::Contains("no year"));
+    CHECK(*zone_name("Europe/London") == "Europe/London");
+    check_refused(zone_name, {"", "London time", "Europe/Lundon", "BST and GMT"});
+}
+
 TEST_CASE("days as people write them", "[cli]") {
     using namespace std::chrono;
     for (const char* text : {"14 June", "June 14", "14 jun", "14th June", "June 14th", "06-14", "6-14", "14. June"}) {
@@ -326,6 +343,8 @@ TEST_CASE("random scraps of quantities never trip a reader", "[cli]") {
         if (const auto read = hour_of_day(text))
             CHECK((*read >= 0.0 && *read <= 24.0));
         if (const auto read = day_of_year(text))
+            CHECK(read->ok());
+        if (const auto read = calendar_date(text))
             CHECK(read->ok());
         (void)years(text);
         (void)minutes(text);

@@ -55,7 +55,7 @@ void check(const PlateSolution* one, const Truth& truth) {
 } // namespace
 
 TEST_CASE("Exact lines give an upright plate back, and its figure is the style's", "[restore]") {
-    for (const Truth& truth : {Truth{52, 157, 0, 0}, Truth{-34, 20, 0, 12}, Truth{60, 235, 0, -30},
+    for (const Truth& truth : {Truth{52, 157, 0, 0}, Truth{-34, 20, 0, 12}, Truth{60, 215, 0, -30},
                                Truth{12, 185, 0, 5}, Truth{50, 340, 0, 0}}) {
         INFO(truth.latitude << " " << truth.facing);
         const bool north = truth.facing == 340;
