@@ -1,5 +1,6 @@
 // SPDX-License-Identifier: MIT
 #include "cli/report/survey.hpp"
+#include "cli/design/quantity.hpp"
 #include "cli/report/json_text.hpp"
 #include "cli/report/lines_of_text.hpp"
 #include "cli/report/ranges.hpp"
