@@ -34,7 +34,7 @@ class Help(Bench):
         self.assertRegex(out, r"^dialwright \d+\.\d+\.\d+\n$")
 
     def test_wrong_words(self):
-        for words, said in (([], "--help"), (["mkae"], 'did you mean make?'), (["carve"], "give make, numbers, shadow, check, calibrate, sun, sunlight, fix or accuracy"),
+        for words, said in (([], "--help"), (["mkae"], 'did you mean make?'), (["carve"], "give make, numbers, shadow, check, calibrate, sun, sunlight, fix, accuracy, survey, adjust or restore"),
                             (["make"], "DESIGN"), (["make", "--bogus", "x"], "--bogus"), (["numbers", "--json", "--csv", "x"], "--csv"),
                             (["shadow", "x", "--at"], "--at"), (["check", "a", "b"], "b")):
             status, out, err = run(*words)
