@@ -71,6 +71,16 @@ Read<double> give_length_mm(std::string_view text) {
 }
 
 Read<double> give_angle_deg(std::string_view text) {
+    // Minutes of arc alone, as ranges are often said.
+    if (Read<Scanner> read = Scanner::over(without_sign(text))) {
+        Scanner scan = *read;
+        if (scan.number_next() && scan.sign_next("'", 1)) {
+            const double minutes = scan.take().number;
+            scan.take();
+            if (scan.at_end())
+                return above_zero(text, minutes / 60);
+        }
+    }
     const Read<Angle> angle = plain_angle(without_sign(text));
     if (!angle)
         return angle.trouble();

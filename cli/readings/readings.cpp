@@ -29,18 +29,18 @@ std::optional<Instant> read_time(const Section& reading, std::string_view key,
 
 bool check_sun_up(const Section& reading, std::string_view key, const Site& site, Instant at, const Zone& zone) {
     constexpr std::chrono::hours k_half_day{12};
-    const std::array<Instant, 3> times{at, at - k_half_day, at + k_half_day};
+    // Half a day on or back, whichever is of the same date.
+    const auto of_day = [&](Instant when) { return std::chrono::floor<std::chrono::days>(zone.to_clock(when)); };
+    const Instant other = of_day(at + k_half_day) == of_day(at) ? at + k_half_day : at - k_half_day;
+    const std::array<Instant, 2> times{at, other};
     const std::vector<RealSun> suns = real_suns(site, times);
     const LatitudeSines latitude{site.latitude};
     const auto altitude = [&](std::size_t i) { return suns[i].seen(latitude).altitude(); };
     if (altitude(0) > Angle{})
         return true;
-    std::string hint = "check the day, the time and the zone";
-    for (const std::size_t i : {1, 2})
-        if (altitude(i) > Angle{}) {
-            hint = fmt::format("a.m. and p.m. confused? At {} it was up", say_moment(zone, times[i]));
-            break;
-        }
+    const std::string hint = altitude(1) > Angle{}
+                                 ? fmt::format("a.m. and p.m. confused? At {} it was up", say_moment(zone, other))
+                                 : std::string{"check the day, the time and the zone"};
     reading.error(key,
                   fmt::format("at {} the Sun was {} below the horizon there", say_moment(zone, at),
                               say_arc(altitude(0).in_degrees())),

@@ -28,10 +28,11 @@ std::string fault_words(const WallAnswer& answer) {
     return "clock, board and peg were as good as their ± say";
 }
 
-std::string hour_off_words(double clock_s) {
-    const double hours = clock_s / 3600;
-    const bool whole = std::abs(hours) > 0.9 && std::abs(hours - std::round(hours)) < 0.05;
-    return whole ? " That is a whole hour: was summer time forgotten, or the zone another?" : "";
+/// The clock may have been off by an hour of summer time or of the zone.
+bool whole_hour(const WallAnswer& answer) {
+    const double hours = answer.clock_s.value / 3600, range = answer.clock_s.range / 3600;
+    return answer.fault == Fault::clock && std::abs(hours) > 0.75 &&
+           std::abs(hours - std::round(hours)) < std::max(range, 0.02);
 }
 
 std::string next_words(const SurveyFile& file, const WallSurvey& survey) {
@@ -54,10 +55,9 @@ void judge_clock_and_level(const WallSurvey& survey, SurveyVerdict& verdict) {
                                 "plumb line and rule (\"lean: 0° 10' back ± 0.2°\") may tell them apart");
     } else if (first.fault != Fault::none) {
         verdict.notes.push_back(fault_words(first) +
-                                (first.fault == Fault::clock ? "." + hour_off_words(first.clock_s.value) : "") +
-                                " The facing allows for it; put it right and take another reading to be sure");
+                                ". The facing allows for it; put it right and take another reading to be sure");
     }
-    if (survey.answers.size() > 1 && first.fault == Fault::clock && !hour_off_words(first.clock_s.value).empty())
+    if (std::any_of(survey.answers.begin(), survey.answers.end(), whole_hour))
         verdict.notes.push_back(
             "a clock a whole hour off is likelier than a crooked board: was summer time forgotten, or "
             "the zone another?");
