@@ -194,6 +194,11 @@ AdjustReport report_on(const AdjustFile& file, const DialAdjustment& found, cons
             "the readings fit in more than one way; try the style with the packet's gauge before anything is "
             "moved");
     note_what_helps(file, first, report);
+    constexpr double k_far_deg = 20;
+    if (first.turn.told && std::abs(first.turn.value) - first.turn.range > k_far_deg)
+        report.notes.push_back(
+            "a dial that is turned so far is seldom only fixed wrongly: is the design this dial's, and was it "
+            "read by the right hours?");
     if (!found.checked)
         report.notes.push_back("so few readings do not check each other: take more, from morning to evening");
     return report;

@@ -112,8 +112,10 @@ std::string restore_text(const RestoreFile& file, const PlateFigure& figure, con
     if (figure.substyle_deg.told)
         text.line("  substyle     {}, {}, clockwise from up", say_arc(figure.substyle_deg.value),
                   say_give(figure.substyle_deg.range));
-    text.line("  its hour     {} by the numerals, ± {} min", hour_words(figure.substyle_hour_h.value),
-              fixed(std::max(0.1, 60 * figure.substyle_hour_h.range), 1));
+    if (std::any_of(file.readings.lines.begin(), file.readings.lines.end(),
+                    [](const PlateLine& line) { return line.hour_h.has_value(); }))
+        text.line("  its hour     {} by the numerals, ± {} min", hour_words(figure.substyle_hour_h.value),
+                  fixed(std::max(0.1, 60 * figure.substyle_hour_h.range), 1));
     text.line("  hours run    {}", figure.clockwise ? "clockwise: the style points to the north pole"
                                                     : "anticlockwise: the style points to the south pole");
     if (figure.centre)

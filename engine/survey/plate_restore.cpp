@@ -299,6 +299,8 @@ std::optional<PlateFigure> figure_of(const PlateReadings& readings) {
     figure.off_deg.assign(readings.lines.size(), 0.0);
     figure.off_mm.assign(readings.lines.size(), 0.0);
     figure.hour_h.assign(readings.lines.size(), std::nullopt);
+    for (const Counted& one : counted)
+        figure.counted_deg.push_back(one.hour_deg);
     const VectorXd& x = best->values;
     for (std::size_t i = 0; i < counted.size(); ++i) {
         figure.stray[counted[i].line] = best->left_out[i];

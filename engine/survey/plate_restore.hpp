@@ -47,6 +47,7 @@ struct PlateFigure {
     std::vector<double> off_deg;      ///< each line as cut less as it should be, clockwise
     std::vector<double> off_mm; ///< the same at its outermost point, to the right of the way out; 0 for mere directions
     std::vector<bool> stray;    ///< cut wrong, or read wrong: it did not count
+    std::vector<double> counted_deg;           ///< hours of the lines that count, from noon by the numerals
     std::vector<std::optional<double>> hour_h; ///< of each line; of unreadable ones what it must be, to the quarter
 };
 
@@ -77,7 +78,7 @@ struct PlateFacts {
 };
 
 /// The plates that the lines allow, one or two a fact. Hour lines never tell lean and latitude apart: leaning a plate is as
-/// good as moving it along its meridian.
+/// good as moving it along its meridian. Plates whose lines the Sun would hardly reach are left out.
 [[nodiscard]] std::vector<PlateSolution> solutions_of(const PlateFigure& figure, bool up_known,
                                                       const PlateFacts& facts);
 

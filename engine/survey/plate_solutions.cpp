@@ -5,6 +5,9 @@
 // substyle's hour by the numerals, the plate is ahead of its place's Sun by H0 − H_n, to the half-turn: numerals that count to
 // twelve know no more.
 #include "engine/base/angle.hpp"
+#include "engine/cast/caster.hpp"
+#include "engine/style/style.hpp"
+#include "engine/surface/plane.hpp"
 #include "engine/survey/plate_restore.hpp"
 
 #include <Eigen/Geometry>
@@ -76,11 +79,30 @@ double lean_for_sun_time(const Shape& shape, double side) {
 /// A stand as a function of the shape and of the fact's own figure.
 using Stands = std::function<std::optional<Stand>(const Shape& shape, double fact)>;
 
+/// Whether the Sun ever reaches most of the lines on a plate that stands so. Numerals count to twelve: either half-day will do.
+bool is_lit(const PlateFigure& figure, const Stand& stand) {
+    constexpr double k_most = 0.6; // makers drew some lines that no Sun reaches
+    constexpr Angle k_solstice = Angle::degrees(23.44);
+    const Angle latitude = Angle::degrees(stand.latitude);
+    const Plane plane{frame_of({Angle::degrees(stand.facing), Angle::degrees(stand.lean)}), 1.0};
+    const Style style = style_of(plane.frame(), 1.0, latitude);
+    const Caster<Plane> caster{latitude, plane, GnomonEdges{plane.frame(), style, latitude, 0.0}, Skyline{}};
+    int lit = 0;
+    for (const double hour_deg : figure.counted_deg)
+        for (const double half_day : {0.0, 180.0})
+            if (caster.ever_lit(Angle::degrees(hour_deg - stand.ahead + half_day).signed_turn(),
+                                {-k_solstice, k_solstice})) {
+                ++lit;
+                break;
+            }
+    return lit >= k_most * double(figure.counted_deg.size());
+}
+
 std::optional<PlateSolution> solution(const PlateFigure& figure, Fact fact, const Known& known, const Stands& stands) {
     const Shape shape = figure.fit.values.head<3>();
     const auto here = stands(shape, known.value);
     constexpr double k_most_overhang_deg = 80;
-    if (!here || here->lean < -k_most_overhang_deg || here->lean > 90.001)
+    if (!here || here->lean < -k_most_overhang_deg || here->lean > 90.001 || !is_lit(figure, *here))
         return std::nullopt;
     constexpr double k_step = 1e-4;
     constexpr int k_unknowns = 3;
