@@ -172,6 +172,36 @@ class Adjuster {
     std::vector<RealSun> suns_;
 };
 
+/// One explanation and its fit.
+struct Way {
+    Fault fault;
+    FitTask task;
+    Fit fit;
+};
+
+/// A dial fixed wrongly first, a level one last. Empty where that does not settle.
+std::vector<Way> ways_of(const Adjuster& adjuster) {
+    constexpr double k_once_in = 100;
+    std::vector<Way> ways;
+    for (const Fault fault : {Fault::fixing, Fault::style, Fault::both, Fault::level}) {
+        if ((fault == Fault::style || fault == Fault::both) && !adjuster.style_told())
+            continue;
+        FitTask task = adjuster.task(fault);
+        if (!ways.empty())
+            task.left_out = ways.front().fit.left_out; // the same readings count, so that the ways compare
+        Fit found = ways.empty() ? fit_without_strays(task, k_once_in, 3) : fit(task);
+        if (found.settled)
+            ways.push_back({fault, std::move(task), std::move(found)});
+        else if (fault == Fault::fixing)
+            break;
+    }
+    return ways;
+}
+
+bool fits_better(const Way* a, const Way* b) {
+    return a->fit.misfit < b->fit.misfit;
+}
+
 } // namespace
 
 std::optional<double> reading_of_misfixed(const DialPlan& plan, const MeanYear& year, const Misfixing& misfixing,
@@ -180,59 +210,39 @@ std::optional<double> reading_of_misfixed(const DialPlan& plan, const MeanYear& 
 }
 
 DialAdjustment adjust_dial(const DialReadings& readings, const MeanYear& year) {
-    constexpr double k_rare = 0.001, k_tells = 9.0, k_scattered = 10, k_once_in = 100, k_as_good = 6.0;
+    constexpr double k_rare = 0.001, k_tells = 9.0, k_scattered = 10, k_as_good = 6.0, k_shows = 2.5;
     const Adjuster adjuster{readings, year};
     DialAdjustment made;
     made.style_asked = adjuster.style_told();
     for (std::size_t i = 0; i < readings.readings.size(); ++i)
         made.as_designed_min.push_back(adjuster.off_min(i, {}, 0));
-
-    struct Way {
-        Fault fault;
-        FitTask task;
-        Fit fit;
-    };
-    std::vector<Way> ways;
-    for (const Fault fault : {Fault::fixing, Fault::style, Fault::both, Fault::level}) {
-        if ((fault == Fault::style || fault == Fault::both) && !made.style_asked)
-            continue;
-        FitTask task = adjuster.task(fault);
-        if (!ways.empty())
-            task.left_out = ways.front().fit.left_out;
-        Fit found = ways.empty() ? fit_without_strays(task, k_once_in, 3) : fit(task);
-        if (found.settled)
-            ways.push_back({fault, std::move(task), std::move(found)});
-        else if (fault == Fault::fixing)
-            return made;
-    }
-    const Way& fixing = ways.front();
-    made.checked = fixing.fit.checked();
-    made.too_scattered = made.checked && fixing.fit.noise > k_scattered;
-    std::vector<const Way*> good{&fixing};
+    const std::vector<Way> ways = ways_of(adjuster);
+    if (ways.empty())
+        return made;
+    made.checked = ways.front().fit.checked();
+    made.too_scattered = made.checked && ways.front().fit.noise > k_scattered;
+    std::vector<const Way*> good{&ways.front()};
     for (const Way& way : ways) {
         if (way.fault == Fault::both)
-            made.style_told_deg = 2.5 * way.fit.spread(k_style_height).range_95;
+            made.style_told_deg = k_shows * way.fit.spread(k_style_height).range_95;
         if (way.fault != Fault::style && way.fault != Fault::both)
             continue;
         const bool off = std::min(way.fit.chance_of(k_style_height, k_gauge_deg),
                                   way.fit.chance_of(k_style_right, k_gauge_deg)) < k_rare;
         // Both at once only where neither alone will do.
-        const double best =
-            std::min_element(good.begin(), good.end(),
-                             [](const Way* a, const Way* b) { return a->fit.misfit < b->fit.misfit; })[0]
-                ->fit.misfit;
+        const double best = (*std::min_element(good.begin(), good.end(), fits_better))->fit.misfit;
         if (off && way.fit.misfit < best + (way.fault == Fault::style ? k_tells : -k_tells))
             good.push_back(&way);
     }
-    std::stable_sort(good.begin(), good.end(),
-                     [](const Way* a, const Way* b) { return a->fit.misfit < b->fit.misfit; });
+    std::stable_sort(good.begin(), good.end(), fits_better);
     for (const Way* way : good)
         if (way->fit.misfit < good.front()->fit.misfit + k_tells)
             made.answers.push_back(adjuster.answer(way->fit, way->task, way->fault));
     const AdjustAnswer& first = made.answers.front();
     const bool told = first.turn.told && first.top.told && first.right.told;
-    if (ways.back().fault == Fault::level && (!told || ways.back().fit.misfit < good.front()->fit.misfit + k_as_good))
-        made.if_level = adjuster.answer(ways.back().fit, ways.back().task, Fault::level);
+    const Way& level = ways.back();
+    if (level.fault == Fault::level && (!told || level.fit.misfit < good.front()->fit.misfit + k_as_good))
+        made.if_level = adjuster.answer(level.fit, level.task, Fault::level);
     return made;
 }
 

@@ -275,45 +275,60 @@ std::pair<double, bool> side_of(const Plate& plate, const PlateReadings& reading
     return {side < 0 ? -1.0 : 1.0, std::abs(side) > k_plain * count};
 }
 
-} // namespace
-
-std::optional<PlateFigure> figure_of(const PlateReadings& readings) {
+/// From every start, the answer that leaves the fewest lines out; of equals the one that fits best.
+std::optional<Fit> best_fit(const Plate& plate) {
     constexpr double k_once_in = 25; // of few lines even a bad one hardly stands out more
-    const std::vector<Counted> counted = counted_lines(readings);
-    const Plate plate{readings, counted};
     FitTask task = plate.task();
+    const auto strays = [](const Fit& fit) { return std::count(fit.left_out.begin(), fit.left_out.end(), true); };
     std::optional<Fit> best;
     for (const VectorXd& start : plate.starts(task)) {
         for (int i = 0; i < k_unknowns; ++i)
             task.unknowns[std::size_t(i)].start = start[i];
         Fit made = fit_without_strays(task, k_once_in, 4);
-        const auto strays = [](const Fit& fit) { return std::count(fit.left_out.begin(), fit.left_out.end(), true); };
         if (made.settled &&
             (!best || strays(made) < strays(*best) || (strays(made) == strays(*best) && made.misfit < best->misfit)))
             best = std::move(made);
     }
+    return best;
+}
+
+/// What is said of each line.
+void tell_lines(PlateFigure& figure, const Plate& plate, const std::vector<Counted>& counted,
+                const PlateReadings& readings, const Fit& fit) {
+    const std::size_t count = readings.lines.size();
+    figure.stray.assign(count, false);
+    figure.off_deg.assign(count, 0.0);
+    figure.off_mm.assign(count, 0.0);
+    figure.hour_h.assign(count, std::nullopt);
+    for (std::size_t i = 0; i < counted.size(); ++i) {
+        const Counted& one = counted[i];
+        figure.counted_deg.push_back(one.hour_deg);
+        figure.stray[one.line] = fit.left_out[i];
+        std::tie(figure.off_deg[one.line], figure.off_mm[one.line]) = plate.off(fit.values, one);
+        figure.hour_h[one.line] = readings.lines[one.line].hour_h;
+    }
+    if (counted.size() == count)
+        return;
+    for (std::size_t i = 0; i < count; ++i)
+        if (!readings.lines[i].hour_h) {
+            constexpr double k_quarter_deg = 3.75;
+            const double hour_deg = plate.nearest_hour(fit.values, i, k_quarter_deg);
+            figure.hour_h[i] = hour_deg == 0 ? 12.0 : hour_deg / 15;
+            std::tie(figure.off_deg[i], figure.off_mm[i]) = plate.off(fit.values, {i, hour_deg});
+        }
+}
+
+} // namespace
+
+std::optional<PlateFigure> figure_of(const PlateReadings& readings) {
+    const std::vector<Counted> counted = counted_lines(readings);
+    const Plate plate{readings, counted};
+    std::optional<Fit> best = best_fit(plate);
     if (!best)
         return std::nullopt;
     PlateFigure figure;
-    figure.stray.assign(readings.lines.size(), false);
-    figure.off_deg.assign(readings.lines.size(), 0.0);
-    figure.off_mm.assign(readings.lines.size(), 0.0);
-    figure.hour_h.assign(readings.lines.size(), std::nullopt);
-    for (const Counted& one : counted)
-        figure.counted_deg.push_back(one.hour_deg);
+    tell_lines(figure, plate, counted, readings, *best);
     const VectorXd& x = best->values;
-    for (std::size_t i = 0; i < counted.size(); ++i) {
-        figure.stray[counted[i].line] = best->left_out[i];
-        std::tie(figure.off_deg[counted[i].line], figure.off_mm[counted[i].line]) = plate.off(x, counted[i]);
-        figure.hour_h[counted[i].line] = readings.lines[counted[i].line].hour_h;
-    }
-    for (std::size_t i = 0; i < readings.lines.size(); ++i)
-        if (!readings.lines[i].hour_h && readings.lines[counted.front().line].hour_h) {
-            constexpr double k_quarter_deg = 3.75;
-            const double hour_deg = plate.nearest_hour(x, i, k_quarter_deg);
-            figure.hour_h[i] = hour_deg / 15 == 0 ? 12.0 : hour_deg / 15;
-            std::tie(figure.off_deg[i], figure.off_mm[i]) = plate.off(x, {i, hour_deg});
-        }
     const double height = x[k_height];
     std::tie(figure.side, figure.side_told) = side_of(plate, readings, x);
     figure.centre_told = std::abs(height) > best->spread(k_height).range_95;

@@ -245,73 +245,85 @@ WallReadings swapped(WallReadings readings, WallSurvey::Swap swap) {
     return readings;
 }
 
+/// One explanation and its fit.
+struct Way {
+    WallAnswer::Fault fault;
+    FitTask task;
+    Fit fit;
+};
+
+/// As measured first; then, of shadows enough, with the clock or the board free. Empty where nothing settles.
+std::vector<Way> ways_of(const Survey& survey, std::size_t shadows) {
+    using Fault = WallAnswer::Fault;
+    std::vector<Way> ways;
+    FitTask task = survey.task(Fault::none);
+    Fit found = survey.best(task);
+    if (!found.settled)
+        return ways;
+    ways.push_back({Fault::none, std::move(task), std::move(found)});
+    for (const Fault fault : {Fault::clock, Fault::level}) {
+        if (shadows < 3)
+            break;
+        const Fit& first = ways.front().fit;
+        FitTask other = survey.task(fault);
+        other.left_out = first.left_out; // the same readings count, so that the ways compare
+        for (int i = 0; i < k_unknowns; ++i)
+            other.unknowns[std::size_t(i)].start = first.values[i];
+        other.unknowns[k_facing].known = first.values[k_facing];
+        if (Fit made = fit(other); made.settled)
+            ways.push_back({fault, std::move(other), std::move(made)});
+    }
+    return ways;
+}
+
+/// Of readings that fit no wall: whether they would with a sign changed.
+WallSurvey::Swap swap_that_fits(const WallReadings& readings, double noise) {
+    constexpr double k_far_better = 5;
+    for (const WallSurvey::Swap swap : {WallSurvey::Swap::left_for_right, WallSurvey::Swap::up_for_down}) {
+        const WallReadings other = swapped(readings, swap);
+        const Survey again{other};
+        const Fit made = again.best(again.task(WallAnswer::Fault::none));
+        if (made.settled && made.noise < noise / k_far_better)
+            return swap;
+    }
+    return WallSurvey::Swap::none;
+}
+
 } // namespace
 
 WallSurvey survey_wall(const WallReadings& readings) {
-    using Fault = WallAnswer::Fault;
     constexpr double k_rare = 0.001, k_tells = 9.0; // −2 log likelihood: e^(9/2), some ninety to one
     constexpr double k_shows = 2.5;                 // ranges: what is so far off passes the two tests nearly always
+    constexpr double k_scattered = 10;              // nominal deviations: such readings are of no wall
     const Survey survey{readings};
     WallSurvey made;
     made.sun_span = survey.sun_span();
-
-    struct Way {
-        Fault fault;
-        FitTask task;
-        Fit fit;
-    };
-    std::vector<Way> ways;
-    for (const Fault fault : {Fault::none, Fault::clock, Fault::level}) {
-        if (fault != Fault::none && readings.shadows.size() < 3)
-            break;
-        FitTask task = survey.task(fault);
-        if (fault != Fault::none) { // the same readings count, so that the ways compare
-            task.left_out = ways.front().fit.left_out;
-            for (int i = 0; i < k_unknowns; ++i)
-                task.unknowns[std::size_t(i)].start = ways.front().fit.values[i];
-            task.unknowns[k_facing].known = ways.front().fit.values[k_facing];
-        }
-        Fit found = fault == Fault::none ? survey.best(task) : fit(task);
-        if (found.settled)
-            ways.push_back({fault, std::move(task), std::move(found)});
-        else if (fault == Fault::none)
-            return made;
-    }
+    const std::vector<Way> ways = ways_of(survey, readings.shadows.size());
+    if (ways.empty())
+        return made;
     const Way& as_said = ways.front();
     made.checked = as_said.fit.checked();
     std::vector<const Way*> good{&as_said};
-    double least = as_said.fit.misfit;
     for (std::size_t i = 1; i < ways.size(); ++i) {
         const Way& way = ways[i];
-        const bool clock = way.fault == Fault::clock;
+        const bool clock = way.fault == WallAnswer::Fault::clock;
         const int unknown = clock ? k_clock : k_turn;
         const double thought_to = as_said.task.unknowns[std::size_t(unknown)].known_to;
         (clock ? made.clock_told_s : made.level_told_deg) = k_shows * way.fit.spread(unknown).range_95;
         if (way.fit.chance_of(unknown, thought_to) < k_rare && way.fit.misfit < as_said.fit.misfit - k_tells)
             good.push_back(&way);
-        least = std::min(least, good.back()->fit.misfit);
     }
     std::stable_sort(good.begin(), good.end(),
                      [](const Way* a, const Way* b) { return a->fit.misfit < b->fit.misfit; });
+    const Way& best = *good.front();
     for (const Way* way : good)
-        if (way->fit.misfit < least + k_tells)
+        if (way->fit.misfit < best.fit.misfit + k_tells)
             made.answers.push_back(survey.answer(way->fit, way->task, way->fault));
-
     if (made.checked)
-        made.next = survey.next(good.front()->fit, good.front()->task);
-
-    // Far too scattered for any wall: offsets with a wrong sign?
-    constexpr double k_scattered = 10, k_far_better = 5;
-    const double noise = good.front()->fit.noise;
-    made.too_scattered = made.checked && noise > k_scattered;
+        made.next = survey.next(best.fit, best.task);
+    made.too_scattered = made.checked && best.fit.noise > k_scattered;
     if (made.too_scattered)
-        for (const WallSurvey::Swap swap : {WallSurvey::Swap::left_for_right, WallSurvey::Swap::up_for_down}) {
-            const WallReadings other = swapped(readings, swap);
-            const Survey again{other};
-            const Fit fit = again.best(again.task(Fault::none));
-            if (fit.settled && fit.noise < noise / k_far_better)
-                made.swap = swap;
-        }
+        made.swap = swap_that_fits(readings, best.fit.noise);
     return made;
 }
 
