@@ -1,5 +1,6 @@
 // SPDX-License-Identifier: MIT
 #include "cli/report/restore.hpp"
+#include "cli/commands/asked.hpp"
 #include "cli/commands/commands.hpp"
 #include "cli/commands/said.hpp"
 #include "cli/commission.hpp"
@@ -18,6 +19,7 @@ namespace {
 struct RestoreOptions {
     std::string lines;
     std::string recut, as;
+    SheetOptions sheet;
     bool json = false;
 };
 
@@ -68,6 +70,16 @@ bool write_recut(const RestoreOptions& options, const RestoreFile& file, const R
     return true;
 }
 
+bool write_sheet(const RestoreOptions& options, const RestoreFile& file, const PlateFigure& figure,
+                 const RestoreReport& report) {
+    const auto print = asked_print(options.sheet, nullptr);
+    return print && write_pdf(options.sheet.file, *print, [&] {
+               layout::PrintOptions on = print->options;
+               on.title = file.title.empty() ? std::string{"An old plate"} : file.title;
+               return layout::SheetBook{"Restoring a plate", on.title, restore_sheets(file, figure, report, on)};
+           });
+}
+
 int run_restore(const RestoreOptions& options) {
     const RestoreReading reading = read_restore_file(options.lines);
     tell(reading.errors);
@@ -78,6 +90,8 @@ int run_restore(const RestoreOptions& options) {
     const RestoreReport report = report_on(file, figure);
     tell(report.errors);
     if (!report.errors.empty())
+        return k_error;
+    if (options.sheet.asked() && !write_sheet(options, file, *figure, report))
         return k_error;
     if (!options.recut.empty() && !write_recut(options, file, report))
         return k_error;
@@ -98,6 +112,7 @@ void add_restore(CLI::App& app, int& status) {
     command->add_option("LINES", options->lines, "the file of the plate's lines (docs/restore.md)")->required();
     CLI::Option* recut = command->add_option("--recut", options->recut, "write a design file that cuts it again");
     command->add_option("--as", options->as, "of several plates: upright, level, lean, latitude or sun")->needs(recut);
+    options->sheet.add_to(*command);
     command->add_flag("--json", options->json, "for programs (docs/output-formats.md)");
     command->callback([options, &status] { status = run_restore(*options); });
 }

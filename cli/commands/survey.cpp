@@ -21,7 +21,7 @@ struct SurveyOptions {
     std::string readings;
     std::string into;
     std::string board;
-    std::string paper;
+    SheetOptions sheet;
     bool json = false;
 };
 
@@ -38,7 +38,7 @@ bool write_one(const std::filesystem::path& path, std::string bytes) {
 }
 
 int write_board(const SurveyOptions& options) {
-    const auto print = asked_print({options.board, options.paper}, nullptr);
+    const auto print = asked_print({options.board, options.sheet.paper}, nullptr);
     if (!print)
         return k_error;
     const auto make = [&] {
@@ -50,6 +50,16 @@ int write_board(const SurveyOptions& options) {
         return k_error;
     std::cout << fmt::format("{}: the board at full scale; print it at 100 % and measure its bars\n", options.board);
     return k_fine;
+}
+
+bool write_sheet(const SurveyOptions& options, const SurveyFile& file, const WallSurvey& survey,
+                 const SurveyVerdict& verdict) {
+    const auto print = asked_print(options.sheet, nullptr);
+    return print && write_pdf(options.sheet.file, *print, [&] {
+               layout::PrintOptions on = print->options;
+               on.title = file.title.empty() ? std::string{"Survey of a wall"} : file.title;
+               return layout::SheetBook{"Survey", on.title, survey_sheets(file, survey, verdict, on)};
+           });
 }
 
 /// Facing and lean into a design file.
@@ -98,6 +108,8 @@ int run_survey(const SurveyOptions& options) {
         std::cerr << "--into: these readings are not settled enough to write into a design; nothing was changed\n";
         return k_error;
     }
+    if (options.sheet.asked() && !write_sheet(options, *reading.survey, survey, verdict))
+        return k_error;
     if (!options.into.empty() && !write_into(options.into, survey))
         return k_error;
     std::cout << (options.json ? survey_json(*reading.survey, survey, verdict)
@@ -116,8 +128,8 @@ void add_survey(CLI::App& app, int& status) {
     CLI::App* command = app.add_subcommand("survey", "Find a wall's facing and lean from timed shadows of a peg");
     command->add_option("READINGS", options->readings, "the file of readings (docs/survey.md)");
     command->add_option("--into", options->into, "a design file to write facing and lean into");
-    CLI::Option* board = command->add_option("--board", options->board, "write the board for taking readings, as PDF");
-    command->add_option("--paper", options->paper, "the board's paper [A4]")->needs(board);
+    command->add_option("--board", options->board, "write the board for taking readings, as PDF");
+    options->sheet.add_to(*command);
     command->add_flag("--json", options->json, "for programs (docs/output-formats.md)");
     command->callback([options, &status] { status = run_survey(*options); });
 }

@@ -61,15 +61,8 @@ Json answer_json(const AdjustAnswer& answer, const AdjustWords& words) {
             {"steps", words.steps}};
 }
 
-std::string heading_of(const std::string& text) {
-    std::string made = text;
-    if (!made.empty() && made[0] >= 'a' && made[0] <= 'z')
-        made[0] = static_cast<char>(made[0] - 'a' + 'A');
-    return made;
-}
-
 std::string sentence(const std::string& text) {
-    std::string made = heading_of(text);
+    std::string made = with_capital(text);
     made += '.';
     return made;
 }
@@ -83,7 +76,7 @@ std::string adjust_text(const AdjustFile& file, const DialAdjustment& found, con
     text.line("  every ± here holds 19 times in 20");
     for (const AdjustWords& way : report.ways) {
         text.gap();
-        text.line("{}", way.if_so.empty() ? "As it stands:" : heading_of(way.if_so) + ":");
+        text.line("{}", way.if_so.empty() ? "As it stands:" : with_capital(way.if_so) + ":");
         for (const std::string& one : way.stands)
             text.line("  {}", one);
         if (way.steps.empty() && !way.proved_off)
@@ -130,7 +123,7 @@ std::vector<layout::Sheet> adjust_sheets(const AdjustFile& file, const AdjustRep
         "Every ± holds 19 times in 20. Never look at the Sun: work from the shadow. A heavy plate wants help or gear; "
         "see that it can't slide or fall while it is loose.");
     for (const AdjustWords& way : report.ways) {
-        flow.heading(way.if_so.empty() ? "As it stands" : heading_of(way.if_so));
+        flow.heading(way.if_so.empty() ? "As it stands" : with_capital(way.if_so));
         std::vector<std::string> stands, steps;
         for (const std::string& one : way.stands)
             stands.push_back(sentence(one));

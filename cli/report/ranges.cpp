@@ -42,4 +42,11 @@ std::string say_decimal(const Found& degrees) {
     return fmt::format("{}° ± {}°", fixed(degrees.value, 2), fixed(std::max(0.01, degrees.range), 2));
 }
 
+std::string with_capital(const std::string& text) {
+    std::string made = text;
+    if (!made.empty() && made[0] >= 'a' && made[0] <= 'z')
+        made[0] = static_cast<char>(made[0] - 'a' + 'A');
+    return made;
+}
+
 } // namespace dialwright::cli

@@ -25,4 +25,7 @@ namespace dialwright::cli {
 /// To the nearest minute of arc.
 [[nodiscard]] Angle to_minutes(double degrees);
 
+/// The text with its first letter a capital, as a heading or a sentence begins.
+[[nodiscard]] std::string with_capital(const std::string& text);
+
 } // namespace dialwright::cli

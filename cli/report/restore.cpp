@@ -45,22 +45,6 @@ std::string say_ahead(const RestoreFile& file, const Found& found) {
                        say_arc(found.value / 4), found.value > 0 ? "east" : "west");
 }
 
-void say_way(LinesOfText& text, const RestoreFile& file, const RestoreWay& way) {
-    const PlateSolution& one = way.solution;
-    text.line("{}:{}", supposed(file, one.fact), way.supposed_known ? "   (which is known)" : "");
-    if (one.latitude_deg.told)
-        text.line("  latitude     {}", say_found_latitude(one.latitude_deg));
-    else
-        text.line("  latitude     {}", latitude_text(to_minutes(one.latitude_deg.value)));
-    if (one.facing_deg)
-        text.line("  facing       {}", say_facing(*one.facing_deg));
-    if (one.lean_deg.told)
-        text.line("  lean         {}", say_lean(one.lean_deg));
-    text.line("  hours        {}", one.ahead_min.told ? say_ahead(file, one.ahead_min) : "the place's own by the Sun");
-    for (const std::string& sign : way.speaks)
-        text.line("  - {}", sign);
-}
-
 std::string hour_words(double hours) {
     const long minutes = std::lround(hours * 60) % 720;
     return fmt::format("{}:{:02}", minutes / 60 == 0 ? 12 : minutes / 60, minutes % 60);
@@ -99,6 +83,27 @@ Json way_json(const RestoreWay& way) {
 
 } // namespace
 
+std::string heading_of(const RestoreFile& file, const RestoreWay& way) {
+    std::string text = supposed(file, way.solution.fact);
+    if (way.supposed_known)
+        text += " (which is known)";
+    return text;
+}
+
+std::vector<std::string> words_of(const RestoreFile& file, const RestoreWay& way) {
+    const PlateSolution& one = way.solution;
+    std::vector<std::string> words;
+    words.push_back("latitude     " + (one.latitude_deg.told ? say_found_latitude(one.latitude_deg)
+                                                             : latitude_text(to_minutes(one.latitude_deg.value))));
+    if (one.facing_deg)
+        words.push_back("facing       " + say_facing(*one.facing_deg));
+    if (one.lean_deg.told)
+        words.push_back("lean         " + say_lean(one.lean_deg));
+    words.push_back("hours        " +
+                    (one.ahead_min.told ? say_ahead(file, one.ahead_min) : std::string{"the place's own by the Sun"}));
+    return words;
+}
+
 std::string restore_text(const RestoreFile& file, const PlateFigure& figure, const RestoreReport& report) {
     LinesOfText text;
     text.line("{}", file.title.empty() ? file.file : file.title);
@@ -124,7 +129,11 @@ std::string restore_text(const RestoreFile& file, const PlateFigure& figure, con
     text.line("  every ± here holds 19 times in 20");
     for (const RestoreWay& way : report.ways) {
         text.gap();
-        say_way(text, file, way);
+        text.line("{}:", heading_of(file, way));
+        for (const std::string& one : words_of(file, way))
+            text.line("  {}", one);
+        for (const std::string& sign : way.speaks)
+            text.line("  - {}", sign);
     }
     say_lines(text, file, figure);
     return text.taken();

@@ -2,6 +2,7 @@
 #pragma once
 
 #include "cli/readings/restore_readings.hpp"
+#include "layout/sheet/tiling.hpp"
 
 #include <optional>
 #include <string>
@@ -29,6 +30,14 @@ struct RestoreReport {
 [[nodiscard]] std::string restore_text(const RestoreFile& file, const PlateFigure& figure, const RestoreReport& report);
 /// docs/output-formats.md.
 [[nodiscard]] std::string restore_json(const RestoreFile& file, const PlateFigure& figure, const RestoreReport& report);
+/// The same on paper, with a picture of the lines as they are and as they should be.
+[[nodiscard]] std::vector<layout::Sheet> restore_sheets(const RestoreFile& file, const PlateFigure& figure,
+                                                        const RestoreReport& report,
+                                                        const layout::PrintOptions& options);
+/// "if it stood upright", and what follows from it, a line a figure: "latitude     53° 47' N ± 35'".
+[[nodiscard]] std::string heading_of(const RestoreFile& file, const RestoreWay& way);
+[[nodiscard]] std::vector<std::string> words_of(const RestoreFile& file, const RestoreWay& way);
+
 /// A design file that cuts the plate again.
 [[nodiscard]] std::string recut_design(const RestoreFile& file, const RestoreWay& way);
 

@@ -18,16 +18,6 @@ using Fault = WallAnswer::Fault;
 /// A facing that is known no better than the first spoils a dial by several minutes; than the second, it is no survey.
 constexpr double k_good_facing_deg = 1.0, k_least_facing_deg = 5.0, k_one_moment_deg = 2.0;
 
-std::string fault_words(const WallAnswer& answer) {
-    if (answer.fault == Fault::clock)
-        return fmt::format("the clock was {} {} (± {})", say_seconds(answer.clock_s.value),
-                           answer.clock_s.value > 0 ? "slow" : "fast", say_seconds(answer.clock_s.range));
-    if (answer.fault == Fault::level)
-        return fmt::format("the board was out of plumb by {} {}, its top to the {}", say_arc(answer.level_deg.value),
-                           say_give(answer.level_deg.range), answer.level_deg.value > 0 ? "right" : "left");
-    return "clock, board and peg were as good as their ± say";
-}
-
 /// The clock may have been off by an hour of summer time or of the zone.
 bool whole_hour(const WallAnswer& answer) {
     const double hours = answer.clock_s.value / 3600, range = answer.clock_s.range / 3600;
@@ -115,6 +105,16 @@ void say_answer(LinesOfText& text, const WallAnswer& answer, bool several) {
 }
 
 } // namespace
+
+std::string fault_words(const WallAnswer& answer) {
+    if (answer.fault == Fault::clock)
+        return fmt::format("the clock was {} {} (± {})", say_seconds(answer.clock_s.value),
+                           answer.clock_s.value > 0 ? "slow" : "fast", say_seconds(answer.clock_s.range));
+    if (answer.fault == Fault::level)
+        return fmt::format("the board was out of plumb by {} {}, its top to the {}", say_arc(answer.level_deg.value),
+                           say_give(answer.level_deg.range), answer.level_deg.value > 0 ? "right" : "left");
+    return "clock, board and peg were as good as their ± say";
+}
 
 SurveyVerdict verdict_on(const SurveyFile& file, const WallSurvey& survey) {
     SurveyVerdict verdict;

@@ -2,6 +2,7 @@
 #pragma once
 
 #include "cli/readings/survey_readings.hpp"
+#include "layout/sheet/tiling.hpp"
 
 #include <string>
 #include <utility>
@@ -23,5 +24,12 @@ struct SurveyVerdict {
 [[nodiscard]] std::string survey_text(const SurveyFile& file, const WallSurvey& survey, const SurveyVerdict& verdict);
 /// docs/output-formats.md.
 [[nodiscard]] std::string survey_json(const SurveyFile& file, const WallSurvey& survey, const SurveyVerdict& verdict);
+
+/// The same on paper, with a picture of the shadows.
+[[nodiscard]] std::vector<layout::Sheet> survey_sheets(const SurveyFile& file, const WallSurvey& survey,
+                                                       const SurveyVerdict& verdict,
+                                                       const layout::PrintOptions& options);
+/// "the clock was 4 min 50 s slow (± 12 s)": what has to be wrong for an answer.
+[[nodiscard]] std::string fault_words(const WallAnswer& answer);
 
 } // namespace dialwright::cli

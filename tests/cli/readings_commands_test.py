@@ -55,6 +55,13 @@ class Survey(Bench):
         self.assertEqual([shadow["left_out"] for shadow in answer["shadows"]], [False] * 3 + [True] + [False] * 3)
         self.assertTrue(made["good_to_cut"])
 
+    def test_sheet(self):
+        sheet = self.folder / "survey.pdf"
+        run("survey", self.design(example("survey.md")), "--sheet", sheet)
+        text = subprocess.run(["pdftotext", "-layout", sheet, "-"], capture_output=True, text=True, check=True).stdout
+        for said in ("Facing S 23° 4' E ± 12'", "left out", "Rings: where the answer puts them"):
+            self.assertIn(said, text)
+
     def test_into_changes_two_values_and_nothing_else(self):
         wall = self.design("# mine\n" + WALL.replace("S 23° E", "S 40° E"), "wall.yaml")
         wall.chmod(0o640)
@@ -169,6 +176,13 @@ class Restore(Bench):
         self.assertAlmostEqual(way["latitude_deg"]["value"], 53.9, delta=way["latitude_deg"]["range"])
         self.assertAlmostEqual(way["facing_deg"]["value"], 157, delta=way["facing_deg"]["range"])
         self.assertEqual([line["hour"] for line in made["lines"] if line["left_out"]], ["X"])
+
+    def test_sheet(self):
+        sheet = self.folder / "plate.pdf"
+        run("restore", self.design(example("restore.md")), "--sheet", sheet, "--paper", "Letter")
+        text = subprocess.run(["pdftotext", "-layout", sheet, "-"], capture_output=True, text=True, check=True).stdout
+        for said in ("If it stood upright (which is known)", "cut or read wrong", "Black: as measured"):
+            self.assertIn(said, text)
 
     def test_the_recut_plate_has_the_old_lines(self):
         recut = self.folder / "recut.yaml"
