@@ -36,7 +36,8 @@ constexpr auto k_keys = std::to_array<KnownKey>({
     {"shadows", "down"},
 
     {"", "grazing"},
-    {"grazing", "at"},
+    {"grazing", "begins"},
+    {"grazing", "ceases"},
     {"grazing", "within"},
 
     {"", "compass"},
@@ -50,7 +51,7 @@ constexpr double k_peg_give_mm = 0.5, k_lean_give_deg = 0.3, k_bearing_give_deg 
 /// The moment at which light that grazes a wall begins or ends is judged to a Sun's width: common practice, no source.
 constexpr double k_grazing_give_deg = 0.5;
 constexpr const char* k_shadow_hint = "- {at: 2027-05-03 10:12:30, right: 34 mm, down: 81.5 mm}";
-constexpr const char* k_grazing_hint = "- {at: 2027-05-03 08:02}";
+constexpr const char* k_grazing_hint = "- {begins: 2027-05-03 08:02}";
 
 void read_shadows(SurveyFile& made, const Section& top, std::optional<std::chrono::year_month_day> day) {
     if (const Entry* entry = top.entry("shadows"))
@@ -74,13 +75,21 @@ void read_shadows(SurveyFile& made, const Section& top, std::optional<std::chron
 void read_grazings(SurveyFile& made, const Section& top, std::optional<std::chrono::year_month_day> day) {
     for (const Node* node : mappings_at(top, "grazing", "moment", k_most_readings, k_grazing_hint)) {
         const Section reading{*node, "grazing", top.state()};
-        const auto at = read_time(reading, "at", day, *made.zone);
+        const bool begins = reading.has("begins");
+        if (begins == reading.has("ceases")) {
+            reading.error_here(
+                "this moment is not said to be the one or the other",
+                fmt::format("give when light along the wall begins, or ceases, as in \"{}\"", k_grazing_hint));
+            continue;
+        }
+        const std::string_view key = begins ? "begins" : "ceases";
+        const auto at = read_time(reading, key, day, *made.zone);
         const auto within = reading.read("within", give_seconds);
-        if (!at || !check_sun_up(reading, "at", made.place.site, *at, *made.zone))
+        if (!at || !check_sun_up(reading, key, made.place.site, *at, *made.zone))
             continue;
         // The Sun goes a quarter of a degree in a minute, and no faster past a wall.
         const double give_deg = within ? std::hypot(*within / 240, 0.1) : k_grazing_give_deg;
-        made.readings.grazings.push_back({*at, Angle::degrees(give_deg)});
+        made.readings.grazings.push_back({*at, begins, Angle::degrees(give_deg)});
     }
 }
 

@@ -56,7 +56,14 @@ class Survey {
         for (std::size_t i = 0; i < readings_.grazings.size(); ++i) {
             const SiteDirection sun = sun_of(readings_.shadows.size() + i, x[k_clock]);
             const double off_deg = arc_sine(plane.light(sun)).in_degrees();
-            r[row++] = off_deg / Known{0, readings_.grazings[i].give.in_degrees()}.deviation();
+            // A wall that faces the other way loses the Sun where this one gets it.
+            constexpr double k_later_s = 60;
+            const SiteDirection later = sun_of(readings_.shadows.size() + i, x[k_clock] + k_later_s);
+            const bool begins = plane.light(later) > plane.light(sun);
+            if (begins != readings_.grazings[i].begins)
+                r[row++] = k_unlit;
+            else
+                r[row++] = off_deg / Known{0, readings_.grazings[i].give.in_degrees()}.deviation();
         }
         if (const auto& bearing = readings_.bearing_deg)
             r[row++] = Angle::degrees(bearing->value - x[k_facing]).signed_turn().in_degrees() / bearing->deviation();

@@ -22,7 +22,8 @@ struct PegShadow {
 /// The Sun's middle stood in the wall's own plane: it began or ceased to graze the wall.
 struct Grazing {
     Instant at;
-    Angle give; ///< of the moment's judging, as an angle between Sun and wall (95 %)
+    bool begins = true; ///< the Sun came round to the wall's face; else it left it
+    Angle give;         ///< of the moment's judging, as an angle between Sun and wall (95 %)
 };
 
 /// All that was measured of a wall.

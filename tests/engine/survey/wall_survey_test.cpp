@@ -134,8 +134,13 @@ TEST_CASE("Grazing moments and a compass give a facing, and claim no more", "[su
                 std::abs(sun.azimuth().in_degrees() - azimuth) < 0.05)
                 break;
         REQUIRE(at < end);
-        readings.grazings.push_back({at, Angle::degrees(0.5)});
+        readings.grazings.push_back({at, azimuth < 180, Angle::degrees(0.5)});
     }
+    // The moments alone, with a plumb wall, tell even which side of the building it is.
+    readings.bearing_deg.reset();
+    readings.lean_deg = Known{0, 0.3};
+    CHECK_THAT(survey_wall(readings).answers.front().facing_deg.value, WithinAbs(170, 0.3));
+    readings.lean_deg.reset();
     readings.bearing_deg = Known{165, 10};
     const WallAnswer grazed = survey_wall(readings).answers.front();
     CHECK_THAT(grazed.facing_deg.value, WithinAbs(170, 0.3));
