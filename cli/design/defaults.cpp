@@ -74,6 +74,8 @@ void fill_borders_and_letters(Design& design, Filler& filler, double s) {
                          "1/45 of the plate, and no less than 4 mm");
     filler.note_unless_given("lettering: font", letters.family, "an old-style face that cuts well");
     filler.note_unless_given("lettering: place line", "no", "not asked for");
+    if (design.also.hours.size() + (design.also.altitudes.empty() ? 0 : 1) + (design.also.azimuths.empty() ? 0 : 1) > 1)
+        filler.note_unless_given("lettering: legend", "yes", "so that the figures of each family are told apart");
 }
 
 std::string_view thickness_why(GnomonKind kind) {

@@ -84,6 +84,7 @@ class Delineator {
         for (const int minute : minutes_of(hours)) {
             DialLine line;
             line.family = family_of(hours.time);
+            line.time = hours.time;
             line.set = set;
             line.time_h = minute / 60.0;
             line.step_min = coarsest_step_of(minute);

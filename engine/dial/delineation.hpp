@@ -28,6 +28,7 @@ enum class Family {
 /// One line of the dial, not yet trimmed to the plate's borders.
 struct DialLine {
     Family family = Family::hour;
+    HourTime time = HourTime::sun; ///< of an hour line
     int set = 0;         ///< 0: the plan's own hours; 1, 2, …: its more_hours
     std::string label;   ///< of a date line, of a place
     double time_h = 0.0; ///< of an hour line, on its own scale; of noon elsewhere, by the Sun of this place

@@ -1,7 +1,8 @@
 // SPDX-License-Identifier: MIT
 //
 // Numerals stand in the middle of their band, where the hour's line points. They shrink together until they stand
-// clear of each other; where that does not do, the crowded ones are left out and the maker is told.
+// clear of each other; where that does not do, the crowded ones are left out and the maker is told. The numerals of
+// summer time stand on the same side of the plate as those of the hour, and a word says whose they are.
 #include "layout/plate/bench.hpp"
 #include "layout/plate/numerals.hpp"
 
@@ -17,7 +18,10 @@ struct Row {
     Outline middle, outer, inner;
     double height_mm = 0.0;
     double shift_h = 0.0; ///< added to the hour
-    std::string name;     ///< "numeral ", "summer numeral "
+    std::string name;     ///< "numeral", "summer numeral"
+    const Outline* side_of = nullptr; ///< the row's whose sides the numerals keep to; null for its own
+    double depth_mm = 0.0;            ///< inside that row
+    std::string word;                 ///< beside the row; empty: none
 };
 
 class NumeralDrawer {
@@ -27,30 +31,48 @@ class NumeralDrawer {
     void draw(const std::vector<RingHour>& hours) {
         std::vector<Numeral> all;
         for (const RingHour& hour : hours)
-            if (const auto exit = row_.middle.exit(hour.from, hour.direction))
+            if (const auto exit = place_of(hour))
                 all.push_back({hour.hour, text_of(hour.hour), exit->at, exit->normal});
         double height = row_.height_mm;
-        while (height > 0.55 * row_.height_mm && !all_in_band(all, height))
+        while (height > k_least * row_.height_mm && !all_in_band(all, height))
             height *= 0.95;
-        while (height > 0.72 * row_.height_mm && !all_apart(all, height))
+        const double in_band = height;
+        while (height > k_least * row_.height_mm && !all_apart(all, height))
             height *= 0.95;
-        if (!all_apart(all, height))
+        if (!all_apart(all, height)) { // all small, and some left out, would be worse than these left out alone
+            height = std::min(in_band, k_least_when_dropped * row_.height_mm);
             drop_crowded(all, height);
+        }
         if (height < row_.height_mm && bench_.spec.numeral_height_asked)
             bench_.warnings.push_back(
                 fmt::format("{}s are {:.1f} mm high instead of {:.1f} mm, so that they stand clear", row_.name, height,
                             row_.height_mm));
         for (const Numeral& n : all)
             set(n, height);
+        if (!row_.word.empty() && !all.empty())
+            set_word(all, height);
     }
 
   private:
+    static constexpr double k_least = 0.55, k_least_when_dropped = 0.72; ///< of the height that is wanted
+
     struct Numeral {
         int hour;
         std::string text;
         Point at;     ///< middle of the capitals
         Point normal; ///< of the border, outward
     };
+
+    /// Where an hour's line meets the row; round a corner, on the side on which the other row has the hour.
+    [[nodiscard]] std::optional<Outline::Exit> place_of(const RingHour& hour) const {
+        const auto own = row_.middle.exit(hour.from, hour.direction);
+        if (!row_.side_of || row_.middle.is_round())
+            return own;
+        const auto there = row_.side_of->exit(hour.from, hour.direction);
+        if (!own || !there || dot(own->normal, there->normal) > 0.999)
+            return own;
+        return Outline::Exit{there->at - row_.depth_mm * there->normal, there->normal};
+    }
 
     [[nodiscard]] bool upright() const { return bench_.spec.stand == NumeralStand::upright; }
 
@@ -61,9 +83,9 @@ class NumeralDrawer {
 
     [[nodiscard]] Angle turn_of_numeral(const Numeral& n) const {
         if (upright())
-            return turn_of({bench_.up.y_mm, -bench_.up.x_mm});
+            return turn_of(right_of(bench_.up));
         const Point heads = heads_out_ ? n.normal : -1.0 * n.normal;
-        return turn_of({heads.y_mm, -heads.x_mm});
+        return turn_of(right_of(heads));
     }
 
     /// Keeps a numeral that follows a straight side within that side's length.
@@ -97,11 +119,60 @@ class NumeralDrawer {
 
     /// Whether the numerals stand within the band, which upright ones may be too wide for.
     [[nodiscard]] bool all_in_band(const std::vector<Numeral>& all, double height) const {
-        return !upright() || std::all_of(all.begin(), all.end(), [&](const Numeral& n) {
-            const auto corners = box_of(n, height).corners();
-            return std::all_of(corners.begin(), corners.end(),
-                               [&](Point p) { return row_.outer.contains(p) && !row_.inner.contains(p); });
+        return !upright() ||
+               std::all_of(all.begin(), all.end(), [&](const Numeral& n) { return in_band(box_of(n, height)); });
+    }
+    [[nodiscard]] bool in_band(const TurnedBox& box) const {
+        const auto corners = box.corners();
+        return std::all_of(corners.begin(), corners.end(),
+                           [&](Point p) { return row_.outer.contains(p) && !row_.inner.contains(p); });
+    }
+
+    /// Places all along the row's middle line, with the border's normal.
+    [[nodiscard]] std::vector<Outline::Exit> places_along(double step_mm) const {
+        std::vector<Outline::Exit> places;
+        const Outline& line = row_.middle;
+        if (line.is_round()) {
+            const int parts = std::max(90, int(line.radius_mm() * 6.3 / step_mm));
+            for (int i = 0; i < parts; ++i) {
+                const Point way = clockwise_from_up(Angle::degrees(360.0 * i / parts));
+                places.push_back({line.centre() + line.radius_mm() * way, way});
+            }
+            return places;
+        }
+        for (std::size_t i = 0; i < line.corners().size(); ++i) {
+            const Point a = line.corners()[i], b = line.corners()[(i + 1) % line.corners().size()];
+            const int parts = std::max(1, int(distance(a, b) / step_mm));
+            for (int k = 0; k < parts; ++k)
+                places.push_back({between(a, b, (k + 0.5) / parts), right_of(unit(b - a))});
+        }
+        return places;
+    }
+
+    /// The row's word stands beside its first numeral, on the side away from the second.
+    void set_word(const std::vector<Numeral>& all, double height) {
+        const auto first = std::min_element(all.begin(), all.end(),
+                                            [](const Numeral& a, const Numeral& b) { return a.hour < b.hour; });
+        const auto second = std::min_element(all.begin(), all.end(), [&](const Numeral& a, const Numeral& b) {
+            return std::pair{a.hour == first->hour, a.hour} < std::pair{b.hour == first->hour, b.hour};
         });
+        std::optional<Numeral> best;
+        double best_score = 1e300;
+        for (const Outline::Exit& place : places_along(0.25 * height)) {
+            const Numeral word{-1, row_.word, place.at, place.normal};
+            const TurnedBox box = box_of(word, height);
+            const double score = distance(box.middle, first->at) - 0.3 * distance(box.middle, second->at);
+            if (score >= best_score || !in_band(box) ||
+                std::any_of(all.begin(), all.end(), [&](const Numeral& n) { return box.overlaps(box_of(n, height)); }))
+                continue;
+            best_score = score;
+            best = word;
+        }
+        if (best)
+            set(*best, height);
+        else
+            bench_.warnings.push_back(
+                fmt::format("no room beside the {}s for the word \"{}\"", row_.name, row_.word));
     }
 
     [[nodiscard]] bool all_apart(const std::vector<Numeral>& all, double height) const {
@@ -166,12 +237,15 @@ std::vector<Row> rows_of(const Bench& bench) {
     const double height = std::min(bench.spec.lettering.numeral_height_mm, 0.9 * band);
     const auto at = [&](double part) { return bench.rings.outer.inset(part * band).value_or(bench.rings.outer); };
     if (!(bench.spec.summer_shift_h > 0))
-        return {{at(0.5), bench.rings.outer, bench.rings.numerals, height, 0.0, "numeral"}};
+        return {{at(0.5), bench.rings.outer, bench.rings.numerals, height, 0.0, "numeral", nullptr, 0.0,
+                 ""}};
     constexpr double k_border = 0.62;
     return {
-        {at(k_border / 2), bench.rings.outer, at(k_border), std::min(height, 0.66 * k_border * band), 0.0, "numeral"},
+        {at(k_border / 2), bench.rings.outer, at(k_border), std::min(height, 0.66 * k_border * band), 0.0, "numeral",
+         nullptr, 0.0, ""},
         {at((1 + k_border) / 2), at(k_border), bench.rings.numerals,
-         std::min(0.6 * height, 0.58 * (1 - k_border) * band), bench.spec.summer_shift_h, "summer numeral"}};
+         std::min(0.6 * height, 0.58 * (1 - k_border) * band), bench.spec.summer_shift_h, "summer numeral", nullptr,
+         band / 2, bench.spec.summer_word}};
 }
 
 } // namespace
@@ -179,7 +253,9 @@ std::vector<Row> rows_of(const Bench& bench) {
 void draw_numerals(Bench& bench, const std::vector<RingHour>& hours, bool heads_out) {
     if (bench.spec.borders.chapter_ring_mm <= 0 || bench.spec.lettering.numeral_height_mm <= 0)
         return;
-    const std::vector<Row> rows = rows_of(bench);
+    std::vector<Row> rows = rows_of(bench);
+    if (rows.size() > 1)
+        rows.back().side_of = &rows.front().middle;
     for (const Row& row : rows)
         NumeralDrawer{bench, row, heads_out}.draw(hours);
     if (rows.size() > 1)
