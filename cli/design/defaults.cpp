@@ -60,7 +60,9 @@ void fill_borders_and_letters(Design& design, Filler& filler, double s) {
     Borders& borders = design.borders;
     LetteringChoice& letters = design.lettering;
     filler.fill_tidy(borders.margin_mm, "borders: margin", std::clamp(0.02 * s, 3.0, 12.0), "1/50 of the plate");
-    filler.fill_tidy(borders.chapter_ring_mm, "borders: chapter ring", 0.10 * s, "1/10 of the plate");
+    const bool on_field = counts_from_horizon(design.hours.time);
+    filler.fill_tidy(borders.chapter_ring_mm, "borders: chapter ring", on_field ? 0.0 : 0.10 * s,
+                     on_field ? "these hours bear their figures on the field" : "1/10 of the plate");
     const bool off = centre_is_off(design.plate);
     filler.fill_tidy(borders.inner_mm, "borders: inner border", off ? 0.0 : 0.05 * s,
                      off ? "the centre is off the plate" : "1/20 of the plate");

@@ -104,7 +104,8 @@ struct Dates {
     std::vector<NamedDay> days;
     bool labels = true;
     LineWeight weight;
-    std::optional<std::pair<double, double>> hours; ///< from and to, on the dial's scale where that is of the Sun or the zone
+    std::optional<std::pair<double, double>>
+        hours; ///< from and to, on the dial's scale where that is of the Sun or the zone
 };
 
 /// The plate that says how to come from the dial to the clock.

@@ -204,18 +204,16 @@ FacePlan plan_of(const Design& design, const MeanYear& year, bool upper_face) {
     spec.lettering = design.lettering;
     spec.cutting = design.cutting;
     const double tool_mm = design.cutting.line_width_mm;
-    spec.widths = {design.hours.look.weight.of(tool_mm),
-                   design.dates.weight.of(tool_mm),
-                   design.also.altitude_look.weight.of(tool_mm),
-                   design.also.azimuth_look.weight.of(tool_mm),
-                   design.also.noon_look.weight.of(tool_mm),
-                   {}};
+    spec.widths = {design.hours.look.weight.of(tool_mm),         design.dates.weight.of(tool_mm),
+                   design.also.altitude_look.weight.of(tool_mm), design.also.azimuth_look.weight.of(tool_mm),
+                   design.also.noon_look.weight.of(tool_mm),     {}};
     for (const MoreHours& more : design.also.hours)
         spec.widths.more_hours_mm.push_back(more.look.weight.of(tool_mm));
     spec.numerals = design.hours.numerals;
     spec.stand = design.hours.stand;
     spec.numeral_count = design.hours.count;
-    spec.divide_min = has_straight_lines(design.hours.time) && design.hours.reach == HourExtent::style ? design.hours.divide_min : 0;
+    spec.divide_min =
+        has_straight_lines(design.hours.time) && design.hours.reach == HourExtent::style ? design.hours.divide_min : 0;
     if (design.hours.summer_numerals) {
         const SummerNumerals summer = summer_numerals(*zone, design.years.first);
         spec.summer_shift_h = summer.shift_h;

@@ -242,8 +242,7 @@ layout::Face with_free_nodus(const FacePlan& plan, const MeanYear& year) {
 } // namespace
 
 std::vector<DesignError> what_misses_the_plate(const Design& design, const MeanYear& year,
-                                               const std::vector<FacePlan>& plans,
-                                               std::vector<layout::Face>& faces) {
+                                               const std::vector<FacePlan>& plans, std::vector<layout::Face>& faces) {
     std::vector<DesignError> errors;
     for (std::size_t i = 0; i < faces.size(); ++i) {
         if (std::none_of(faces[i].lines.begin(), faces[i].lines.end(),
@@ -267,8 +266,8 @@ std::vector<DesignError> what_misses_the_plate(const Design& design, const MeanY
         for (const std::string& label : lost)
             all += (all.empty() ? "" : ", ") + label;
         faces[i].warnings.push_back(
-            fmt::format("a nodus {} above the plate throws {} of its date lines off it ({}): about {} would keep more", given,
-                        lost.size(), all, works));
+            fmt::format("a nodus {} above the plate throws {} of its date lines off it ({}): about {} would keep more",
+                        given, lost.size(), all, works));
     }
     return errors;
 }

@@ -44,9 +44,8 @@ std::vector<DrawnFamily> drawn_families(const FacePlan& plan, const layout::Face
         DrawnFamily family{words.name, words.lines, false, line.width_mm, season_of(plan.dial, line.family, line.set),
                            "",         ""};
         const auto figured =
-            std::find_if(face.families.begin(), face.families.end(), [&](const layout::FiguredFamily& f) {
-                return f.family == line.family && f.set == line.set;
-            });
+            std::find_if(face.families.begin(), face.families.end(),
+                         [&](const layout::FiguredFamily& f) { return f.family == line.family && f.set == line.set; });
         if (figured != face.families.end()) {
             family.figures = layout::say_dress(figured->dress);
             family.sample = figured->sample;

@@ -16,8 +16,8 @@ struct DrawnFamily {
     bool in_ring = false;
     double width_mm = 0.0;         ///< of its widest line
     std::optional<Season> between; ///< declinations that it is drawn for; nothing: the whole year
-    std::string figures;           ///< how its labels are set: "figures, italic"; empty where they are words or numerals
-    std::string sample;            ///< one of these labels
+    std::string figures; ///< how its labels are set: "figures, italic"; empty where they are words or numerals
+    std::string sample;  ///< one of these labels
 };
 
 /// In the order of the face's lines.

@@ -54,14 +54,14 @@ Json more_line(const layout::DrawnLine& line) {
 Json families_json(const FacePlan& plan, const layout::Face& face) {
     Json list = Json::array();
     for (const DrawnFamily& family : drawn_families(plan, face))
-        list.push_back({{"family", family.name},
-                        {"in_ring", family.in_ring},
-                        {"width_mm", number(family.width_mm)},
-                        {"declinations_deg", family.between
-                                                 ? Json::array({number(family.between->least.in_degrees()),
+        list.push_back(
+            {{"family", family.name},
+             {"in_ring", family.in_ring},
+             {"width_mm", number(family.width_mm)},
+             {"declinations_deg", family.between ? Json::array({number(family.between->least.in_degrees()),
                                                                 number(family.between->greatest.in_degrees())})
                                                  : Json(nullptr)},
-                        {"figures", family.figures.empty() ? Json(nullptr) : Json(family.figures)}});
+             {"figures", family.figures.empty() ? Json(nullptr) : Json(family.figures)}});
     return list;
 }
 

@@ -169,8 +169,7 @@ class Delineator {
         if (!line.pieces.empty())
             return true;
         for (int i = 0; i <= path.steps; ++i)
-            if (const auto sky = path.at(path.first + (path.last - path.first) * i / path.steps);
-                sky && shines(*sky))
+            if (const auto sky = path.at(path.first + (path.last - path.first) * i / path.steps); sky && shines(*sky))
                 return true;
         return false;
     }

@@ -29,12 +29,12 @@ enum class Family {
 struct DialLine {
     Family family = Family::hour;
     HourTime time = HourTime::sun; ///< of an hour line
-    int set = 0;         ///< 0: the plan's own hours; 1, 2, …: its more_hours
-    std::string label;   ///< of a date line, of a place
-    double time_h = 0.0; ///< of an hour line, on its own scale; of noon elsewhere, by the Sun of this place
-    Angle level;         ///< of an altitude circle or an azimuth line
-    int step_min = 60;   ///< the coarsest of 60, 30, 15, 10, 5, 2, 1 minutes that the time is a whole number of
-    Angle hour_angle;    ///< of an hour line; of the mean Sun for the clock's
+    int set = 0;                   ///< 0: the plan's own hours; 1, 2, …: its more_hours
+    std::string label;             ///< of a date line, of a place
+    double time_h = 0.0;           ///< of an hour line, on its own scale; of noon elsewhere, by the Sun of this place
+    Angle level;                   ///< of an altitude circle or an azimuth line
+    int step_min = 60; ///< the coarsest of 60, 30, 15, 10, 5, 2, 1 minutes that the time is a whole number of
+    Angle hour_angle;  ///< of an hour line; of the mean Sun for the clock's
     std::optional<Angle> direction;   ///< of a straight hour line, from the centre, clockwise from +v
     std::optional<Angle> declination; ///< of a date line
     std::vector<PlatePolyline> pieces;

@@ -72,7 +72,7 @@ struct DialPlan {
     Skyline skyline;
     HourPlan hours;                   ///< those of the chapter ring
     std::vector<HourPlan> more_hours; ///< drawn on the field beside them
-    Angle horizon;                    ///< the Sun's altitude at rising and setting, for hours that count from them: 0° or −50′
+    Angle horizon; ///< the Sun's altitude at rising and setting, for hours that count from them: 0° or −50′
     std::vector<Angle> altitudes, azimuths;
     std::vector<PlaceNoon> noons;
     std::optional<Season> altitudes_between, azimuths_between, noons_between; ///< as HourPlan::between

@@ -58,6 +58,13 @@ struct Bench {
 /// Drops what a label has left of a line on both its sides: crumbs that a tool would only spoil.
 void drop_scraps(std::vector<Polyline>& pieces, double width_mm);
 
+/// The last part (0 to 1) of a straight line.
+[[nodiscard]] inline Polyline end_part(const Polyline& line, double part) {
+    return {between(line.back(), line.front(), part), line.back()};
+}
+/// How much of its line the mark of a quarter hour takes at either end where it stands in the field.
+inline constexpr double k_field_mark = 0.10;
+
 /// Where a whole hour's line points to in the chapter ring.
 struct RingHour {
     int hour;

@@ -62,7 +62,7 @@ struct Rings {
 struct DrawnLine {
     Family family = Family::hour;
     HourTime time = HourTime::sun; ///< of an hour line
-    int set = 0; ///< as DialLine::set
+    int set = 0;                   ///< as DialLine::set
     int step_min = 60;
     Angle level;       ///< of an altitude circle or an azimuth line
     std::string label; ///< as it is engraved: the numeral of a whole hour, "9:15" between, a date line's label
@@ -82,7 +82,7 @@ struct Face {
     double gnomon_foot_mm = 0.0;  ///< length of the gnomon's foot along the substyle
     std::vector<DrawnLine> lines; ///< the ring's hours by time, other sets of hours by time, what is no hour, dates
     std::vector<FiguredFamily> families; ///< whose labels on the field are figures
-    Drawing drawing;              ///< turned so that the reader's up is the page's
+    Drawing drawing;                     ///< turned so that the reader's up is the page's
     std::vector<std::string> warnings;
 };
 

@@ -13,7 +13,8 @@ std::string line_name(Family family, HourTime time, int set, const std::string& 
 std::string by_family(const std::vector<Named>& lines) {
     std::vector<Named> groups;
     for (const auto& [family, label] : lines) {
-        const auto same = std::find_if(groups.begin(), groups.end(), [&f = family](const Named& g) { return g.first == f; });
+        const auto same =
+            std::find_if(groups.begin(), groups.end(), [&f = family](const Named& g) { return g.first == f; });
         if (same == groups.end())
             groups.emplace_back(family, label);
         else

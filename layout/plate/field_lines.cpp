@@ -94,13 +94,17 @@ class FieldDrawer {
                              : line.step_min == 15 ? bench_.quarter_hour_reach_mm()
                                                    : 0.0;
         const auto inside = reach > 0 ? bench_.rings.divisions.inset(reach) : std::nullopt;
-        if (!inside)
-            return;
-        for (const Polyline& part : on_field(line))
-            for (const Polyline& mark : clipped(part, {{}, {*inside}})) {
+        for (const Polyline& part : on_field(line)) {
+            std::vector<Polyline> marks;
+            if (inside)
+                marks = clipped(part, {{}, {*inside}});
+            else if (bench_.divides_in_field())
+                marks = {end_part(part, k_field_mark), end_part({part.back(), part.front()}, k_field_mark)};
+            for (const Polyline& mark : marks) {
                 room_.block(mark);
                 room_without_hours_.block(mark);
             }
+        }
     }
 
     void block_lines() {
@@ -130,6 +134,8 @@ class FieldDrawer {
     }
 
     void place_label(const DialLine& line) {
+        if (on_field(line).empty())
+            return;
         const std::string label = field_label(line, dress(line));
         const auto lettered = [&](double part) {
             return bench_.letters(dress(line).italic).line(label, part * cap_mm_, 0.04 * part * cap_mm_);
@@ -254,8 +260,8 @@ class FieldDrawer {
         const double half = text.ink.width_mm() / 2;
         const Point right = right_of(bench_.up);
         const Point whole_run = rule.point(s + half) - rule.point(s - half);
-        if (length(whole_run) < 1.6 * half)
-            return;                                                   // doubled back
+        if (length(whole_run) < 1.9 * half) // bends by more than letters can follow, or is doubled back
+            return;
         const double sense = dot(whole_run, right) >= 0 ? 1.0 : -1.0; // reads to the reader's right
         LabelPlace place;
         const int chunks = std::max(2, int(std::ceil(2 * half / (1.5 * cap_mm_))));

@@ -143,11 +143,8 @@ class HourDrawer {
     }
 
     /// The last `wanted_mm` of a ray's field part.
-    [[nodiscard]] static Polyline end_part(const Polyline& field, double wanted_mm) {
-        const double whole = distance(field.front(), field.back());
-        if (wanted_mm >= whole)
-            return field;
-        return {between(field.back(), field.front(), wanted_mm / whole), field.back()};
+    [[nodiscard]] static Polyline last_mm(const Polyline& field, double wanted_mm) {
+        return end_part(field, std::min(1.0, wanted_mm / distance(field.front(), field.back())));
     }
 
     void draw_ray(const Ray& ray) {
@@ -174,7 +171,7 @@ class HourDrawer {
         const double across = step >= 10 ? 1.0 : step == 5 ? 0.7 : 0.45;
         Polyline mark{between(ray.tick.back(), ray.tick.front(), across), ray.tick.back()};
         if (into_field > 0)
-            mark.front() = end_part(ray.field.back(), into_field).front();
+            mark.front() = last_mm(ray.field.back(), into_field).front();
         bench_.add_line(*ray.line, mark, label_of(*ray.line), width);
     }
 
@@ -188,11 +185,12 @@ class HourDrawer {
                 bench_.add_line(*ray.line, piece, label, width);
             return;
         }
-        const double mark = step == 15 ? 0.10 : step >= 5 ? 0.06 : 0.04;
+        const double part = step == 15 ? k_field_mark : step >= 5 ? 0.6 * k_field_mark : 0.4 * k_field_mark;
         const Polyline &first = ray.field.front(), &last = ray.field.back();
-        const double run = distance(first.front(), last.back());
-        bench_.add_line(*ray.line, end_part({first.back(), first.front()}, mark * run), label, width);
-        bench_.add_line(*ray.line, end_part(last, mark * run), label, width);
+        std::vector<Polyline> marks{end_part({first.back(), first.front()}, part), end_part(last, part)};
+        drop_scraps(marks, width);
+        for (const Polyline& mark : marks)
+            bench_.add_line(*ray.line, mark, label, width);
     }
 
     [[nodiscard]] std::string label_of(const DialLine& line) const {

@@ -98,8 +98,7 @@ class Inscriber {
         if (!middle)
             return false;
         box.middle = *middle;
-        const Point start =
-            *middle - (line.ink.left_mm + line.ink.width_mm() / 2) * right_ - height / 2 * bench_.up;
+        const Point start = *middle - (line.ink.left_mm + line.ink.width_mm() / 2) * right_ - height / 2 * bench_.up;
         bench_.add_letters(set_straight(line, start, turn_of(right_)), name);
         bench_.clear.block(box);
         return true;
@@ -123,12 +122,13 @@ std::optional<Point> find_room(const Bench& bench, double half_width_mm, double 
             const Point at = middle + (reach / 2 * column / 24.0) * right + (reach / 2 * row / 40.0) * bench.up;
             if (bench.clear.clearance_mm(at) < wanted_mm + std::min(half_width_mm, half_height_mm))
                 continue;
-            const double clearance = bench.clear.clearance_mm(TurnedBox{at, half_width_mm, half_height_mm, turn_of(right)});
+            const double clearance =
+                bench.clear.clearance_mm(TurnedBox{at, half_width_mm, half_height_mm, turn_of(right)});
             if (clearance < wanted_mm)
                 continue;
             // Room counts up to four times what is wanted; then the middle line; then low rather than high.
-            const double score = std::min(clearance, 4 * wanted_mm) -
-                                 wish.middle * std::abs(column) / 24.0 * reach / 2 - 0.002 * row;
+            const double score =
+                std::min(clearance, 4 * wanted_mm) - wish.middle * std::abs(column) / 24.0 * reach / 2 - 0.002 * row;
             if (score > best_score) {
                 best_score = score;
                 best = at;

@@ -1,7 +1,8 @@
 // SPDX-License-Identifier: MIT
 //
-// Numerals stand in the middle of their band, where the hour's line points. They shrink together until they stand
-// clear of each other; where that does not do, the crowded ones are left out and the maker is told. The numerals of
+// Numerals stand in the middle of their band, where the hour's line points. They shrink together, and on a straight side
+// slide a little apart, until they stand clear of each other; where that does not do, the crowded ones are left out and
+// the maker is told. The numerals of
 // summer time stand on the same side of the plate as those of the hour, and a word says whose they are.
 #include "layout/plate/bench.hpp"
 #include "layout/plate/numerals.hpp"
@@ -17,8 +18,8 @@ namespace {
 struct Row {
     Outline middle, outer, inner;
     double height_mm = 0.0;
-    double shift_h = 0.0; ///< added to the hour
-    std::string name;     ///< "numeral", "summer numeral"
+    double shift_h = 0.0;             ///< added to the hour
+    std::string name;                 ///< "numeral", "summer numeral"
     const Outline* side_of = nullptr; ///< the row's whose sides the numerals keep to; null for its own
     double depth_mm = 0.0;            ///< inside that row
     std::string word;                 ///< beside the row; empty: none
@@ -32,14 +33,15 @@ class NumeralDrawer {
         std::vector<Numeral> all;
         for (const RingHour& hour : hours)
             if (const auto exit = place_of(hour))
-                all.push_back({hour.hour, text_of(hour.hour), exit->at, exit->normal});
+                all.push_back({hour.hour, text_of(hour.hour), exit->at, exit->normal, 0.0});
         double height = row_.height_mm;
         while (height > k_least * row_.height_mm && !all_in_band(all, height))
             height *= 0.95;
         const double in_band = height;
-        while (height > k_least * row_.height_mm && !all_apart(all, height))
+        while (height > k_least * row_.height_mm && !all_apart(all, height) && !slid_apart(all, height))
             height *= 0.95;
-        if (!all_apart(all, height)) { // all small, and some left out, would be worse than these left out alone
+        if (!all_apart(all, height) &&
+            !slid_apart(all, height)) { // all small, and some left out, would be worse than these left out alone
             height = std::min(in_band, k_least_when_dropped * row_.height_mm);
             drop_crowded(all, height);
         }
@@ -59,8 +61,9 @@ class NumeralDrawer {
     struct Numeral {
         int hour;
         std::string text;
-        Point at;     ///< middle of the capitals
-        Point normal; ///< of the border, outward
+        Point at;             ///< middle of the capitals
+        Point normal;         ///< of the border, outward
+        double slid_mm = 0.0; ///< from its place to the left of the normal
     };
 
     /// Where an hour's line meets the row; round a corner, on the side on which the other row has the hour.
@@ -71,7 +74,20 @@ class NumeralDrawer {
         const auto there = row_.side_of->exit(hour.from, hour.direction);
         if (!own || !there || dot(own->normal, there->normal) > 0.999)
             return own;
-        return Outline::Exit{there->at - row_.depth_mm * there->normal, there->normal};
+        return Outline::Exit{kept_between_corners(there->at - row_.depth_mm * there->normal, there->normal),
+                             there->normal};
+    }
+
+    /// The nearest place on the row's own side that looks the same way.
+    [[nodiscard]] Point kept_between_corners(Point at, Point normal) const {
+        const std::vector<Point>& corners = row_.middle.corners();
+        for (std::size_t i = 0; i < corners.size(); ++i) {
+            const Point a = corners[i], b = corners[(i + 1) % corners.size()];
+            const Point along = unit(b - a);
+            if (dot(right_of(along), normal) > 0.999 && std::abs(dot(at - a, normal)) < 1e-3)
+                return a + std::clamp(dot(at - a, along), 0.0, distance(a, b)) * along;
+        }
+        return at;
     }
 
     [[nodiscard]] bool upright() const { return bench_.spec.stand == NumeralStand::upright; }
@@ -92,28 +108,28 @@ class NumeralDrawer {
     [[nodiscard]] Point kept_on_side(const Numeral& n, double half_width_mm) const {
         if (row_.middle.is_round())
             return n.at;
-        const Point along = left_of(n.normal);
+        const Point along = left_of(n.normal), at = n.at + n.slid_mm * along;
         const auto room = [&](double way) {
             double least = 1e300;
             for (const Point& corner : row_.middle.corners())
-                if (const double ahead = dot(corner - n.at, along) * way;
-                    ahead > -1e-6 && std::abs(dot(corner - n.at, n.normal)) < 1e-3)
+                if (const double ahead = dot(corner - at, along) * way;
+                    ahead > -1e-6 && std::abs(dot(corner - at, n.normal)) < 1e-3)
                     least = std::min(least, ahead);
             return least;
         };
         const double ahead = room(1), behind = room(-1);
         if (ahead + behind < 2 * half_width_mm || ahead > 1e200 || behind > 1e200)
-            return n.at;
+            return at;
         const double shift = ahead < half_width_mm    ? ahead - half_width_mm
                              : behind < half_width_mm ? half_width_mm - behind
                                                       : 0.0;
-        return n.at + shift * along;
+        return at + shift * along;
     }
 
     [[nodiscard]] TurnedBox box_of(const Numeral& n, double height) const {
         const LetteredLine line = bench_.lettering.line(n.text, height, 0.06 * height);
         const double half_width = line.ink.width_mm() / 2;
-        const Point at = upright() ? n.at : kept_on_side(n, half_width + 0.2 * height);
+        const Point at = upright() ? n.at + n.slid_mm * left_of(n.normal) : kept_on_side(n, half_width + 0.2 * height);
         return {at, half_width + 0.22 * height, height / 2, turn_of_numeral(n)};
     }
 
@@ -159,7 +175,7 @@ class NumeralDrawer {
         std::optional<Numeral> best;
         double best_score = 1e300;
         for (const Outline::Exit& place : places_along(0.25 * height)) {
-            const Numeral word{-1, row_.word, place.at, place.normal};
+            const Numeral word{-1, row_.word, place.at, place.normal, 0.0};
             const TurnedBox box = box_of(word, height);
             const double score = distance(box.middle, first->at) - 0.3 * distance(box.middle, second->at);
             if (score >= best_score || !in_band(box) ||
@@ -171,8 +187,7 @@ class NumeralDrawer {
         if (best)
             set(*best, height);
         else
-            bench_.warnings.push_back(
-                fmt::format("no room beside the {}s for the word \"{}\"", row_.name, row_.word));
+            bench_.warnings.push_back(fmt::format("no room beside the {}s for the word \"{}\"", row_.name, row_.word));
     }
 
     [[nodiscard]] bool all_apart(const std::vector<Numeral>& all, double height) const {
@@ -184,6 +199,34 @@ class NumeralDrawer {
                 if (boxes[i].overlaps(boxes[k]))
                     return false;
         return true;
+    }
+
+    /// Slides numerals of one side apart, each by no more than a fifth of its width, so that it still tells its line.
+    /// @return whether all stand apart then; if not they are back in their places
+    [[nodiscard]] bool slid_apart(std::vector<Numeral>& all, double height) const {
+        if (row_.middle.is_round())
+            return false;
+        constexpr double k_most = 0.2;
+        const auto push = [&](Numeral& n, double by_mm) {
+            const double most = k_most * 2 * box_of(n, height).half_width_mm;
+            n.slid_mm = std::clamp(n.slid_mm + by_mm, -most, most);
+        };
+        for (int round = 0; round < 30 && !all_apart(all, height); ++round)
+            for (std::size_t i = 0; i < all.size(); ++i)
+                for (std::size_t k = i + 1; k < all.size(); ++k) {
+                    const TurnedBox a = box_of(all[i], height), b = box_of(all[k], height);
+                    if (dot(all[i].normal, all[k].normal) < 0.999 || !a.overlaps(b))
+                        continue;
+                    const double apart = dot(b.middle - a.middle, left_of(all[i].normal));
+                    const double lacks = 0.51 * (a.half_width_mm + b.half_width_mm - std::abs(apart));
+                    push(all[i], apart > 0 ? -lacks : lacks);
+                    push(all[k], apart > 0 ? lacks : -lacks);
+                }
+        if (all_apart(all, height) && all_in_band(all, height))
+            return true;
+        for (Numeral& n : all)
+            n.slid_mm = 0.0;
+        return false;
     }
 
     /// Noon stays before all, then the quarters of the day and their halves, then the others.
@@ -237,15 +280,13 @@ std::vector<Row> rows_of(const Bench& bench) {
     const double height = std::min(bench.spec.lettering.numeral_height_mm, 0.9 * band);
     const auto at = [&](double part) { return bench.rings.outer.inset(part * band).value_or(bench.rings.outer); };
     if (!(bench.spec.summer_shift_h > 0))
-        return {{at(0.5), bench.rings.outer, bench.rings.numerals, height, 0.0, "numeral", nullptr, 0.0,
-                 ""}};
+        return {{at(0.5), bench.rings.outer, bench.rings.numerals, height, 0.0, "numeral", nullptr, 0.0, ""}};
     constexpr double k_border = 0.62;
-    return {
-        {at(k_border / 2), bench.rings.outer, at(k_border), std::min(height, 0.66 * k_border * band), 0.0, "numeral",
-         nullptr, 0.0, ""},
-        {at((1 + k_border) / 2), at(k_border), bench.rings.numerals,
-         std::min(0.6 * height, 0.58 * (1 - k_border) * band), bench.spec.summer_shift_h, "summer numeral", nullptr,
-         band / 2, bench.spec.summer_word}};
+    return {{at(k_border / 2), bench.rings.outer, at(k_border), std::min(height, 0.66 * k_border * band), 0.0,
+             "numeral", nullptr, 0.0, ""},
+            {at((1 + k_border) / 2), at(k_border), bench.rings.numerals,
+             std::min(0.6 * height, 0.58 * (1 - k_border) * band), bench.spec.summer_shift_h, "summer numeral", nullptr,
+             band / 2, bench.spec.summer_word}};
 }
 
 } // namespace

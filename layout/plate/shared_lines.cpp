@@ -42,9 +42,7 @@ bool SharedLines::covers(const Part& whole, const Polyline& part) {
                    return std::abs(cross(unit(run), p - from)) < k_hair_mm;
                });
     }
-    return std::all_of(part.begin(), part.end(), [&](Point p) {
-        return distance_to(p, whole.points) < k_hair_mm;
-    });
+    return std::all_of(part.begin(), part.end(), [&](Point p) { return distance_to(p, whole.points) < k_hair_mm; });
 }
 
 bool SharedLines::has(const DialLine& line, const std::string& label, const Polyline& part) {
@@ -53,9 +51,8 @@ bool SharedLines::has(const DialLine& line, const std::string& label, const Poly
     });
     if (there == parts_.end())
         return false;
-    const bool noted = std::any_of(pairs_.begin(), pairs_.end(), [&](const Pair& pair) {
-        return pair.there == there->line && pair.other == &line;
-    });
+    const bool noted = std::any_of(pairs_.begin(), pairs_.end(),
+                                   [&](const Pair& pair) { return pair.there == there->line && pair.other == &line; });
     if (!noted)
         pairs_.push_back({there->line, &line, there->label, label});
     return true;
@@ -77,9 +74,10 @@ std::vector<std::string> SharedLines::told() const {
                                         name(*pair.there, pair.there_label), name(*pair.other, pair.other_label)));
             continue;
         }
-        std::string note = fmt::format("the {} and the {} lie on the same lines, {} of them: each is cut once and bears "
-                                       "both labels; one of the two families would do",
-                                       a, b, count);
+        std::string note =
+            fmt::format("the {} and the {} lie on the same lines, {} of them: each is cut once and bears "
+                        "both labels; one of the two families would do",
+                        a, b, count);
         if (std::find(notes.begin(), notes.end(), note) == notes.end())
             notes.push_back(std::move(note));
     }

@@ -30,8 +30,7 @@ struct PlaneDial {
     double p;         ///< the sine of the polar stylus' angle with the plate, with a sign
 
     explicit PlaneDial(const test::RandomPlate& plate)
-        : phi{plate.latitude.in_radians()},
-          d{(plate.attitude.normal_azimuth - Angle::degrees(180)).in_radians()},
+        : phi{plate.latitude.in_radians()}, d{(plate.attitude.normal_azimuth - Angle::degrees(180)).in_radians()},
           z{(Angle::degrees(90) - plate.attitude.normal_altitude).in_radians()} {
         // A level plate has no steepest slope: x to the east and y to the north, or seen from below to the west.
         if (std::abs(std::sin(z)) < 1e-7)
@@ -166,9 +165,9 @@ TEST_CASE("Meeus' horizontal dial", "[engine][published]") {
             const double q = cos_phi * cos(hour) + sin_phi * tan_declination;
             if (q < 1e-4)
                 return;
-            check_same(plane.shadow_of_nodus(to_site({hour, declination}, plate.latitude)),
-                       {k_stylus_mm * sin(hour) / q,
-                        k_stylus_mm * (sin_phi * cos(hour) - cos_phi * tan_declination) / q});
+            check_same(
+                plane.shadow_of_nodus(to_site({hour, declination}, plate.latitude)),
+                {k_stylus_mm * sin(hour) / q, k_stylus_mm * (sin_phi * cos(hour) - cos_phi * tan_declination) / q});
         });
         if (abs(plate.latitude) < Angle::degrees(0.1))
             continue;
@@ -193,10 +192,10 @@ TEST_CASE("Meeus' vertical dial", "[engine][published]") {
             const double q = sin_d * sin(hour) + sin_phi * cos_d * cos(hour) - cos_phi * cos_d * tan_declination;
             if (q < 1e-4)
                 return;
-            check_same(plane.shadow_of_nodus(to_site({hour, declination}, plate.latitude)),
-                       {k_stylus_mm *
-                            (cos_d * sin(hour) - sin_d * (sin_phi * cos(hour) - cos_phi * tan_declination)) / q,
-                        -k_stylus_mm * (cos_phi * cos(hour) + sin_phi * tan_declination) / q});
+            check_same(
+                plane.shadow_of_nodus(to_site({hour, declination}, plate.latitude)),
+                {k_stylus_mm * (cos_d * sin(hour) - sin_d * (sin_phi * cos(hour) - cos_phi * tan_declination)) / q,
+                 -k_stylus_mm * (cos_phi * cos(hour) + sin_phi * tan_declination) / q});
         });
         if (std::abs(cos_phi * cos_d) < 1e-3)
             continue;
