@@ -53,6 +53,12 @@ std::vector<DrawnFamily> drawn_families(const FacePlan& plan, const layout::Face
         family.in_ring = line.set == 0 && is_hour(line.family) && figured == face.families.end();
         made.push_back(std::move(family));
     }
+    for (const layout::FiguredFamily& figured : face.families)
+        if (std::find(keys.begin(), keys.end(), std::pair{figured.family, figured.set}) == keys.end()) {
+            const layout::FamilyWords words = layout::words_of(figured.family, figured.time);
+            made.push_back({words.name, words.lines, false, 0.0, season_of(plan.dial, figured.family, figured.set),
+                            layout::say_dress(figured.dress), figured.sample});
+        }
     return made;
 }
 

@@ -14,7 +14,7 @@ struct DrawnFamily {
     std::string name;  ///< as designs name it: "sun", "since sunrise", "altitude", "date"
     std::string lines; ///< "hours since sunrise"
     bool in_ring = false;
-    double width_mm = 0.0;         ///< of its widest line
+    double width_mm = 0.0;         ///< of its widest line; 0 where all lie on the lines of another family
     std::optional<Season> between; ///< declinations that it is drawn for; nothing: the whole year
     std::string figures; ///< how its labels are set: "figures, italic"; empty where they are words or numerals
     std::string sample;  ///< one of these labels

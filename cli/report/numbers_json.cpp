@@ -57,7 +57,7 @@ Json families_json(const FacePlan& plan, const layout::Face& face) {
         list.push_back(
             {{"family", family.name},
              {"in_ring", family.in_ring},
-             {"width_mm", number(family.width_mm)},
+             {"width_mm", family.width_mm > 0 ? number(family.width_mm) : Json(nullptr)},
              {"declinations_deg", family.between ? Json::array({number(family.between->least.in_degrees()),
                                                                 number(family.between->greatest.in_degrees())})
                                                  : Json(nullptr)},

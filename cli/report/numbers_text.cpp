@@ -112,7 +112,9 @@ void say_families(Text& text, const FacePlan& plan, const layout::Face& face) {
     text.gap();
     text.line("  Families of lines, and how they are drawn");
     for (const DrawnFamily& family : drawn_families(plan, face)) {
-        std::string row = fmt::format("  {:<28} {} mm wide", family.lines, fixed(family.width_mm, 2));
+        std::string row = fmt::format("  {:<28} {}", family.lines,
+                                      family.width_mm > 0 ? fixed(family.width_mm, 2) + " mm wide"
+                                                          : "on the lines of another family");
         if (family.in_ring)
             row += "; in the chapter ring";
         if (!family.figures.empty())

@@ -116,13 +116,13 @@ double ClearMap::clearance_mm(Point p) const {
     return on_map ? double(distance_[index(column, row)]) : 0.0;
 }
 
-double ClearMap::clearance_mm(const TurnedBox& box) const {
+double ClearMap::clearance_mm(const TurnedBox& box, double wanted_mm) const {
     const Point x{cos(box.turn), sin(box.turn)}, y = left_of(x);
     const auto parts = [&](double half) { return std::max(2, int(std::ceil(2 * half / cell_mm_))); };
     const int across = parts(box.half_width_mm), up = parts(box.half_height_mm);
     double least = 1e300;
     for (int i = 0; i <= across && least > 0; ++i)
-        for (int k = 0; k <= up; ++k)
+        for (int k = 0; k <= up && least >= wanted_mm; ++k)
             least = std::min(least, clearance_mm(box.middle + (2.0 * i / across - 1) * box.half_width_mm * x +
                                                  (2.0 * k / up - 1) * box.half_height_mm * y));
     return least;

@@ -90,14 +90,13 @@ class FieldDrawer {
 
     /// Where the marks of half and quarter hours reach into the field.
     void block_marks(const DialLine& line) {
-        const double reach = line.step_min == 30   ? bench_.half_hour_reach_mm()
-                             : line.step_min == 15 ? bench_.quarter_hour_reach_mm()
-                                                   : 0.0;
-        const auto inside = reach > 0 ? bench_.rings.divisions.inset(reach) : std::nullopt;
+        const std::optional<Outline>* inside = line.step_min == 30   ? &inside_half_hours_
+                                               : line.step_min == 15 ? &inside_quarters_
+                                                                     : nullptr;
         for (const Polyline& part : on_field(line)) {
             std::vector<Polyline> marks;
-            if (inside)
-                marks = clipped(part, {{}, {*inside}});
+            if (inside && *inside)
+                marks = clipped(part, {{}, {**inside}});
             else if (bench_.divides_in_field())
                 marks = {end_part(part, k_field_mark), end_part({part.back(), part.front()}, k_field_mark)};
             for (const Polyline& mark : marks) {
@@ -108,6 +107,10 @@ class FieldDrawer {
     }
 
     void block_lines() {
+        if (bench_.half_hour_reach_mm() > 0)
+            inside_half_hours_ = bench_.rings.divisions.inset(bench_.half_hour_reach_mm());
+        if (bench_.quarter_hour_reach_mm() > 0)
+            inside_quarters_ = bench_.rings.divisions.inset(bench_.quarter_hour_reach_mm());
         for (const DialLine& line : bench_.delineation.lines) {
             const bool drawn_whole = line.step_min >= 60 || (line.step_min == 30 && bench_.divides_in_field());
             if (in_ring(line) && !drawn_whole) {
@@ -143,11 +146,11 @@ class FieldDrawer {
         LetteredLine text = lettered(1.0);
         LabelPlace best = search(line, text, room_);
         const bool words = line.family == Family::date || line.family == Family::place_noon;
-        for (const double part : {0.9, 0.8})
-            if (words && !best.found) {
-                text = lettered(part);
-                best = search(line, text, room_);
-            }
+        if (words && !best.found) {
+            constexpr double k_smaller = 0.85;
+            text = lettered(k_smaller);
+            best = search(line, text, room_);
+        }
         const bool in_the_clear = best.found;
         if (!best.found) {
             text = lettered(1.0);
@@ -277,7 +280,7 @@ class FieldDrawer {
             const Point a = rule.point(from), b = rule.point(to), along = unit(b - a);
             const TurnedBox box{between(a, b, 0.5) + (base_off + ink_middle) * left_of(along), distance(a, b) / 2,
                                 text.ink.height_mm() / 2, turn_of(along)};
-            clearance = std::min(clearance, room.clearance_mm(box));
+            clearance = std::min(clearance, room.clearance_mm(box, 0.3 * cap_mm_));
             if (clearance < 0.3 * cap_mm_ ||
                 std::any_of(placed_.begin(), placed_.end(), [&](const TurnedBox& p) { return p.overlaps(box); }))
                 return;
@@ -320,6 +323,7 @@ class FieldDrawer {
     double cap_mm_;
     ClearMap room_, room_without_hours_;
     std::optional<ClearMap> bare_room_;
+    std::optional<Outline> inside_half_hours_, inside_quarters_; ///< the field without the strip of their marks
     std::vector<TurnedBox> placed_;
     std::vector<Named> unlabelled_;
     std::map<const DialLine*, std::vector<Polyline>> parts_;

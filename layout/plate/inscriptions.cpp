@@ -123,7 +123,7 @@ std::optional<Point> find_room(const Bench& bench, double half_width_mm, double 
             if (bench.clear.clearance_mm(at) < wanted_mm + std::min(half_width_mm, half_height_mm))
                 continue;
             const double clearance =
-                bench.clear.clearance_mm(TurnedBox{at, half_width_mm, half_height_mm, turn_of(right)});
+                bench.clear.clearance_mm(TurnedBox{at, half_width_mm, half_height_mm, turn_of(right)}, wanted_mm);
             if (clearance < wanted_mm)
                 continue;
             // Room counts up to four times what is wanted; then the middle line; then low rather than high.

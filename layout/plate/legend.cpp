@@ -18,9 +18,10 @@ class LegendDrawer {
     void draw() {
         bench_.clear.measure();
         const double full = bench_.spec.lettering.label_height_mm;
-        for (double height = full; height >= 0.6 * full; height *= 0.9)
+        const Room room = room_of(rows(full)); // of full height: lettering keeps its proportions
+        for (double part = 1.0; part >= 0.6; part *= 0.9)
             for (const std::size_t columns : {std::size_t{1}, std::size_t{2}, std::size_t{3}})
-                if (columns <= bench_.families.size() && draw(height, columns))
+                if (columns <= bench_.families.size() && draw(part * full, part, room, columns))
                     return;
         bench_.warnings.push_back("no room on the plate for the lines that tell its figures apart: the first sheet "
                                   "and the numbers tell it");
@@ -42,22 +43,31 @@ class LegendDrawer {
         return made;
     }
 
-    bool draw(double height, std::size_t columns) {
-        const std::vector<Row> all = rows(height);
-        const std::size_t per_column = (all.size() + columns - 1) / columns;
-        if ((columns - 1) * per_column >= all.size())
-            return false; // a column would stay empty
-        double sample_width = 0, name_width = 0;
-        for (const Row& row : all) {
-            sample_width = std::max(sample_width, row.sample.ink.width_mm());
-            name_width = std::max(name_width, row.name.ink.width_mm());
+    /// The widest sample and the widest name.
+    struct Room {
+        double sample_mm = 0.0, name_mm = 0.0;
+    };
+    [[nodiscard]] static Room room_of(const std::vector<Row>& rows) {
+        Room room;
+        for (const Row& row : rows) {
+            room.sample_mm = std::max(room.sample_mm, row.sample.ink.width_mm());
+            room.name_mm = std::max(room.name_mm, row.name.ink.width_mm());
         }
+        return room;
+    }
+
+    bool draw(double height, double part, const Room& room, std::size_t columns) {
+        const std::size_t count = bench_.families.size(), per_column = (count + columns - 1) / columns;
+        if ((columns - 1) * per_column >= count)
+            return false; // a column would stay empty
+        const double sample_width = part * room.sample_mm, name_width = part * room.name_mm;
         const double column = sample_width + 0.7 * height + name_width, between = 1.6 * height, pitch = 1.75 * height;
         const double width = double(columns) * column + double(columns - 1) * between;
         const double tall = double(per_column - 1) * pitch + height;
         const auto middle = find_room(bench_, width / 2, tall / 2, 0.8 * height, {true, 0.1});
         if (!middle)
             return false;
+        const std::vector<Row> all = rows(height);
         const Point corner = *middle - width / 2 * right_ + (tall / 2 - height) * bench_.up; // of the first base line
         for (std::size_t i = 0; i < all.size(); ++i) {
             const Point at = corner + double(i / per_column) * (column + between) * right_ -

@@ -33,8 +33,7 @@ void SharedLines::add(const DialLine& line, std::string label, const Polyline& p
 
 bool SharedLines::covers(const Part& whole, const Polyline& part) {
     const bool straight = part.size() == 2;
-    if (straight != (whole.points.size() == 2) || !whole.reach.contains(part.front()) ||
-        !whole.reach.contains(part.back()))
+    if (straight != (whole.points.size() == 2) || !whole.reach.contains(reach_of(part)))
         return false;
     if (straight) {
         const Point from = whole.points.front(), run = whole.points.back() - from;
