@@ -232,11 +232,15 @@ std::vector<std::string> lost_dates(const FacePlan& plan, const layout::Face& fa
     return lost;
 }
 
-/// The face as it would be with the nodus left open.
-layout::Face with_free_nodus(const FacePlan& plan, const MeanYear& year) {
+/// The face as it would be with the nodus left open; none where its gnomon could not be made.
+std::optional<layout::Face> with_free_nodus(const FacePlan& plan, const MeanYear& year) {
     DialPlan free = plan.dial;
     free.nodus_height_mm = 0.0;
-    return layout::draw_face(free, year, plan.spec);
+    try {
+        return layout::draw_face(free, year, plan.spec);
+    } catch (const layout::GnomonError&) {
+        return std::nullopt;
+    }
 }
 
 } // namespace
@@ -251,11 +255,11 @@ std::vector<DesignError> what_misses_the_plate(const Design& design, const MeanY
         const std::vector<std::string> lost = lost_dates(plans[i], faces[i]);
         if (lost.empty() || !design.gnomon.nodus_height_mm)
             continue;
-        const layout::Face free = with_free_nodus(plans[i], year);
-        if (lost_dates(plans[i], free).size() >= lost.size())
-            continue; // not for the height of the nodus
+        const std::optional<layout::Face> free = with_free_nodus(plans[i], year);
+        if (!free || lost_dates(plans[i], *free).size() >= lost.size())
+            continue; // not for the height of the nodus, or no other would do
         const std::string given = say_length(*design.gnomon.nodus_height_mm, false),
-                          works = say_length(free.placement.nodus_height_mm, false);
+                          works = say_length(free->placement.nodus_height_mm, false);
         if (lost.size() == plans[i].dial.dates.lines.size()) {
             errors.push_back(error_at(design, "gnomon: nodus height",
                                       fmt::format("a nodus {} above the plate throws every date line off it", given),
