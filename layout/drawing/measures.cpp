@@ -4,6 +4,7 @@
 #include "layout/drawing/clipping.hpp"
 
 #include <algorithm>
+#include <array>
 #include <cmath>
 #include <iterator>
 
@@ -14,15 +15,40 @@ double radius_of(Point start, const ArcTo& arc) {
     return std::hypot(start.x_mm - arc.centre.x_mm, start.y_mm - arc.centre.y_mm);
 }
 
+/// Of a cubic from part `low` to `high`, by Gauss and Legendre's rule of four points, halved until halves and whole agree.
+double length_of(Point start, const CurveTo& curve, double low, double high, int halvings = 0) {
+    constexpr std::array<double, 2> k_at{0.339981043584856, 0.861136311594053}, // Abramowitz and Stegun, table 25.4
+        k_weight{0.652145154862546, 0.347854845137454};
+    const Point c1 = curve.control_1, c2 = curve.control_2, to = curve.to;
+    const auto speed = [&](double t) {
+        const double u = 1 - t, a = 3 * u * u, b = 6 * u * t, c = 3 * t * t;
+        const double x = a * (c1.x_mm - start.x_mm) + b * (c2.x_mm - c1.x_mm) + c * (to.x_mm - c2.x_mm);
+        const double y = a * (c1.y_mm - start.y_mm) + b * (c2.y_mm - c1.y_mm) + c * (to.y_mm - c2.y_mm);
+        return std::sqrt(x * x + y * y);
+    };
+    const auto by_rule = [&](double from, double until) {
+        const double middle = (from + until) / 2, half = (until - from) / 2;
+        double sum = 0;
+        for (std::size_t i = 0; i < k_at.size(); ++i)
+            sum += k_weight[i] * (speed(middle - k_at[i] * half) + speed(middle + k_at[i] * half));
+        return half * sum;
+    };
+    constexpr double k_agree = 2e-5; // the halves are then closer by far
+    constexpr int k_most = 12;       // at a point where the curve turns back
+    const double middle = (low + high) / 2, whole = by_rule(low, high);
+    const double halves = by_rule(low, middle) + by_rule(middle, high);
+    if (std::abs(halves - whole) <= k_agree * halves || halvings == k_most)
+        return halves;
+    return length_of(start, curve, low, middle, halvings + 1) + length_of(start, curve, middle, high, halvings + 1);
+}
+
 double length_of(Point start, const Piece& piece) {
     if (const auto* arc = std::get_if<ArcTo>(&piece))
         return radius_of(start, *arc) * std::abs(arc->sweep.in_radians());
-    std::vector<Point> points{start};
-    flatten(points, start, piece, std::max(1e-6, 1e-5 * bounds_of(start, piece).width_mm()));
-    double sum = 0;
-    for (std::size_t i = 1; i < points.size(); ++i)
-        sum += std::hypot(points[i].x_mm - points[i - 1].x_mm, points[i].y_mm - points[i - 1].y_mm);
-    return sum;
+    if (const auto* curve = std::get_if<CurveTo>(&piece))
+        return length_of(start, *curve, 0, 1);
+    const Point to = end_of(piece);
+    return std::hypot(to.x_mm - start.x_mm, to.y_mm - start.y_mm);
 }
 
 double cross(Point a, Point b) {

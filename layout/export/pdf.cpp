@@ -8,10 +8,12 @@
 #include <fmt/format.h>
 
 #include <cmath>
+#include <future>
 #include <map>
 #include <memory>
 #include <optional>
 #include <set>
+#include <vector>
 
 namespace dialwright::layout {
 namespace {
@@ -153,7 +155,7 @@ void draw_window(PdfPage& page, const Window& window, BoxesOfMarks& boxes) {
     page.close();
 }
 
-void add_sheet(PdfDocument& document, const Sheet& sheet, BoxesOfMarks& boxes, PdfLayers* layers) {
+PdfPage drawn_sheet(PdfDocument& document, const Sheet& sheet, BoxesOfMarks& boxes, PdfLayers* layers) {
     const auto fits = [](double side) { return side >= 5.0 && side <= 5080.0; };
     if (!fits(sheet.width_mm) || !fits(sheet.height_mm)) {
         throw ExportError(fmt::format("A sheet of {:.1f} × {:.1f} mm is no PDF page: each side takes 5 to 5080 mm.",
@@ -187,13 +189,25 @@ void add_sheet(PdfDocument& document, const Sheet& sheet, BoxesOfMarks& boxes, P
             paper.note(note, document.font(note.bold));
         }
     }
-    paper.finish();
     document.check();
     HPDF_Outline bookmark =
         HPDF_CreateOutline(document.get(), nullptr, sheet.title.c_str(), HPDF_GetEncoder(document.get(), "UTF-8"));
     document.check();
     HPDF_Outline_SetDestination(bookmark, HPDF_Page_CreateDestination(page));
     document.check();
+    return paper;
+}
+
+/// Every second page in a thread of its own.
+void pack(std::vector<PdfPage>& pages) {
+    const auto pack_from = [&pages](std::size_t first) {
+        for (std::size_t i = first; i < pages.size(); i += 2) {
+            pages[i].pack();
+        }
+    };
+    auto others = std::async(std::launch::async, pack_from, 1U);
+    pack_from(0);
+    others.get();
 }
 
 } // namespace
@@ -216,9 +230,15 @@ std::string pdf_of(const SheetBook& book) {
     if (book.layers) {
         layers.emplace(document.get());
     }
+    std::vector<PdfPage> pages;
     for (const Sheet& sheet : book.sheets) {
-        add_sheet(document, sheet, boxes, layers ? &*layers : nullptr);
+        pages.push_back(drawn_sheet(document, sheet, boxes, layers ? &*layers : nullptr));
     }
+    pack(pages);
+    for (PdfPage& page : pages) {
+        page.finish();
+    }
+    document.check();
     return document.bytes();
 }
 

@@ -3,6 +3,7 @@
 
 #include "layout/drawing/clipping.hpp"
 #include "layout/export/pdf_layers.hpp"
+#include "layout/export/plain_number.hpp"
 #include "layout/sheet/export_error.hpp"
 #include "layout/sheet/note_width.hpp"
 
@@ -34,24 +35,14 @@ HPDF_STATUS write_filter(HPDF_Dict, HPDF_Stream stream) {
 
 } // namespace
 
-/// A number and a space. From whole thousandths, because there are a hundred thousand of them.
+/// A number and a space.
 void PdfPage::number(double points) {
     // The largest page is 14,400; what lies far outside of it is a mistake of ours or of the design.
     if (!std::isfinite(points) || std::abs(points) > 32000.0) {
         throw ExportError(
             fmt::format("“{}” runs off the paper to a place that a PDF can't name, so no PDF was made.", drawing_now_));
     }
-    const long thousandths = std::lround(points * 1000.0);
-    if (thousandths < 0) {
-        text_ += '-';
-    }
-    const fmt::format_int whole{std::abs(thousandths) / 1000};
-    text_.append(whole.data(), whole.size());
-    if (const long rest = std::abs(thousandths) % 1000; rest != 0) {
-        const fmt::format_int digits{1000 + rest}; // "1" and the three decimals
-        text_ += '.';
-        text_.append(digits.data() + 1, rest % 100 == 0 ? 1U : rest % 10 == 0 ? 2U : 3U);
-    }
+    add_number(text_, points, 3);
     text_ += ' ';
 }
 
@@ -248,16 +239,21 @@ void PdfPage::note(const Note& note, const PdfFont& font) {
     text_ += "Tm " + font.shown(note.text) + " Tj ET\n";
 }
 
-void PdfPage::finish() {
+void PdfPage::pack() {
     uLongf length = compressBound(static_cast<uLong>(text_.size()));
     std::string packed(length, '\0');
     if (compress2(reinterpret_cast<Bytef*>(packed.data()), &length, reinterpret_cast<const Bytef*>(text_.data()),
                   static_cast<uLong>(text_.size()), Z_BEST_SPEED) != Z_OK) {
         throw ExportError("The PDF could not be made: no memory is left.");
     }
+    packed.resize(length);
+    text_ = std::move(packed);
+}
+
+void PdfPage::finish() {
     auto* attributes = static_cast<HPDF_PageAttr>(page_->attr);
-    HPDF_Stream_Write(attributes->stream, reinterpret_cast<const HPDF_BYTE*>(packed.data()),
-                      static_cast<HPDF_UINT>(length));
+    HPDF_Stream_Write(attributes->stream, reinterpret_cast<const HPDF_BYTE*>(text_.data()),
+                      static_cast<HPDF_UINT>(text_.size()));
     attributes->contents->filter = HPDF_STREAM_FILTER_NONE;
     attributes->contents->write_fn = &write_filter;
 }

@@ -18,7 +18,7 @@ namespace dialwright::layout {
 /// looked at, and written with three decimals of a point (0.0002 mm).
 class PdfPage {
   public:
-    explicit PdfPage(HPDF_Page page) : page_{page} { text_.reserve(1U << 16U); }
+    explicit PdfPage(HPDF_Page page) : page_{page} { text_.reserve(1U << 13U); }
 
     /// What follows comes out this much larger about the page's middle.
     void stretch(double x, double y, double width_mm, double height_mm);
@@ -31,7 +31,9 @@ class PdfPage {
     /// Between these two, the page shows nothing outside the opening.
     void open(const Box& opening);
     void close();
-    /// Hands what was drawn to the page; to be called once, at the end.
+    /// Packs what was drawn; once, when nothing more is to come. Pages may be packed in several threads.
+    void pack();
+    /// Hands what was packed to the page; once, at the end.
     void finish();
 
   private:

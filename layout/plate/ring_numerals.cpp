@@ -33,7 +33,7 @@ class NumeralDrawer {
         std::vector<Numeral> all;
         for (const RingHour& hour : hours)
             if (const auto exit = place_of(hour))
-                all.push_back({hour.hour, text_of(hour.hour), exit->at, exit->normal, 0.0});
+                all.push_back(numeral_at(*exit, hour.hour, text_of(hour.hour)));
         double height = row_.height_mm;
         while (height > k_least * row_.height_mm && !all_in_band(all, height))
             height *= 0.95;
@@ -64,7 +64,16 @@ class NumeralDrawer {
         Point at;             ///< middle of the capitals
         Point normal;         ///< of the border, outward
         double slid_mm = 0.0; ///< from its place to the left of the normal
+        double width = 0.0;   ///< of its ink, of a height of 1
     };
+
+    [[nodiscard]] LetteredLine lettered(const std::string& text, double height) const {
+        return bench_.lettering.line(text, height, 0.06 * height);
+    }
+    [[nodiscard]] Numeral numeral_at(const Outline::Exit& place, int hour, std::string text) const {
+        const double width = lettered(text, row_.height_mm).ink.width_mm() / row_.height_mm;
+        return {hour, std::move(text), place.at, place.normal, 0.0, width};
+    }
 
     /// Where an hour's line meets the row; round a corner, on the side on which the other row has the hour.
     [[nodiscard]] std::optional<Outline::Exit> place_of(const RingHour& hour) const {
@@ -127,8 +136,7 @@ class NumeralDrawer {
     }
 
     [[nodiscard]] TurnedBox box_of(const Numeral& n, double height) const {
-        const LetteredLine line = bench_.lettering.line(n.text, height, 0.06 * height);
-        const double half_width = line.ink.width_mm() / 2;
+        const double half_width = n.width * height / 2;
         const Point at = upright() ? n.at + n.slid_mm * left_of(n.normal) : kept_on_side(n, half_width + 0.2 * height);
         return {at, half_width + 0.22 * height, height / 2, turn_of_numeral(n)};
     }
@@ -174,8 +182,10 @@ class NumeralDrawer {
         });
         std::optional<Numeral> best;
         double best_score = 1e300;
+        Numeral word = numeral_at({}, -1, row_.word);
         for (const Outline::Exit& place : places_along(0.25 * height)) {
-            const Numeral word{-1, row_.word, place.at, place.normal, 0.0};
+            word.at = place.at;
+            word.normal = place.normal;
             const TurnedBox box = box_of(word, height);
             const double score = distance(box.middle, first->at) - 0.3 * distance(box.middle, second->at);
             if (score >= best_score || !in_band(box) ||
@@ -253,7 +263,7 @@ class NumeralDrawer {
     }
 
     void set(const Numeral& n, double height) {
-        const LetteredLine line = bench_.lettering.line(n.text, height, 0.06 * height);
+        const LetteredLine line = lettered(n.text, height);
         const std::string name = row_.name + " " + n.text;
         if (row_.middle.is_round() && !upright()) {
             const double radius = row_.middle.radius_mm() + (heads_out_ ? -height / 2 : height / 2);
