@@ -9,10 +9,11 @@
 
 #include <fmt/format.h>
 #include <hpdf_pages.h>
-#include <zlib.h>
+#include <libdeflate.h>
 
 #include <algorithm>
 #include <cmath>
+#include <memory>
 
 // Lines end square (butt): an hour line that stops at a border must not run over it by half its width, and a bar's
 // ticks must not grow. Corners are round: a mitre at a sharp turn would run out farther than the line is wide, and a
@@ -217,11 +218,16 @@ void PdfPage::close() {
     joins_set_ = false;
 }
 
-void PdfPage::note(const Note& note, const PdfFont& font) {
+void PdfPage::use_font(bool bold, const PdfFont& font) {
+    fonts_[bold ? 1U : 0U] = {&font, HPDF_Page_GetLocalFontName(page_, font.get())};
+}
+
+void PdfPage::note(const Note& note) {
     drawing_now_ = note.text;
     if (note.text.empty()) {
         return;
     }
+    const UsedFont& font = fonts_[note.bold ? 1U : 0U];
     const double width_mm = note_width_mm(note.text, note.size_mm, note.bold);
     const double back_mm = note.align == Align::left ? 0.0 : note.align == Align::middle ? width_mm / 2 : width_mm;
     const double c = cos(note.turn), s = sin(note.turn);
@@ -230,23 +236,24 @@ void PdfPage::note(const Note& note, const PdfFont& font) {
     }
     fill_style(tone_of(Layer::engrave));
     text_ += "BT /";
-    text_ += HPDF_Page_GetLocalFontName(page_, font.get());
+    text_ += font.name;
     text_ += ' ';
     length(note.size_mm);
     // A long line's end must not drift with a coarse turn, so the turn has more decimals than `number` gives.
     text_ += fmt::format("Tf {:.7f} {:.7f} {:.7f} {:.7f} ", c, s, -s, c);
     point({note.at.x_mm - back_mm * c, note.at.y_mm - back_mm * s});
-    text_ += "Tm " + font.shown(note.text) + " Tj ET\n";
+    text_ += "Tm " + font.font->shown(note.text) + " Tj ET\n";
 }
 
 void PdfPage::pack() {
-    uLongf length = compressBound(static_cast<uLong>(text_.size()));
-    std::string packed(length, '\0');
-    if (compress2(reinterpret_cast<Bytef*>(packed.data()), &length, reinterpret_cast<const Bytef*>(text_.data()),
-                  static_cast<uLong>(text_.size()), Z_BEST_SPEED) != Z_OK) {
+    constexpr int k_fastest = 1;
+    const std::unique_ptr<libdeflate_compressor, void (*)(libdeflate_compressor*)> packer{
+        libdeflate_alloc_compressor(k_fastest), &libdeflate_free_compressor};
+    if (!packer) {
         throw ExportError("The PDF could not be made: no memory is left.");
     }
-    packed.resize(length);
+    std::string packed(libdeflate_zlib_compress_bound(packer.get(), text_.size()), '\0');
+    packed.resize(libdeflate_zlib_compress(packer.get(), text_.data(), text_.size(), packed.data(), packed.size()));
     text_ = std::move(packed);
 }
 

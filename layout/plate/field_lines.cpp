@@ -50,8 +50,8 @@ struct LabelPlace {
 class FieldDrawer {
   public:
     explicit FieldDrawer(Bench& bench)
-        : bench_{bench}, cap_mm_{bench.spec.lettering.label_height_mm}, room_{room_of(bench)}, room_without_hours_{
-                                                                                                   room_} {}
+        : bench_{bench}, cap_mm_{bench.spec.lettering.label_height_mm}, free_room_{room_of(bench)}, room_{free_room_},
+          room_without_hours_{free_room_} {}
 
     void draw() {
         std::vector<const DialLine*> lines;
@@ -130,8 +130,10 @@ class FieldDrawer {
     /// The field without any line; seldom wanted.
     [[nodiscard]] const ClearMap& bare_room() {
         if (!bare_room_) {
-            bare_room_ = room_of(bench_);
+            bare_room_ = free_room_;
             bare_room_->measure();
+            for (const TurnedBox& label : placed_)
+                bare_room_->block(label);
         }
         return *bare_room_;
     }
@@ -168,6 +170,10 @@ class FieldDrawer {
             grown.half_width_mm += 0.35 * cap_mm_;
             grown.half_height_mm += 0.35 * cap_mm_;
             placed_.push_back(grown);
+            room_.block(grown);
+            room_without_hours_.block(grown);
+            if (bare_room_)
+                bare_room_->block(grown);
             bench_.clear.block(chunk);
             if (in_the_clear)
                 continue;
@@ -281,8 +287,7 @@ class FieldDrawer {
             const TurnedBox box{between(a, b, 0.5) + (base_off + ink_middle) * left_of(along), distance(a, b) / 2,
                                 text.ink.height_mm() / 2, turn_of(along)};
             clearance = std::min(clearance, room.clearance_mm(box, 0.3 * cap_mm_));
-            if (clearance < 0.3 * cap_mm_ ||
-                std::any_of(placed_.begin(), placed_.end(), [&](const TurnedBox& p) { return p.overlaps(box); }))
+            if (clearance < 0.3 * cap_mm_)
                 return;
             place.chunks.push_back(box);
         }
@@ -321,8 +326,8 @@ class FieldDrawer {
 
     Bench& bench_;
     double cap_mm_;
-    ClearMap room_, room_without_hours_;
-    std::optional<ClearMap> bare_room_;
+    ClearMap free_room_, room_, room_without_hours_;
+    std::optional<ClearMap> bare_room_;                          ///< all three with the labels that are placed
     std::optional<Outline> inside_half_hours_, inside_quarters_; ///< the field without the strip of their marks
     std::vector<TurnedBox> placed_;
     std::vector<Named> unlabelled_;

@@ -26,7 +26,7 @@ namespace dialwright::layout {
     return a.x_mm * b.y_mm - a.y_mm * b.x_mm;
 }
 [[nodiscard]] inline double length(Point p) {
-    return std::hypot(p.x_mm, p.y_mm);
+    return std::sqrt(p.x_mm * p.x_mm + p.y_mm * p.y_mm); // plates are far from where this loses figures
 }
 [[nodiscard]] inline double distance(Point a, Point b) {
     return length(b - a);
