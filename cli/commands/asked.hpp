@@ -2,6 +2,7 @@
 #pragma once
 
 #include "cli/design/design.hpp"
+#include "cli/design/quantity.hpp"
 #include "engine/time/zone.hpp"
 #include "layout/sheet/compensation.hpp"
 #include "layout/sheet/sheet.hpp"
@@ -16,6 +17,9 @@
 #include <vector>
 
 namespace dialwright::cli {
+
+/// An option's text that is not what is wanted, told on stderr.
+void tell_option(const std::string& option, const Trouble& trouble);
 
 /// Where a command that needs no dial is asked for: a design's place, or one that options give.
 struct PlaceOptions {
