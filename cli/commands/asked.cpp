@@ -104,7 +104,7 @@ std::optional<AskedDates> asked_dates(const DateOptions& options, int most_days)
 }
 
 void SheetOptions::add_to(CLI::App& command) {
-    command.add_option("--sheet", file, "a PDF to print, written there as well");
+    command.add_option("--pdf", file, "a PDF to print, written there as well");
     command.add_option("--paper", paper, "for the PDF: A4, Letter, … [the design's, else A4]");
 }
 

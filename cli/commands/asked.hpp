@@ -61,6 +61,6 @@ struct AskedPrint {
 [[nodiscard]] std::optional<AskedPrint> asked_print(const SheetOptions& options, const Design* design);
 /// Makes the sheets and writes them as one PDF. Tells on stderr what keeps it from being made, and then is false.
 [[nodiscard]] bool write_pdf(const std::string& file, const AskedPrint& print,
-                             const std::function<layout::SheetBook()>& make, const char* option = "--sheet");
+                             const std::function<layout::SheetBook()>& make, const char* option = "--pdf");
 
 } // namespace dialwright::cli
