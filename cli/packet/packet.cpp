@@ -216,13 +216,16 @@ Packet make_packet(const Commission& commission) {
         packet.warnings.insert(packet.warnings.end(), commission.correction_plate->warnings.begin(),
                                commission.correction_plate->warnings.end());
     packet.cautions = cautions(commission.design);
-    Book book{commission, packet};
-    const layout::SheetBook sheets = book.whole();
-    packet.sheets = sheets.sheets.size();
-    auto pdf =
-        std::async(std::launch::async, [&sheets] { return layout::pdf_of(sheets); }); // the longest: beside all others
-    packet.items.push_back({{"sheets" + hand_of(commission.design) + ".pdf", {}},
-                            "full-scale sheets: print this, and read its first page"});
+    // The sheets take the longest: beside all others.
+    auto printing = std::async(std::launch::async, [&commission, printed = packet]() mutable {
+        Book book{commission, printed};
+        const layout::SheetBook sheets = book.whole();
+        printed.sheets = sheets.sheets.size();
+        printed.items.push_back({{"sheets" + hand_of(commission.design) + ".pdf", layout::pdf_of(sheets)},
+                                 "full-scale sheets: print this, and read its first page"});
+        return printed;
+    });
+    packet.items.emplace_back(); // the sheets, first of all
     add_machine_files(packet, commission, work_pieces(commission));
     for (std::size_t i = 0; i < commission.faces.size(); ++i) {
         const std::string& name = commission.plans[i].name;
@@ -233,9 +236,12 @@ Packet make_packet(const Commission& commission) {
     packet.items.push_back({{"hour-lines.csv", hour_lines_csv(commission)}, "angles and ends of the hour lines"});
     packet.items.push_back({{"numbers.txt", numbers_text(commission)}, "all numbers, to read"});
     packet.items.push_back({{"numbers.json", numbers_json(commission)}, "all numbers, for programs"});
+    Packet printed = printing.get();
+    packet.items.front() = std::move(printed.items.front());
+    packet.sheets = printed.sheets;
+    packet.warnings = std::move(printed.warnings); // with those of the sheets
     packet.items.push_back(
         {{"contents.txt", contents_of(commission, packet)}, "what each file is for, and in which order"});
-    packet.items.front().file.bytes = pdf.get();
     return packet;
 }
 

@@ -63,7 +63,7 @@ std::vector<FixingAnswer> answers_of(const Commission& commission, std::size_t f
     for (const ShadowReport& report : shadow_reports(commission, instants, face)) {
         if (!report.lit || !report.shadow || !report.reads_h || report.towards_sun.altitude() < k_least_height)
             continue;
-        const double mean_day = mean_day_of(report.at, commission.year);
+        const double mean_day = commission.year.day_of(report.at);
         const auto rate = [&](const Eigen::Vector3d& axis) {
             Slip ahead, behind;
             ahead.turned = turn_about(axis, k_small_turn);

@@ -50,7 +50,7 @@ std::string motion_text(const Motion& motion, const std::vector<FixingAnswer>& a
         return rate_of(answer) * rate < 0 && std::abs(rate_of(answer)) > k_no_answer;
     });
     const std::string& when_slow = rate > 0 ? motion.forward : motion.backward;
-    return fmt::format("It is slow at {}: move it {}; {} ({} {}) is a minute. Fast: the other way.{}",
+    return fmt::format("Where it is slow at {}, move it {}: {} ({} {}) is a minute. Where it is fast, the other way.{}",
                        say_clock(zone, most.at).substr(0, 5), when_slow, degrees_text(a_minute.in_degrees(), 2),
                        over(motion.arm_mm, a_minute, inches), motion.where,
                        both_signs ? " At other hours it may be the other way about: the table's sign tells." : "");

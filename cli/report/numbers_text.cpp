@@ -1,7 +1,10 @@
 // SPDX-License-Identifier: MIT
+#include "cli/report/families.hpp"
+#include "cli/report/lines_of_text.hpp"
 #include "cli/report/numbers.hpp"
 #include "cli/report/say.hpp"
 #include "layout/correction/words.hpp"
+#include "layout/plate/family_words.hpp"
 
 #include <cmath>
 #include <fmt/format.h>
@@ -10,20 +13,7 @@
 namespace dialwright::cli {
 namespace {
 
-class Text {
-  public:
-    template <class... Parts>
-    void line(fmt::format_string<Parts...> form, Parts&&... parts) {
-        fmt::format_to(std::back_inserter(text_), form, std::forward<Parts>(parts)...);
-        text_ += '\n';
-    }
-    void gap() { text_ += '\n'; }
-    [[nodiscard]] std::string taken() { return std::move(text_); }
-
-  private:
-    std::string text_;
-};
-
+using Text = LinesOfText;
 std::string point_text(PlatePoint p) {
     return fmt::format("{:>8} {:>8}", fixed(p.u_mm, 1), fixed(p.v_mm, 1));
 }
@@ -101,18 +91,33 @@ void say_more_lines(Text& text, const layout::Face& face) {
             text.line("  More lines: ends in mm from the nodus' foot");
         }
         headed = true;
-        text.line("  {:<16} {:<12}   {}   {}   {} points", say_family(line.family), line.label,
+        text.line("  {:<16} {:<12}   {}   {}   {} points", layout::words_of(line.family, line.time).name, line.label,
                   point_text(line.points.front()), point_text(line.points.back()), line.points.size());
+    }
+}
+
+void say_families(Text& text, const FacePlan& plan, const layout::Face& face) {
+    text.gap();
+    text.line("  Families of lines, and how they are drawn");
+    for (const DrawnFamily& family : drawn_families(plan, face)) {
+        std::string row = fmt::format("  {:<28} {}", family.lines,
+                                      family.width_mm > 0 ? fixed(family.width_mm, 2) + " mm wide"
+                                                          : "on the lines of another family");
+        if (family.in_ring)
+            row += "; in the chapter ring";
+        if (!family.figures.empty())
+            row += fmt::format("; {}, as in {}", family.figures, family.sample);
+        if (family.between)
+            row += "; " + say_between(*family.between);
+        text.line("{}", row);
     }
 }
 
 void list_equation(Text& text, const MeanYear& year) {
     text.gap();
     text.line("Equation of time, the mean of the years, at noon UT");
-    static constexpr const char* k_months[] = {"Jan", "Feb", "Mar", "Apr", "May", "Jun",
-                                               "Jul", "Aug", "Sep", "Oct", "Nov", "Dec"};
     for (unsigned month = 1; month <= 12; ++month) {
-        std::string row = fmt::format("  {}", k_months[month - 1]);
+        std::string row = fmt::format("  {:.3}", layout::month_name(month));
         for (const unsigned day : {1U, 11U, 21U}) {
             const auto mean = year.at(year.day_of(std::chrono::month{month} / std::chrono::day{day}));
             row += fmt::format("  {:>2}: {:<22}", day, say_equation(mean.equation_of_time));
@@ -164,6 +169,7 @@ std::string numbers_text(const Commission& commission) {
         say_style(text, commission.faces[i], commission.plans[i], commission.design.units == Units::inches);
         say_lines(text, commission.faces[i]);
         say_more_lines(text, commission.faces[i]);
+        say_families(text, commission.plans[i], commission.faces[i]);
     }
     say_correction(text, commission);
     list_equation(text, commission.year);

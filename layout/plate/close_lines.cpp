@@ -2,6 +2,7 @@
 //
 // The lines are cut into short segments, which are sorted into square cells wider than what is looked for: only those that
 // share a cell are compared.
+#include "layout/plate/family_words.hpp"
 #include "layout/plate/points.hpp"
 #include "layout/plate/tool_check.hpp"
 
@@ -93,7 +94,7 @@ class LineCheck {
         const auto key = std::make_tuple(line.family, line.set, line.label, std::lround(line.time_h * 3600));
         const auto [it, added] = index_.try_emplace(key, lines_.size());
         if (added)
-            lines_.push_back({&line, name_of_family(line.family) + line.label, of_ring(line), 0.0});
+            lines_.push_back({&line, line_name(line.family, line.time, line.set, line.label), of_ring(line), 0.0});
         return it->second;
     }
 
@@ -169,10 +170,11 @@ class LineCheck {
     [[nodiscard]] Point turned(Point at) const { return Placing{spec_.reader_up, {}, 1.0, 1.0, false}(at); }
 
     [[nodiscard]] static std::string kinds(const WholeLine& a, const WholeLine& b) {
-        std::string one = name_of_family(a.first->family), other = name_of_family(b.first->family);
+        std::string one = words_of(a.first->family, a.first->time).lines,
+                    other = words_of(b.first->family, b.first->time).lines;
         if (other < one)
             std::swap(one, other);
-        return one == other ? one : one + "/ " + other;
+        return one == other ? one : one + " and " + other;
     }
 
     const Face& face_;

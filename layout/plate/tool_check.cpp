@@ -75,13 +75,10 @@ class LetterCheck {
                                "{:.1f} mm would do",
                                kind_, capital_mm_, stroke_mm_, k_stroke_widths * stroke_mm_);
         return fmt::format(
-            "the tool leaves no line finer than {:.2f} mm, and letters ({}) with capitals of {:.1f} mm "
-            "are finer: it misses up to {:.0f} % of one{}, first in " {} ", {}; {}" cutting:letters
-            : "
-              "single strokes" suits it ",
-              thinnest_line_mm(*cutting_),
-              kind_, capital_mm_, std::min(100.0, std::ceil(100 * worst_share_)),
-              lost_eyes_ > 0 ? " and breaks eyes out" : "", worst_name_, place_text(at_), remedy());
+            "the tool leaves no line finer than {:.2f} mm, and letters ({}) with capitals of {:.1f} mm are finer: it "
+            "misses up to {:.0f} % of one{}, first in \"{}\", {}; {}\"cutting: letters: single strokes\" suits it",
+            thinnest_line_mm(*cutting_), kind_, capital_mm_, std::min(100.0, std::ceil(100 * worst_share_)),
+            lost_eyes_ > 0 ? " and breaks eyes out" : "", worst_name_, place_text(at_), remedy());
     }
 
   private:

@@ -13,8 +13,8 @@ namespace dialwright::layout {
 /// where no tool is named.
 [[nodiscard]] double thinnest_line_mm(const Cutting& cutting);
 
-/// Two lines of a face that run too close to each other, side by side (within 30°), and do not meet. The ring's own hours may meet (at the centre)
-/// and are told all the same.
+/// Two lines of a face that run too close to each other, side by side (within 30°), and do not meet. The ring's own hours
+/// may meet (at the centre) and are told all the same.
 struct CloseLines {
     std::string a, b;     ///< names, as the marks have them: "hour line XI", "date line 21 Jun"
     std::string kinds;    ///< of both: "date lines", "altitude circles and date lines"
