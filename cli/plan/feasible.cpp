@@ -4,6 +4,7 @@
 #include "cli/report/say.hpp"
 #include "layout/lettering/plate_lettering.hpp"
 #include "layout/plate/numerals.hpp"
+#include "layout/plate/tool_check.hpp"
 
 #include <algorithm>
 #include <cmath>
@@ -254,6 +255,14 @@ std::vector<DesignError> what_misses_the_plate(const Design& design, const MeanY
         if (std::none_of(faces[i].lines.begin(), faces[i].lines.end(),
                          [](const layout::DrawnLine& line) { return is_hour(line.family); }))
             errors.push_back(no_hours_error(design));
+        if (layout::parts_no_hours(faces[i], plans[i].spec))
+            errors.push_back(error_at(
+                design,
+                first_given(design,
+                            {"cutting: diameter", "cutting: depth", "cutting: line width", "cutting: tool", "cutting"}),
+                fmt::format("the tool leaves a line of {}, and no hour line of this plate stands clear of the next",
+                            say_length(plans[i].spec.cutting.line_width_mm, false)),
+                "take a finer tool, or a larger plate"));
         const std::vector<std::string> lost = lost_dates(plans[i], faces[i]);
         if (lost.empty() || !design.gnomon.nodus_height_mm)
             continue;

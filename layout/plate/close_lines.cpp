@@ -154,7 +154,8 @@ class LineCheck {
         const double widths = (a.first->width_mm + b.first->width_mm) / 2, gap = nearest.first - widths;
         if (gap > spec_.cutting.least_gap_mm - k_rounding_mm)
             return std::nullopt;
-        CloseLines close{a.name, b.name, kinds(a, b), gap, turned(nearest.second), ring, 0.0, 0.0};
+        CloseLines close{a.name, b.name,          kinds(a, b),     gap, turned(nearest.second),
+                         ring,   a.first->time_h, b.first->time_h, 0.0, 0.0};
         if (ring && face_.delineation.style.centre) {
             const double spread = std::abs(cross(way(*a.first), way(*b.first)));
             close.radius_mm = spread > 1e-9 ? (spec_.cutting.least_gap_mm + widths) / spread : 0.0;

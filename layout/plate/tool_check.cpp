@@ -164,14 +164,18 @@ std::string pair_text(const CloseLines& close) {
     return fmt::format("\"{}\" and \"{}\"", close.a, close.b);
 }
 
-/// Up to a few more pairs, by name.
+/// Up to a few more pairs, by name; VI in the morning and VI in the evening have one.
 std::string more_pairs(const std::vector<CloseLines>& all) {
     constexpr std::size_t k_named = 4;
+    std::vector<std::string> names;
+    for (const CloseLines& close : all)
+        if (const std::string name = pair_text(close); std::find(names.begin(), names.end(), name) == names.end())
+            names.push_back(name);
     std::string text;
-    for (std::size_t i = 1; i < all.size() && i <= k_named; ++i)
-        text += (i == 1 ? "; so with " : ", ") + pair_text(all[i]);
-    if (all.size() > k_named + 1)
-        text += fmt::format(" and {} more", all.size() - k_named - 1);
+    for (std::size_t i = 1; i < names.size() && i <= k_named; ++i)
+        text += (i == 1 ? "; so with " : ", ") + names[i];
+    if (names.size() > k_named + 1)
+        text += fmt::format(" and {} more", names.size() - k_named - 1);
     return text;
 }
 
@@ -255,6 +259,19 @@ double thinnest_line_mm(const Cutting& cutting) {
         break;
     }
     return 0.0;
+}
+
+bool parts_no_hours(const Face& face, const FaceSpec& spec) {
+    if (spec.cutting.tool == Tool::any)
+        return false;
+    std::set<long> hours, crowded; // by minutes of the ring's own time
+    for (const DrawnLine& line : face.lines)
+        if (line.set == 0 && line.family == Family::hour && line.step_min >= 60)
+            hours.insert(std::lround(line.time_h * 60));
+    for (const CloseLines& close : close_lines(face, spec))
+        if (close.of_ring && !(close.radius_mm > 0 && close.radius_mm < close.reach_mm))
+            crowded.insert({std::lround(close.a_h * 60), std::lround(close.b_h * 60)});
+    return hours.size() > 1 && crowded == hours;
 }
 
 std::vector<std::string> tool_warnings(const Face& face, const FaceSpec& spec) {
