@@ -69,7 +69,8 @@ class Book {
         add(owner_card(commission_, options_));
         for (const WorkPiece& piece : pieces_)
             if (is_correction(piece)) {
-                add(layout::tile(piece.drawing, options_of(piece)).sheets);
+                for (const layout::Tiling& tiling : tilings_of(piece))
+                    add(tiling.sheets);
                 if (design_.print.own_size)
                     add_own_size(piece);
             }
@@ -106,29 +107,30 @@ class Book {
         return options;
     }
 
-    /// One for each plate, or one for each of its layers.
+    /// The whole piece, or one for each of its layers.
+    [[nodiscard]] std::vector<layout::Tiling> tilings_of(const WorkPiece& piece) const {
+        layout::PrintOptions options = options_of(piece);
+        if (design_.print.layers != PrintedLayers::one_by_one)
+            return {layout::tile(piece.drawing, options)};
+        std::vector<layout::Tiling> all;
+        options.frame = layout::bounds_of(*piece.drawing);
+        for (const layout::Layer layer : layout::k_layers) {
+            const auto drawing = only(*piece.drawing, {layer});
+            if (drawing->marks.empty())
+                continue;
+            const std::string name = fmt::format("{}, layer {}", piece.title, layout::name_of(layer));
+            options.title = design_.title + ", " + name;
+            options.part = name;
+            all.push_back(layout::tile(drawing, options));
+        }
+        return all;
+    }
+
     [[nodiscard]] std::vector<std::vector<layout::Tiling>> plate_tilings() const {
         std::vector<std::vector<layout::Tiling>> all;
-        for (const WorkPiece& piece : pieces_) {
-            if (!piece.is_plate)
-                continue;
-            all.emplace_back();
-            layout::PrintOptions options = options_of(piece);
-            if (design_.print.layers != PrintedLayers::one_by_one) {
-                all.back().push_back(layout::tile(piece.drawing, options));
-                continue;
-            }
-            options.frame = layout::bounds_of(*piece.drawing);
-            for (const layout::Layer layer : layout::k_layers) {
-                const auto drawing = only(*piece.drawing, {layer});
-                if (drawing->marks.empty())
-                    continue;
-                const std::string name = fmt::format("{}, layer {}", piece.title, layout::name_of(layer));
-                options.title = design_.title + ", " + name;
-                options.part = name;
-                all.back().push_back(layout::tile(drawing, options));
-            }
-        }
+        for (const WorkPiece& piece : pieces_)
+            if (piece.is_plate)
+                all.push_back(tilings_of(piece));
         return all;
     }
 
