@@ -218,6 +218,15 @@ class Check(Bench):
         self.assertIn("their lines miss the field", out)
         self.assertNotIn("throws", out)
 
+    def test_what_the_named_tool_cannot_cut_is_told_with_its_place(self):
+        fine = run("check", self.design(LEVEL + "cutting: {tool: laser, diameter: 0.1 mm}\n"))[1]
+        self.assertNotIn("the tool leaves no line", fine)
+        status, out, _ = run("check", self.design(LEVEL + "cutting: {tool: end mill, diameter: 3 mm}\n"))
+        self.assertEqual(status, WITH_WARNINGS)
+        place = r"\d+ mm (right|left) and \d+ mm (up|down) from the plate's middle"
+        self.assertRegex(out, r"the tool leaves no line finer than 3\.00 mm, and letters .* " + place)
+        self.assertRegex(out, r"the hour lines \"hour line \w+\" and \"hour line \w+\" leave [\d.]+ mm between them " + place)
+
     def test_it_writes_nothing(self):
         design = self.design(LEVEL)
         before = contents_of(self.folder)
