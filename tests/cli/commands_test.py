@@ -225,7 +225,7 @@ class Check(Bench):
         self.assertEqual(status, WITH_WARNINGS)
         place = r"\d+ mm (right|left) and \d+ mm (up|down) from the plate's middle"
         self.assertRegex(out, r"the tool leaves no line finer than 3\.00 mm, and letters .* " + place)
-        self.assertRegex(out, r"the hour lines \"hour line \w+\" and \"hour line \w+\" leave [\d.]+ mm between them " + place)
+        self.assertRegex(out, r'"hour line \w+" and "date line 21 Jun" leave [\d.]+ mm between them ' + place)
 
     def test_it_writes_nothing(self):
         design = self.design(LEVEL)
