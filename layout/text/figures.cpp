@@ -33,6 +33,10 @@ std::string sixty_fourths(double mm) {
     return text;
 }
 
+std::string bare_length(double mm, bool inches) {
+    return inches ? sixty_fourths(mm) : fixed(mm, 1);
+}
+
 std::string say_length(double mm, bool inches) {
     const std::string metric = fixed(mm, 1) + " mm";
     return inches ? fmt::format("{} ({} in)", metric, sixty_fourths(mm)) : metric;

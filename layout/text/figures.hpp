@@ -15,6 +15,8 @@ namespace dialwright::layout {
 [[nodiscard]] std::string degrees_minutes(Angle angle);
 /// The length to the nearest 1/64 inch, as a rule shows it: "1 53/64", "-3/8", "0".
 [[nodiscard]] std::string sixty_fourths(double mm);
+/// For a table of one unit: "46.3", or "1 53/64".
+[[nodiscard]] std::string bare_length(double mm, bool inches);
 /// "46.3 mm", or "46.3 mm (1 53/64 in)".
 [[nodiscard]] std::string say_length(double mm, bool inches);
 
