@@ -128,10 +128,11 @@ std::optional<AskedPrint> asked_print(const SheetOptions& options, const Design*
 bool write_pdf(const std::string& file, const AskedPrint& print, const std::function<layout::SheetBook()>& make,
                const char* option) {
     const std::filesystem::path path{file};
+    const std::string named = *option != '\0' ? std::string{option} + ": " : std::string{};
     try {
         std::error_code trouble;
         if (path.filename().empty() || std::filesystem::is_directory(path, trouble)) {
-            std::cerr << fmt::format("{}: {} is a folder: give the name of a file in it\n", option, file);
+            std::cerr << fmt::format("{}{} is a folder: give the name of a file in it\n", named, file);
             return false;
         }
         layout::SheetBook book = make();
@@ -143,7 +144,7 @@ bool write_pdf(const std::string& file, const AskedPrint& print, const std::func
     } catch (const WriteError& trouble) {
         std::cerr << trouble.what() << "; nothing was changed there\n";
     } catch (const layout::ExportError& trouble) {
-        std::cerr << option << ": " << trouble.what() << '\n';
+        std::cerr << (named.empty() ? file + ": " : named) << trouble.what() << '\n';
     }
     return false;
 }

@@ -9,7 +9,6 @@ import subprocess
 import xml.etree.ElementTree as tree
 
 import ezdxf
-import ezdxf.path
 import numpy as np
 
 MM = 25.4 / 72
@@ -20,8 +19,8 @@ def curve(a, b, c, d, count=24):
     return (1 - t) ** 3 * a + 3 * t * (1 - t) ** 2 * b + 3 * t * t * (1 - t) * c + t**3 * d
 
 
-def arc(p, r, large, sweep, q, count=180):
-    """By the centre form of SVG 1.1, appendix F.6.5."""
+def arc(p, r, large, sweep, q):
+    """By the centre form of SVG 1.1, appendix F.6.5; in chords within 0.001 mm."""
     x, y = (p - q) / 2
     d2 = x * x + y * y
     r = max(r, math.sqrt(d2))
@@ -29,7 +28,7 @@ def arc(p, r, large, sweep, q, count=180):
     middle = np.array([k * y, -k * x]) + (p + q) / 2
     start, end = (math.atan2(*(point - middle)[::-1]) for point in (p, q))
     turn = (end - start) % (2 * math.pi) if sweep else -((start - end) % (2 * math.pi))
-    angles = start + turn * np.linspace(0, 1, count + 1)[1:]
+    angles = start + turn * np.linspace(0, 1, 2 + math.ceil(abs(turn) * math.sqrt(r / 0.008)))[1:]
     return middle + r * np.stack([np.cos(angles), np.sin(angles)], axis=1)
 
 
@@ -61,9 +60,11 @@ class Svg:
         self.width, self.height = (float(v) for v in root.get("viewBox").split()[2:])
         assert root.get("width") == f"{self.width:.4f}".rstrip("0").rstrip(".") + "mm"
         self.strokes, self.fills, self.edge = [], [], None  # [(layer, width, runs)]
+        self.in_order = []  # the runs of each mark
         for group in root:
             for mark in group:
                 runs = [np.array([0, self.height]) + run * [1, -1] for run in svg_runs(mark.get("d"))]
+                self.in_order.append(runs)
                 if mark.get("fill") == "none":
                     self.strokes.append((group.get("id"), float(mark.get("stroke-width")), runs))
                 else:
@@ -72,13 +73,13 @@ class Svg:
                     self.edge = runs[0]
 
 
-def pdf_runs(path):
-    """For each page, its stroked runs in millimetres from the lower left corner."""
+def pdf_runs(path, painted="stroke_path"):
+    """For each page its size, and its stroked (or with "fill_path" its filled) runs, in millimetres from the lower left corner."""
     traced = tree.fromstring(subprocess.run(["mutool", "trace", path], check=True, capture_output=True).stdout)
     for page in traced.iter("page"):
         box = [float(v) for v in page.get("mediabox").split()]
         pages = []
-        for stroke in page.iter("stroke_path"):
+        for stroke in page.iter(painted):
             m = [float(v) for v in stroke.get("transform").split()]
             runs = []
             for step in stroke:
@@ -131,6 +132,15 @@ def along(line):
     return np.concatenate(points)
 
 
+def bulged(a, b, bulge):
+    """The points of an arc after its first; `bulge` is the tangent of a quarter of its sweep. In chords within 0.001 mm."""
+    turn, across = 4 * math.atan(bulge), (b - a) / 2
+    middle = (a + b) / 2 + np.array([-across[1], across[0]]) / math.tan(turn / 2)
+    angles = turn * np.linspace(0, 1, 2 + math.ceil(abs(turn) * math.sqrt(math.dist(a, middle) / 0.008)))[1:]
+    from_middle = a - middle
+    return middle + np.stack([from_middle[0] * np.cos(angles) - from_middle[1] * np.sin(angles), from_middle[0] * np.sin(angles) + from_middle[1] * np.cos(angles)], axis=1)
+
+
 class Dxf:
     """Entities of a DXF in the file's order, as ezdxf reads them: [(layer, kind, closed, run)]."""
 
@@ -139,13 +149,25 @@ class Dxf:
         self.faults = [fault.message for found in [self.document.audit()] for fault in [*found.errors, *found.fixes]]
         self.entities = [(entity.dxf.layer, entity.dxftype(), entity.dxftype() == "CIRCLE" or getattr(entity, "is_closed", False), self.run_of(entity))
                          for entity in self.document.modelspace()]
+        # True arcs, alone and as bulges of polylines.
+        self.arcs = len(self.document.modelspace().query("ARC CIRCLE")) + sum(
+            vertex.dxf.get("bulge", 0) != 0 for line in self.document.modelspace().query("POLYLINE") for vertex in line.vertices)
         self.circles = [(entity.dxf.layer, np.array(entity.dxf.center)[:2], entity.dxf.radius) for entity in self.document.modelspace().query("CIRCLE")]
 
     @staticmethod
     def run_of(entity):
-        path = ezdxf.path.make_path(entity)
-        straight = not path.has_curves
-        return np.array([(p.x, p.y) for p in (path.control_vertices() if straight else path.flattening(0.001))])
+        kind = entity.dxftype()
+        if kind == "LINE":
+            points = [entity.dxf.start, entity.dxf.end]
+        elif kind in ("ARC", "CIRCLE"):
+            points = entity.flattening(0.001)
+        else:
+            corners = [(np.array(vertex.dxf.location)[:2], vertex.dxf.get("bulge", 0)) for vertex in entity.vertices]
+            corners += corners[:1] if entity.is_closed else []
+            points = [corners[0][0]]
+            for (a, bulge), (b, _) in zip(corners, corners[1:]):
+                points.extend(bulged(a, b, bulge) if bulge else [b])
+        return np.array([(p[0], p[1]) for p in points])
 
     def runs(self, layer):
         return [run for on, _, _, run in self.entities if on == layer.upper()]

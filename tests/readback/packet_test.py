@@ -5,8 +5,11 @@ The lines on paper and in the SVG are those of numbers.json within 0.005 mm. Whe
 the plate's outline and from how tiles are laid (their openings and overlaps), not from the lines that are tested.
 """
 import math
+import pathlib
 import re
+import shutil
 import subprocess
+import tempfile
 import unittest
 
 import fitz
@@ -31,12 +34,21 @@ def setting(design, key, checked):
 
 
 class Packets(Bench):
+    @classmethod
+    def setUpClass(cls):
+        cls.packets = pathlib.Path(tempfile.mkdtemp(prefix="dialwright-"))
+        cls.addClassCleanup(shutil.rmtree, cls.packets, ignore_errors=True)
+        cls.made = {}
+
     def each(self):
+        """Each design's packet, made when it is first asked for."""
         for design in DESIGNS:
-            folder = self.folder / design.stem
-            status, out, err = run("make", design, "--to", folder)
-            self.assertIn(status, (FINE, WITH_WARNINGS), err)
-            yield design, folder, int(re.search(r": (\d+) sheets", out)[1]), strict_json((folder / "numbers.json").read_text())
+            folder = self.packets / design.stem
+            if design not in self.made:
+                status, out, err = run("make", design, "--to", folder)
+                self.assertIn(status, (FINE, WITH_WARNINGS), err)
+                self.made[design] = int(re.search(r": (\d+) sheets", out)[1]), strict_json((folder / "numbers.json").read_text())
+            yield design, folder, *self.made[design]
 
     @staticmethod
     def svg_of(folder, name):
