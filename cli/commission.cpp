@@ -67,8 +67,10 @@ CommissionTaking take_commission(DesignReading reading) {
             return {std::nullopt, in_order(what_cannot_be_lettered(design, trouble.what()))};
         } catch (const layout::GnomonError& trouble) {
             return {std::nullopt, {gnomon_error(design, trouble.what())}};
-        } catch (const std::invalid_argument& trouble) {
+        } catch (const layout::BordersError& trouble) {
             return {std::nullopt, {borders_error(design, trouble.what())}};
+        } catch (const std::invalid_argument& trouble) {
+            return {std::nullopt, {error_at(design, "plate", trouble.what(), "")}};
         }
         plan.dial.nodus_height_mm = faces.back().placement.nodus_height_mm;
     }
@@ -97,6 +99,17 @@ CommissionTaking take_commission(DesignReading reading) {
     return {Commission{std::move(design), std::move(year), std::move(plans), std::move(faces), std::move(gnomons),
                        std::move(correction), std::move(correction_plate)},
             {}};
+}
+
+std::optional<std::size_t> face_named(const Commission& commission, const std::string& name) {
+    for (std::size_t i = 0; i < commission.plans.size(); ++i)
+        if (commission.plans[i].name == name)
+            return i;
+    std::cerr << fmt::format("--face {}: this design has no such face{}\n", name,
+                             commission.plans.size() > 1
+                                 ? "; it has " + commission.plans[0].name + " and " + commission.plans[1].name
+                                 : std::string{" (it has only one)"});
+    return std::nullopt;
 }
 
 } // namespace dialwright::cli

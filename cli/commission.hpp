@@ -34,6 +34,9 @@ struct CommissionTaking {
 /// @return nothing after an error has been told
 [[nodiscard]] std::optional<Commission> take_commission(const std::filesystem::path& file);
 
+/// The face of that name; tells on stderr of a name that the design's faces have not.
+[[nodiscard]] std::optional<std::size_t> face_named(const Commission& commission, const std::string& name);
+
 /// Each error on a line of stderr.
 void tell(const std::vector<DesignError>& errors);
 

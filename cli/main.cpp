@@ -45,6 +45,9 @@ int main(int count, char** words) {
     add_sunlight(app, status);
     add_fix(app, status);
     add_accuracy(app, status);
+    add_survey(app, status);
+    add_adjust(app, status);
+    add_restore(app, status);
     if (const std::string wrong = count > 1 ? no_command(app, words[1]) : std::string{}; !wrong.empty()) {
         std::cerr << "dialwright: " << wrong << '\n';
         return k_error;

@@ -104,7 +104,7 @@ std::optional<AskedDates> asked_dates(const DateOptions& options, int most_days)
 }
 
 void SheetOptions::add_to(CLI::App& command) {
-    command.add_option("--sheet", file, "a PDF to print, written there as well");
+    command.add_option("--pdf", file, "a PDF to print, written there as well");
     command.add_option("--paper", paper, "for the PDF: A4, Letter, … [the design's, else A4]");
 }
 
@@ -125,12 +125,14 @@ std::optional<AskedPrint> asked_print(const SheetOptions& options, const Design*
     return AskedPrint{print_options(asked), asked.print.printer};
 }
 
-bool write_pdf(const std::string& file, const AskedPrint& print, const std::function<layout::SheetBook()>& make) {
+bool write_pdf(const std::string& file, const AskedPrint& print, const std::function<layout::SheetBook()>& make,
+               const char* option) {
     const std::filesystem::path path{file};
+    const std::string named = *option != '\0' ? std::string{option} + ": " : std::string{};
     try {
         std::error_code trouble;
         if (path.filename().empty() || std::filesystem::is_directory(path, trouble)) {
-            std::cerr << fmt::format("{} is a folder: give the name of a file in it\n", file);
+            std::cerr << fmt::format("{}{} is a folder: give the name of a file in it\n", named, file);
             return false;
         }
         layout::SheetBook book = make();
@@ -142,7 +144,7 @@ bool write_pdf(const std::string& file, const AskedPrint& print, const std::func
     } catch (const WriteError& trouble) {
         std::cerr << trouble.what() << "; nothing was changed there\n";
     } catch (const layout::ExportError& trouble) {
-        std::cerr << file << ": " << trouble.what() << '\n';
+        std::cerr << (named.empty() ? file + ": " : named) << trouble.what() << '\n';
     }
     return false;
 }

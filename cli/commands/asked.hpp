@@ -59,8 +59,8 @@ struct AskedPrint {
 };
 /// Tells on stderr what is wrong, and then gives nothing.
 [[nodiscard]] std::optional<AskedPrint> asked_print(const SheetOptions& options, const Design* design);
-/// Makes the sheets and writes them as one PDF. Tells on stderr what keeps it from being made, and then is false.
+/// Makes the sheets and writes them as one PDF, whose file is an option's, or with "" the command's own. Tells on stderr what keeps it from being made, and then is false.
 [[nodiscard]] bool write_pdf(const std::string& file, const AskedPrint& print,
-                             const std::function<layout::SheetBook()>& make);
+                             const std::function<layout::SheetBook()>& make, const char* option = "--pdf");
 
 } // namespace dialwright::cli

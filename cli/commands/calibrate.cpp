@@ -22,12 +22,15 @@ int run_calibrate(const CalibrateOptions& options) {
     if (!print)
         return k_error;
     print->options.inches = options.inches;
-    const bool made = write_pdf(options.sheet.file, *print, [&] {
-        return layout::SheetBook{"Calibration of the printer",
-                                 "A page to measure a printer with",
-                                 {layout::calibration_sheet(print->options)},
-                                 false};
-    });
+    const bool made = write_pdf(
+        options.sheet.file, *print,
+        [&] {
+            return layout::SheetBook{"Calibration of the printer",
+                                     "A page to measure a printer with",
+                                     {layout::calibration_sheet(print->options)},
+                                     false};
+        },
+        "");
     if (!made)
         return k_error;
     std::cout << fmt::format(

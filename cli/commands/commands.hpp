@@ -17,5 +17,8 @@ void add_sun(CLI::App& app, int& status);
 void add_sunlight(CLI::App& app, int& status);
 void add_fix(CLI::App& app, int& status);
 void add_accuracy(CLI::App& app, int& status);
+void add_survey(CLI::App& app, int& status);
+void add_adjust(CLI::App& app, int& status);
+void add_restore(CLI::App& app, int& status);
 
 } // namespace dialwright::cli

@@ -74,13 +74,6 @@ bool read_lines(const std::string& name, Asked& asked) {
     return true;
 }
 
-std::optional<std::size_t> face_named(const Commission& commission, const std::string& name) {
-    for (std::size_t i = 0; i < commission.plans.size(); ++i)
-        if (commission.plans[i].name == name)
-            return i;
-    return std::nullopt;
-}
-
 int run_shadow(const ShadowOptions& options) {
     Asked asked;
     for (const std::string& text : options.at)
@@ -97,13 +90,8 @@ int run_shadow(const ShadowOptions& options) {
     std::optional<std::size_t> face;
     if (!options.face.empty()) {
         face = face_named(*commission, options.face);
-        if (!face) {
-            std::cerr << fmt::format("--face {}: this design has no such face{}\n", options.face,
-                                     commission->plans.size() > 1
-                                         ? "; it has " + commission->plans[0].name + " and " + commission->plans[1].name
-                                         : std::string{" (it has only one)"});
+        if (!face)
             return k_error;
-        }
     }
     try {
         const auto reports = shadow_reports(*commission, asked.instants, face);

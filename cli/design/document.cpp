@@ -277,11 +277,9 @@ DesignError at_top(const std::string& file, std::string message, std::string hin
     return {file, 1, 1, "", std::move(message), std::move(hint)};
 }
 
-constexpr const char* k_start_hint = "start with what is made and where: \"dial:\", \"place:\" and \"plate:\"";
-
 } // namespace
 
-DocumentReading read_document(std::string_view text, const std::string& file) {
+DocumentReading read_document(std::string_view text, const std::string& file, std::string_view start_hint) {
     if (text.size() > k_largest_file_bytes)
         return {std::nullopt, {at_top(file, "the file is larger than 1 MB", "a design needs a few kB at most")}};
     const std::string plain = plain_lines(text);
@@ -310,13 +308,13 @@ DocumentReading read_document(std::string_view text, const std::string& file) {
         reading.root.reset();
     } else if (!reading.root || reading.root->kind == Node::Kind::empty) {
         reading.root.reset();
-        reading.errors.push_back(at_top(file, "the file has nothing in it", k_start_hint));
+        reading.errors.push_back(at_top(file, "the file has nothing in it", std::string{start_hint}));
     } else if (reading.root->kind != Node::Kind::mapping) {
         const Position at = reading.root->at;
         const char* what = reading.root->kind == Node::Kind::list ? "a list" : "a text";
         reading.errors.push_back({file, at.line, at.column, "",
                                   std::string{"the file is "} + what + " where keys with values are wanted",
-                                  k_start_hint});
+                                  std::string{start_hint}});
         reading.root.reset();
     }
     return reading;

@@ -42,9 +42,14 @@ inline constexpr std::size_t k_largest_file_bytes = 1'000'000;
 inline constexpr std::size_t k_deepest_nesting = 32;
 inline constexpr std::size_t k_most_nodes = 20'000;
 
+/// What to do about a file without keys.
+inline constexpr std::string_view k_design_start_hint =
+    "start with what is made and where: \"dial:\", \"place:\" and \"plate:\"";
+
 /// The tree of a YAML text. Refused, each with its place: text that is not UTF-8, control characters, keys given twice,
 /// anchors and aliases, tags, keys that are not text, deep nesting, too many pieces, a second document. A byte order
 /// mark and any kind of line end are accepted. Never throws for what is in the text.
-[[nodiscard]] DocumentReading read_document(std::string_view text, const std::string& file);
+[[nodiscard]] DocumentReading read_document(std::string_view text, const std::string& file,
+                                            std::string_view start_hint = k_design_start_hint);
 
 } // namespace dialwright::cli

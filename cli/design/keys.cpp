@@ -121,6 +121,8 @@ constexpr auto k_keys = std::to_array<KnownKey>({
     {"weights", "noon at"},
 
     {"", "extents"},
+    {"extents", "hours"},
+    {"extents", "dates"},
     {"extents", "sun"},
     {"extents", "zone"},
     {"extents", "clock"},
@@ -158,6 +160,7 @@ constexpr auto k_keys = std::to_array<KnownKey>({
     {"lettering", "motto"},
     {"lettering", "motto height"},
     {"lettering", "place line"},
+    {"lettering", "legend"},
 
     {"", "cutting"},
     {"cutting", "line width"},
@@ -197,14 +200,14 @@ std::span<const KnownKey> known_keys() {
     return k_keys;
 }
 
-bool is_known(std::string_view section, std::string_view name) {
-    return std::any_of(k_keys.begin(), k_keys.end(),
+bool is_known(std::string_view section, std::string_view name, std::span<const KnownKey> table) {
+    return std::any_of(table.begin(), table.end(),
                        [&](const KnownKey& key) { return key.section == section && key.name == name; });
 }
 
-std::vector<std::string_view> keys_of(std::string_view section) {
+std::vector<std::string_view> keys_of(std::string_view section, std::span<const KnownKey> table) {
     std::vector<std::string_view> names;
-    for (const KnownKey& key : k_keys)
+    for (const KnownKey& key : table)
         if (key.section == section)
             names.push_back(key.name);
     return names;
@@ -214,12 +217,12 @@ std::string full_name(std::string_view section, std::string_view name) {
     return section.empty() ? std::string{name} : fmt::format("{}: {}", section, name);
 }
 
-std::string hint_for_unknown(std::string_view section, std::string_view name) {
-    const std::vector<std::string_view> here = keys_of(section);
+std::string hint_for_unknown(std::string_view section, std::string_view name, std::span<const KnownKey> table) {
+    const std::vector<std::string_view> here = keys_of(section, table);
     if (const std::string_view meant = nearest(name, here); !meant.empty())
         return fmt::format("did you mean \"{}\"?", meant);
     constexpr std::size_t k_longest = 60;
-    for (const KnownKey& key : k_keys) {
+    for (const KnownKey& key : table) {
         if (key.section == section || slips_between(key.name, name.substr(0, k_longest)) > 1)
             continue;
         return key.section.empty() ? fmt::format("\"{}\" stands at the top of the file, not indented", key.name)

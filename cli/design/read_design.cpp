@@ -3,20 +3,16 @@
 
 #include "cli/design/defaults.hpp"
 #include "cli/design/document.hpp"
+#include "cli/design/file_text.hpp"
 #include "cli/design/sections.hpp"
 
 #include <fmt/format.h>
 
 #include <algorithm>
-#include <fstream>
-#include <iterator>
-#include <tuple>
 
 namespace dialwright::cli {
 
 namespace {
-
-constexpr std::size_t k_most_errors = 100;
 
 /// Lengths that must agree with each other and with the plate. An error is shown at the first of `keys` that the file
 /// gives, or else at the plate.
@@ -105,10 +101,6 @@ void read_sections(Design& design, const Node& root, ReadingState& state) {
     read_print(design, top);
 }
 
-DesignReading unreadable(const std::string& file, std::string message, std::string hint) {
-    return {std::nullopt, {{file, 1, 1, "", std::move(message), std::move(hint)}}};
-}
-
 } // namespace
 
 DesignReading read_design(std::string_view text, std::string file_name) {
@@ -129,31 +121,14 @@ DesignReading read_design(std::string_view text, std::string file_name) {
         design.where[key] = {at.line, at.column};
     if (state.errors.empty())
         return {std::move(design), {}};
-    std::stable_sort(state.errors.begin(), state.errors.end(), [](const DesignError& a, const DesignError& b) {
-        return std::tie(a.line, a.column) < std::tie(b.line, b.column);
-    });
-    if (state.errors.size() > k_most_errors)
-        state.errors.resize(k_most_errors);
-    return {std::nullopt, std::move(state.errors)};
+    return {std::nullopt, first_errors(std::move(state.errors))};
 }
 
 DesignReading read_design_file(const std::filesystem::path& path) {
-    const std::string name = path.string();
-    std::error_code trouble;
-    if (std::filesystem::is_directory(path, trouble))
-        return unreadable(name, "this is a folder", "give the design file in it");
-    if (!std::filesystem::exists(path, trouble))
-        return unreadable(name, "there is no such file", "check its name and folder");
-    std::ifstream stream{path, std::ios::binary};
-    if (!stream)
-        return unreadable(name, "the file can't be opened", "check that you may read it");
-    // One byte more than is accepted, so that an endless device ends too.
-    std::string text(k_largest_file_bytes + 1, '\0');
-    stream.read(text.data(), static_cast<std::streamsize>(text.size()));
-    if (stream.bad())
-        return unreadable(name, "the file can't be read to its end", "check the disk that it is on");
-    text.resize(static_cast<std::size_t>(stream.gcount()));
-    return read_design(text, name);
+    FileText file = read_text_file(path, "design file");
+    if (!file.text)
+        return {std::nullopt, std::move(file.errors)};
+    return read_design(*file.text, path.string());
 }
 
 } // namespace dialwright::cli

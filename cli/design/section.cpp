@@ -37,7 +37,7 @@ Section::Section(const Entry* holder, std::string_view name, ReadingState& state
     }
     if (value.kind == Node::Kind::refused)
         return;
-    const std::string example{keys_of(name).front()};
+    const std::string example{keys_of(name, state.keys).front()};
     if (value.kind == Node::Kind::empty)
         state.error(holder->at, name_, "this section has nothing in it", "indent its keys below it, or leave it out");
     else
@@ -55,20 +55,21 @@ Section::Section(const Node& mapping, std::string_view name, ReadingState& state
 void Section::open(const Node& mapping) {
     mapping_ = &mapping;
     for (const Entry& entry : mapping.entries) {
-        if (is_known(name_, entry.key)) {
+        if (is_known(name_, entry.key, state_->keys)) {
             const bool is_section = entry.value.kind == Node::Kind::mapping;
             state_->given.emplace(full_name(name_, entry.key), is_section ? entry.at : entry.value.at);
             continue;
         }
-        misspelt_.push_back(nearest(entry.key, keys_of(name_)));
+        misspelt_.push_back(nearest(entry.key, keys_of(name_, state_->keys)));
         state_->error(entry.at, name_,
-                      in_quotes(entry.key) + " is not a key of a design" + (name_.empty() ? "" : "'s " + name_),
-                      hint_for_unknown(name_, entry.key));
+                      fmt::format("{} is not a key of {}{}", in_quotes(entry.key), state_->whose,
+                                  name_.empty() ? "" : "'s " + name_),
+                      hint_for_unknown(name_, entry.key, state_->keys));
     }
 }
 
 const Entry* Section::entry(std::string_view key) const {
-    assert(is_known(name_, key));
+    assert(is_known(name_, key, state_->keys));
     return mapping_ == nullptr ? nullptr : mapping_->find(key);
 }
 

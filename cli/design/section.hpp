@@ -18,9 +18,11 @@
 
 namespace dialwright::cli {
 
-/// What is known while a design is read: its errors, and which keys the file gives ("place: latitude").
+/// What is known while a file is read: its errors, and which keys the file gives ("place: latitude").
 struct ReadingState {
     std::string file;
+    std::span<const KnownKey> keys = known_keys(); ///< all that such a file may hold
+    std::string_view whose = "a design";           ///< what it is, for messages
     Units units = Units::millimetres;
     std::vector<DesignError> errors;
     std::map<std::string, Position, std::less<>> given; ///< and where

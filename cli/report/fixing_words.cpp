@@ -60,10 +60,15 @@ std::string motion_text(const Motion& motion, const std::vector<FixingAnswer>& a
 
 PlateWords plate_words(const Design& design) {
     if (design.dial.kind == DialKind::level)
-        return {"east mm",        "north mm",        "turned clockwise", "north edge down",
+        return {"east",           "north",           "turned clockwise", "north edge down",
                 "east edge down", "north edge down", "east edge down"};
-    return {"right mm",         "up mm",    "turned clockwise (from above)",    "top back",
-            "rolled clockwise", "top back", "rolled clockwise in its own plane"};
+    return {"right",
+            "up",
+            "turned clockwise (from above)",
+            "top back",
+            "rolled clockwise",
+            "top back",
+            "rolled clockwise in its own plane"};
 }
 
 std::string reading_words(double hours) {

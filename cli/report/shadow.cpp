@@ -5,7 +5,6 @@
 #include "engine/sun/almanac.hpp"
 #include "engine/time/instant_text.hpp"
 
-#include <chrono>
 #include <fmt/format.h>
 #include <iterator>
 
@@ -27,14 +26,6 @@ std::string reading_text(std::optional<double> hours) {
 }
 
 } // namespace
-
-double mean_day_of(Instant at, const MeanYear& year) {
-    using namespace std::chrono;
-    const auto midnight = floor<days>(at);
-    const year_month_day date{midnight};
-    const double hours = duration<double, std::ratio<3600>>(at - midnight).count();
-    return year.day_of(date.month() / date.day(), hours);
-}
 
 std::vector<ShadowReport> shadow_reports(const Commission& commission, std::span<const Instant> instants,
                                          std::optional<std::size_t> face) {
@@ -59,7 +50,7 @@ std::vector<ShadowReport> shadow_reports(const Commission& commission, std::span
                 report.lit = true;
                 report.shadow = cast->point;
                 const DialPlan& dial = readers[k].plan->dial;
-                const double day = mean_day_of(report.at, commission.year);
+                const double day = commission.year.day_of(report.at);
                 report.reads_h = reading_of(dial, dial.hours.time, commission.year, report.sky, day);
                 for (const HourPlan& more : dial.more_hours)
                     report.also_reads_h.push_back(reading_of(dial, more.time, commission.year, report.sky, day));

@@ -22,9 +22,6 @@ struct ShadowReport {
     std::vector<std::optional<double>> also_reads_h; ///< by each more set of hours, beside the plan's more_hours
 };
 
-/// Day of the mean year on which an instant falls, from 1 January 0 h UT.
-[[nodiscard]] double mean_day_of(Instant at, const MeanYear& year);
-
 /// @param face  of a dial with several; nothing: the one that is lit, else the first
 [[nodiscard]] std::vector<ShadowReport> shadow_reports(const Commission& commission, std::span<const Instant> instants,
                                                        std::optional<std::size_t> face);

@@ -130,6 +130,12 @@ double MeanYear::day_of(month_day date, double hour_ut) const {
     return static_cast<double>(whole.count()) + gap + hour_ut / 24.0;
 }
 
+double MeanYear::day_of(Instant at) const {
+    const auto midnight = floor<days>(at);
+    const year_month_day date{midnight};
+    return day_of(date.month() / date.day(), duration<double, std::ratio<3600>>(at - midnight).count());
+}
+
 month_day MeanYear::date_of(double day) const {
     double in_year = day - k_length_days * std::floor(day / k_length_days);
     if (in_year >= k_days_before_march) {

@@ -2,6 +2,7 @@
 #pragma once
 
 #include "engine/base/angle.hpp"
+#include "engine/time/instant.hpp"
 
 #include <array>
 #include <chrono>
@@ -44,6 +45,8 @@ class MeanYear {
     /// years alone is up to 21″ in declination away, as they need not lie in the middle of the span.
     /// @param date  a valid month and day
     [[nodiscard]] double day_of(std::chrono::month_day date, double hour_ut = 12.0) const;
+    /// The day of an instant, whatever its year.
+    [[nodiscard]] double day_of(Instant at) const;
     /// The date on which a day falls; the quarter of a day between 28 February and 1 March is 29 February.
     [[nodiscard]] std::chrono::month_day date_of(double day) const;
 

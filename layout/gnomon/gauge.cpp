@@ -69,8 +69,8 @@ void add_lettering(Drawing& drawing, const GaugePlan& plan, const Shape& shape) 
                                   degrees_minutes(plan.angle)));
 }
 
-/// How far the lettering is from a point.
-double clear_of_letters(const Drawing& drawing, Point from) {
+/// How far from a point the lettering stays, by its boxes.
+double clear_round(const Drawing& drawing, Point from) {
     double least = 1e300;
     for (const Mark& mark : drawing.marks)
         if (mark.layer == Layer::engrave) {
@@ -98,15 +98,16 @@ Gauge gauge_of(const GaugePlan& plan) {
         {Layer::guide, {polyline({{-5, 0}, {shape.right_mm + 5, 0}})}, k_thin_mm, false, "face, along the base"});
     drawing.marks.push_back(cross_mark(Layer::guide, {}, 2.0, "centre"));
     add_lettering(drawing, plan, shape);
-    const double r = std::min({0.3 * edge, 40.0, 0.9 * clear_of_letters(drawing, shape.corner)});
-    drawing.marks.push_back(
-        {Layer::guide,
-         {Path{shape.corner + Point{r, 0},
-               {ArcTo{shape.corner + r * Point{cos(plan.angle), sin(plan.angle)}, shape.corner, plan.angle}},
-               false}},
-         k_thin_mm,
-         false,
-         "angle " + degrees_minutes(plan.angle)});
+    const double r = std::min({0.3 * edge, 40.0, clear_round(drawing, shape.corner) - 1.5});
+    if (r > 4)
+        drawing.marks.push_back(
+            {Layer::guide,
+             {Path{shape.corner + Point{r, 0},
+                   {ArcTo{shape.corner + r * Point{cos(plan.angle), sin(plan.angle)}, shape.corner, plan.angle}},
+                   false}},
+             k_thin_mm,
+             false,
+             "angle " + degrees_minutes(plan.angle)});
     drawing.marks.push_back({Layer::cut, {rounded_polygon(shape.corners)}, k_cut_mm, false, "gauge"});
     gauge.part.drawings.push_back(std::move(drawing));
     gauge.part.particulars = {{"Gauge", plan.words},

@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "layout/setting_out/setting_out.hpp"
 
+#include "layout/plate/family_words.hpp"
 #include "layout/plate/points.hpp"
 #include "layout/text/figures.hpp"
 
@@ -133,7 +134,7 @@ class Setter {
         for (const DrawnLine& line : face_.lines) {
             if (line.points.size() < 2 || (!options_.divisions && is_hour(line.family) && line.step_min < 60))
                 continue;
-            SeenLine made{&line, name_of_family(line.family) + line.label, {}};
+            SeenLine made{&line, line_name(line.family, line.time, line.set, line.label), {}};
             for (const PlatePoint& p : line.points)
                 made.points.push_back(seen(p));
             if (made.straight() && runs_inward(made))

@@ -48,7 +48,7 @@ class Sun(Bench):
 
     def test_a_sheet(self):
         sheet = self.folder / "sun.pdf"
-        status, _, err = run("sun", *MOOR, "--on", "2027-06-01", "--to", "2027-06-30", "--sheet", sheet, "--paper", "Letter")
+        status, _, err = run("sun", *MOOR, "--on", "2027-06-01", "--to", "2027-06-30", "--pdf", sheet, "--paper", "Letter")
         self.assertEqual((status, err), (FINE, ""))
         self.assertTrue(sheet.read_bytes().startswith(b"%PDF"))
 
@@ -63,8 +63,8 @@ class Sun(Bench):
             (*MOOR, "--on", "tomorrow"): ["--on", "not a date"],
             (*MOOR, "--on", "2027-06-14", "--to", "2027-06-13"): ["--to", "before the first"],
             (*MOOR, "--on", "2027-06-14", "--to", "2057-06-13"): ["--to", "at most"],
-            (*MOOR, "--on", "2027-06-14", "--sheet", self.folder): ["--sheet", "folder"],
-            (*MOOR, "--on", "2027-06-14", "--sheet", self.folder / "a.pdf", "--paper", "A44"): ["--paper", "A4"],
+            (*MOOR, "--on", "2027-06-14", "--pdf", self.folder): ["--pdf", "folder"],
+            (*MOOR, "--on", "2027-06-14", "--pdf", self.folder / "a.pdf", "--paper", "A44"): ["--paper", "A4"],
             ("--on", "2027-06-14"): ["no place", "--latitude"],
             (self.folder / "none.yaml", "--on", "2027-06-14"): ["no such file"],
             MOOR: ["--on"],
@@ -112,7 +112,7 @@ class Sunlight(Bench):
 
     def test_sheets(self):
         sheet = self.folder / "light.pdf"
-        status, _, err = run("sunlight", self.design(WALL), "--facing", "S", "--sheet", sheet)
+        status, _, err = run("sunlight", self.design(WALL), "--facing", "S", "--pdf", sheet)
         self.assertEqual((status, err), (FINE, ""))
         pages = [page.get_text() for page in fitz.open(sheet)]
         self.assertEqual(len(pages), 3)
@@ -149,7 +149,7 @@ class Fix(Bench):
             for dates in (("--on", "2027-06-14"), ("--on", "2027-03-25", "--to", "2027-04-20")):
                 with self.subTest(design.name, dates=dates):
                     sheet = self.folder / "fix.pdf"
-                    status, out, err = run("fix", design, *dates, "--sheet", sheet)
+                    status, out, err = run("fix", design, *dates, "--pdf", sheet)
                     self.assertEqual((status, err), (FINE, ""))
                     self.assertNotIn("nan", out)
                     pages = [page.get_text() for page in fitz.open(sheet)]
@@ -159,7 +159,7 @@ class Fix(Bench):
 
     def test_the_same_words_give_the_same_bytes(self):
         design, sheets = self.design(WALL), [self.folder / name for name in ("a.pdf", "b.pdf")]
-        said = [run("fix", design, "--on", "2027-06-14", "--sheet", sheet, env={"TZ": tz, "PATH": "/usr/bin", "HOME": str(self.folder)})
+        said = [run("fix", design, "--on", "2027-06-14", "--pdf", sheet, env={"TZ": tz, "PATH": "/usr/bin", "HOME": str(self.folder)})
                 for sheet, tz in zip(sheets, ("Pacific/Auckland", "America/Lima"))]
         self.assertEqual(said[0], said[1])
         self.assertEqual(sheets[0].read_bytes(), sheets[1].read_bytes())
@@ -218,7 +218,7 @@ class Accuracy(Bench):
         for design in DESIGNS:
             with self.subTest(design.name):
                 sheet = self.folder / "accuracy.pdf"
-                status, out, err = run("accuracy", design, "--sheet", sheet)
+                status, out, err = run("accuracy", design, "--pdf", sheet)
                 self.assertEqual((status, err), (FINE, ""))
                 self.assertNotRegex(out, r"\bnan\b|\binf\b")
                 faces = strict_json(run("accuracy", design, "--json")[1])["faces"]
@@ -258,7 +258,7 @@ class Accuracy(Bench):
         self.assertIn("How good it will be", "".join(page.get_text() for page in fitz.open(packet / "sheets.pdf")))
 
     def test_wrong_words(self):
-        for words, part in (((self.folder / "none.yaml",), "no such file"), ((self.design(WALL), "--sheet", self.folder), "folder"),
+        for words, part in (((self.folder / "none.yaml",), "no such file"), ((self.design(WALL), "--pdf", self.folder), "folder"),
                             ((self.design(WALL), "--json", "--csv"), "--json")):
             status, out, err = run("accuracy", *words)
             self.assertEqual((status, out), (ERROR, ""))

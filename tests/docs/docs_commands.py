@@ -12,7 +12,7 @@ import sys
 import tempfile
 from pathlib import Path
 
-COMMANDS = ("make", "numbers", "shadow", "check", "calibrate", "sun", "sunlight", "fix", "accuracy")
+COMMANDS = ("make", "numbers", "shadow", "check", "calibrate", "sun", "sunlight", "fix", "accuracy", "survey", "adjust", "restore")
 
 
 def blocks(text):
