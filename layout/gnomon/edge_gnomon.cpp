@@ -218,7 +218,8 @@ class Maker {
         }
     }
 
-    /// Screws from behind go up into the edge of a plain foot.
+    /// Screws from behind go up into the edge of a plain foot. Seen from the side they are no work for a machine, so they stand
+    /// on the sheets alone.
     void add_screw_holes(Drawing& drawing) const {
         if (joint_.options.kind != FootKind::plain)
             return;
@@ -231,12 +232,12 @@ class Maker {
                 refuse(fmt::format("fixing hole {} would come out of the gnomon, which is {:.1f} mm high there: take "
                                    "fewer or smaller screws",
                                    i + 1, over));
-            drawing.marks.push_back({Layer::drill,
+            drawing.marks.push_back({Layer::guide,
                                      {polyline({{x - d / 2, 0}, {x - d / 2, deep}, {x + d / 2, deep}, {x + d / 2, 0}})},
                                      k_thin_mm,
                                      false,
                                      fmt::format("tapped hole {} {} deep", i + 1, say(deep))});
-            drawing.marks.push_back({Layer::drill,
+            drawing.marks.push_back({Layer::guide,
                                      {polyline({{x, -2}, {x, deep + 2}})},
                                      k_thin_mm,
                                      false,

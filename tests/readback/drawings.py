@@ -103,24 +103,30 @@ def segments_of(runs):
     return np.concatenate([np.hstack([run[:-1], run[1:]]) for run in runs if len(run) > 1])
 
 
-def farthest(points, segments):
-    """The largest distance of any point from its nearest segment."""
+def distances(points, segments):
+    """Of each point from its nearest segment."""
     a, d = segments[:, :2], segments[:, 2:] - segments[:, :2]
-    size = np.maximum((d**2).sum(axis=1), 1e-18)
+    e = points[:, None, :] - a
+    t = np.clip((e * d).sum(axis=2) / np.maximum((d**2).sum(axis=1), 1e-18), 0, 1)
+    return np.sqrt(((e - t[..., None] * d) ** 2).sum(axis=2)).min(axis=1, initial=math.inf)
+
+
+def farthest(points, segments):
+    """The largest distance of any point from its nearest segment. Neighbours look round themselves first."""
+    low, high = np.minimum(segments[:, :2], segments[:, 2:]), np.maximum(segments[:, :2], segments[:, 2:])
     worst = 0.0
-    for part in np.array_split(points, max(1, len(points) * len(segments) // 2_000_000)):
-        e = part[:, None, :] - a
-        t = np.clip((e * d).sum(axis=2) / size, 0, 1)
-        worst = max(worst, np.sqrt((((e - t[..., None] * d) ** 2).sum(axis=2)).min(axis=1)).max(initial=0.0))
+    for part in np.array_split(points, max(1, len(points) // 32)):
+        about = ((low <= part.max(axis=0) + 1) & (high >= part.min(axis=0) - 1)).all(axis=1)
+        found = distances(part, segments[about])
+        if (lost := found > 1).any():
+            found[lost] = distances(part[lost], segments)
+        worst = max(worst, found.max(initial=0.0))
     return worst
 
 
 def nearest(points, segments):
     """The least distance of any point from any segment."""
-    a, d = segments[:, :2], segments[:, 2:] - segments[:, :2]
-    e = points[:, None, :] - a
-    t = np.clip((e * d).sum(axis=2) / np.maximum((d**2).sum(axis=1), 1e-18), 0, 1)
-    return np.sqrt(((e - t[..., None] * d) ** 2).sum(axis=2)).min()
+    return distances(points, segments).min()
 
 
 def along(line):

@@ -170,12 +170,16 @@ class Gnomons(Bench):
         self.assertLess(slot[0], start)
         self.foot(outline, plate, to_seat, 5)
 
-    def holes(self, outline, face_up, gnomon, plate, to_seat, *_):
-        axes = sorted(run[0][0] for run in gnomon.drill if len(run) == 2 and abs(run[0][0] - run[1][0]) < 1e-4)
-        shift = outline[:, 0].min() - gnomon.outline[:, 0].min()
+    def holes(self, outline, face_up, gnomon, plate, to_seat, folder, kind):
+        # Tapped into the gnomon's edge they are on its sheet alone: an axis each, from 2 mm below the foot.
+        self.assertEqual(gnomon.drill, [])
+        size = np.ptp(outline, axis=0)
+        [(there, runs)] = [(one, runs) for _, runs in pdf_runs(folder / "sheets.pdf") for one in runs if np.abs(np.ptp(one, axis=0) - size).max() < 0.005]
+        shift = outline.min(axis=0) - there.min(axis=0)
+        axes = sorted(run[0][0] + shift[0] for run in runs if len(run) == 2 and abs(run[0][0] - run[1][0]) < 1e-4 and abs(min(run[:, 1]) + shift[1] + 2) < 0.01)
         found = sorted((*to_seat(middle), size) for middle, size in plate.holes())
         self.assertEqual(len(found), 2)
-        self.pairs(found, [(x + shift, 0, 4) for x in axes])
+        self.pairs(found, [(x, 0, 4) for x in axes])
         self.foot(outline, plate, to_seat, 8)
 
     def test_gauges(self):

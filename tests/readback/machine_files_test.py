@@ -41,6 +41,8 @@ class Files(Bench):
         drawn = [one for _, _, runs in svg.strokes + svg.fills for one in runs]
         self.assertEqual(sum(len(runs) for _, _, runs in svg.strokes + svg.fills), len(dxf.entities))
         low, high = (getattr(np.concatenate(drawn), end)(axis=0) for end in ("min", "max"))
+        # The page is as large as the work, with half of its outline's stroke on each side.
+        self.assertLess(np.abs(np.concatenate([low, [svg.width, svg.height] - high]) - 0.1).max(), 0.02)
         points = np.concatenate([one for *_, one in dxf.entities])
         self.assertLess(np.abs(np.concatenate([points.min(axis=0) - low, points.max(axis=0) - high])).max(), flatten + 0.002)
         # One by one, in the same order.

@@ -152,3 +152,15 @@ TEST_CASE("What is no number goes to no machine", "[layout]") {
         ready_for_machine({"bad", {engraved(polyline({{0, 0}, {std::numeric_limits<double>::infinity(), 0}}))}}),
         ExportError);
 }
+
+TEST_CASE("Guides do not widen the frame of a machine's file", "[layout]") {
+    const Drawing drawing{"part",
+                          {{Layer::guide, {polyline({{-50, 0}, {90, 0}})}, 0.1, false, "face"},
+                           {Layer::engrave, {polyline({{1, 1}, {9, 4}})}, 0.4, false, "line"},
+                           {Layer::cut, {rectangle({0, 0, 20, 10})}, 0.2, false, "edge"}}};
+    const Box box = bounds_for_machine(drawing);
+    CHECK_THAT(box.left_mm, WithinAbs(-0.1, 1e-9));
+    CHECK_THAT(box.right_mm, WithinAbs(20.1, 1e-9));
+    CHECK_THAT(box.height_mm(), WithinAbs(10.2, 1e-9));
+    CHECK(bounds_for_machine(Drawing{"guides alone", {drawing.marks[0]}}).empty());
+}
