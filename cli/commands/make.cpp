@@ -37,6 +37,20 @@ std::optional<std::vector<layout::Layer>> layers_named(const std::vector<std::st
     return layers;
 }
 
+/// Files for machines in the folder that this packet has not written: of an earlier design, perhaps, and cut by mistake.
+std::vector<std::string> strangers_in(const std::filesystem::path& folder, const std::vector<OutputFile>& files) {
+    std::vector<std::string> found;
+    std::error_code trouble;
+    for (const auto& entry : std::filesystem::directory_iterator{folder, trouble}) {
+        const std::string name = entry.path().filename().string(), kind = entry.path().extension().string();
+        if ((kind == ".svg" || kind == ".dxf") &&
+            std::none_of(files.begin(), files.end(), [&](const OutputFile& file) { return file.name == name; }))
+            found.push_back(name);
+    }
+    std::sort(found.begin(), found.end());
+    return found;
+}
+
 int run_make(const MakeOptions& options) {
     const auto commission = take_commission(options.design);
     if (!commission)
@@ -48,7 +62,7 @@ int run_make(const MakeOptions& options) {
     const auto layers = layers_named(options.layers);
     if (!layers)
         return k_error;
-    const auto packet = take_packet(*commission, {*layers, options.sheet});
+    auto packet = take_packet(*commission, {*layers, options.sheet});
     if (!packet)
         return k_error;
     if (packet->items.empty()) {
@@ -67,6 +81,10 @@ int run_make(const MakeOptions& options) {
         std::cerr << trouble.what() << "; nothing was changed there\n";
         return k_error;
     }
+    if (layers->empty() && options.sheet.empty())
+        for (const std::string& name : strangers_in(folder, files))
+            packet->warnings.push_back(
+                fmt::format("{} in this folder is not of this packet; it stays there, but is not to be cut", name));
     std::cout << fmt::format("{}: {} sheets\n", commission->design.title, packet->sheets);
     for (const Packet::Item& item : packet->items)
         std::cout << fmt::format("  {:<40} {}\n", (folder / item.file.name).string(), item.purpose);

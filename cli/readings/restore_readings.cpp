@@ -15,20 +15,20 @@ namespace dialwright::cli {
 namespace {
 
 constexpr auto k_keys = std::to_array<KnownKey>({
-    {"", "title"},         {"", "stood"},        {"", "lean"},           {"", "up"},
-    {"", "noon"},          {"", "origin"},       {"", "hours apart"},    {"", "gap"},
+    {"", "title"},         {"", "stood"},          {"", "lean"},           {"", "up"},
+    {"", "noon"},          {"", "origin"},         {"", "hours apart"},    {"", "gap"},
 
-    {"", "place"},         {"place", "name"},    {"place", "latitude"},  {"place", "longitude"},
+    {"", "place"},         {"place", "name"},      {"place", "latitude"},  {"place", "longitude"},
     {"place", "zone"},     {"place", "skyline"},
 
-    {"", "lines"},         {"lines", "hour"},    {"lines", "direction"}, {"lines", "further"},
+    {"", "lines"},         {"lines", "hour"},      {"lines", "direction"}, {"lines", "further"},
     {"lines", "points"},
 
-    {"", "style"},         {"style", "height"},  {"style", "substyle"},
+    {"", "style"},         {"style", "height"},    {"style", "substyle"},
 
-    {"", "plate"},         {"plate", "shape"},   {"plate", "diameter"},  {"plate", "width"},
-    {"plate", "height"},   {"plate", "across"},  {"plate", "corners"},   {"plate", "centre"},
-    {"plate", "material"},
+    {"", "plate"},         {"plate", "shape"},     {"plate", "diameter"},  {"plate", "width"},
+    {"plate", "height"},   {"plate", "across"},    {"plate", "corners"},   {"plate", "centre"},
+    {"plate", "material"}, {"plate", "thickness"},
 });
 
 constexpr std::size_t k_most_lines = 200, k_most_points = 20, k_least_lines = 4;

@@ -289,6 +289,17 @@ class Make(Bench):
         self.assertEqual((packet / "survey.txt").read_text(), "mine")
         self.assertFalse([name for name in contents_of(packet) if name.endswith(".part")])
 
+    def test_files_for_machines_of_an_earlier_design_are_told(self):
+        packet = self.folder / "packet"
+        run("make", self.design(LEVEL + "gnomon: {thickness: 5 mm, joint: flange}\n"), "--to", packet)
+        status, _, err = run("make", self.design(LEVEL), "--to", packet)
+        self.assertEqual(status, WITH_WARNINGS)
+        self.assertIn("note: gnomon-flange.dxf in this folder is not of this packet", err)
+        self.assertTrue((packet / "gnomon-flange.svg").exists())
+        self.assertNotIn("plate.svg in this folder", err)
+        _, _, err = run("make", self.design(LEVEL), "--to", packet, "--layers", "cut")
+        self.assertNotIn("in this folder", err)
+
     def test_folders_above_are_made(self):
         for to in ("a/b/c", "d/e/"):
             status, _, err = run("make", self.design(LEVEL), "--to", f"{self.folder}/{to}")
