@@ -5,6 +5,7 @@
 #include "cli/report/lines_of_text.hpp"
 #include "cli/report/ranges.hpp"
 #include "cli/report/say.hpp"
+#include "cli/report/text_table.hpp"
 #include "engine/time/instant_text.hpp"
 #include "layout/plate/outline.hpp"
 #include "layout/sheet/flow.hpp"
@@ -20,21 +21,13 @@ std::string title_of(const AdjustFile& file, const Commission& commission) {
     return file.title.empty() ? commission.design.title : file.title;
 }
 
-std::string signed_minutes(double minutes) {
-    return fmt::format("{}{}", minutes >= 0 ? "+" : "", fixed(minutes, 1));
-}
-
-std::string reads_text(double hours) {
-    return hour_text(hours);
-}
-
-std::vector<std::vector<std::string>> reading_rows(const AdjustFile& file, const DialAdjustment& found) {
-    std::vector<std::vector<std::string>> rows;
+std::vector<TableRow> reading_rows(const AdjustFile& file, const DialAdjustment& found) {
+    std::vector<TableRow> rows;
     const AdjustAnswer& first = found.answers.front();
     for (std::size_t i = 0; i < file.readings.readings.size(); ++i) {
         const DialReading& reading = file.readings.readings[i];
-        rows.push_back({std::to_string(i + 1), say_moment(*file.zone, reading.at), reads_text(reading.reads_h),
-                        signed_minutes(found.as_designed_min[i]), signed_minutes(first.off_min[i]),
+        rows.push_back({std::to_string(i + 1), say_moment(*file.zone, reading.at), hour_text(reading.reads_h),
+                        say_signed(found.as_designed_min[i], 1), say_signed(first.off_min[i], 1),
                         first.stray[i] ? "left out" : ""});
     }
     return rows;
@@ -45,18 +38,14 @@ const char* fault_name(Fault fault) {
     return k_names[std::size_t(fault)];
 }
 
-Json found_json(const Found& found) {
-    return {{"value", json_number(found.value)}, {"range", json_number(found.range)}, {"told", found.told}};
-}
-
 Json answer_json(const AdjustAnswer& answer, const AdjustWords& words) {
     return {{"fault", fault_name(answer.fault)},
-            {"turn_deg", found_json(answer.turn)},
-            {"top_deg", found_json(answer.top)},
-            {"right_deg", found_json(answer.right)},
-            {"style_height_deg", found_json(answer.style_height)},
-            {"style_side_deg", found_json(answer.style_right)},
-            {"clock_slow_s", found_json(answer.clock_s)},
+            {"turn_deg", json_found(answer.turn)},
+            {"top_deg", json_found(answer.top)},
+            {"right_deg", json_found(answer.right)},
+            {"style_height_deg", json_found(answer.style_height)},
+            {"style_side_deg", json_found(answer.style_right)},
+            {"clock_slow_s", json_found(answer.clock_s)},
             {"scatter_min", answer.scatter_min > 0 ? json_number(answer.scatter_min) : Json{}},
             {"steps", words.steps}};
 }
@@ -85,9 +74,13 @@ std::string adjust_text(const AdjustFile& file, const DialAdjustment& found, con
             text.line("  {} {}", i == 0 ? "do:" : "   ", way.steps[i]);
     }
     text.gap();
-    text.line("  {:>3}  {:<28} {:>7} {:>12} {:>12}", "", "clock", "read", "off, min", "left, min");
-    for (const auto& row : reading_rows(file, found))
-        text.line("  {:>3}  {:<28} {:>7} {:>12} {:>12}  {}", row[0], row[1], row[2], row[3], row[4], row[5]);
+    using layout::Align;
+    text.add(text_table({{"", Align::right},
+                         {"clock"},
+                         {"read", Align::right},
+                         {"off, min", Align::right},
+                         {"left, min", Align::right}},
+                        reading_rows(file, found), 2));
     text.line("  off: from what the dial should read; left: from what it would read as it is said to stand first");
     if (found.checked)
         text.line("  scatter {} min", fixed(found.answers.front().scatter_min, 1));

@@ -43,6 +43,10 @@ Json json_number(double value) {
     return value;
 }
 
+Json json_found(const Found& found) {
+    return {{"value", json_number(found.value)}, {"range", json_number(found.range)}, {"told", found.told}};
+}
+
 std::string json_text(const Json& json) {
     std::string text;
     write(json, text);

@@ -18,6 +18,7 @@ class LinesOfText {
         text_ += '\n';
     }
     void gap() { text_ += '\n'; }
+    void add(const std::string& lines) { text_ += lines; } ///< whole lines
     [[nodiscard]] std::string taken() { return std::move(text_); }
 
   private:

@@ -42,6 +42,10 @@ std::string say_decimal(const Found& degrees) {
     return fmt::format("{}° ± {}°", fixed(degrees.value, 2), fixed(std::max(0.01, degrees.range), 2));
 }
 
+std::string say_signed(double value, int decimals) {
+    return fmt::format("{}{}", value >= 0 ? "+" : "", fixed(value, decimals));
+}
+
 std::string with_capital(const std::string& text) {
     std::string made = text;
     if (!made.empty() && made[0] >= 'a' && made[0] <= 'z')

@@ -25,6 +25,8 @@ namespace dialwright::cli {
 /// To the nearest minute of arc.
 [[nodiscard]] Angle to_minutes(double degrees);
 
+/// "+1.3", "-0.4": always with its sign.
+[[nodiscard]] std::string say_signed(double value, int decimals);
 /// The text with its first letter a capital, as a heading or a sentence begins.
 [[nodiscard]] std::string with_capital(const std::string& text);
 

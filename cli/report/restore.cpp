@@ -5,6 +5,7 @@
 #include "cli/report/lines_of_text.hpp"
 #include "cli/report/ranges.hpp"
 #include "cli/report/say.hpp"
+#include "cli/report/text_table.hpp"
 #include "engine/time/zone.hpp"
 
 #include <algorithm>
@@ -52,20 +53,18 @@ std::string hour_words(double hours) {
 
 void say_lines(LinesOfText& text, const RestoreFile& file, const PlateFigure& figure) {
     text.gap();
-    text.line("  {:<12} {:>8} {:>10} {:>9}", "line", "hour", "off", "off, mm");
+    using layout::Align;
+    std::vector<TableRow> rows;
     for (std::size_t i = 0; i < file.names.size(); ++i) {
         const bool unread = !file.readings.lines[i].hour_h && figure.hour_h[i];
-        text.line("  {:<12} {:>8} {:>9}° {:>9}{}", file.names[i], figure.hour_h[i] ? hour_words(*figure.hour_h[i]) : "",
-                  fixed(figure.off_deg[i], 2), figure.off_mm[i] != 0.0 ? fixed(figure.off_mm[i], 1) : "",
-                  figure.stray[i] ? "  cut or read wrong"
-                  : unread        ? "  unreadable: nearest this"
-                                  : "");
+        rows.push_back({file.names[i], figure.hour_h[i] ? hour_words(*figure.hour_h[i]) : "",
+                        say_signed(figure.off_deg[i], 2) + "°",
+                        figure.off_mm[i] != 0.0 ? say_signed(figure.off_mm[i], 1) : ""});
+        if (figure.stray[i] || unread)
+            rows.back().push_back(figure.stray[i] ? "cut or read wrong" : "unreadable: nearest this");
     }
+    text.add(text_table({{"line"}, {"hour", Align::right}, {"off", Align::right}, {"off, mm", Align::right}}, rows, 2));
     text.line("  off: as it is, less as it should be, clockwise");
-}
-
-Json found_json(const Found& found) {
-    return {{"value", json_number(found.value)}, {"range", json_number(found.range)}, {"told", found.told}};
 }
 
 Json way_json(const RestoreWay& way) {
@@ -74,10 +73,10 @@ Json way_json(const RestoreWay& way) {
             {"known", way.supposed_known},
             {"signs", way.signs},
             {"for_this_place", way.for_this_place},
-            {"latitude_deg", found_json(one.latitude_deg)},
-            {"facing_deg", one.facing_deg ? found_json(*one.facing_deg) : Json{}},
-            {"lean_deg", found_json(one.lean_deg)},
-            {"ahead_min", found_json(one.ahead_min)},
+            {"latitude_deg", json_found(one.latitude_deg)},
+            {"facing_deg", one.facing_deg ? json_found(*one.facing_deg) : Json{}},
+            {"lean_deg", json_found(one.lean_deg)},
+            {"ahead_min", json_found(one.ahead_min)},
             {"speaks", way.speaks}};
 }
 
@@ -142,9 +141,9 @@ std::string restore_text(const RestoreFile& file, const PlateFigure& figure, con
 std::string restore_json(const RestoreFile& file, const PlateFigure& figure, const RestoreReport& report) {
     Json out{{"format", 1}, {"title", file.title}, {"checked", figure.fit.checked()}};
     out["figure"] = {
-        {"style_height_deg", found_json(figure.style_height_deg)},
-        {"substyle_deg", found_json(figure.substyle_deg)},
-        {"substyle_hour_h", found_json(figure.substyle_hour_h)},
+        {"style_height_deg", json_found(figure.style_height_deg)},
+        {"substyle_deg", json_found(figure.substyle_deg)},
+        {"substyle_hour_h", json_found(figure.substyle_hour_h)},
         {"clockwise", figure.clockwise},
         {"centre_mm",
          figure.centre ? Json::array({json_number(figure.centre->u_mm), json_number(figure.centre->v_mm)}) : Json{}}};

@@ -67,30 +67,8 @@ void fail(const SurveyFile& file, SurveyVerdict& verdict, std::string message, s
     verdict.errors.push_back({file.file, file.at.line, file.at.column, "shadows", std::move(message), std::move(hint)});
 }
 
-std::string signed_mm(double mm) {
-    return fmt::format("{}{}", mm >= 0 ? "+" : "", fixed(mm, 1));
-}
-
-Json found_json(const Found& found) {
-    return {{"value", json_number(found.value)}, {"range", json_number(found.range)}, {"told", found.told}};
-}
-
 const char* fault_name(Fault fault) {
     return fault == Fault::none ? "none" : fault == Fault::clock ? "clock" : "level";
-}
-
-void say_readings(LinesOfText& text, const SurveyFile& file, const WallAnswer& answer) {
-    if (file.readings.shadows.empty())
-        return;
-    text.gap();
-    text.line("  {:>3}  {:<30} {:>9} {:>9} {:>10} {:>10}", "", "shadow", "right mm", "down mm", "off right",
-              "off down");
-    for (std::size_t i = 0; i < file.readings.shadows.size(); ++i) {
-        const PegShadow& shadow = file.readings.shadows[i];
-        text.line("  {:>3}  {:<30} {:>9} {:>9} {:>10} {:>10}{}", i + 1, say_moment(*file.zone, shadow.at),
-                  fixed(shadow.right_mm, 1), fixed(shadow.down_mm, 1), signed_mm(answer.off_right_mm[i]),
-                  signed_mm(answer.off_down_mm[i]), answer.stray[i] ? "  left out" : "");
-    }
 }
 
 void say_answer(LinesOfText& text, const WallAnswer& answer, bool several) {
@@ -114,6 +92,23 @@ std::string fault_words(const WallAnswer& answer) {
         return fmt::format("the board was out of plumb by {} {}, its top to the {}", say_arc(answer.level_deg.value),
                            say_give(answer.level_deg.range), answer.level_deg.value > 0 ? "right" : "left");
     return "clock, board and peg were as good as their ± say";
+}
+
+ShadowTable shadow_table(const SurveyFile& file, const WallAnswer& answer) {
+    using layout::Align;
+    ShadowTable table;
+    table.columns = {{"", Align::right},          {"clock"},
+                     {"right mm", Align::right},  {"down mm", Align::right},
+                     {"off right", Align::right}, {"off down", Align::right}};
+    for (std::size_t i = 0; i < file.readings.shadows.size(); ++i) {
+        const PegShadow& shadow = file.readings.shadows[i];
+        table.rows.push_back({std::to_string(i + 1), say_moment(*file.zone, shadow.at), fixed(shadow.right_mm, 1),
+                              fixed(shadow.down_mm, 1), say_signed(answer.off_right_mm[i], 1),
+                              say_signed(answer.off_down_mm[i], 1)});
+        if (answer.stray[i])
+            table.rows.back().push_back("left out");
+    }
+    return table;
 }
 
 SurveyVerdict verdict_on(const SurveyFile& file, const WallSurvey& survey) {
@@ -179,7 +174,11 @@ std::string survey_text(const SurveyFile& file, const WallSurvey& survey, const 
         say_answer(text, answer, several);
     const WallAnswer& first = survey.answers.front();
     text.line("  every ± here holds 19 times in 20");
-    say_readings(text, file, first);
+    if (!file.readings.shadows.empty()) {
+        const ShadowTable table = shadow_table(file, first);
+        text.gap();
+        text.add(text_table(table.columns, table.rows, 2));
+    }
     if (survey.checked) {
         text.gap();
         text.line("  scatter      {} mm either way beside the peg", fixed(first.scatter_mm, 1));
@@ -210,10 +209,10 @@ std::string survey_json(const SurveyFile& file, const WallSurvey& survey, const 
     Json answers = Json::array();
     for (const WallAnswer& answer : survey.answers) {
         Json one{{"fault", fault_name(answer.fault)},
-                 {"facing_deg", found_json(answer.facing_deg)},
-                 {"lean_deg", found_json(answer.lean_deg)},
-                 {"clock_slow_s", found_json(answer.clock_s)},
-                 {"board_turned_deg", found_json(answer.level_deg)},
+                 {"facing_deg", json_found(answer.facing_deg)},
+                 {"lean_deg", json_found(answer.lean_deg)},
+                 {"clock_slow_s", json_found(answer.clock_s)},
+                 {"board_turned_deg", json_found(answer.level_deg)},
                  {"scatter_mm", survey.checked ? json_number(answer.scatter_mm) : Json{}}};
         Json shadows = Json::array();
         for (std::size_t i = 0; i < answer.stray.size(); ++i)

@@ -2,6 +2,7 @@
 #pragma once
 
 #include "cli/readings/survey_readings.hpp"
+#include "cli/report/text_table.hpp"
 #include "layout/sheet/tiling.hpp"
 
 #include <string>
@@ -29,6 +30,12 @@ struct SurveyVerdict {
 [[nodiscard]] std::vector<layout::Sheet> survey_sheets(const SurveyFile& file, const WallSurvey& survey,
                                                        const SurveyVerdict& verdict,
                                                        const layout::PrintOptions& options);
+/// Each shadow, and how far an answer leaves it off.
+struct ShadowTable {
+    std::vector<layout::Flow::Column> columns;
+    std::vector<TableRow> rows;
+};
+[[nodiscard]] ShadowTable shadow_table(const SurveyFile& file, const WallAnswer& answer);
 /// "the clock was 4 min 50 s slow (± 12 s)": what has to be wrong for an answer.
 [[nodiscard]] std::string fault_words(const WallAnswer& answer);
 

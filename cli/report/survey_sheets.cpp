@@ -68,22 +68,11 @@ std::vector<layout::Sheet> survey_sheets(const SurveyFile& file, const WallSurve
     const WallAnswer& first = survey.answers.front();
     if (!file.readings.shadows.empty()) {
         flow.heading("Shadows");
-        std::vector<std::vector<std::string>> rows;
-        for (std::size_t i = 0; i < file.readings.shadows.size(); ++i) {
-            const PegShadow& shadow = file.readings.shadows[i];
-            rows.push_back({std::to_string(i + 1), say_moment(*file.zone, shadow.at), fixed(shadow.right_mm, 1),
-                            fixed(shadow.down_mm, 1), fixed(first.off_right_mm[i], 1), fixed(first.off_down_mm[i], 1),
-                            first.stray[i] ? "left out" : ""});
-        }
-        using layout::Align;
-        flow.table({{"", Align::right},
-                    {"clock"},
-                    {"right mm", Align::right},
-                    {"down mm", Align::right},
-                    {"off right", Align::right},
-                    {"off down", Align::right},
-                    {""}},
-                   rows);
+        ShadowTable table = shadow_table(file, first);
+        table.columns.push_back({""});
+        for (TableRow& row : table.rows)
+            row.resize(table.columns.size());
+        flow.table(table.columns, table.rows);
         flow.space(4);
         flow.picture(picture_of(file, first), k_picture_mm, k_picture_mm,
                      "Crosses: measured. Rings: where the answer puts them. Dot: the peg. Not to scale.");
