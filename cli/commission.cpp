@@ -67,8 +67,10 @@ CommissionTaking take_commission(DesignReading reading) {
             return {std::nullopt, in_order(what_cannot_be_lettered(design, trouble.what()))};
         } catch (const layout::GnomonError& trouble) {
             return {std::nullopt, {gnomon_error(design, trouble.what())}};
-        } catch (const std::invalid_argument& trouble) {
+        } catch (const layout::BordersError& trouble) {
             return {std::nullopt, {borders_error(design, trouble.what())}};
+        } catch (const std::invalid_argument& trouble) {
+            return {std::nullopt, {error_at(design, "plate", trouble.what(), "")}};
         }
         plan.dial.nodus_height_mm = faces.back().placement.nodus_height_mm;
     }

@@ -17,10 +17,6 @@
 namespace dialwright::cli {
 namespace {
 
-void tell(const std::string& option, const Trouble& trouble) {
-    std::cerr << fmt::format("{}: {}{}{}\n", option, trouble.message, trouble.hint.empty() ? "" : ": ", trouble.hint);
-}
-
 /// Reads an option that is given into `target`; false (told) where its text is wrong.
 template <class T>
 bool read_option(T& target, const std::string& option, const std::string& text, Read<T> (*reader)(std::string_view)) {
@@ -30,11 +26,15 @@ bool read_option(T& target, const std::string& option, const std::string& text, 
     if (value)
         target = *value;
     else
-        tell(option, value.trouble());
+        tell_option(option, value.trouble());
     return static_cast<bool>(value);
 }
 
 } // namespace
+
+void tell_option(const std::string& option, const Trouble& trouble) {
+    std::cerr << fmt::format("{}: {}{}{}\n", option, trouble.message, trouble.hint.empty() ? "" : ": ", trouble.hint);
+}
 
 void PlaceOptions::add_to(CLI::App& command, bool with_design) {
     if (with_design)
@@ -85,25 +85,26 @@ std::optional<AskedDates> asked_dates(const DateOptions& options, int most_days)
     asked.last = asked.first;
     const bool last_good = read_option(asked.last, "--to", options.to, calendar_date);
     if (options.on.empty())
-        tell("--on", {"no date is given", "write it as in 2027-06-14 or 14 June 2027"});
+        tell_option("--on", {"no date is given", "write it as in 2027-06-14 or 14 June 2027"});
     if (!first_good || !last_good || options.on.empty())
         return std::nullopt;
     const auto days = (sys_days{asked.last} - sys_days{asked.first}).count() + 1;
     if (days < 1) {
-        tell("--to", {in_quotes(options.to) + " is before the first date, " + in_quotes(options.on),
-                      "give the later date to --to"});
+        tell_option("--to", {in_quotes(options.to) + " is before the first date, " + in_quotes(options.on),
+                             "give the later date to --to"});
         return std::nullopt;
     }
     if (days > most_days) {
-        tell("--to", {fmt::format("{} is {} days after {}", in_quotes(options.to), days - 1, in_quotes(options.on)),
-                      fmt::format("give at most {} days", most_days)});
+        tell_option("--to",
+                    {fmt::format("{} is {} days after {}", in_quotes(options.to), days - 1, in_quotes(options.on)),
+                     fmt::format("give at most {} days", most_days)});
         return std::nullopt;
     }
     return asked;
 }
 
 void SheetOptions::add_to(CLI::App& command) {
-    command.add_option("--sheet", file, "a PDF to print, written there as well");
+    command.add_option("--pdf", file, "a PDF to print, written there as well");
     command.add_option("--paper", paper, "for the PDF: A4, Letter, … [the design's, else A4]");
 }
 
@@ -114,9 +115,9 @@ std::optional<AskedPrint> asked_print(const SheetOptions& options, const Design*
         if (!layout::paper_named(options.paper)) {
             const std::string_view near =
                 nearest(options.paper, std::vector<std::string_view>{names.begin(), names.end()});
-            tell("--paper", {in_quotes(options.paper) + " is not a paper",
-                             near.empty() ? std::string{"write it as in A4, Letter or roll 610 mm"}
-                                          : fmt::format("did you mean {}?", near)});
+            tell_option("--paper", {in_quotes(options.paper) + " is not a paper",
+                                    near.empty() ? std::string{"write it as in A4, Letter or roll 610 mm"}
+                                                 : fmt::format("did you mean {}?", near)});
             return std::nullopt;
         }
         asked.print.paper = options.paper;

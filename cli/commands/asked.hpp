@@ -2,6 +2,7 @@
 #pragma once
 
 #include "cli/design/design.hpp"
+#include "cli/design/quantity.hpp"
 #include "engine/time/zone.hpp"
 #include "layout/sheet/compensation.hpp"
 #include "layout/sheet/sheet.hpp"
@@ -16,6 +17,9 @@
 #include <vector>
 
 namespace dialwright::cli {
+
+/// An option's text that is not what is wanted, told on stderr.
+void tell_option(const std::string& option, const Trouble& trouble);
 
 /// Where a command that needs no dial is asked for: a design's place, or one that options give.
 struct PlaceOptions {
@@ -57,6 +61,6 @@ struct AskedPrint {
 [[nodiscard]] std::optional<AskedPrint> asked_print(const SheetOptions& options, const Design* design);
 /// Makes the sheets and writes them as one PDF. Tells on stderr what keeps it from being made, and then is false.
 [[nodiscard]] bool write_pdf(const std::string& file, const AskedPrint& print,
-                             const std::function<layout::SheetBook()>& make, const char* option = "--sheet");
+                             const std::function<layout::SheetBook()>& make, const char* option = "--pdf");
 
 } // namespace dialwright::cli

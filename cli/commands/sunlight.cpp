@@ -30,10 +30,6 @@ struct SunlightOptions {
     bool json = false, csv = false;
 };
 
-void tell_option(const std::string& option, const Trouble& trouble) {
-    std::cerr << fmt::format("{}: {}: {}\n", option, trouble.message, trouble.hint);
-}
-
 /// The faces of one design; false after an error has been told.
 bool add_design(std::vector<LightFace>& faces, const std::string& file, std::optional<Design>& first) {
     DesignReading reading = read_design_file(file);

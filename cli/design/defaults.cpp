@@ -60,7 +60,9 @@ void fill_borders_and_letters(Design& design, Filler& filler, double s) {
     Borders& borders = design.borders;
     LetteringChoice& letters = design.lettering;
     filler.fill_tidy(borders.margin_mm, "borders: margin", std::clamp(0.02 * s, 3.0, 12.0), "1/50 of the plate");
-    filler.fill_tidy(borders.chapter_ring_mm, "borders: chapter ring", 0.10 * s, "1/10 of the plate");
+    const bool on_field = counts_from_horizon(design.hours.time);
+    filler.fill_tidy(borders.chapter_ring_mm, "borders: chapter ring", on_field ? 0.0 : 0.10 * s,
+                     on_field ? "these hours bear their figures on the field" : "1/10 of the plate");
     const bool off = centre_is_off(design.plate);
     filler.fill_tidy(borders.inner_mm, "borders: inner border", off ? 0.0 : 0.05 * s,
                      off ? "the centre is off the plate" : "1/20 of the plate");
@@ -74,6 +76,8 @@ void fill_borders_and_letters(Design& design, Filler& filler, double s) {
                          "1/45 of the plate, and no less than 4 mm");
     filler.note_unless_given("lettering: font", letters.family, "an old-style face that cuts well");
     filler.note_unless_given("lettering: place line", "no", "not asked for");
+    if (design.also.hours.size() + (design.also.altitudes.empty() ? 0 : 1) + (design.also.azimuths.empty() ? 0 : 1) > 1)
+        filler.note_unless_given("lettering: legend", "yes", "so that the figures of each family are told apart");
 }
 
 std::string_view thickness_why(GnomonKind kind) {

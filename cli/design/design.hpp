@@ -60,6 +60,12 @@ struct LineWeight {
     double width_mm = 0.0, share = 0.0;
     [[nodiscard]] double of(double line_width_mm) const { return width_mm > 0 ? width_mm : share * line_width_mm; }
 };
+using DayRange = std::pair<std::chrono::month_day, std::chrono::month_day>;
+/// How a family of lines is drawn, where the design says.
+struct FamilyLook {
+    LineWeight weight;
+    std::optional<DayRange> between; ///< from day to day
+};
 struct Hours {
     HourTime time = HourTime::sun;
     std::optional<double> first_h, last_h; ///< on the dial's own time; not given: all that are ever lit
@@ -68,7 +74,7 @@ struct Hours {
     int count = 12;                    ///< 12 or 24
     HalfYear curves = HalfYear::whole; ///< of clock time
     NumeralStand stand = NumeralStand::along_border;
-    LineWeight weight;
+    FamilyLook look;
     bool noon_mark = true;
     HourExtent reach = HourExtent::style;
     bool summer_numerals = false; ///< a second row, an hour on, for the zone's summer time
@@ -76,11 +82,6 @@ struct Hours {
 };
 
 /// Lines drawn on the field beside the hours of the chapter ring.
-/// How a family of lines is drawn, where the design says.
-struct FamilyLook {
-    LineWeight weight;
-    std::optional<std::pair<std::chrono::month_day, std::chrono::month_day>> between; ///< from day to day
-};
 struct MoreHours {
     HourTime time = HourTime::unequal;
     std::optional<double> first_h, last_h; ///< whole hours; not given: all that are ever lit
@@ -103,6 +104,8 @@ struct Dates {
     std::vector<NamedDay> days;
     bool labels = true;
     LineWeight weight;
+    std::optional<std::pair<double, double>>
+        hours; ///< from and to, on the dial's scale where that is of the Sun or the zone
 };
 
 /// The plate that says how to come from the dial to the clock.

@@ -121,6 +121,8 @@ constexpr auto k_keys = std::to_array<KnownKey>({
     {"weights", "noon at"},
 
     {"", "extents"},
+    {"extents", "hours"},
+    {"extents", "dates"},
     {"extents", "sun"},
     {"extents", "zone"},
     {"extents", "clock"},
@@ -158,6 +160,7 @@ constexpr auto k_keys = std::to_array<KnownKey>({
     {"lettering", "motto"},
     {"lettering", "motto height"},
     {"lettering", "place line"},
+    {"lettering", "legend"},
 
     {"", "cutting"},
     {"cutting", "line width"},

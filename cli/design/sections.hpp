@@ -2,6 +2,7 @@
 #pragma once
 
 #include "cli/design/section.hpp"
+#include "layout/plate/family_words.hpp"
 
 #include <array>
 #include <initializer_list>
@@ -30,13 +31,14 @@ void read_cutting(Design& design, const Section& top);
 void read_print(Design& design, const Section& top);
 
 /// The kinds of time, as `hours: time` and the keys of `also` name them.
-inline constexpr std::array<Choice<HourTime>, 7> k_hour_times = {{{"sun", HourTime::sun},
-                                                                  {"zone", HourTime::zone},
-                                                                  {"clock", HourTime::clock},
-                                                                  {"since sunrise", HourTime::since_sunrise},
-                                                                  {"since sunset", HourTime::since_sunset},
-                                                                  {"hours left", HourTime::to_sunset},
-                                                                  {"unequal", HourTime::unequal}}};
+inline constexpr auto k_hour_times = [] {
+    std::array<Choice<HourTime>, 7> choices;
+    std::size_t i = 0;
+    for (const HourTime time : {HourTime::sun, HourTime::zone, HourTime::clock, HourTime::since_sunrise,
+                                HourTime::since_sunset, HourTime::to_sunset, HourTime::unequal})
+        choices[i++] = {layout::words_of(time).name, time};
+    return choices;
+}();
 
 /// The largest side of a plate, and the smallest.
 inline constexpr double k_largest_plate_mm = 5000.0;

@@ -214,7 +214,9 @@ bool draws_straight_hours(const Design& design) {
 }
 
 bool counts_from_the_horizon(const Design& design) {
-    return draws_any(design, {HourTime::since_sunrise, HourTime::since_sunset, HourTime::to_sunset, HourTime::unequal});
+    return counts_from_horizon(design.hours.time) ||
+           std::any_of(design.also.hours.begin(), design.also.hours.end(),
+                       [](const MoreHours& more) { return counts_from_horizon(more.time); });
 }
 
 void read_also(Design& design, const Section& top) {

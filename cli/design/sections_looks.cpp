@@ -10,8 +10,6 @@ namespace dialwright::cli {
 
 namespace {
 
-using DayRange = std::pair<std::chrono::month_day, std::chrono::month_day>;
-
 constexpr std::array<std::pair<std::string_view, double>, 3> k_weights = {
     {{"fine", 0.3}, {"plain", 0.5}, {"bold", 0.9}}};
 
@@ -39,6 +37,36 @@ Read<DayRange> day_range(std::string_view text) {
     if (*first == *last)
         return Trouble{in_quotes(text) + " is one day, on which a line is a point", hint};
     return DayRange{*first, *last};
+}
+
+using HourRange = std::pair<double, double>;
+
+/// "9 to 15".
+Read<HourRange> hour_range(std::string_view text) {
+    const std::size_t at = text.find(" to ");
+    const std::string hint = "give two hours, as in 9 to 15";
+    if (at == std::string_view::npos)
+        return Trouble{in_quotes(text) + " is no part of the day", hint};
+    const auto first = hour_of_day(text.substr(0, at)), last = hour_of_day(text.substr(at + 4));
+    if (!first || !last)
+        return Trouble{(first ? last : first).trouble().message, hint};
+    if (!(*first < *last))
+        return Trouble{in_quotes(text) + " ends before it starts", "give the earlier hour first"};
+    return HourRange{*first, *last};
+}
+
+/// The ring's hours keep to a part of the year where the nodus' shadow is what is read.
+void read_ring_extent(Design& design, const Section& extents) {
+    if (!extents.has("hours"))
+        return;
+    const auto between = extents.read<DayRange>("hours", day_range);
+    const bool nodus = !has_straight_lines(design.hours.time) || design.hours.reach == HourExtent::nodus ||
+                       !has_style(design.gnomon.kind);
+    if (!nodus && !extents.state().faulty("hours: reach") && !extents.state().faulty("hours: time"))
+        extents.error("hours", "the hour lines run to the border, as the style's shadow does all year",
+                      "give \"hours: reach: season\", or leave this out");
+    else if (between)
+        design.hours.look.between = *between;
 }
 
 /// The look of a family by its key; null where the design draws no such lines.
@@ -86,8 +114,11 @@ void read_looks_of(Design& design, const Section& section, std::string_view key,
 void read_looks(Design& design, const Section& top) {
     const Section weights{top.entry("weights"), "weights", top.state()},
         extents{top.entry("extents"), "extents", top.state()};
-    weights.read_into(design.hours.weight, "hours", weight_of);
+    weights.read_into(design.hours.look.weight, "hours", weight_of);
     weights.read_into(design.dates.weight, "dates", weight_of);
+    read_ring_extent(design, extents);
+    if (const auto hours = extents.read<HourRange>("dates", hour_range))
+        design.dates.hours = *hours;
     for (const std::string_view key : k_families) {
         read_looks_of(design, weights, key, true);
         read_looks_of(design, extents, key, false);

@@ -214,6 +214,7 @@ void read_lettering(Design& design, const Section& top) {
     lettering.length_into(made.motto_height_mm, "motto height", k_least_letter_mm, k_largest_letter_mm);
     if (lettering.has("motto height") && !lettering.has("motto"))
         lettering.error("motto height", "there is no motto to have it", "give the motto, or leave this out");
+    lettering.read_into(made.legend, "legend", yes_or_no);
     line_into(made.place_line, lettering, "place line", 200);
     // "yes" and "no" are read as such: nobody cuts them into a plate.
     const Read<bool> wanted = yes_or_no(made.place_line);

@@ -1,33 +1,15 @@
 // SPDX-License-Identifier: MIT
 #include "cli/packet/cover_words.hpp"
 
+#include "cli/report/families.hpp"
 #include "cli/report/say.hpp"
+#include "layout/plate/family_words.hpp"
 #include "layout/plate/numerals.hpp"
 
 #include <fmt/format.h>
 
 namespace dialwright::cli {
 namespace {
-
-const char* time_text(HourTime time) {
-    switch (time) {
-    case HourTime::sun:
-        return "the Sun's own, at this place";
-    case HourTime::zone:
-        return "by the Sun, corrected for longitude to the zone";
-    case HourTime::clock:
-        return "the zone's clock, by yearly curves (summer time not added)";
-    case HourTime::since_sunrise:
-        return "equal hours since the Sun rose";
-    case HourTime::since_sunset:
-        return "equal hours since the last sunset";
-    case HourTime::to_sunset:
-        return "equal hours left until sunset";
-    case HourTime::unequal:
-        break;
-    }
-    return "unequal hours, twelve from sunrise to sunset";
-}
 
 std::string hours_text(const layout::Face& face) {
     double first = 24, last = 0;
@@ -66,8 +48,11 @@ std::vector<std::pair<std::string, std::string>> key_numbers(const Commission& c
         rows.emplace_back("Gnomon", say_length(design.gnomon.thickness_mm, inches) + " thick");
     if (face.gnomon_foot_mm > 0)
         rows.emplace_back("Its foot", say_length(face.gnomon_foot_mm, inches) + " along the substyle");
-    rows.emplace_back("Shows", time_text(design.hours.time));
+    rows.emplace_back("Shows", layout::words_of(design.hours.time).meaning);
     rows.emplace_back("Hours", hours_text(face));
+    for (const DrawnFamily& family : drawn_families(commission.plans[i], face))
+        if (!family.figures.empty())
+            rows.emplace_back("Label " + family.sample, family.lines + " (" + family.figures + ")");
     rows.emplace_back("Date lines", fmt::format("mean of {} to {}", design.years.first, design.years.last));
     return rows;
 }

@@ -69,7 +69,8 @@ class Book {
         add(owner_card(commission_, options_));
         for (const WorkPiece& piece : pieces_)
             if (is_correction(piece)) {
-                add(layout::tile(piece.drawing, options_of(piece)).sheets);
+                for (const layout::Tiling& tiling : tilings_of(piece))
+                    add(tiling.sheets);
                 if (design_.print.own_size)
                     add_own_size(piece);
             }
@@ -106,29 +107,30 @@ class Book {
         return options;
     }
 
-    /// One for each plate, or one for each of its layers.
+    /// The whole piece, or one for each of its layers.
+    [[nodiscard]] std::vector<layout::Tiling> tilings_of(const WorkPiece& piece) const {
+        layout::PrintOptions options = options_of(piece);
+        if (design_.print.layers != PrintedLayers::one_by_one)
+            return {layout::tile(piece.drawing, options)};
+        std::vector<layout::Tiling> all;
+        options.frame = layout::bounds_of(*piece.drawing);
+        for (const layout::Layer layer : layout::k_layers) {
+            const auto drawing = only(*piece.drawing, {layer});
+            if (drawing->marks.empty())
+                continue;
+            const std::string name = fmt::format("{}, layer {}", piece.title, layout::name_of(layer));
+            options.title = design_.title + ", " + name;
+            options.part = name;
+            all.push_back(layout::tile(drawing, options));
+        }
+        return all;
+    }
+
     [[nodiscard]] std::vector<std::vector<layout::Tiling>> plate_tilings() const {
         std::vector<std::vector<layout::Tiling>> all;
-        for (const WorkPiece& piece : pieces_) {
-            if (!piece.is_plate)
-                continue;
-            all.emplace_back();
-            layout::PrintOptions options = options_of(piece);
-            if (design_.print.layers != PrintedLayers::one_by_one) {
-                all.back().push_back(layout::tile(piece.drawing, options));
-                continue;
-            }
-            options.frame = layout::bounds_of(*piece.drawing);
-            for (const layout::Layer layer : layout::k_layers) {
-                const auto drawing = only(*piece.drawing, {layer});
-                if (drawing->marks.empty())
-                    continue;
-                const std::string name = fmt::format("{}, layer {}", piece.title, layout::name_of(layer));
-                options.title = design_.title + ", " + name;
-                options.part = name;
-                all.back().push_back(layout::tile(drawing, options));
-            }
-        }
+        for (const WorkPiece& piece : pieces_)
+            if (piece.is_plate)
+                all.push_back(tilings_of(piece));
         return all;
     }
 
@@ -216,13 +218,16 @@ Packet make_packet(const Commission& commission) {
         packet.warnings.insert(packet.warnings.end(), commission.correction_plate->warnings.begin(),
                                commission.correction_plate->warnings.end());
     packet.cautions = cautions(commission.design);
-    Book book{commission, packet};
-    const layout::SheetBook sheets = book.whole();
-    packet.sheets = sheets.sheets.size();
-    auto pdf =
-        std::async(std::launch::async, [&sheets] { return layout::pdf_of(sheets); }); // the longest: beside all others
-    packet.items.push_back({{"sheets" + hand_of(commission.design) + ".pdf", {}},
-                            "full-scale sheets: print this, and read its first page"});
+    // The sheets take the longest: beside all others.
+    auto printing = std::async(std::launch::async, [&commission, printed = packet]() mutable {
+        Book book{commission, printed};
+        const layout::SheetBook sheets = book.whole();
+        printed.sheets = sheets.sheets.size();
+        printed.items.push_back({{"sheets" + hand_of(commission.design) + ".pdf", layout::pdf_of(sheets)},
+                                 "full-scale sheets: print this, and read its first page"});
+        return printed;
+    });
+    packet.items.emplace_back(); // the sheets, first of all
     add_machine_files(packet, commission, work_pieces(commission));
     for (std::size_t i = 0; i < commission.faces.size(); ++i) {
         const std::string& name = commission.plans[i].name;
@@ -233,9 +238,12 @@ Packet make_packet(const Commission& commission) {
     packet.items.push_back({{"hour-lines.csv", hour_lines_csv(commission)}, "angles and ends of the hour lines"});
     packet.items.push_back({{"numbers.txt", numbers_text(commission)}, "all numbers, to read"});
     packet.items.push_back({{"numbers.json", numbers_json(commission)}, "all numbers, for programs"});
+    Packet printed = printing.get();
+    packet.items.front() = std::move(printed.items.front());
+    packet.sheets = printed.sheets;
+    packet.warnings = std::move(printed.warnings); // with those of the sheets
     packet.items.push_back(
         {{"contents.txt", contents_of(commission, packet)}, "what each file is for, and in which order"});
-    packet.items.front().file.bytes = pdf.get();
     return packet;
 }
 

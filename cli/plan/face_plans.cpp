@@ -2,7 +2,9 @@
 #include "cli/plan/face_plans.hpp"
 
 #include "engine/time/zone.hpp"
+#include "layout/correction/words.hpp"
 
+#include <algorithm>
 #include <array>
 #include <cmath>
 #include <fmt/format.h>
@@ -11,13 +13,16 @@
 namespace dialwright::cli {
 namespace {
 
-constexpr std::array<const char*, 12> k_months{"Jan", "Feb", "Mar", "Apr", "May", "Jun",
-                                               "Jul", "Aug", "Sep", "Oct", "Nov", "Dec"};
 /// The signs in the order of the Sun's longitude.
 constexpr std::array<const char*, 12> k_signs{"♈", "♉", "♊", "♋", "♌", "♍", "♎", "♏", "♐", "♑", "♒", "♓"};
 
 /// Refraction at the horizon, 34′, and the Sun's semidiameter, 16′: the almanacs' convention.
 constexpr Angle k_seen_horizon = Angle::degrees(-50.0 / 60.0);
+
+/// "21 Jun".
+std::string say_day_of_year(std::chrono::month_day day) {
+    return layout::say_date(day, true);
+}
 
 class DateLines {
   public:
@@ -36,10 +41,10 @@ class DateLines {
         plan.lines.push_back({std::move(label), declination});
     }
     void add_day(std::chrono::month_day day, std::string label) {
-        add(label.empty() ? date_text(day) : std::move(label),
+        add(label.empty() ? say_day_of_year(day) : std::move(label),
             year_.at(year_.day_of(day, local_noon_ut_h_)).declination);
     }
-    [[nodiscard]] std::string date_of(double day) const { return date_text(year_.date_of(day)); }
+    [[nodiscard]] std::string date_of(double day) const { return say_day_of_year(year_.date_of(day)); }
 
     DatePlan plan;
 
@@ -79,13 +84,6 @@ std::string face_name(const Design& design, bool first_face) {
     return first_face ? "front" : "back";
 }
 
-HourPlan hour_plan(const Design& design) {
-    const Hours& hours = design.hours;
-    const bool ring_time = hours.time == HourTime::sun || hours.time == HourTime::zone;
-    return {hours.time,   hours.first_h, hours.last_h, ring_time ? hours.divide_min : 60,
-            hours.curves, hours.reach,   std::nullopt};
-}
-
 /// The Sun's declinations on the days of a part of the year, which may pass the year's end.
 std::optional<Season> declinations(const FamilyLook& look, const Design& design, const MeanYear& year) {
     if (!look.between)
@@ -107,6 +105,17 @@ std::optional<Season> declinations(const FamilyLook& look, const Design& design,
     return season;
 }
 
+HourPlan hour_plan(const Design& design, const MeanYear& year) {
+    const Hours& hours = design.hours;
+    return {hours.time,
+            hours.first_h,
+            hours.last_h,
+            has_straight_lines(hours.time) ? hours.divide_min : 60,
+            hours.curves,
+            hours.reach,
+            declinations(hours.look, design, year)};
+}
+
 HourPlan hour_plan(const MoreHours& more, const Design& design, const MeanYear& year) {
     return {more.time,
             more.first_h,
@@ -117,14 +126,25 @@ HourPlan hour_plan(const MoreHours& more, const Design& design, const MeanYear& 
             declinations(more.look, design, year)};
 }
 
-/// How far the zone's summer time is ahead of its standard time, in hours; 0 where it has none.
-double summer_shift_h(const Zone& zone, int year) {
+/// The zone's summer time beside its standard time.
+struct SummerNumerals {
+    double shift_h = 0.0; ///< 0 where it has none
+    std::string word;     ///< the zone's letters for it, as in BST; "summer" where it has figures alone
+};
+SummerNumerals summer_numerals(const Zone& zone, int year) {
     using namespace std::chrono;
-    double most = 0;
-    for (unsigned month = 1; month <= 12; ++month)
-        most = std::max(
-            most, duration<double, std::ratio<3600>>(zone.at(sys_days{std::chrono::year{year} / month / 1}).summer_time)
-                      .count());
+    SummerNumerals most{0.0, "summer"};
+    for (unsigned month = 1; month <= 12; ++month) {
+        const auto at = zone.at(sys_days{std::chrono::year{year} / month / 1});
+        const double shift = duration<double, std::ratio<3600>>(at.summer_time).count();
+        if (shift <= most.shift_h)
+            continue;
+        most.shift_h = shift;
+        const std::string_view letters = at.abbreviation;
+        const bool word = std::all_of(letters.begin(), letters.end(),
+                                      [](char c) { return (c >= 'A' && c <= 'Z') || (c >= 'a' && c <= 'z'); });
+        most.word = word && !letters.empty() ? std::string{letters} : "summer";
+    }
     return most;
 }
 
@@ -154,7 +174,7 @@ FacePlan plan_of(const Design& design, const MeanYear& year, bool upper_face) {
         equatorial || design.gnomon.kind != layout::GnomonKind::edge ? 0.0 : design.gnomon.thickness_mm;
     if (!design.place.skyline.empty())
         dial.skyline = Skyline{design.place.skyline};
-    dial.hours = hour_plan(design);
+    dial.hours = hour_plan(design, year);
     for (const MoreHours& more : design.also.hours)
         dial.more_hours.push_back(hour_plan(more, design, year));
     dial.horizon = design.hours.seen_rise ? k_seen_horizon : Angle{};
@@ -165,6 +185,11 @@ FacePlan plan_of(const Design& design, const MeanYear& year, bool upper_face) {
     dial.azimuths_between = declinations(design.also.azimuth_look, design, year);
     dial.noons_between = declinations(design.also.noon_look, design, year);
     dial.dates = date_plan(design, year);
+    if (const auto& hours = design.dates.hours) {
+        const HourTime scale = has_straight_lines(dial.hours.time) ? dial.hours.time : HourTime::sun;
+        dial.dates.first = hour_angle_of(scale, hours->first, dial.site, dial.zone_meridian);
+        dial.dates.last = hour_angle_of(scale, hours->second, dial.site, dial.zone_meridian);
+    }
     if (equatorial) // the Sun stands on this face's side of the equator, or never lights it
         std::erase_if(dial.dates.lines, [&](const DatePlan::Line& line) {
             const bool north = (dial.site.latitude >= Angle{}) == upper_face;
@@ -179,20 +204,21 @@ FacePlan plan_of(const Design& design, const MeanYear& year, bool upper_face) {
     spec.lettering = design.lettering;
     spec.cutting = design.cutting;
     const double tool_mm = design.cutting.line_width_mm;
-    spec.widths = {design.hours.weight.of(tool_mm),
-                   design.dates.weight.of(tool_mm),
-                   design.also.altitude_look.weight.of(tool_mm),
-                   design.also.azimuth_look.weight.of(tool_mm),
-                   design.also.noon_look.weight.of(tool_mm),
-                   {}};
+    spec.widths = {design.hours.look.weight.of(tool_mm),         design.dates.weight.of(tool_mm),
+                   design.also.altitude_look.weight.of(tool_mm), design.also.azimuth_look.weight.of(tool_mm),
+                   design.also.noon_look.weight.of(tool_mm),     {}};
     for (const MoreHours& more : design.also.hours)
         spec.widths.more_hours_mm.push_back(more.look.weight.of(tool_mm));
     spec.numerals = design.hours.numerals;
     spec.stand = design.hours.stand;
     spec.numeral_count = design.hours.count;
-    const bool ring_time = design.hours.time == HourTime::sun || design.hours.time == HourTime::zone;
-    spec.divide_min = ring_time && design.hours.reach == HourExtent::style ? design.hours.divide_min : 0;
-    spec.summer_shift_h = design.hours.summer_numerals ? summer_shift_h(*zone, design.years.first) : 0.0;
+    spec.divide_min =
+        has_straight_lines(design.hours.time) && design.hours.reach == HourExtent::style ? design.hours.divide_min : 0;
+    if (design.hours.summer_numerals) {
+        const SummerNumerals summer = summer_numerals(*zone, design.years.first);
+        spec.summer_shift_h = summer.shift_h;
+        spec.summer_word = summer.word;
+    }
     spec.numeral_height_asked = design.where.contains("lettering: numeral height");
     spec.motto_height_asked = design.where.contains("lettering: motto height");
     spec.noon_mark = design.hours.noon_mark;
@@ -205,10 +231,6 @@ FacePlan plan_of(const Design& design, const MeanYear& year, bool upper_face) {
 }
 
 } // namespace
-
-std::string date_text(std::chrono::month_day day) {
-    return fmt::format("{} {}", unsigned(day.day()), k_months[unsigned(day.month()) - 1]);
-}
 
 DatePlan date_plan(const Design& design, const MeanYear& year) {
     DateLines lines{design, year};

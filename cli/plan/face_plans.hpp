@@ -28,9 +28,6 @@ struct FaceAttitude {
 /// The same faces, for what is asked of a wall before there is a dial.
 [[nodiscard]] std::vector<FaceAttitude> face_attitudes(const Design& design);
 
-/// "21 Jun".
-[[nodiscard]] std::string date_text(std::chrono::month_day day);
-
 /// The date lines that a design asks for: label and mean declination. Lines that coincide share one label.
 [[nodiscard]] DatePlan date_plan(const Design& design, const MeanYear& year);
 

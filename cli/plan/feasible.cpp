@@ -4,6 +4,7 @@
 #include "cli/report/say.hpp"
 #include "layout/lettering/plate_lettering.hpp"
 #include "layout/plate/numerals.hpp"
+#include "layout/plate/tool_check.hpp"
 
 #include <algorithm>
 #include <cmath>
@@ -14,10 +15,6 @@
 
 namespace dialwright::cli {
 namespace {
-
-bool counts_from_horizon(HourTime time) {
-    return time != HourTime::sun && time != HourTime::zone && time != HourTime::clock;
-}
 
 struct LitHours {
     std::vector<double> hours; ///< quarter hours of the dial's own time
@@ -36,16 +33,28 @@ LitHours lit_hours(DialPlan plan, const MeanYear& year) {
     return lit;
 }
 
-std::string span_text(const LitHours& lit) {
-    std::string text;
-    for (std::size_t i = 0; i < lit.hours.size();) {
-        std::size_t k = i;
-        while (k + 1 < lit.hours.size() && lit.hours[k + 1] - lit.hours[k] < 0.3)
-            ++k;
-        text += fmt::format("{}{} to {}", text.empty() ? "" : " and ", layout::time_label(lit.hours[i]),
-                            layout::time_label(lit.hours[k]));
-        i = k + 1;
+/// "it is lit from 4:00 to 10:15 and 17:00 to 20:00"; a span that passes midnight is one.
+std::string say_lit(const LitHours& lit) {
+    struct Span {
+        double first, last;
+    };
+    std::vector<Span> spans;
+    for (const double hour : lit.hours)
+        if (!spans.empty() && hour - spans.back().last < 0.3)
+            spans.back().last = hour;
+        else
+            spans.push_back({hour, hour});
+    const bool through_midnight = !spans.empty() && spans.front().first == 0.0 && spans.back().last == 23.75;
+    if (through_midnight && spans.size() == 1)
+        return "it is lit at every hour, at some time of the year";
+    if (through_midnight) {
+        spans.front().first = spans.back().first;
+        spans.pop_back();
     }
+    std::string text;
+    for (const Span& span : spans)
+        text += fmt::format("{}{} to {}", text.empty() ? "it is lit from " : " and ", layout::time_label(span.first),
+                            layout::time_label(span.last));
     return text;
 }
 
@@ -53,7 +62,7 @@ std::optional<DesignError> borders_without_field(const Design& design, const lay
     try {
         static_cast<void>(layout::Rings::of(spec));
         return std::nullopt;
-    } catch (const std::invalid_argument& trouble) {
+    } catch (const layout::BordersError& trouble) {
         return borders_error(design, trouble.what());
     }
 }
@@ -69,7 +78,7 @@ void add_unlit_hours(std::vector<DesignError>& errors, const Design& design, con
         return std::any_of(lit.hours.begin(), lit.hours.end(), [&](double h) { return h >= first && h <= last; });
     };
     const std::string face = plan.name.empty() ? "this plate" : "the " + plan.name + " face";
-    const std::string lit_span = fmt::format("it is lit from {}", span_text(lit));
+    const std::string lit_span = say_lit(lit);
     const auto& first = design.hours.first_h;
     const auto& last = design.hours.last_h;
     const auto never_at = [&](const char* key, double hour) {
@@ -203,6 +212,8 @@ std::vector<DesignError> what_cannot_be_lettered(const Design& design, const std
         try_text("lettering: place line", design.lettering.place_line);
         for (const NamedDay& day : design.dates.days)
             try_text("dates: days", day.label);
+        if (design.dates.signs)
+            try_text("dates: signs", "♈");
     } catch (const layout::LetteringError& trouble) {
         errors.push_back(error_at(design, "lettering: font", trouble.what(), ""));
     }
@@ -211,35 +222,67 @@ std::vector<DesignError> what_cannot_be_lettered(const Design& design, const std
     return errors;
 }
 
+namespace {
+
+/// Labels of the date lines that a face was to have and has not.
+std::vector<std::string> lost_dates(const FacePlan& plan, const layout::Face& face) {
+    std::vector<std::string> lost;
+    for (const DatePlan::Line& date : plan.dial.dates.lines)
+        if (std::none_of(face.lines.begin(), face.lines.end(), [&](const layout::DrawnLine& line) {
+                return line.family == Family::date && line.declination == date.declination;
+            }))
+            lost.push_back(date.label);
+    return lost;
+}
+
+/// The face as it would be with the nodus left open; none where its gnomon could not be made.
+std::optional<layout::Face> with_free_nodus(const FacePlan& plan, const MeanYear& year) {
+    DialPlan free = plan.dial;
+    free.nodus_height_mm = 0.0;
+    try {
+        return layout::draw_face(free, year, plan.spec);
+    } catch (const layout::GnomonError&) {
+        return std::nullopt;
+    }
+}
+
+} // namespace
+
 std::vector<DesignError> what_misses_the_plate(const Design& design, const MeanYear& year,
-                                               const std::vector<FacePlan>& plans,
-                                               const std::vector<layout::Face>& faces) {
+                                               const std::vector<FacePlan>& plans, std::vector<layout::Face>& faces) {
     std::vector<DesignError> errors;
     for (std::size_t i = 0; i < faces.size(); ++i) {
-        bool hours = false, dates = false;
-        for (const layout::DrawnLine& line : faces[i].lines) {
-            dates = dates || line.family == Family::date;
-            hours = hours || is_hour(line.family);
-        }
-        if (!hours)
+        if (std::none_of(faces[i].lines.begin(), faces[i].lines.end(),
+                         [](const layout::DrawnLine& line) { return is_hour(line.family); }))
             errors.push_back(no_hours_error(design));
-        const bool asked = !plans[i].dial.dates.lines.empty();
-        const bool one_can_fall = std::any_of(
-            plans[i].dial.dates.lines.begin(), plans[i].dial.dates.lines.end(), [&](const DatePlan::Line& line) {
-                const bool equatorial =
-                    design.dial.kind == DialKind::equatorial; // an equinox line lies at infinity there
-                return !equatorial || std::abs(line.declination.in_degrees()) > 0.5;
-            });
-        if (asked && one_can_fall && !dates && design.gnomon.nodus_height_mm) {
-            DialPlan free = plans[i].dial;
-            free.nodus_height_mm = 0.0;
-            const double works = layout::place_on_plate(free, year, plans[i].spec).nodus_height_mm;
+        if (layout::parts_no_hours(faces[i], plans[i].spec))
             errors.push_back(error_at(
-                design, "gnomon: nodus height",
-                fmt::format("a nodus {} above the plate throws every date line off it",
-                            say_length(*design.gnomon.nodus_height_mm, false)),
-                fmt::format("about {} would do; leave the key out, and it is taken", say_length(works, false))));
+                design,
+                first_given(design,
+                            {"cutting: diameter", "cutting: depth", "cutting: line width", "cutting: tool", "cutting"}),
+                fmt::format("the tool leaves a line of {}, and no hour line of this plate stands clear of the next",
+                            say_length(plans[i].spec.cutting.line_width_mm, false)),
+                "take a finer tool, or a larger plate"));
+        const std::vector<std::string> lost = lost_dates(plans[i], faces[i]);
+        if (lost.empty() || !design.gnomon.nodus_height_mm)
+            continue;
+        const std::optional<layout::Face> free = with_free_nodus(plans[i], year);
+        if (!free || lost_dates(plans[i], *free).size() >= lost.size())
+            continue; // not for the height of the nodus, or no other would do
+        const std::string given = say_length(*design.gnomon.nodus_height_mm, false),
+                          works = say_length(free->placement.nodus_height_mm, false);
+        if (lost.size() == plans[i].dial.dates.lines.size()) {
+            errors.push_back(error_at(design, "gnomon: nodus height",
+                                      fmt::format("a nodus {} above the plate throws every date line off it", given),
+                                      fmt::format("about {} would do; leave the key out, and it is taken", works)));
+            continue;
         }
+        std::string all;
+        for (const std::string& label : lost)
+            all += (all.empty() ? "" : ", ") + label;
+        faces[i].warnings.push_back(
+            fmt::format("a nodus {} above the plate throws {} of its date lines off it ({}): about {} would keep more",
+                        given, lost.size(), all, works));
     }
     return errors;
 }

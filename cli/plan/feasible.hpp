@@ -29,9 +29,10 @@ namespace dialwright::cli {
 /// Which texts no font at hand can set, each at its own key; `otherwise` at the font's where each by itself can be set.
 [[nodiscard]] std::vector<DesignError> what_cannot_be_lettered(const Design& design, const std::string& otherwise);
 
-/// What fell off the plate: no hour line on it; a given nodus that throws every date line off it.
+/// What fell off the plate: no hour line on it; a given nodus that throws every date line off it. One that throws some
+/// off is told in the face's warnings.
 [[nodiscard]] std::vector<DesignError> what_misses_the_plate(const Design& design, const MeanYear& year,
                                                              const std::vector<FacePlan>& plans,
-                                                             const std::vector<layout::Face>& faces);
+                                                             std::vector<layout::Face>& faces);
 
 } // namespace dialwright::cli

@@ -2,6 +2,7 @@
 #include "cli/report/accuracy_words.hpp"
 #include "layout/chart/accuracy_chart.hpp"
 #include "layout/sheet/flow.hpp"
+#include "layout/sheet/note_width.hpp"
 
 #include <algorithm>
 
@@ -25,16 +26,22 @@ void put_chart(layout::Flow& flow, const FaceAccuracy& face) {
     }
     if (plan.hours.empty())
         return;
-    const layout::AccuracyChart chart = layout::accuracy_chart(plan);
-    flow.need(chart.box.height_mm() + 2);
-    flow.space(chart.box.height_mm() + 1);
-    const layout::Placing placing{{}, {flow.left(), flow.y()}, 1.0, 1.0, false};
-    for (const layout::Mark& mark : chart.marks)
-        flow.sheet().furniture.push_back(placing(mark));
-    for (layout::Note note : chart.notes) {
-        note.at = placing(note.at);
-        flow.sheet().notes.push_back(std::move(note));
+    layout::put_chart(flow, layout::accuracy_chart(plan));
+}
+
+/// The largest letters in which a table stands on a page of this width.
+double size_that_fits(const std::vector<layout::Flow::Column>& columns, const std::vector<TableRow>& rows,
+                      double width_mm) {
+    constexpr double k_gap_mm = 3.5, k_largest_mm = 2.5, k_least_mm = 1.7; // of the columns; of the letters
+    double at_one_mm = 0;
+    for (std::size_t i = 0; i < columns.size(); ++i) {
+        double most = layout::note_width_mm(columns[i].head, 1.0, true);
+        for (const TableRow& row : rows)
+            most = std::max(most, layout::note_width_mm(row[i], 1.0));
+        at_one_mm += most;
     }
+    const double room = width_mm - k_gap_mm * double(columns.size());
+    return std::clamp(room / std::max(at_one_mm, 1.0), k_least_mm, k_largest_mm);
 }
 
 } // namespace
@@ -57,7 +64,9 @@ std::vector<layout::Sheet> accuracy_sheets(const Commission& commission, const s
         flow.paragraph("Minutes of error of each hour line: all slips by squares at the three seasons, then each slip "
                        "at the hour's worst season.",
                        "", false, 2.5);
-        flow.table(accuracy_columns(faces[i]), accuracy_rows(faces[i]), 2.0);
+        const auto columns = accuracy_columns(faces[i]);
+        const auto rows = accuracy_rows(faces[i]);
+        flow.table(columns, rows, size_that_fits(columns, rows, flow.width()));
         flow.space(1);
         flow.paragraph(k_accuracy_note, "", false, 2.5);
         for (layout::Sheet& sheet : flow.sheets())

@@ -5,6 +5,7 @@
 #include "layout/plate/numerals.hpp"
 
 #include <algorithm>
+#include <cmath>
 #include <fmt/format.h>
 
 namespace dialwright::cli {
@@ -101,8 +102,13 @@ std::string way(double mm, const char* forward, const char* backward, bool inche
 }
 
 std::string place_words(PlatePoint at, const AccuracyPlan& plan, bool inches) {
-    return plan.level ? way(at.u_mm, "east", "west", inches) + ", " + way(at.v_mm, "north", "south", inches)
-                      : way(at.u_mm, "right", "left", inches) + ", " + way(at.v_mm, "up", "down", inches);
+    constexpr double k_on_it_mm = 0.05;
+    std::vector<std::string> parts;
+    if (std::abs(at.u_mm) >= k_on_it_mm)
+        parts.push_back(plan.level ? way(at.u_mm, "east", "west", inches) : way(at.u_mm, "right", "left", inches));
+    if (std::abs(at.v_mm) >= k_on_it_mm)
+        parts.push_back(plan.level ? way(at.v_mm, "north", "south", inches) : way(at.v_mm, "up", "down", inches));
+    return parts.empty() ? "at the foot of the nodus" : fmt::format("{} of the nodus' foot", fmt::join(parts, ", "));
 }
 
 /// What is gained by proving a slip to be nothing; empty where that is less than the next finer reading.
@@ -150,7 +156,7 @@ std::vector<std::string> accuracy_words(const Commission& commission, const Face
     std::vector<std::string> list{supported_words(face)};
     if (const Found most = largest_slip(face); most.minutes >= 0) {
         const AccuracyCell& cell = *face.lines[most.line].at[most.season];
-        list.push_back(fmt::format("What matters most there: {}, {} min at {} {}, read {} of the nodus' foot.{}",
+        list.push_back(fmt::format("What matters most there: {}, {} min at {} {}, read {}.{}",
                                    slip_words(most.kind, face.plan), fixed(most.minutes, 1), face.labels[most.line],
                                    k_seasons[most.season], place_words(cell.at, face.plan, inches),
                                    proved_words(face, most.kind)));

@@ -111,13 +111,15 @@ Json date_json(const Fixing& fixing, const FixingDate& date) {
 }
 
 std::vector<TableRow> quarter_rows(const Fixing& fixing, const FixingDate& date) {
+    const bool inches = fixing.commission->design.units == Units::inches;
     std::vector<TableRow> rows;
     for (const FixingRow& row : date.rows) {
         const ShadowReport& shadow = row.shadow;
-        rows.push_back({say_clock(fixing.zone, shadow.at).substr(0, 5),
-                        shadow.reads_h ? reading_words(*shadow.reads_h) : "none", fixed(shadow.shadow->u_mm, 1),
-                        fixed(shadow.shadow->v_mm, 1), fixed(shadow.towards_sun.altitude().in_degrees(), 1) + "°",
-                        fixed(shadow.towards_sun.azimuth().in_degrees(), 1) + "°"});
+        rows.push_back(
+            {say_clock(fixing.zone, shadow.at).substr(0, 5), shadow.reads_h ? reading_words(*shadow.reads_h) : "none",
+             layout::bare_length(shadow.shadow->u_mm, inches), layout::bare_length(shadow.shadow->v_mm, inches),
+             fixed(shadow.towards_sun.altitude().in_degrees(), 1) + "°",
+             fixed(shadow.towards_sun.azimuth().in_degrees(), 1) + "°"});
         if (fixing.commission->plans.size() > 1)
             rows.back().push_back(fixing.commission->plans[shadow.face].name);
         if (!row.on_plate)
@@ -151,6 +153,8 @@ std::string fixing_text(const Fixing& fixing) {
     using layout::Align;
     const Design& design = fixing.commission->design;
     const PlateWords words = plate_words(design);
+    const bool inches = design.units == Units::inches;
+    const std::string unit = inches ? " in" : " mm";
     std::string text = fmt::format("Fixing {} at {}, {}, {}\n", design.title, say_latitude(design.place.site.latitude),
                                    say_longitude(design.place.site.longitude), design.place.zone);
     const auto put = std::back_inserter(text);
@@ -159,14 +163,14 @@ std::string fixing_text(const Fixing& fixing) {
         noons.push_back(noon_row(fixing, date));
     fmt::format_to(put, "\nLocal noon\n{}", text_table(noon_columns(), noons, 2));
     for (const FixingDate& date : fixing.dates) {
-        fmt::format_to(put, "\n{}: what the dial must read, and where the nodus' shadow falls, mm from its foot\n",
-                       say_weekday_date(date.day.date));
+        fmt::format_to(put, "\n{}: what the dial must read, and where the nodus' shadow falls, {} from its foot\n",
+                       say_weekday_date(date.day.date), inches ? "inches" : "mm");
         fmt::format_to(put, "{}",
                        date.rows.empty() ? std::string{"  the Sun does not light it on this date\n"}
                                          : text_table({{"clock", Align::left},
                                                        {"reads", Align::right},
-                                                       {words.right, Align::right},
-                                                       {words.up, Align::right},
+                                                       {words.right + unit, Align::right},
+                                                       {words.up + unit, Align::right},
                                                        {"Sun's height", Align::right},
                                                        {"azimuth", Align::right}},
                                                       quarter_rows(fixing, date), 2));

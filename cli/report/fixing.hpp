@@ -53,7 +53,7 @@ inline constexpr int k_most_fixing_days = 31; ///< a run that still goes on one 
 [[nodiscard]] std::string fixing_text(const Fixing& fixing);
 [[nodiscard]] std::string fixing_json(const Fixing& fixing);
 [[nodiscard]] std::string fixing_csv(const Fixing& fixing);
-/// The fixing sheet: two pages at most. What has no room on it is left out in this order: dates in the middle of the
+/// The fixing sheet: two pages at most of A4 or larger. What has no room on it is left out in this order: dates in the middle of the
 /// run, every other quarter hour, the gauge, which the packet has on a page of its own.
 [[nodiscard]] std::vector<layout::Sheet> fixing_sheets(const Fixing& fixing, const layout::PrintOptions& options);
 

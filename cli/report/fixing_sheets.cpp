@@ -102,8 +102,8 @@ class FixingPages {
             const auto day = date->day.date;
             columns.push_back(
                 {dates_.size() == 1 ? "reads" : say_date(day).substr(0, say_date(day).size() - 5), Align::right});
-            columns.push_back({words_.right, Align::right});
-            columns.push_back({words_.up, Align::right});
+            columns.push_back({words_.right + (inches() ? " in" : " mm"), Align::right});
+            columns.push_back({words_.up + (inches() ? " in" : " mm"), Align::right});
         }
         std::vector<TableRow> rows;
         for (const auto& [clock, cells] : by_clock) {
@@ -112,21 +112,22 @@ class FixingPages {
                 add_cells(rows.back(), row);
         }
         flow_.table(columns, rows, extent_.size_mm);
-        flow_.paragraph(fmt::format("The nodus' shadow in mm from the nodus' foot, {} and {}{}.",
-                                    words_.right.substr(0, words_.right.size() - 3),
-                                    words_.up.substr(0, words_.up.size() - 3),
+        flow_.paragraph(fmt::format("The nodus' shadow in {} from the nodus' foot, {} and {}{}.",
+                                    inches() ? "inches" : "mm", words_.right, words_.up,
                                     off_plate ? "; – where it falls beyond the plate: read the style's shadow" : ""),
                         "", false, 2.5);
     }
 
-    static void add_cells(TableRow& cells, const FixingRow* row) {
+    [[nodiscard]] bool inches() const { return commission_.design.units == Units::inches; }
+
+    void add_cells(TableRow& cells, const FixingRow* row) const {
         if (row == nullptr) {
             cells.insert(cells.end(), 3, "");
             return;
         }
         cells.push_back(row->shadow.reads_h ? reading_words(*row->shadow.reads_h) : "none");
-        cells.push_back(row->on_plate ? fixed(row->shadow.shadow->u_mm, 1) : "–");
-        cells.push_back(row->on_plate ? fixed(row->shadow.shadow->v_mm, 1) : "–");
+        cells.push_back(row->on_plate ? layout::bare_length(row->shadow.shadow->u_mm, inches()) : "–");
+        cells.push_back(row->on_plate ? layout::bare_length(row->shadow.shadow->v_mm, inches()) : "–");
     }
 
     void put_north() {

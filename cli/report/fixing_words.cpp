@@ -50,7 +50,7 @@ std::string motion_text(const Motion& motion, const std::vector<FixingAnswer>& a
         return rate_of(answer) * rate < 0 && std::abs(rate_of(answer)) > k_no_answer;
     });
     const std::string& when_slow = rate > 0 ? motion.forward : motion.backward;
-    return fmt::format("It is slow at {}: move it {}; {} ({} {}) is a minute. Fast: the other way.{}",
+    return fmt::format("Where it is slow at {}, move it {}: {} ({} {}) is a minute. Where it is fast, the other way.{}",
                        say_clock(zone, most.at).substr(0, 5), when_slow, degrees_text(a_minute.in_degrees(), 2),
                        over(motion.arm_mm, a_minute, inches), motion.where,
                        both_signs ? " At other hours it may be the other way about: the table's sign tells." : "");
@@ -60,10 +60,15 @@ std::string motion_text(const Motion& motion, const std::vector<FixingAnswer>& a
 
 PlateWords plate_words(const Design& design) {
     if (design.dial.kind == DialKind::level)
-        return {"east mm",        "north mm",        "turned clockwise", "north edge down",
+        return {"east",           "north",           "turned clockwise", "north edge down",
                 "east edge down", "north edge down", "east edge down"};
-    return {"right mm",         "up mm",    "turned clockwise (from above)",    "top back",
-            "rolled clockwise", "top back", "rolled clockwise in its own plane"};
+    return {"right",
+            "up",
+            "turned clockwise (from above)",
+            "top back",
+            "rolled clockwise",
+            "top back",
+            "rolled clockwise in its own plane"};
 }
 
 std::string reading_words(double hours) {

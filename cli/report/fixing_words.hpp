@@ -8,7 +8,7 @@ namespace dialwright::cli {
 
 // What text and paper have in common.
 
-/// How a table of quarter hours names where the shadow falls: "right mm" or, on a level plate, "east mm".
+/// How a table of quarter hours names where the shadow falls, and which way it is to be moved.
 struct PlateWords {
     std::string right, up;         ///< "right", "up" or "east", "north"
     std::string turn, tip, roll;   ///< heads of the answers

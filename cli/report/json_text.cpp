@@ -3,10 +3,18 @@
 
 #include "layout/text/figures.hpp"
 
+#include <algorithm>
 #include <cmath>
 
 namespace dialwright::cli {
 namespace {
+
+/// As JSON has it: what needs no escape is copied.
+void write_text(const std::string& words, std::string& text) {
+    const bool plain =
+        std::all_of(words.begin(), words.end(), [](char c) { return c >= ' ' && c < '\x7f' && c != '"' && c != '\\'; });
+    text += plain ? '"' + words + '"' : Json(words).dump(-1, ' ', false, Json::error_handler_t::replace);
+}
 
 /// Floating numbers fixed to the millionth; all else as the library writes it.
 void write(const Json& json, std::string& text) {
@@ -21,15 +29,17 @@ void write(const Json& json, std::string& text) {
     };
     if (json.is_object()) {
         write_list('{', '}', [&](const auto& item) {
-            text += Json(item.key()).dump() + ':';
+            write_text(item.key(), text);
+            text += ':';
             write(item.value(), text);
         });
     } else if (json.is_array()) {
         write_list('[', ']', [&](const auto& item) { write(*item, text); });
     } else if (json.is_number_float()) {
-        std::string number = layout::fixed(json.get<double>(), 6);
-        number.erase(number.find_last_not_of('0') + 1);
-        text += number.ends_with('.') ? number + '0' : number;
+        if (const double number = json.get<double>(); !layout::append_fixed(text, number, 6, 1))
+            text += layout::fixed(number, 1);
+    } else if (json.is_string()) {
+        write_text(json.get_ref<const std::string&>(), text);
     } else {
         text += json.dump(-1, ' ', false, Json::error_handler_t::replace);
     }

@@ -1,8 +1,10 @@
 // SPDX-License-Identifier: MIT
+#include "cli/report/families.hpp"
 #include "cli/report/json_text.hpp"
 #include "cli/report/numbers.hpp"
 #include "cli/report/say.hpp"
 #include "layout/correction/words.hpp"
+#include "layout/plate/family_words.hpp"
 
 #include <fmt/format.h>
 
@@ -32,12 +34,12 @@ Json style_json(const Style& style) {
 }
 
 bool has_hour_angle(const layout::DrawnLine& line) {
-    return line.family == Family::hour || line.family == Family::clock_hour;
+    return !counts_from_horizon(line.family);
 }
 
 /// A line that is neither one of the ring's hours nor a date: with its time, or with the angle that it stands for.
 Json more_line(const layout::DrawnLine& line) {
-    Json out{{"family", say_family(line.family)}, {"label", line.label}};
+    Json out{{"family", layout::words_of(line.family, line.time).name}, {"label", line.label}};
     if (is_hour(line.family))
         out["time_h"] = number(line.time_h);
     else if (line.family == Family::place_noon)
@@ -48,6 +50,21 @@ Json more_line(const layout::DrawnLine& line) {
     return out;
 }
 
+/// How each family is drawn.
+Json families_json(const FacePlan& plan, const layout::Face& face) {
+    Json list = Json::array();
+    for (const DrawnFamily& family : drawn_families(plan, face))
+        list.push_back(
+            {{"family", family.name},
+             {"in_ring", family.in_ring},
+             {"width_mm", family.width_mm > 0 ? number(family.width_mm) : Json(nullptr)},
+             {"declinations_deg", family.between ? Json::array({number(family.between->least.in_degrees()),
+                                                                number(family.between->greatest.in_degrees())})
+                                                 : Json(nullptr)},
+             {"figures", family.figures.empty() ? Json(nullptr) : Json(family.figures)}});
+    return list;
+}
+
 void add_face(Json& out, const FacePlan& plan, const layout::Face& face) {
     const Attitude& attitude = plan.dial.attitude;
     out["plate"] = {{"normal_azimuth_deg", number(attitude.normal_azimuth.in_degrees())},
@@ -56,6 +73,7 @@ void add_face(Json& out, const FacePlan& plan, const layout::Face& face) {
     out["nodus"] = {{"height_mm", number(face.placement.nodus_height_mm)}};
     out["gnomon"] = {{"thickness_mm", number(plan.dial.gnomon_thickness_mm)}, {"foot_mm", number(face.gnomon_foot_mm)}};
     out["style"] = style_json(face.delineation.style);
+    out["families"] = families_json(plan, face);
     out["hour_lines"] = Json::array();
     out["date_lines"] = Json::array();
     out["more_lines"] = Json::array();

@@ -1,8 +1,10 @@
 // SPDX-License-Identifier: MIT
+#include "cli/report/families.hpp"
 #include "cli/report/lines_of_text.hpp"
 #include "cli/report/numbers.hpp"
 #include "cli/report/say.hpp"
 #include "layout/correction/words.hpp"
+#include "layout/plate/family_words.hpp"
 
 #include <cmath>
 #include <fmt/format.h>
@@ -12,8 +14,16 @@ namespace dialwright::cli {
 namespace {
 
 using Text = LinesOfText;
-std::string point_text(PlatePoint p) {
-    return fmt::format("{:>8} {:>8}", fixed(p.u_mm, 1), fixed(p.v_mm, 1));
+/// How wide a column of one coordinate is.
+int column(bool inches) {
+    return inches ? 10 : 8;
+}
+std::string ends_words(bool inches) {
+    return inches ? "ends in inches from the nodus' foot" : "ends in mm from the nodus' foot";
+}
+std::string point_text(PlatePoint p, bool inches) {
+    return fmt::format("{:>{}} {:>{}}", layout::bare_length(p.u_mm, inches), column(inches),
+                       layout::bare_length(p.v_mm, inches), column(inches));
 }
 
 void say_site(Text& text, const Commission& commission) {
@@ -56,51 +66,67 @@ void say_style(Text& text, const layout::Face& face, const FacePlan& plan, bool 
                   say_length(plan.dial.gnomon_thickness_mm, inches));
 }
 
-void say_lines(Text& text, const layout::Face& face) {
+void say_lines(Text& text, const layout::Face& face, bool inches) {
     text.gap();
-    text.line("  Hour lines: angle on the plate from the centre, clockwise from up; ends in mm from the nodus' foot");
-    text.line("  {:<8} {:>7} {:>11} {:>10} {:>12}   {:>8} {:>8}   {:>8} {:>8}", "line", "time", "hour angle", "angle",
-              "", "from u", "v", "to u", "v");
+    text.line("  Hour lines: angle on the plate from the centre, clockwise from up; {}", ends_words(inches));
+    const int wide = column(inches);
+    text.line("  {:<8} {:>7} {:>11} {:>10} {:>12}   {:>{}} {:>{}}   {:>{}} {:>{}}", "line", "time", "hour angle",
+              "angle", "", "from u", wide, "v", wide, "to u", wide, "v", wide);
     for (const layout::DrawnLine& line : face.lines) {
         if (line.set != 0 || !is_hour(line.family))
             continue;
         const std::string angle = line.direction ? fixed(line.direction->in_degrees(), 4) + "°" : "curve";
         const std::string minutes = line.direction ? degrees_minutes(*line.direction) : "";
         text.line("  {:<8} {:>7} {:>10}° {:>10} {:>12}   {}   {}", line.label, say_clock(line.time_h).substr(0, 5),
-                  fixed(line.hour_angle.in_degrees(), 4), angle, minutes, point_text(line.points.front()),
-                  point_text(line.points.back()));
+                  fixed(line.hour_angle.in_degrees(), 4), angle, minutes, point_text(line.points.front(), inches),
+                  point_text(line.points.back(), inches));
     }
     text.gap();
-    text.line("  Date lines: ends in mm from the nodus' foot");
+    text.line("  Date lines: {}", ends_words(inches));
     for (const layout::DrawnLine& line : face.lines)
         if (line.family == Family::date)
             text.line("  {:<28} {:>24}   {}   {}   {} points", line.label,
-                      both_ways(line.declination.value_or(Angle{})), point_text(line.points.front()),
-                      point_text(line.points.back()), line.points.size());
+                      both_ways(line.declination.value_or(Angle{})), point_text(line.points.front(), inches),
+                      point_text(line.points.back(), inches), line.points.size());
 }
 
-void say_more_lines(Text& text, const layout::Face& face) {
+void say_more_lines(Text& text, const layout::Face& face, bool inches) {
     bool headed = false;
     for (const layout::DrawnLine& line : face.lines) {
         if (line.family == Family::date || (line.set == 0 && is_hour(line.family)))
             continue;
         if (!headed) {
             text.gap();
-            text.line("  More lines: ends in mm from the nodus' foot");
+            text.line("  More lines: {}", ends_words(inches));
         }
         headed = true;
-        text.line("  {:<16} {:<12}   {}   {}   {} points", say_family(line.family), line.label,
-                  point_text(line.points.front()), point_text(line.points.back()), line.points.size());
+        text.line("  {:<16} {:<12}   {}   {}   {} points", layout::words_of(line.family, line.time).name, line.label,
+                  point_text(line.points.front(), inches), point_text(line.points.back(), inches), line.points.size());
+    }
+}
+
+void say_families(Text& text, const FacePlan& plan, const layout::Face& face) {
+    text.gap();
+    text.line("  Families of lines, and how they are drawn");
+    for (const DrawnFamily& family : drawn_families(plan, face)) {
+        std::string row = fmt::format("  {:<28} {}", family.lines,
+                                      family.width_mm > 0 ? fixed(family.width_mm, 2) + " mm wide"
+                                                          : "on the lines of another family");
+        if (family.in_ring)
+            row += "; in the chapter ring";
+        if (!family.figures.empty())
+            row += fmt::format("; {}, as in {}", family.figures, family.sample);
+        if (family.between)
+            row += "; " + say_between(*family.between);
+        text.line("{}", row);
     }
 }
 
 void list_equation(Text& text, const MeanYear& year) {
     text.gap();
     text.line("Equation of time, the mean of the years, at noon UT");
-    static constexpr const char* k_months[] = {"Jan", "Feb", "Mar", "Apr", "May", "Jun",
-                                               "Jul", "Aug", "Sep", "Oct", "Nov", "Dec"};
     for (unsigned month = 1; month <= 12; ++month) {
-        std::string row = fmt::format("  {}", k_months[month - 1]);
+        std::string row = fmt::format("  {:.3}", layout::month_name(month));
         for (const unsigned day : {1U, 11U, 21U}) {
             const auto mean = year.at(year.day_of(std::chrono::month{month} / std::chrono::day{day}));
             row += fmt::format("  {:>2}: {:<22}", day, say_equation(mean.equation_of_time));
@@ -144,14 +170,16 @@ void say_correction(Text& text, const Commission& commission) {
 std::string numbers_text(const Commission& commission) {
     Text text;
     say_site(text, commission);
+    const bool inches = commission.design.units == Units::inches;
     for (std::size_t i = 0; i < commission.faces.size(); ++i) {
         if (commission.faces.size() > 1) {
             text.gap();
             text.line("{} face", commission.plans[i].name);
         }
         say_style(text, commission.faces[i], commission.plans[i], commission.design.units == Units::inches);
-        say_lines(text, commission.faces[i]);
-        say_more_lines(text, commission.faces[i]);
+        say_lines(text, commission.faces[i], inches);
+        say_more_lines(text, commission.faces[i], inches);
+        say_families(text, commission.plans[i], commission.faces[i]);
     }
     say_correction(text, commission);
     list_equation(text, commission.year);

@@ -2,6 +2,8 @@
 #include "cli/report/say.hpp"
 
 #include "engine/time/instant_text.hpp"
+#include "layout/correction/words.hpp"
+#include "layout/plate/family_words.hpp"
 
 #include <cmath>
 #include <fmt/format.h>
@@ -58,49 +60,7 @@ std::string say_equation(Angle equation) {
 }
 
 const char* say_time(HourTime time) {
-    switch (time) {
-    case HourTime::sun:
-        return "sun";
-    case HourTime::zone:
-        return "zone";
-    case HourTime::clock:
-        return "clock";
-    case HourTime::since_sunrise:
-        return "since sunrise";
-    case HourTime::since_sunset:
-        return "since sunset";
-    case HourTime::to_sunset:
-        return "hours left";
-    case HourTime::unequal:
-        break;
-    }
-    return "unequal";
-}
-
-const char* say_family(Family family) {
-    switch (family) {
-    case Family::hour:
-        return "hour";
-    case Family::clock_hour:
-        return "clock";
-    case Family::date:
-        return "date";
-    case Family::since_sunrise:
-        return "since sunrise";
-    case Family::since_sunset:
-        return "since sunset";
-    case Family::to_sunset:
-        return "hours left";
-    case Family::unequal_hour:
-        return "unequal";
-    case Family::altitude:
-        return "altitude";
-    case Family::azimuth:
-        return "azimuth";
-    case Family::place_noon:
-        break;
-    }
-    return "noon at";
+    return layout::words_of(time).name;
 }
 
 std::string say_clock(double hours) {
@@ -140,9 +100,7 @@ std::string say_duration(std::chrono::microseconds length) {
 }
 
 std::string say_date(std::chrono::year_month_day date) {
-    static constexpr const char* k_months[] = {"Jan", "Feb", "Mar", "Apr", "May", "Jun",
-                                               "Jul", "Aug", "Sep", "Oct", "Nov", "Dec"};
-    return fmt::format("{} {} {}", unsigned(date.day()), k_months[unsigned(date.month()) - 1], int(date.year()));
+    return fmt::format("{} {}", layout::say_date(date.month() / date.day(), true), int(date.year()));
 }
 
 std::string say_weekday_date(std::chrono::year_month_day date) {

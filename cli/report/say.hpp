@@ -27,9 +27,8 @@ using layout::say_length;
 [[nodiscard]] std::string say_attitude(const Attitude& attitude);
 /// "+3 m 39 s, dial fast".
 [[nodiscard]] std::string say_equation(Angle equation_of_time);
-/// The trade's words for a kind of time and for a family of lines: "since sunrise", "altitude".
+/// A kind of time as designs name it: "since sunrise".
 [[nodiscard]] const char* say_time(HourTime time);
-[[nodiscard]] const char* say_family(Family family);
 /// "HH:MM:SS" of hours in the day, to the nearest second, 24 h as 00:00:00.
 [[nodiscard]] std::string say_clock(double hours);
 /// What the zone's clocks show, to the nearest second: "2027-06-14T13:04:07 BST".

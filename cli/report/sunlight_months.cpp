@@ -2,6 +2,7 @@
 #include "cli/report/sunlight_months.hpp"
 
 #include "cli/report/say.hpp"
+#include "layout/correction/words.hpp"
 
 #include <algorithm>
 #include <cmath>
@@ -13,8 +14,10 @@ namespace {
 using namespace std::chrono;
 using layout::Align;
 
-constexpr std::array<const char*, 12> k_months{"Jan", "Feb", "Mar", "Apr", "May", "Jun",
-                                               "Jul", "Aug", "Sep", "Oct", "Nov", "Dec"};
+/// "Jun".
+std::string short_month(std::size_t index) {
+    return std::string{layout::month_name(unsigned(index) + 1)}.substr(0, 3);
+}
 
 std::size_t month_index(const LightDay& day) {
     return std::size_t(unsigned(day.date.month()) - 1);
@@ -126,7 +129,7 @@ std::vector<TableRow> month_rows(const LightYear& year) {
     std::vector<TableRow> rows;
     const auto months = months_of(year);
     for (std::size_t i = 0; i < months.size(); ++i)
-        rows.push_back(totals_row(k_months[i], months[i], extremes_of(year, i)));
+        rows.push_back(totals_row(short_month(i), months[i], extremes_of(year, i)));
     rows.push_back(totals_row("year", total_of(year), {}));
     return rows;
 }
@@ -141,7 +144,7 @@ std::vector<TableRow> day_rows(const LightYear& year) {
     for (const LightDay& day : year.days)
         if (const unsigned of_month = unsigned(day.date.day()); of_month == 1 || of_month == 11 || of_month == 21)
             rows.push_back(
-                {fmt::format("{} {}", of_month, k_months[month_index(day)]), spans_text(year.face.zone, day)});
+                {layout::say_date(day.date.month() / day.date.day(), true), spans_text(year.face.zone, day)});
     return rows;
 }
 
@@ -155,7 +158,7 @@ std::vector<layout::Flow::Column> compared_columns(const std::vector<LightYear>&
 std::vector<TableRow> compared_rows(const std::vector<LightYear>& years) {
     std::vector<TableRow> rows(15);
     for (std::size_t i = 0; i < 12; ++i)
-        rows[i].push_back(k_months[i]);
+        rows[i].push_back(short_month(i));
     rows[12].push_back("year");
     rows[13].push_back("of Sun up");
     rows[14].push_back("days lit");
@@ -177,7 +180,7 @@ std::vector<std::string> light_remarks(const LightYear& year) {
     const auto dark = [&](std::size_t i) { return year.days[i % count].lit.empty(); };
     const auto name = [&](std::size_t i) {
         const LightDay& day = year.days[i % count];
-        return fmt::format("{} {}", unsigned(day.date.day()), k_months[month_index(day)]);
+        return layout::say_date(day.date.month() / day.date.day(), true);
     };
     std::size_t first = 0; // a date with light, from which to go round the year
     while (first < count && dark(first))

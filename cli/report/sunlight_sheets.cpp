@@ -58,16 +58,7 @@ void put_chart(layout::Flow& flow, const LightYear& year) {
     layout::LightChartPlan plan = chart_plan(year);
     plan.width_mm = flow.width();
     plan.height_mm = std::min(0.62 * flow.width(), 120.0);
-    const layout::LightChart chart = layout::light_chart(plan);
-    flow.need(chart.box.height_mm() + 2);
-    flow.space(chart.box.height_mm() + 1);
-    const layout::Placing placing{{}, {flow.left(), flow.y()}, 1.0, 1.0, false};
-    for (const layout::Mark& mark : chart.marks)
-        flow.sheet().furniture.push_back(placing(mark));
-    for (layout::Note note : chart.notes) {
-        note.at = placing(note.at);
-        flow.sheet().notes.push_back(std::move(note));
-    }
+    layout::put_chart(flow, layout::light_chart(plan));
 }
 
 } // namespace

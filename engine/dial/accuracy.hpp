@@ -72,7 +72,7 @@ struct AccuracyLine {
 /// By how many minutes each slip puts each hour off. Each slip is taken at its full size both ways through the whole
 /// reading of the dial, and the larger of the two stands. Independent, so that they add by squares.
 /// @param plan  hours of the Sun, the zone, the clock or any other scale that reading_of() reads
-/// Cost: under 0.1 ms an hour line, and 8 ms for the years' own Suns. Test: tests/engine/dial/accuracy_test.cpp,
+/// Cost: under 0.1 ms an hour line, and 3 ms for the years' own Suns. Test: tests/engine/dial/accuracy_test.cpp,
 /// tests/against/accuracy_by_force.py
 [[nodiscard]] std::vector<AccuracyLine> accuracy_of(const AccuracyPlan& plan, const MeanYear& year);
 

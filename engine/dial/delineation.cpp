@@ -3,6 +3,7 @@
 
 #include <algorithm>
 #include <cmath>
+#include <iterator>
 #include <stdexcept>
 
 namespace dialwright {
@@ -21,9 +22,8 @@ std::vector<int> minutes_of(const HourPlan& plan) {
     const int end_of_scale = plan.time == HourTime::unequal ? 12 * 60 : 24 * 60;
     const int last = plan.last_h ? std::min(int(std::lround(*plan.last_h * 60)), end_of_scale) : end_of_scale - 1;
     std::vector<int> minutes;
-    const bool from_horizon = family_of(plan.time) != Family::hour && family_of(plan.time) != Family::clock_hour;
     for (int minute = 0; minute <= 24 * 60; minute += plan.divide_min) {
-        const bool horizon_itself = from_horizon && (minute == 0 || minute == end_of_scale);
+        const bool horizon_itself = counts_from_horizon(plan.time) && (minute == 0 || minute == end_of_scale);
         const bool midnight_again = minute == 24 * 60 && first == 0; // the line of 0 h is that of 24 h
         if (minute >= first && minute <= last && !horizon_itself && !midnight_again)
             minutes.push_back(minute);
@@ -34,17 +34,24 @@ std::vector<int> minutes_of(const HourPlan& plan) {
 struct DayStretch {
     double first, last;
 };
+/// @param half  one of the two halves
 DayStretch stretch_of(HalfYear half, const MeanYear& year) {
     const double june = year.june_solstice_day(), december = year.december_solstice_day();
-    switch (half) {
-    case HalfYear::december_to_june:
-        return {december - year.length_days(), june};
-    case HalfYear::june_to_december:
-        return {june, december};
-    case HalfYear::whole:
-        break;
+    return half == HalfYear::june_to_december ? DayStretch{june, december}
+                                              : DayStretch{december - year.length_days(), june};
+}
+
+/// Adds the pieces of a next stretch of the same curve; what goes on where the last piece ends becomes one with it.
+void add_joined(std::vector<PlatePolyline>& all, std::vector<PlatePolyline>&& more) {
+    constexpr double k_same_mm = 1e-6;
+    auto next = more.begin();
+    if (!all.empty() && next != more.end() &&
+        std::hypot(next->front().u_mm - all.back().back().u_mm, next->front().v_mm - all.back().back().v_mm) <
+            k_same_mm) {
+        all.back().insert(all.back().end(), next->begin() + 1, next->end());
+        ++next;
     }
-    return {december - year.length_days(), december};
+    all.insert(all.end(), std::make_move_iterator(next), std::make_move_iterator(more.end()));
 }
 
 class Delineator {
@@ -77,6 +84,7 @@ class Delineator {
         for (const int minute : minutes_of(hours)) {
             DialLine line;
             line.family = family_of(hours.time);
+            line.time = hours.time;
             line.set = set;
             line.time_h = minute / 60.0;
             line.step_min = coarsest_step_of(minute);
@@ -88,12 +96,14 @@ class Delineator {
                 made_.outside_hours.push_back(line.time_h);
             else if (whole_hour && hours.first_h && set == 0)
                 made_.unlit_hours.push_back(line.time_h);
+            else if (whole_hour && hours.first_h)
+                made_.missed.push_back({std::move(line), lit});
         }
     }
 
     /// @return whether the hour is ever lit
     bool add_pieces(DialLine& line, const HourPlan& hours) {
-        if (line.family != Family::hour && line.family != Family::clock_hour)
+        if (counts_from_horizon(hours.time))
             return add_curve(line, day_path(hours.time, line.time_h, within(hours.between)));
         line.hour_angle = hour_angle_of(hours.time, line.time_h, plan_.site, plan_.zone_meridian);
         if (line.family == Family::hour)
@@ -104,10 +114,9 @@ class Delineator {
         return lit;
     }
 
-    /// The days of a clock-time curve: one stretch, or in each half of the year those between two declinations.
+    /// The days of a clock-time curve: of each half of the year those between two declinations. The halves meet in the
+    /// solstices, so that a curve which is lit for a few days about one of them is not stepped over.
     [[nodiscard]] std::vector<DayStretch> stretches_of(const HourPlan& hours) const {
-        if (!hours.between)
-            return {stretch_of(hours.half_year, year_)};
         const Season season = within(hours.between);
         std::vector<DayStretch> stretches;
         for (const HalfYear half : {HalfYear::december_to_june, HalfYear::june_to_december}) {
@@ -115,6 +124,10 @@ class Delineator {
                 continue;
             const bool north = half == HalfYear::december_to_june;
             const DayStretch all = stretch_of(half, year_);
+            if (!hours.between) {
+                stretches.push_back(all);
+                continue;
+            }
             const auto day_in = [&](Angle declination, double otherwise) {
                 double day = year_.day_of_declination(declination, north).value_or(otherwise);
                 day += day > all.last + 1 ? -year_.length_days() : 0.0;
@@ -152,15 +165,20 @@ class Delineator {
 
     /// @return whether any Sun of the path lights the plate
     bool add_curve(DialLine& line, const SunPath& path) {
-        const std::vector<PlatePolyline> pieces = pieces_of(path);
-        line.pieces.insert(line.pieces.end(), pieces.begin(), pieces.end());
-        if (!pieces.empty())
+        add_joined(line.pieces, pieces_of(path));
+        if (!line.pieces.empty())
             return true;
         for (int i = 0; i <= path.steps; ++i)
-            if (const auto sky = path.at(path.first + (path.last - path.first) * i / path.steps);
-                sky && caster_.cast(*sky, path.light))
+            if (const auto sky = path.at(path.first + (path.last - path.first) * i / path.steps); sky && shines(*sky))
                 return true;
         return false;
+    }
+
+    /// The Sun is seen and lights the plate, and more than grazing.
+    [[nodiscard]] bool shines(const SkyPlace& sky) const {
+        constexpr double k_grazing = 1e-6; // sine
+        const SiteDirection sun = to_site(sky, plan_.site.latitude);
+        return caster_.surface().light(sun) > k_grazing && caster_.skyline().clearance(sun) > k_grazing;
     }
 
     /// @return whether the hour is ever lit
@@ -210,9 +228,8 @@ class Delineator {
             line.family = Family::place_noon;
             line.label = noon.name;
             line.hour_angle = (plan_.site.longitude - noon.longitude).signed_turn();
-            line.time_h = time_of(plan_.hours.time, line.hour_angle, plan_.site, plan_.zone_meridian);
-            add_straight_pieces(line, plan_.hours.extent, plan_.noons_between);
-            keep_or_list(std::move(line), noon.name);
+            line.time_h = time_of(HourTime::sun, line.hour_angle, plan_.site, plan_.zone_meridian);
+            keep_or_list(line, add_straight_pieces(line, plan_.hours.extent, plan_.noons_between));
         }
     }
 
@@ -220,16 +237,14 @@ class Delineator {
         DialLine line;
         line.family = family;
         line.level = level;
-        add_curve(line, path);
-        const std::string name = family == Family::altitude ? "altitude " : "azimuth ";
-        keep_or_list(std::move(line), name + std::to_string(std::lround(level.in_degrees())) + "°");
+        keep_or_list(line, add_curve(line, path));
     }
 
-    void keep_or_list(DialLine&& line, const std::string& name) {
+    void keep_or_list(DialLine& line, bool lit) {
         if (!line.pieces.empty())
             made_.lines.push_back(std::move(line));
         else
-            made_.unlit_dates.push_back(name);
+            made_.missed.push_back({std::move(line), lit});
     }
 
     void add_date(const DatePlan::Line& date) {
@@ -237,8 +252,10 @@ class Delineator {
         line.family = Family::date;
         line.label = date.label;
         line.declination = date.declination;
-        line.pieces = trace(caster_, declination_path(date.declination), window_);
-        keep_or_list(std::move(line), date.label);
+        SunPath path = declination_path(date.declination);
+        path.first = plan_.dates.first.value_or(Angle::radians(path.first)).in_radians();
+        path.last = plan_.dates.last.value_or(Angle::radians(path.last)).in_radians();
+        keep_or_list(line, add_curve(line, path));
     }
 
     const DialPlan& plan_;
@@ -272,6 +289,10 @@ Family family_of(HourTime time) {
 bool is_hour(Family family) {
     return family != Family::date && family != Family::altitude && family != Family::azimuth &&
            family != Family::place_noon;
+}
+
+bool counts_from_horizon(Family family) {
+    return is_hour(family) && family != Family::hour && family != Family::clock_hour;
 }
 
 Angle hour_angle_of(HourTime time, double time_h, const Site& site, Angle zone_meridian) {
@@ -319,7 +340,7 @@ std::optional<double> reading_of(const DialPlan& plan, HourTime time, const Mean
                                  double day_of_year) {
     if (time == HourTime::clock)
         return clock_reading(plan, year, sun, day_of_year);
-    if (time == HourTime::sun || time == HourTime::zone)
+    if (has_straight_lines(time))
         return time_of(time, sun.hour_angle, plan.site, plan.zone_meridian);
     const auto arc = half_day_arc(plan.site.latitude, sun.declination, plan.horizon);
     if (!arc)

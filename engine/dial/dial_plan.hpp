@@ -20,6 +20,14 @@ enum class HourTime {
     to_sunset,     ///< equal hours that are left until it sets
     unequal        ///< twelfths of the day from sunrise to sunset, 0 to 12
 };
+/// Hours that count from the Sun's rising or setting: they need a day that has both, and have no hour angle of their own.
+[[nodiscard]] constexpr bool counts_from_horizon(HourTime time) {
+    return time != HourTime::sun && time != HourTime::zone && time != HourTime::clock;
+}
+/// Hours whose lines are straight, each of one hour angle.
+[[nodiscard]] constexpr bool has_straight_lines(HourTime time) {
+    return time == HourTime::sun || time == HourTime::zone;
+}
 
 /// Which part of the year a clock-time curve is drawn for.
 enum class HalfYear { whole, december_to_june, june_to_december };
@@ -51,6 +59,7 @@ struct DatePlan {
         Angle declination;
     };
     std::vector<Line> lines;
+    std::optional<Angle> first, last; ///< hour angles from and to which they run; nothing: as long as they are lit
 };
 
 /// All that the mathematics needs to delineate one face.

@@ -52,7 +52,9 @@ struct Season {
 /// A clock-time curve: the Suns of one mean-time hour through the mean year. The hour angle is that of the apparent
 /// Sun when the mean Sun stands at `mean_hour_angle`.
 /// @param first_day, last_day  days of the mean year, last > first, at most a year apart; may pass the year's end
+/// @param year  the path holds on to it
 [[nodiscard]] SunPath mean_time_path(Angle mean_hour_angle, const MeanYear& year, double first_day, double last_day);
+SunPath mean_time_path(Angle mean_hour_angle, MeanYear&& year, double first_day, double last_day) = delete;
 
 /// An hour counted from the Sun's rising, or up to its setting: the Suns of the season that stand that far after their
 /// own rising, or before their own setting (1 h = 15°). With the level horizon a great circle.

@@ -25,7 +25,7 @@ class ChartDrawer {
         top_min_ = std::min(k_cut_off_min, step_min_ * std::ceil(most / step_min_ - 1e-9));
     }
 
-    AccuracyChart drawn() {
+    Chart drawn() {
         add_grid();
         for (std::size_t i = 0; i < plan_.hours.size(); ++i)
             add_hour(i);
@@ -98,12 +98,12 @@ class ChartDrawer {
     Box field_;
     int step_min_ = 1;
     double top_min_ = 1;
-    AccuracyChart chart_;
+    Chart chart_;
 };
 
 } // namespace
 
-AccuracyChart accuracy_chart(const AccuracyChartPlan& plan) {
+Chart accuracy_chart(const AccuracyChartPlan& plan) {
     return ChartDrawer{plan}.drawn();
 }
 

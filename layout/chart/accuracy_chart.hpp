@@ -1,7 +1,7 @@
 // SPDX-License-Identifier: MIT
 #pragma once
 
-#include "layout/sheet/sheet.hpp"
+#include "layout/chart/chart.hpp"
 
 #include <array>
 #include <optional>
@@ -23,11 +23,6 @@ struct AccuracyChartPlan {
 };
 
 /// Its lower left corner is at (0, 0). Bars over a quarter of an hour are cut off there, with their minutes above them.
-struct AccuracyChart {
-    std::vector<Mark> marks;
-    std::vector<Note> notes;
-    Box box;
-};
-[[nodiscard]] AccuracyChart accuracy_chart(const AccuracyChartPlan& plan);
+[[nodiscard]] Chart accuracy_chart(const AccuracyChartPlan& plan);
 
 } // namespace dialwright::layout

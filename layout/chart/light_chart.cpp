@@ -28,7 +28,7 @@ class ChartDrawer {
         field_ = {k_side_mm, k_key_mm + k_months_mm, plan.width_mm - k_side_mm, plan.height_mm};
     }
 
-    LightChart drawn() {
+    Chart drawn() {
         add_days(Layer::guide, "Sun behind the plate", &LightChartDay::behind);
         add_days(Layer::fill, "shade of the skyline", &LightChartDay::shaded);
         add_days(Layer::score, "lit", &LightChartDay::lit);
@@ -135,12 +135,12 @@ class ChartDrawer {
 
     const LightChartPlan& plan_;
     Box field_;
-    LightChart chart_;
+    Chart chart_;
 };
 
 } // namespace
 
-LightChart light_chart(const LightChartPlan& plan) {
+Chart light_chart(const LightChartPlan& plan) {
     return ChartDrawer{plan}.drawn();
 }
 

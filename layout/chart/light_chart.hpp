@@ -1,7 +1,7 @@
 // SPDX-License-Identifier: MIT
 #pragma once
 
-#include "layout/sheet/sheet.hpp"
+#include "layout/chart/chart.hpp"
 
 #include <vector>
 
@@ -28,11 +28,6 @@ struct LightChartPlan {
 
 /// Months across, hours up: when a plate is lit through the year. Its lower left corner is at (0, 0); hours and months are
 /// noted beside and under it, the words for the three tones under these.
-struct LightChart {
-    std::vector<Mark> marks;
-    std::vector<Note> notes;
-    Box box; ///< of it all
-};
-[[nodiscard]] LightChart light_chart(const LightChartPlan& plan);
+[[nodiscard]] Chart light_chart(const LightChartPlan& plan);
 
 } // namespace dialwright::layout

@@ -1,14 +1,17 @@
 // SPDX-License-Identifier: MIT
 #include "layout/drawing/kerf.hpp"
 
+#include "layout/drawing/clipping.hpp"
 #include "layout/drawing/measures.hpp"
 #include "layout/drawing/offset.hpp"
 #include "layout/sheet/export_error.hpp"
 
 #include <fmt/format.h>
 
+#include <algorithm>
 #include <cmath>
 #include <numbers>
+#include <optional>
 #include <stdexcept>
 
 namespace dialwright::layout {
@@ -46,6 +49,37 @@ Path outline_moved(const Path& path, double kerf_mm, bool hole, const std::strin
     return std::abs(std::abs(area_of(*pieces)) - area_of(chords.front())) <= slack ? *pieces : chords.front();
 }
 
+Point pushed(Point at, Point from, double by_mm) {
+    const double x = at.x_mm - from.x_mm, y = at.y_mm - from.y_mm, run = std::hypot(x, y);
+    return {at.x_mm + by_mm * x / run, at.y_mm + by_mm * y / run};
+}
+
+/// An open cut that comes from outside the part, goes round a bite of it and leaves again, moved into the bite.
+/// @return none for any other open line
+std::optional<Path> slot_moved(const Path& path, double kerf_mm, const std::vector<const Path*>& outlines,
+                               const std::string& part) {
+    constexpr double k_fine_mm = 0.01;
+    const auto inside = [&](Point at) {
+        return std::any_of(outlines.begin(), outlines.end(),
+                           [&](const Path* outline) { return winding_round(flattened(*outline, k_fine_mm), at) != 0; });
+    };
+    if (path.pieces.size() < 3 || inside(path.start) || inside(end_of(path)) || !inside(end_of(path.pieces.front())))
+        return std::nullopt;
+    Path closed = path;
+    closed.pieces.emplace_back(LineTo{path.start});
+    closed.closed = true;
+    Path moved = outline_moved(closed, kerf_mm, true, part);
+    if (moved.pieces.size() != closed.pieces.size())
+        return std::nullopt;
+    // Open again, its ends as far outside as they were.
+    moved.closed = false;
+    moved.pieces.pop_back();
+    moved.start = pushed(moved.start, end_of(moved.pieces.front()), kerf_mm / 2);
+    const Point before = end_of(moved.pieces[moved.pieces.size() - 2]), end = end_of(moved);
+    moved.pieces.back() = LineTo{pushed(end, before, kerf_mm / 2)};
+    return moved;
+}
+
 } // namespace
 
 Kerfed with_kerf(const Drawing& drawing, double kerf_mm) {
@@ -60,17 +94,24 @@ Kerfed with_kerf(const Drawing& drawing, double kerf_mm) {
         }
     }
     const std::vector<Nest> nests = nests_of(outlines);
+    std::size_t at = 0; // in nests
     for (Mark& mark : made.drawing.marks) {
         for (Path& path : mark.paths) {
             if (mark.layer != Layer::cut)
                 break;
-            if (!path.closed) {
+            const std::string& part = mark.name.empty() ? drawing.name : mark.name;
+            if (path.closed) {
+                const bool hole = nests[at++].depth % 2 == 1;
+                if (kerf_mm > 0)
+                    path = outline_moved(path, kerf_mm, hole, part);
+            } else if (std::optional<Path> slot =
+                           kerf_mm > 0 ? slot_moved(path, kerf_mm, outlines, part) : std::nullopt) {
+                path = std::move(*slot);
+            } else {
                 ++made.left_alone;
-            } else if (kerf_mm > 0) {
-                const bool hole = nests[made.moved].depth % 2 == 1;
-                path = outline_moved(path, kerf_mm, hole, mark.name.empty() ? drawing.name : mark.name);
-                ++made.moved;
+                continue;
             }
+            made.moved += kerf_mm > 0;
         }
     }
     made.said = kerf_mm == 0

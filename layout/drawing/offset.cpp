@@ -165,9 +165,9 @@ bool join(Edge& a, Edge& b, Point corner, double by_mm, std::vector<Edge>& filli
     return true;
 }
 
-ClipperLib::Path ring_of(const Path& path) {
+ClipperLib::Path ring_of(const Path& path, double fine_mm = k_fine_mm) {
     ClipperLib::Path ring;
-    for (const Point p : flattened(path, k_fine_mm))
+    for (const Point p : flattened(path, fine_mm))
         ring.emplace_back(std::llround(p.x_mm * k_scale), std::llround(p.y_mm * k_scale));
     return ring;
 }
@@ -240,6 +240,52 @@ std::vector<Path> offset_by_chords(const Path& path, double by_mm) {
         made.push_back(polyline(corners, true));
     }
     return made;
+}
+
+DiscFit fit_of_disc(const std::vector<Path>& shapes, double radius_mm) {
+    constexpr double k_square = k_scale * k_scale, k_near = 0.45;
+    const double fine_mm = radius_mm / 15;
+    ClipperLib::Clipper clipper;
+    for (const Path& shape : shapes)
+        clipper.AddPath(ring_of(shape, fine_mm), ClipperLib::ptSubject, true);
+    ClipperLib::Paths simple, within, missed;
+    clipper.Execute(ClipperLib::ctUnion, simple, ClipperLib::pftNonZero, ClipperLib::pftNonZero);
+    const auto moved = [&](const ClipperLib::Paths& rings, double by_mm) {
+        ClipperLib::ClipperOffset offset{2.0, fine_mm * k_scale};
+        offset.AddPaths(rings, ClipperLib::jtRound, ClipperLib::etClosedPolygon);
+        ClipperLib::Paths made;
+        offset.Execute(made, by_mm * k_scale);
+        return made;
+    };
+    within = moved(moved(simple, -radius_mm), (1 + k_near) * radius_mm);
+    clipper.Clear();
+    clipper.AddPaths(simple, ClipperLib::ptSubject, true);
+    clipper.AddPaths(within, ClipperLib::ptClip, true);
+    clipper.Execute(ClipperLib::ctDifference, missed, ClipperLib::pftNonZero, ClipperLib::pftNonZero);
+
+    DiscFit fit;
+    for (ClipperLib::Path& ring : simple) {
+        const double area = ClipperLib::Area(ring) / k_square;
+        fit.area_mm2 += area;
+        if (area >= 0)
+            continue;
+        ++fit.eyes;
+        ClipperLib::ReversePath(ring);
+        fit.lost_eyes += moved({ring}, -radius_mm).empty();
+    }
+    double largest = 0;
+    for (const ClipperLib::Path& ring : missed) {
+        const double area = ClipperLib::Area(ring) / k_square;
+        fit.missed_mm2 += area;
+        if (area <= largest)
+            continue;
+        largest = area;
+        Box box;
+        for (const ClipperLib::IntPoint& p : ring)
+            box.add(Point{static_cast<double>(p.X) / k_scale, static_cast<double>(p.Y) / k_scale});
+        fit.worst = box.middle();
+    }
+    return fit;
 }
 
 } // namespace dialwright::layout

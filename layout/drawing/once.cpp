@@ -5,11 +5,13 @@
 
 #include <algorithm>
 #include <cmath>
+#include <functional>
 #include <map>
 #include <numbers>
 #include <set>
 #include <tuple>
 #include <unordered_map>
+#include <utility>
 
 // Every line and arc is a stretch of a carrier: a straight line measured in mm from its start, or a circle measured in
 // radians from its start. What other stretches of the same carrier, drawn before, have covered is taken away from it.
@@ -253,17 +255,58 @@ bool has_curves(const Path& path) {
                        [](const Piece& piece) { return std::holds_alternative<CurveTo>(piece); });
 }
 
+/// Tells at little cost that a path has no equal among others: equal ones have as many pieces, and nearly the same sum
+/// of what its points measure.
+class FirstLook {
+  public:
+    void add(const Path& path) { ++seen_[bucket_of(path)]; }
+    [[nodiscard]] bool alone(const Path& path) const {
+        const auto [pieces, sum] = bucket_of(path);
+        int alike = 0;
+        for (const long long beside : {sum - 1, sum, sum + 1})
+            if (const auto found = seen_.find({pieces, beside}); found != seen_.end())
+                alike += found->second;
+        return alike <= 1;
+    }
+
+  private:
+    using Bucket = std::pair<std::size_t, long long>;
+    struct Hash {
+        std::size_t operator()(const Bucket& b) const {
+            return std::hash<long long>{}(b.second * 4099 + static_cast<long long>(b.first));
+        }
+    };
+    [[nodiscard]] static Bucket bucket_of(const Path& path) {
+        double sum = path.closed ? 0.0 : path.start.x_mm + 2 * path.start.y_mm;
+        for (const Piece& piece : path.pieces) {
+            const Point to = end_of(piece);
+            sum += to.x_mm + 2 * to.y_mm;
+        }
+        const double wide = 6 * k_same_mm * static_cast<double>(path.pieces.size() + 1);
+        return {path.pieces.size(), std::llround(sum / wide)};
+    }
+
+    std::unordered_map<Bucket, int, Hash> seen_;
+};
+
 /// Contours of filled shapes, and strokes with curves in them, go only as wholes. In one filled shape a contour that
 /// runs the other way is a hole, and stays.
 std::size_t drop_equal(std::vector<Mark>& marks) {
     std::size_t dropped = 0;
+    FirstLook filled_look, stroke_look;
+    for (const Mark& mark : marks)
+        for (const Path& path : mark.paths)
+            if (mark.filled || has_curves(path))
+                (mark.filled ? filled_look : stroke_look).add(path);
     std::set<std::vector<long long>> filled, strokes;
     for (Mark& mark : marks) {
         std::set<std::vector<long long>> here;
         std::vector<std::vector<long long>> keys;
         const auto again = [&](const Path& path) {
             if (!mark.filled)
-                return has_curves(path) && !strokes.insert(key_of(path, false)).second;
+                return has_curves(path) && !stroke_look.alone(path) && !strokes.insert(key_of(path, false)).second;
+            if (filled_look.alone(path))
+                return false;
             keys.push_back(key_of(path, false));
             return filled.contains(keys.back()) || !here.insert(key_of(path, true)).second;
         };

@@ -5,6 +5,8 @@
 #include "layout/drawing/measures.hpp"
 #include "layout/export/plain_number.hpp"
 
+#include <fmt/format.h>
+
 #include <cmath>
 #include <set>
 
@@ -83,7 +85,7 @@ std::string part_list_of(const std::vector<ListedPart>& parts) {
         }
         csv += ',' + std::to_string(sum.drilled) + ',';
         if (sum.has_area)
-            add_number(csv, sum.area_mm2, 0);
+            csv += fmt::format("{:.0f}", sum.area_mm2);
         csv += '\n';
     }
     return csv;

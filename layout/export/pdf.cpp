@@ -7,11 +7,14 @@
 
 #include <fmt/format.h>
 
+#include <algorithm>
 #include <cmath>
+#include <future>
 #include <map>
 #include <memory>
 #include <optional>
 #include <set>
+#include <vector>
 
 namespace dialwright::layout {
 namespace {
@@ -105,18 +108,29 @@ void require_finite(const Mark& mark) {
 /// The boxes of each drawing's marks, found once for all the sheets that show it.
 class BoxesOfMarks {
   public:
-    const std::vector<Box>& of(const Drawing& drawing) {
-        const auto [place, is_new] = boxes_.try_emplace(&drawing);
-        if (is_new) {
-            for (const Mark& mark : drawing.marks) {
-                require_finite(mark);
-                place->second.push_back(bounds_of(mark));
+    explicit BoxesOfMarks(const SheetBook& book) {
+        for (const Sheet& sheet : book.sheets) {
+            for (const Window& window : sheet.windows) {
+                if (window.drawing != nullptr) {
+                    add(*window.drawing);
+                }
             }
         }
-        return place->second;
     }
+    [[nodiscard]] const std::vector<Box>& of(const Drawing& drawing) const { return boxes_.at(&drawing); }
 
   private:
+    void add(const Drawing& drawing) {
+        const auto [place, is_new] = boxes_.try_emplace(&drawing);
+        if (!is_new) {
+            return;
+        }
+        for (const Mark& mark : drawing.marks) {
+            require_finite(mark);
+            place->second.push_back(bounds_of(mark));
+        }
+    }
+
     std::map<const Drawing*, std::vector<Box>> boxes_;
 };
 
@@ -132,7 +146,7 @@ Box placed(const Placing& placing, const Box& box) {
     return out;
 }
 
-void draw_window(PdfPage& page, const Window& window, BoxesOfMarks& boxes) {
+void draw_window(PdfPage& page, const Window& window, const BoxesOfMarks& boxes) {
     const Placing& p = window.placing;
     const bool good = std::isfinite(p.turn.in_radians()) && std::isfinite(p.shift.x_mm) &&
                       std::isfinite(p.shift.y_mm) && p.scale_x > 0 && p.scale_y > 0 && std::isfinite(p.scale_x) &&
@@ -153,26 +167,41 @@ void draw_window(PdfPage& page, const Window& window, BoxesOfMarks& boxes) {
     page.close();
 }
 
-void add_sheet(PdfDocument& document, const Sheet& sheet, BoxesOfMarks& boxes, PdfLayers* layers) {
+PdfPage page_for(PdfDocument& document, const Sheet& sheet, PdfLayers* layers) {
     const auto fits = [](double side) { return side >= 5.0 && side <= 5080.0; };
     if (!fits(sheet.width_mm) || !fits(sheet.height_mm)) {
         throw ExportError(fmt::format("A sheet of {:.1f} × {:.1f} mm is no PDF page: each side takes 5 to 5080 mm.",
                                       sheet.width_mm, sheet.height_mm));
+    }
+    const auto sound = [](double stretch) { return stretch > 0.5 && stretch < 2.0; };
+    if (!sound(sheet.stretch_x) || !sound(sheet.stretch_y)) {
+        throw ExportError("A sheet is stretched to less than half or more than double, so no PDF was made.");
     }
     HPDF_Page page = HPDF_AddPage(document.get());
     document.check();
     HPDF_Page_SetWidth(page, static_cast<HPDF_REAL>(sheet.width_mm * 72.0 / 25.4));
     HPDF_Page_SetHeight(page, static_cast<HPDF_REAL>(sheet.height_mm * 72.0 / 25.4));
     PdfPage paper{page};
-    const auto sound = [](double stretch) { return stretch > 0.5 && stretch < 2.0; };
-    if (!sound(sheet.stretch_x) || !sound(sheet.stretch_y)) {
-        throw ExportError("A sheet is stretched to less than half or more than double, so no PDF was made.");
-    }
-    paper.stretch(sheet.stretch_x, sheet.stretch_y, sheet.width_mm, sheet.height_mm);
     if (layers != nullptr) {
         layers->use_on(page);
         paper.use_layers(true);
     }
+    for (const bool bold : {false, true}) {
+        if (std::any_of(sheet.notes.begin(), sheet.notes.end(),
+                        [&](const Note& note) { return note.bold == bold && !note.text.empty(); })) {
+            paper.use_font(bold, document.font(bold));
+        }
+    }
+    HPDF_Outline bookmark =
+        HPDF_CreateOutline(document.get(), nullptr, sheet.title.c_str(), HPDF_GetEncoder(document.get(), "UTF-8"));
+    document.check();
+    HPDF_Outline_SetDestination(bookmark, HPDF_Page_CreateDestination(page));
+    document.check();
+    return paper;
+}
+
+void draw(PdfPage& paper, const Sheet& sheet, const BoxesOfMarks& boxes) {
+    paper.stretch(sheet.stretch_x, sheet.stretch_y, sheet.width_mm, sheet.height_mm);
     for (const Window& window : sheet.windows) {
         draw_window(paper, window, boxes);
     }
@@ -183,17 +212,22 @@ void add_sheet(PdfDocument& document, const Sheet& sheet, BoxesOfMarks& boxes, P
         paper.mark(mark, whole);
     }
     for (const Note& note : sheet.notes) {
-        if (!note.text.empty()) {
-            paper.note(note, document.font(note.bold));
-        }
+        paper.note(note);
     }
-    paper.finish();
-    document.check();
-    HPDF_Outline bookmark =
-        HPDF_CreateOutline(document.get(), nullptr, sheet.title.c_str(), HPDF_GetEncoder(document.get(), "UTF-8"));
-    document.check();
-    HPDF_Outline_SetDestination(bookmark, HPDF_Page_CreateDestination(page));
-    document.check();
+    paper.pack();
+}
+
+/// Every second page in a thread of its own.
+void draw_all(std::vector<PdfPage>& pages, const SheetBook& book) {
+    const BoxesOfMarks boxes{book};
+    const auto draw_from = [&](std::size_t first) {
+        for (std::size_t i = first; i < pages.size(); i += 2) {
+            draw(pages[i], book.sheets[i], boxes);
+        }
+    };
+    auto others = std::async(std::launch::async, draw_from, 1U);
+    draw_from(0);
+    others.get();
 }
 
 } // namespace
@@ -203,7 +237,6 @@ std::string pdf_of(const SheetBook& book) {
         throw ExportError("There is nothing to print: the book has no sheets.");
     }
     PdfDocument document;
-    BoxesOfMarks boxes;
     if (!book.title.empty()) {
         HPDF_SetInfoAttr(document.get(), HPDF_INFO_TITLE, book.title.c_str());
     }
@@ -216,9 +249,15 @@ std::string pdf_of(const SheetBook& book) {
     if (book.layers) {
         layers.emplace(document.get());
     }
+    std::vector<PdfPage> pages;
     for (const Sheet& sheet : book.sheets) {
-        add_sheet(document, sheet, boxes, layers ? &*layers : nullptr);
+        pages.push_back(page_for(document, sheet, layers ? &*layers : nullptr));
     }
+    draw_all(pages, book);
+    for (PdfPage& page : pages) {
+        page.finish();
+    }
+    document.check();
     return document.bytes();
 }
 

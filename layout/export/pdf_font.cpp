@@ -137,7 +137,9 @@ std::string PdfFont::shown(std::string_view text) const {
     std::string out = "<";
     for (const char32_t character : note_characters(text, sheet_font_)) {
         const auto found = subset_.glyphs.find(character);
-        fmt::format_to(std::back_inserter(out), "{:04X}", found != subset_.glyphs.end() ? found->second : 0U);
+        const std::uint32_t glyph = found != subset_.glyphs.end() ? found->second : 0U;
+        for (const unsigned shift : {12U, 8U, 4U, 0U})
+            out += "0123456789ABCDEF"[(glyph >> shift) & 15U];
     }
     return out + ">";
 }

@@ -3,15 +3,17 @@
 
 #include "layout/drawing/clipping.hpp"
 #include "layout/export/pdf_layers.hpp"
+#include "layout/export/plain_number.hpp"
 #include "layout/sheet/export_error.hpp"
 #include "layout/sheet/note_width.hpp"
 
 #include <fmt/format.h>
 #include <hpdf_pages.h>
-#include <zlib.h>
+#include <libdeflate.h>
 
 #include <algorithm>
 #include <cmath>
+#include <memory>
 
 // Lines end square (butt): an hour line that stops at a border must not run over it by half its width, and a bar's
 // ticks must not grow. Corners are round: a mitre at a sharp turn would run out farther than the line is wide, and a
@@ -34,24 +36,14 @@ HPDF_STATUS write_filter(HPDF_Dict, HPDF_Stream stream) {
 
 } // namespace
 
-/// A number and a space. From whole thousandths, because there are a hundred thousand of them.
+/// A number and a space.
 void PdfPage::number(double points) {
     // The largest page is 14,400; what lies far outside of it is a mistake of ours or of the design.
     if (!std::isfinite(points) || std::abs(points) > 32000.0) {
         throw ExportError(
             fmt::format("“{}” runs off the paper to a place that a PDF can't name, so no PDF was made.", drawing_now_));
     }
-    const long thousandths = std::lround(points * 1000.0);
-    if (thousandths < 0) {
-        text_ += '-';
-    }
-    const fmt::format_int whole{std::abs(thousandths) / 1000};
-    text_.append(whole.data(), whole.size());
-    if (const long rest = std::abs(thousandths) % 1000; rest != 0) {
-        const fmt::format_int digits{1000 + rest}; // "1" and the three decimals
-        text_ += '.';
-        text_.append(digits.data() + 1, rest % 100 == 0 ? 1U : rest % 10 == 0 ? 2U : 3U);
-    }
+    add_number(text_, points, 3);
     text_ += ' ';
 }
 
@@ -226,11 +218,16 @@ void PdfPage::close() {
     joins_set_ = false;
 }
 
-void PdfPage::note(const Note& note, const PdfFont& font) {
+void PdfPage::use_font(bool bold, const PdfFont& font) {
+    fonts_[bold ? 1U : 0U] = {&font, HPDF_Page_GetLocalFontName(page_, font.get())};
+}
+
+void PdfPage::note(const Note& note) {
     drawing_now_ = note.text;
     if (note.text.empty()) {
         return;
     }
+    const UsedFont& font = fonts_[note.bold ? 1U : 0U];
     const double width_mm = note_width_mm(note.text, note.size_mm, note.bold);
     const double back_mm = note.align == Align::left ? 0.0 : note.align == Align::middle ? width_mm / 2 : width_mm;
     const double c = cos(note.turn), s = sin(note.turn);
@@ -239,25 +236,31 @@ void PdfPage::note(const Note& note, const PdfFont& font) {
     }
     fill_style(tone_of(Layer::engrave));
     text_ += "BT /";
-    text_ += HPDF_Page_GetLocalFontName(page_, font.get());
+    text_ += font.name;
     text_ += ' ';
     length(note.size_mm);
     // A long line's end must not drift with a coarse turn, so the turn has more decimals than `number` gives.
     text_ += fmt::format("Tf {:.7f} {:.7f} {:.7f} {:.7f} ", c, s, -s, c);
     point({note.at.x_mm - back_mm * c, note.at.y_mm - back_mm * s});
-    text_ += "Tm " + font.shown(note.text) + " Tj ET\n";
+    text_ += "Tm " + font.font->shown(note.text) + " Tj ET\n";
+}
+
+void PdfPage::pack() {
+    constexpr int k_fastest = 1;
+    const std::unique_ptr<libdeflate_compressor, void (*)(libdeflate_compressor*)> packer{
+        libdeflate_alloc_compressor(k_fastest), &libdeflate_free_compressor};
+    if (!packer) {
+        throw ExportError("The PDF could not be made: no memory is left.");
+    }
+    std::string packed(libdeflate_zlib_compress_bound(packer.get(), text_.size()), '\0');
+    packed.resize(libdeflate_zlib_compress(packer.get(), text_.data(), text_.size(), packed.data(), packed.size()));
+    text_ = std::move(packed);
 }
 
 void PdfPage::finish() {
-    uLongf length = compressBound(static_cast<uLong>(text_.size()));
-    std::string packed(length, '\0');
-    if (compress2(reinterpret_cast<Bytef*>(packed.data()), &length, reinterpret_cast<const Bytef*>(text_.data()),
-                  static_cast<uLong>(text_.size()), Z_BEST_SPEED) != Z_OK) {
-        throw ExportError("The PDF could not be made: no memory is left.");
-    }
     auto* attributes = static_cast<HPDF_PageAttr>(page_->attr);
-    HPDF_Stream_Write(attributes->stream, reinterpret_cast<const HPDF_BYTE*>(packed.data()),
-                      static_cast<HPDF_UINT>(length));
+    HPDF_Stream_Write(attributes->stream, reinterpret_cast<const HPDF_BYTE*>(text_.data()),
+                      static_cast<HPDF_UINT>(text_.size()));
     attributes->contents->filter = HPDF_STREAM_FILTER_NONE;
     attributes->contents->write_fn = &write_filter;
 }

@@ -2,8 +2,7 @@
 #include "layout/export/plain_number.hpp"
 
 #include "layout/sheet/export_error.hpp"
-
-#include <fmt/format.h>
+#include "layout/text/figures.hpp"
 
 #include <cmath>
 
@@ -12,16 +11,8 @@ namespace dialwright::layout {
 void add_number(std::string& text, double value, int decimals, int least) {
     if (!std::isfinite(value) || std::abs(value) > 1e7)
         throw ExportError("A line of the drawing runs off to infinity, so no file for a machine was made.");
-    char digits[48];
-    char* end = fmt::format_to_n(digits, sizeof digits, "{:.{}f}", value, decimals).out;
-    for (int left = decimals; left > least && end[-1] == '0'; --left)
-        --end;
-    if (end[-1] == '.')
-        --end;
-    std::string_view written{digits, static_cast<std::size_t>(end - digits)};
-    if (written.front() == '-' && written.find_first_not_of("-0.") == std::string_view::npos)
-        written.remove_prefix(1);
-    text += written;
+    if (!append_fixed(text, value, decimals, least))
+        throw ExportError("A line of the drawing is too long for its decimals, so no file for a machine was made.");
 }
 
 std::string in_capitals(std::string_view text) {

@@ -8,7 +8,7 @@ namespace dialwright::layout {
 
 /// Adds a number as files for machines want it: fixed point, idle zeros left off (at least `least` decimals stay), no
 /// exponent, no "-0", whatever the locale.
-/// @param decimals  0 to 12
+/// @param decimals  0 to 10
 /// @throws ExportError  not finite, or beyond ±10 km
 void add_number(std::string& text, double value, int decimals, int least = 0);
 

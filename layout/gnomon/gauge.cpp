@@ -69,6 +69,18 @@ void add_lettering(Drawing& drawing, const GaugePlan& plan, const Shape& shape) 
                                   degrees_minutes(plan.angle)));
 }
 
+/// How far from a point the lettering stays, by its boxes.
+double clear_round(const Drawing& drawing, Point from) {
+    double least = 1e300;
+    for (const Mark& mark : drawing.marks)
+        if (mark.layer == Layer::engrave) {
+            const Box box = bounds_of(mark);
+            least = std::min(least, distance(from, {std::clamp(from.x_mm, box.left_mm, box.right_mm),
+                                                    std::clamp(from.y_mm, box.bottom_mm, box.top_mm)}));
+        }
+    return least;
+}
+
 } // namespace
 
 Gauge gauge_of(const GaugePlan& plan) {
@@ -85,16 +97,17 @@ Gauge gauge_of(const GaugePlan& plan) {
     drawing.marks.push_back(
         {Layer::guide, {polyline({{-5, 0}, {shape.right_mm + 5, 0}})}, k_thin_mm, false, "face, along the base"});
     drawing.marks.push_back(cross_mark(Layer::guide, {}, 2.0, "centre"));
-    const double r = std::min(0.3 * edge, 40.0);
-    drawing.marks.push_back(
-        {Layer::guide,
-         {Path{shape.corner + Point{r, 0},
-               {ArcTo{shape.corner + r * Point{cos(plan.angle), sin(plan.angle)}, shape.corner, plan.angle}},
-               false}},
-         k_thin_mm,
-         false,
-         "angle " + degrees_minutes(plan.angle)});
     add_lettering(drawing, plan, shape);
+    const double r = std::min({0.3 * edge, 40.0, clear_round(drawing, shape.corner) - 1.5});
+    if (r > 4)
+        drawing.marks.push_back(
+            {Layer::guide,
+             {Path{shape.corner + Point{r, 0},
+                   {ArcTo{shape.corner + r * Point{cos(plan.angle), sin(plan.angle)}, shape.corner, plan.angle}},
+                   false}},
+             k_thin_mm,
+             false,
+             "angle " + degrees_minutes(plan.angle)});
     drawing.marks.push_back({Layer::cut, {rounded_polygon(shape.corners)}, k_cut_mm, false, "gauge"});
     gauge.part.drawings.push_back(std::move(drawing));
     gauge.part.particulars = {{"Gauge", plan.words},

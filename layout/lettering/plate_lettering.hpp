@@ -9,11 +9,12 @@
 
 namespace dialwright::layout {
 
-/// The lettering of a piece of work: outlines of a font, to be filled, or single strokes for an engraving point.
+/// The lettering of a piece of work: outlines of a font, to be filled, or single strokes for an engraving point. Its italic is
+/// the font's own; a family that has none, and the strokes, are slanted.
 class PlateLettering {
   public:
     /// @throws LetteringError  no such family, or the strokes are not installed
-    PlateLettering(std::string_view family, bool single_strokes);
+    PlateLettering(std::string_view family, bool single_strokes, bool italic = false);
     /// As Lettering::line and StrokeLettering::line.
     [[nodiscard]] LetteredLine line(std::string_view text, double size_mm, double tracking_mm = 0.0) const;
     [[nodiscard]] bool single_strokes() const { return strokes_.has_value(); }
@@ -21,6 +22,7 @@ class PlateLettering {
   private:
     std::optional<Lettering> outlines_;
     std::optional<StrokeLettering> strokes_;
+    bool slanted_ = false;
 };
 
 } // namespace dialwright::layout

@@ -7,6 +7,15 @@
 #include <cmath>
 
 namespace dialwright::layout {
+namespace {
+
+/// Halves go up; where the map ends is asked afterwards, so numbers beyond it need only stay beyond it.
+int nearest(double cells) {
+    constexpr double k_far = 1e6;
+    return int(std::floor(std::clamp(cells, -k_far, k_far) + 0.5));
+}
+
+} // namespace
 
 std::array<Point, 4> TurnedBox::corners() const {
     const Point x = {half_width_mm * cos(turn), half_width_mm * sin(turn)};
@@ -65,8 +74,8 @@ ClearMap::ClearMap(const Outline& free_inside, double cell_mm) : cell_mm_{cell_m
 }
 
 void ClearMap::block(Point p) {
-    const int column = int(std::lround((p.x_mm - corner_.x_mm) / cell_mm_));
-    const int row = int(std::lround((p.y_mm - corner_.y_mm) / cell_mm_));
+    const int column = nearest((p.x_mm - corner_.x_mm) / cell_mm_);
+    const int row = nearest((p.y_mm - corner_.y_mm) / cell_mm_);
     if (column >= 0 && column < columns_ && row >= 0 && row < rows_)
         distance_[index(column, row)] = 0.0F;
 }
@@ -110,19 +119,19 @@ void ClearMap::measure() {
 }
 
 double ClearMap::clearance_mm(Point p) const {
-    const int column = int(std::lround((p.x_mm - corner_.x_mm) / cell_mm_));
-    const int row = int(std::lround((p.y_mm - corner_.y_mm) / cell_mm_));
+    const int column = nearest((p.x_mm - corner_.x_mm) / cell_mm_);
+    const int row = nearest((p.y_mm - corner_.y_mm) / cell_mm_);
     const bool on_map = column >= 0 && column < columns_ && row >= 0 && row < rows_;
     return on_map ? double(distance_[index(column, row)]) : 0.0;
 }
 
-double ClearMap::clearance_mm(const TurnedBox& box) const {
+double ClearMap::clearance_mm(const TurnedBox& box, double wanted_mm) const {
     const Point x{cos(box.turn), sin(box.turn)}, y = left_of(x);
     const auto parts = [&](double half) { return std::max(2, int(std::ceil(2 * half / cell_mm_))); };
     const int across = parts(box.half_width_mm), up = parts(box.half_height_mm);
     double least = 1e300;
     for (int i = 0; i <= across && least > 0; ++i)
-        for (int k = 0; k <= up; ++k)
+        for (int k = 0; k <= up && least >= wanted_mm; ++k)
             least = std::min(least, clearance_mm(box.middle + (2.0 * i / across - 1) * box.half_width_mm * x +
                                                  (2.0 * k / up - 1) * box.half_height_mm * y));
     return least;

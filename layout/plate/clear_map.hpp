@@ -31,8 +31,8 @@ class ClearMap {
 
     /// 0 on blocked places and outside.
     [[nodiscard]] double clearance_mm(Point p) const;
-    /// The least clearance in the box.
-    [[nodiscard]] double clearance_mm(const TurnedBox& box) const;
+    /// The least clearance in the box; less than `wanted_mm` is not looked into further.
+    [[nodiscard]] double clearance_mm(const TurnedBox& box, double wanted_mm = 0.0) const;
     [[nodiscard]] double cell_mm() const { return cell_mm_; }
 
   private:

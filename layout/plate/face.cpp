@@ -2,7 +2,9 @@
 #include "layout/plate/face.hpp"
 
 #include "layout/plate/bench.hpp"
+#include "layout/plate/family_words.hpp"
 #include "layout/plate/numerals.hpp"
+#include "layout/plate/tool_check.hpp"
 
 #include <algorithm>
 #include <fmt/format.h>
@@ -16,7 +18,7 @@ constexpr double k_numeral_share = 0.64; // of the chapter ring; the rest is for
 Outline inner_border(const Outline& from, double by_mm, const char* what) {
     const auto made = from.inset(by_mm);
     if (!made)
-        throw std::invalid_argument(fmt::format(
+        throw BordersError(fmt::format(
             "the {} needs {:.1f} mm inside the border outside it, and the plate has no such room", what, by_mm));
     return *made;
 }
@@ -40,51 +42,66 @@ void draw_all(Bench& bench, double foot_mm, double nodus_height_mm) {
     draw_motto(bench);
     draw_place_line(bench);
     draw_compass(bench);
+    draw_legend(bench);
 }
 
-void report_unlit(const Delineation& delineation, std::vector<std::string>& warnings) {
-    if (!delineation.unlit_hours.empty()) {
-        std::string hours;
-        for (const double hour : delineation.unlit_hours)
-            hours += (hours.empty() ? "" : ", ") + time_label(hour);
-        warnings.push_back(fmt::format("never lit on this face, so left out: {}", hours));
-    }
-    if (!delineation.outside_hours.empty()) {
-        std::string hours;
-        for (const double hour : delineation.outside_hours)
-            hours += (hours.empty() ? "" : ", ") + time_label(hour);
-        warnings.push_back(fmt::format("lit, but their lines miss this plate: {}", hours));
-    }
-    for (const std::string& date : delineation.unlit_dates)
-        warnings.push_back(fmt::format("the line \"{}\" does not fall on this face, so it is left out", date));
+std::string listed(const std::vector<double>& hours) {
+    std::string text;
+    for (const double hour : hours)
+        text += (text.empty() ? "" : ", ") + time_label(hour);
+    return text;
+}
+
+bool is_drawn(const Face& face, const DialLine& line) {
+    return std::any_of(face.lines.begin(), face.lines.end(), [&](const DrawnLine& drawn) {
+        return drawn.family == line.family && drawn.set == line.set && drawn.time_h == line.time_h &&
+               drawn.level == line.level && drawn.declination == line.declination &&
+               (is_hour(line.family) || line.family != Family::place_noon || drawn.label == line.label);
+    });
+}
+
+/// Lines that the design asks for and that are not there, with their families.
+void report_missed(const Face& face, const std::vector<const DialLine*>& cut_once, std::vector<std::string>& warnings) {
+    const Delineation& delineation = face.delineation;
+    std::vector<Named> unlit, outside;
+    const auto named = [&](const DialLine& line) {
+        return Named{words_of(line).lines, field_label(line, dress_of(line, face.families))};
+    };
+    if (!delineation.unlit_hours.empty())
+        unlit.emplace_back("hours", listed(delineation.unlit_hours));
+    if (!delineation.outside_hours.empty())
+        outside.emplace_back("hours", listed(delineation.outside_hours));
+    for (const MissedLine& missed : delineation.missed)
+        (missed.lit ? outside : unlit).push_back(named(missed.line));
+    // What lies under the borders alone is not drawn either.
+    for (const DialLine& line : delineation.lines)
+        if (!is_hour(line.family) && !is_drawn(face, line) &&
+            std::find(cut_once.begin(), cut_once.end(), &line) == cut_once.end())
+            outside.push_back(named(line));
+    if (!unlit.empty())
+        warnings.push_back("never lit on this face, so left out: " + by_family(unlit));
+    if (!outside.empty())
+        warnings.push_back("lit, but their lines miss the field of this plate: " + by_family(outside));
+}
+
+/// Hours that count from the Sun's rising or setting, at a place that has days without them.
+void report_part_of_year(const Face& face, const DialPlan& plan, const MeanYear& year,
+                         std::vector<std::string>& warnings) {
+    int days = 0;
+    for (int day = 0; day < 365; ++day)
+        if (half_day_arc(plan.site.latitude, year.at(day + 0.5).declination, plan.horizon))
+            ++days;
+    std::string families;
+    for (const FiguredFamily& family : face.families)
+        if (counts_from_horizon(family.family))
+            families += (families.empty() ? "" : ", ") + std::string{words_of(family.time).lines};
+    if (days < 365 && !families.empty())
+        warnings.push_back(fmt::format("for {} days of the year the Sun does not both rise and set here: on these "
+                                       "the dial shows no {}",
+                                       365 - days, families));
 }
 
 } // namespace
-
-std::string name_of_family(Family family) {
-    switch (family) {
-    case Family::date:
-        return "date line ";
-    case Family::altitude:
-        return "altitude circle ";
-    case Family::azimuth:
-        return "azimuth line ";
-    case Family::place_noon:
-        return "noon at ";
-    case Family::since_sunrise:
-        return "hour since sunrise ";
-    case Family::since_sunset:
-        return "hour since sunset ";
-    case Family::to_sunset:
-        return "hour to sunset ";
-    case Family::unequal_hour:
-        return "unequal hour ";
-    case Family::hour:
-    case Family::clock_hour:
-        break;
-    }
-    return "hour line ";
-}
 
 Rings Rings::of(const FaceSpec& spec) {
     const Outline edge = Outline::of(spec.plate);
@@ -100,11 +117,20 @@ Bench::Bench(const FaceSpec& face_spec, const Delineation& delineated, const Pla
       up{clockwise_from_up(face_spec.reader_up)},
       lettering{face_spec.lettering.family, face_spec.cutting.single_strokes}, clear{rings.divisions,
                                                                                      cell_for(face_spec)} {
+    families = figured_families(delineated);
     if (delineated.style.centre && has_style(face_spec.gnomon.kind)) {
         const Point at = layout::to_work(*delineated.style.centre, foot);
         if (rings.divisions.contains(at))
             centre = at;
     }
+}
+
+const PlateLettering& Bench::letters(bool italic) {
+    if (!italic)
+        return lettering;
+    if (!italic_)
+        italic_.emplace(spec.lettering.family, spec.cutting.single_strokes, true);
+    return *italic_;
 }
 
 double Bench::field_line_width(Family family, int set) const {
@@ -116,12 +142,14 @@ double Bench::field_line_width(Family family, int set) const {
                          : set > 0 && std::size_t(set) <= widths.more_hours_mm.size()
                              ? widths.more_hours_mm[std::size_t(set) - 1]
                              : widths.hours_mm;
-    return asked > 0 ? asked : (family == Family::date ? 0.6 : 0.5) * spec.cutting.line_width_mm;
+    return std::max(asked > 0 ? asked : (family == Family::date ? 0.6 : 0.5) * spec.cutting.line_width_mm,
+                    thinnest_line_mm(spec.cutting));
 }
 
 double Bench::width_of_step(int step_min) const {
     const double tool = spec.widths.hours_mm > 0 ? spec.widths.hours_mm : spec.cutting.line_width_mm;
-    return step_min >= 60 ? tool : step_min >= 30 ? 0.8 * tool : step_min >= 15 ? 0.65 * tool : 0.5 * tool;
+    const double weight = step_min >= 60 ? 1.0 : step_min >= 30 ? 0.8 : step_min >= 15 ? 0.65 : 0.5;
+    return std::max(weight * tool, thinnest_line_mm(spec.cutting));
 }
 
 double Bench::division_band_mm() const {
@@ -142,6 +170,7 @@ void Bench::engrave(const Polyline& line, double width_mm, std::string name) {
 void Bench::add_line(const DialLine& line, const Polyline& piece, std::string label, double width_mm) {
     DrawnLine drawn_line;
     drawn_line.family = line.family;
+    drawn_line.time = line.time;
     drawn_line.set = line.set;
     drawn_line.step_min = line.step_min;
     drawn_line.level = line.level;
@@ -150,13 +179,17 @@ void Bench::add_line(const DialLine& line, const Polyline& piece, std::string la
     drawn_line.hour_angle = line.hour_angle;
     drawn_line.direction = line.direction;
     drawn_line.declination = line.declination;
+    drawn_line.width_mm = width_mm;
     for (const Point& p : piece)
         drawn_line.points.push_back(to_plate(p, foot));
     lines.push_back(std::move(drawn_line));
-    engrave(piece, width_mm, name_of_family(line.family) + label);
+    engrave(piece, width_mm, line_name(line.family, line.time, line.set, label));
 }
 
-void Bench::add_letters(std::vector<Path> paths, std::string name) {
+void Bench::add_letters(std::vector<Path> paths, const std::string& kind, const std::string& text, double capital_mm) {
+    std::string name = text.empty() ? kind : kind + " " + text;
+    if (!paths.empty())
+        lettered.push_back({marks.size(), kind, capital_mm});
     if (!lettering.single_strokes())
         add_filled(std::move(paths), std::move(name));
     else if (!paths.empty())
@@ -202,12 +235,20 @@ Face draw_face(DialPlan plan, const MeanYear& year, const FaceSpec& spec) {
     std::stable_sort(bench.lines.begin(), bench.lines.end(), by_family_and_time);
     face.lines = std::move(bench.lines);
     face.warnings = std::move(bench.warnings);
-    report_unlit(face.delineation, face.warnings);
+    face.families = std::move(bench.families);
+    report_missed(face, bench.cut_once, face.warnings);
+    report_part_of_year(face, plan, year, face.warnings);
 
     const Placing turn{spec.reader_up, {}, 1.0, 1.0, false}; // reader_up runs clockwise: turn it back
     face.drawing.name = spec.name.empty() ? "plate" : spec.name;
     for (const Mark& mark : bench.marks)
         face.drawing.marks.push_back(spec.reader_up == Angle{} ? mark : turn(mark));
+    for (Mark& mark : face.drawing.marks) // ornaments and strokes, too, are no finer than what the tool leaves
+        if (mark.layer == Layer::engrave && !mark.filled)
+            mark.width_mm = std::max(mark.width_mm, thinnest_line_mm(spec.cutting));
+    face.lettering = std::move(bench.lettered);
+    for (std::string& sentence : tool_warnings(face, spec))
+        face.warnings.push_back(std::move(sentence));
     return face;
 }
 

@@ -2,9 +2,11 @@
 #pragma once
 
 #include "engine/dial/delineation.hpp"
+#include "layout/plate/dress.hpp"
 #include "layout/plate/outline.hpp"
 #include "layout/plate/plate_spec.hpp"
 
+#include <stdexcept>
 #include <string>
 #include <vector>
 
@@ -24,6 +26,7 @@ struct FaceSpec {
     int numeral_count = 12;
     int divide_min = 60;              ///< 0: the ring has no band of divisions
     double summer_shift_h = 0;        ///< > 0: a second row of numerals, this much on
+    std::string summer_word;          ///< stands beside that row
     bool numeral_height_asked = true; ///< the maker named it, and is told where it has to be less; so with the motto's
     bool motto_height_asked = true;
     bool noon_mark = true;
@@ -40,32 +43,43 @@ struct Placement {
     std::string why_place, why_height; ///< for the maker; empty where the design says it
 };
 
+/// Borders that leave no field.
+struct BordersError : std::invalid_argument {
+    using std::invalid_argument::invalid_argument;
+};
+
 /// The borders from the plate's edge inward.
 struct Rings {
     Outline edge;      ///< of the plate
     Outline outer;     ///< outer border of the chapter ring
     Outline numerals;  ///< inner border of the band of numerals
     Outline divisions; ///< inner border of the band of divisions; the field of the dial
-    /// @throws std::invalid_argument  the borders leave no field; the message says how much the plate has
+    /// @throws BordersError  the borders leave no field; the message says how much the plate has
     static Rings of(const FaceSpec& spec);
 };
 
 /// A line as it is drawn: one unbroken piece, trimmed to the borders. Lines in several pieces are several of these.
 struct DrawnLine {
     Family family = Family::hour;
-    int set = 0; ///< as DialLine::set
+    HourTime time = HourTime::sun; ///< of an hour line
+    int set = 0;                   ///< as DialLine::set
     int step_min = 60;
     Angle level;       ///< of an altitude circle or an azimuth line
-    std::string label; ///< the numeral of a whole hour, "9:15" between, a date line's label
+    std::string label; ///< as it is engraved: the numeral of a whole hour, "9:15" between, a date line's label
     double time_h = 0.0;
+    double width_mm = 0.0;
     Angle hour_angle;
     std::optional<Angle> direction;
     std::optional<Angle> declination;
     std::vector<PlatePoint> points; ///< plate frame, mm, before the page is turned
 };
 
-/// What the name of a line of the family begins with: "hour line ", "date line ".
-[[nodiscard]] std::string name_of_family(Family family);
+/// A mark of lettering.
+struct Lettered {
+    std::size_t mark = 0;    ///< in Face::drawing
+    std::string kind;        ///< "numeral", "label", "motto": how the mark's name begins
+    double capital_mm = 0.0; ///< height of the capitals, as cut
+};
 
 /// One face, ready for paper.
 struct Face {
@@ -73,8 +87,10 @@ struct Face {
     Delineation delineation;
     Placement placement;
     double gnomon_foot_mm = 0.0;  ///< length of the gnomon's foot along the substyle
-    std::vector<DrawnLine> lines; ///< hours by time, then dates
-    Drawing drawing;              ///< turned so that the reader's up is the page's
+    std::vector<DrawnLine> lines; ///< the ring's hours by time, other sets of hours by time, what is no hour, dates
+    std::vector<FiguredFamily> families; ///< whose labels on the field are figures
+    Drawing drawing;                     ///< turned so that the reader's up is the page's
+    std::vector<Lettered> lettering;
     std::vector<std::string> warnings;
 };
 
@@ -84,7 +100,7 @@ struct Face {
 [[nodiscard]] Placement place_on_plate(const DialPlan& plan, const MeanYear& year, const FaceSpec& spec);
 
 /// Delineates and draws one face.
-/// @throws LetteringError, std::invalid_argument  with a message for the maker
+/// @throws LetteringError, GnomonError, BordersError, std::invalid_argument  with a message for the maker
 [[nodiscard]] Face draw_face(DialPlan plan, const MeanYear& year, const FaceSpec& spec);
 
 [[nodiscard]] inline Point to_work(PlatePoint p, Point foot) {

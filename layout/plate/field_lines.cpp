@@ -1,11 +1,12 @@
 // SPDX-License-Identifier: MIT
 //
 // All lines but those of the chapter ring's own hours: dates, hours of other kinds, altitudes and azimuths, noons
-// elsewhere. A label runs along its line, beside it. It is put where it stands clear of every other line; where no such
-// place is long enough, on one that only the ring's hour lines cross, or else on any; the lines then stop for it, as an
-// engraver would have them.
+// elsewhere. A label runs along its line, beside it, in the letters of its family. It is put where it stands clear of
+// every other line, a date or a name a little smaller rather than not; where no such place is long enough, on one that
+// only the ring's hour lines cross, or else on any; the lines then stop for it, as an engraver would have them.
 #include "layout/plate/bench.hpp"
-#include "layout/plate/numerals.hpp"
+#include "layout/plate/family_words.hpp"
+#include "layout/plate/shared_lines.hpp"
 
 #include <algorithm>
 #include <cmath>
@@ -39,19 +40,6 @@ class Rule {
     std::vector<double> at_;
 };
 
-std::string label_of(const DialLine& line) {
-    switch (line.family) {
-    case Family::altitude:
-    case Family::azimuth:
-        return degrees_label(line.level);
-    case Family::date:
-    case Family::place_noon:
-        return line.label;
-    default:
-        return line.step_min >= 60 ? fmt::format("{}", std::lround(line.time_h)) : time_label(line.time_h);
-    }
-}
-
 struct LabelPlace {
     double score = -1e300;
     std::vector<TurnedBox> chunks;
@@ -62,8 +50,8 @@ struct LabelPlace {
 class FieldDrawer {
   public:
     explicit FieldDrawer(Bench& bench)
-        : bench_{bench}, cap_mm_{bench.spec.lettering.label_height_mm}, room_{room_of(bench)}, room_without_hours_{
-                                                                                                   room_} {}
+        : bench_{bench}, cap_mm_{bench.spec.lettering.label_height_mm}, free_room_{room_of(bench)}, room_{free_room_},
+          room_without_hours_{free_room_} {}
 
     void draw() {
         std::vector<const DialLine*> lines;
@@ -80,31 +68,54 @@ class FieldDrawer {
                     place_label(*line);
             tell_unlabelled();
         }
-        tell_close_dates(lines);
         for (const DialLine& line : bench_.delineation.lines)
             if (in_ring(line) && line.step_min >= 60)
                 for (const Polyline& part : on_field(line))
-                    straight_.push_back({&line, part});
+                    shared_.add(line, line_label(line), part);
         for (const DialLine* line : lines)
             draw(*line);
-        tell_shared();
+        for (std::string& note : shared_.told())
+            bench_.warnings.push_back(std::move(note));
     }
 
   private:
-    /// The field without the strip along its border into which the marks of half hours reach.
     static ClearMap room_of(const Bench& bench) {
-        const auto inside = bench.rings.divisions.inset(bench.half_hour_reach_mm());
-        ClearMap room{inside.value_or(bench.rings.divisions), bench.clear.cell_mm()};
+        ClearMap room{bench.rings.divisions, bench.clear.cell_mm()};
         for (const Outline& outline : bench.keep_out)
             room.block(TurnedBox{outline.box().middle(), outline.box().width_mm() / 2, outline.box().height_mm() / 2,
                                  Angle{}});
         return room;
     }
 
+    /// Where the marks of half and quarter hours reach into the field.
+    void block_marks(const DialLine& line) {
+        const std::optional<Outline>* inside = line.step_min == 30   ? &inside_half_hours_
+                                               : line.step_min == 15 ? &inside_quarters_
+                                                                     : nullptr;
+        for (const Polyline& part : on_field(line)) {
+            std::vector<Polyline> marks;
+            if (inside && *inside)
+                marks = clipped(part, {{}, {**inside}});
+            else if (bench_.divides_in_field())
+                marks = {end_part(part, k_field_mark), end_part({part.back(), part.front()}, k_field_mark)};
+            for (const Polyline& mark : marks) {
+                room_.block(mark);
+                room_without_hours_.block(mark);
+            }
+        }
+    }
+
     void block_lines() {
+        if (bench_.half_hour_reach_mm() > 0)
+            inside_half_hours_ = bench_.rings.divisions.inset(bench_.half_hour_reach_mm());
+        if (bench_.quarter_hour_reach_mm() > 0)
+            inside_quarters_ = bench_.rings.divisions.inset(bench_.quarter_hour_reach_mm());
         for (const DialLine& line : bench_.delineation.lines) {
-            if (in_ring(line) && line.step_min < 60)
+            const bool drawn_whole = line.step_min >= 60 || (line.step_min == 30 && bench_.divides_in_field());
+            if (in_ring(line) && !drawn_whole) {
+                block_marks(line);
                 continue;
+            }
             for (const Polyline& part : on_field(line)) {
                 room_.block(part);
                 if (!in_ring(line))
@@ -118,31 +129,53 @@ class FieldDrawer {
     /// The field without any line; seldom wanted.
     [[nodiscard]] const ClearMap& bare_room() {
         if (!bare_room_) {
-            bare_room_ = room_of(bench_);
+            bare_room_ = free_room_;
             bare_room_->measure();
+            for (const TurnedBox& label : placed_)
+                bare_room_->block(label);
         }
         return *bare_room_;
     }
 
     void place_label(const DialLine& line) {
-        const std::string label = label_of(line);
-        const LetteredLine text = bench_.lettering.line(label, cap_mm_, 0.04 * cap_mm_);
+        if (on_field(line).empty())
+            return;
+        const std::string label = field_label(line, dress(line));
+        const auto lettered = [&](double part) {
+            return bench_.letters(dress(line).italic).line(label, part * cap_mm_, 0.04 * part * cap_mm_);
+        };
+        constexpr double k_smaller = 0.85;
+        double height = cap_mm_;
+        LetteredLine text = lettered(1.0);
         LabelPlace best = search(line, text, room_);
+        const bool words = line.family == Family::date || line.family == Family::place_noon;
+        if (words && !best.found) {
+            height = k_smaller * cap_mm_;
+            text = lettered(k_smaller);
+            best = search(line, text, room_);
+        }
         const bool in_the_clear = best.found;
-        if (!best.found)
+        if (!best.found) {
+            height = cap_mm_;
+            text = lettered(1.0);
             best = search(line, text, room_without_hours_);
+        }
         if (!best.found)
             best = search(line, text, bare_room());
         if (!best.found) {
-            unlabelled_.push_back(label);
+            unlabelled_.emplace_back(words_of(line).lines, label);
             return;
         }
-        set(label, text, best);
+        set(label, text, height, best);
         for (const TurnedBox& chunk : best.chunks) {
             TurnedBox grown = chunk;
             grown.half_width_mm += 0.35 * cap_mm_;
             grown.half_height_mm += 0.35 * cap_mm_;
             placed_.push_back(grown);
+            room_.block(grown);
+            room_without_hours_.block(grown);
+            if (bare_room_)
+                bare_room_->block(grown);
             bench_.clear.block(chunk);
             if (in_the_clear)
                 continue;
@@ -151,67 +184,28 @@ class FieldDrawer {
         }
     }
 
-    struct StraightPart {
-        const DialLine* line;
-        Polyline part;
-    };
+    [[nodiscard]] Dress dress(const DialLine& line) const { return dress_of(line, bench_.families); }
 
-    /// A straight line that another family has drawn already is not cut twice.
+    /// As it is engraved on the field, or of the ring's hours the time.
+    [[nodiscard]] std::string line_label(const DialLine& line) const {
+        return in_ring(line) ? fmt::format("{}", std::lround(line.time_h)) : field_label(line, dress(line));
+    }
+
+    /// A line that another family has drawn already is not cut twice.
     void draw(const DialLine& line) {
+        const std::string label = line_label(line);
         for (const Polyline& part : on_field(line)) {
-            if (part.size() == 2) {
-                const auto same = std::find_if(straight_.begin(), straight_.end(),
-                                               [&](const StraightPart& s) { return covers(s.part, part); });
-                if (same != straight_.end()) {
-                    shared_.push_back(fmt::format("\"{}\" and \"{}\"", label_of(line), label_of(*same->line)));
-                    continue;
-                }
-                straight_.push_back({&line, part});
+            if (shared_.has(line, label, part)) {
+                bench_.cut_once.push_back(&line);
+                continue;
             }
+            shared_.add(line, label, part);
             const double width = bench_.field_line_width(line.family, line.set);
             std::vector<Polyline> pieces = clipped(part, {{}, bench_.keep_out});
             drop_scraps(pieces, width);
             for (const Polyline& piece : pieces)
-                bench_.add_line(line, piece, label_of(line), width);
+                bench_.add_line(line, piece, label, width);
         }
-    }
-
-    /// Whether `part` lies along `whole`, within a hair, for all its length.
-    [[nodiscard]] static bool covers(const Polyline& whole, const Polyline& part) {
-        constexpr double k_hair_mm = 0.02;
-        if (whole.size() != 2 || distance(whole.front(), whole.back()) < k_hair_mm)
-            return false;
-        const Point along = unit(whole.back() - whole.front());
-        const double reach = distance(whole.front(), whole.back()) + 1.0;
-        return std::all_of(part.begin(), part.end(), [&](Point p) {
-            const double at = dot(p - whole.front(), along);
-            return std::abs(cross(along, p - whole.front())) < k_hair_mm && at > -1.0 && at < reach;
-        });
-    }
-
-    void tell_shared() {
-        if (shared_.empty())
-            return;
-        std::string all;
-        for (const std::string& pair : shared_)
-            all += (all.empty() ? "" : "; ") + pair;
-        bench_.warnings.push_back(fmt::format("one line serves for {}: it is cut once", all));
-    }
-
-    /// Date lines that run closer together than the tool can cut.
-    void tell_close_dates(const std::vector<const DialLine*>& lines) {
-        std::vector<const DialLine*> dates;
-        for (const DialLine* line : lines)
-            if (line->family == Family::date)
-                dates.push_back(line);
-        std::sort(dates.begin(), dates.end(),
-                  [](const DialLine* a, const DialLine* b) { return *a->declination < *b->declination; });
-        const double wanted = bench_.spec.cutting.least_gap_mm + bench_.field_line_width(Family::date, 0);
-        for (std::size_t i = 0; i + 1 < dates.size(); ++i)
-            if (const double gap = least_distance(*dates[i], *dates[i + 1]); gap < wanted)
-                bench_.warnings.push_back(fmt::format("the date lines \"{}\" and \"{}\" come within {:.1f} mm of each "
-                                                      "other, middle to middle: the tool wants {:.1f} mm",
-                                                      dates[i]->label, dates[i + 1]->label, gap, wanted));
     }
 
     /// A line's parts on the field, as they are before labels stand in their way.
@@ -227,30 +221,12 @@ class FieldDrawer {
         }
     }
 
-    [[nodiscard]] double least_distance(const DialLine& a, const DialLine& b) const {
-        double least = 1e300;
-        const auto& parts_b = on_field(b);
-        for (const Polyline& part_a : on_field(a))
-            for (const Point& p : part_a)
-                for (const Polyline& part_b : parts_b)
-                    for (std::size_t i = 0; i + 1 < part_b.size(); ++i) {
-                        const Point run = part_b[i + 1] - part_b[i];
-                        const double along =
-                            dot(run, run) > 0 ? std::clamp(dot(p - part_b[i], run) / dot(run, run), 0.0, 1.0) : 0.0;
-                        least = std::min(least, distance(p, part_b[i] + along * run));
-                    }
-        return least;
-    }
-
     void tell_unlabelled() {
         if (unlabelled_.empty())
             return;
-        std::string all;
-        for (const std::string& label : unlabelled_)
-            all += (all.empty() ? "\"" : ", \"") + label + "\"";
-        bench_.warnings.push_back(fmt::format(
-            "no room beside their lines for the labels {}: give the labels a smaller height, or draw fewer lines",
-            all));
+        bench_.warnings.push_back(fmt::format("no room beside their lines for the labels of {}: give the labels a "
+                                              "smaller height, or draw fewer lines",
+                                              by_family(unlabelled_)));
     }
 
     [[nodiscard]] LabelPlace search(const DialLine& line, const LetteredLine& text, const ClearMap& room) const {
@@ -268,10 +244,10 @@ class FieldDrawer {
     void consider(Family family, const Rule& rule, double s, double side, const LetteredLine& text,
                   const ClearMap& room, LabelPlace& best) const {
         const double half = text.ink.width_mm() / 2;
-        const Point right{bench_.up.y_mm, -bench_.up.x_mm};
+        const Point right = right_of(bench_.up);
         const Point whole_run = rule.point(s + half) - rule.point(s - half);
-        if (length(whole_run) < 1.6 * half)
-            return;                                                   // doubled back
+        if (length(whole_run) < 1.9 * half) // bends by more than letters can follow, or is doubled back
+            return;
         const double sense = dot(whole_run, right) >= 0 ? 1.0 : -1.0; // reads to the reader's right
         LabelPlace place;
         const int chunks = std::max(2, int(std::ceil(2 * half / (1.5 * cap_mm_))));
@@ -287,9 +263,8 @@ class FieldDrawer {
             const Point a = rule.point(from), b = rule.point(to), along = unit(b - a);
             const TurnedBox box{between(a, b, 0.5) + (base_off + ink_middle) * left_of(along), distance(a, b) / 2,
                                 text.ink.height_mm() / 2, turn_of(along)};
-            clearance = std::min(clearance, room.clearance_mm(box));
-            if (clearance < 0.3 * cap_mm_ ||
-                std::any_of(placed_.begin(), placed_.end(), [&](const TurnedBox& p) { return p.overlaps(box); }))
+            clearance = std::min(clearance, room.clearance_mm(box, 0.3 * cap_mm_));
+            if (clearance < 0.3 * cap_mm_)
                 return;
             place.chunks.push_back(box);
         }
@@ -309,32 +284,32 @@ class FieldDrawer {
             best = place;
     }
 
-    void set(const std::string& label, const LetteredLine& text, const LabelPlace& place) {
-        const std::string name = "label " + label;
+    void set(const std::string& label, const LetteredLine& text, double height, const LabelPlace& place) {
         const Point chord = place.end - place.start;
         const double sagitta = cross(unit(chord), place.middle - place.start); // + bulges to the left: heads outward
         if (std::abs(sagitta) < 0.02 * cap_mm_) {
             const Point along = unit(chord);
             const double lead = text.ink.left_mm;
-            bench_.add_letters(set_straight(text, place.start - lead * along, turn_of(along)), name);
+            bench_.add_letters(set_straight(text, place.start - lead * along, turn_of(along)), "label", label, height);
             return;
         }
         const double half = length(chord) / 2;
         const double radius = (half * half + sagitta * sagitta) / (2 * std::abs(sagitta));
         const Point towards_centre = (sagitta > 0 ? -1.0 : 1.0) * left_of(unit(chord));
         const Point centre = place.middle + radius * towards_centre;
-        bench_.add_letters(set_on_circle(text, centre, radius, turn_of(place.middle - centre), sagitta < 0), name);
+        bench_.add_letters(set_on_circle(text, centre, radius, turn_of(place.middle - centre), sagitta < 0), "label",
+                           label, height);
     }
 
     Bench& bench_;
     double cap_mm_;
-    ClearMap room_, room_without_hours_;
-    std::optional<ClearMap> bare_room_;
+    ClearMap free_room_, room_, room_without_hours_;
+    std::optional<ClearMap> bare_room_;                          ///< all three with the labels that are placed
+    std::optional<Outline> inside_half_hours_, inside_quarters_; ///< the field without the strip of their marks
     std::vector<TurnedBox> placed_;
-    std::vector<std::string> unlabelled_;
+    std::vector<Named> unlabelled_;
     std::map<const DialLine*, std::vector<Polyline>> parts_;
-    std::vector<StraightPart> straight_;
-    std::vector<std::string> shared_;
+    SharedLines shared_;
 };
 
 } // namespace

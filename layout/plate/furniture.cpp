@@ -179,7 +179,7 @@ void draw_compass(Bench& bench) {
         const LetteredLine text = bench.lettering.line(name, height);
         const Point middle = best + (from + 0.12 * radius + height / 2) * clockwise_from_up(Angle::degrees(degrees));
         const Point at = middle - (text.ink.left_mm + text.ink.width_mm() / 2) * right - height / 2 * bench.up;
-        bench.add_letters(set_straight(text, at, turn_of(right)), std::string{"compass mark "} + name);
+        bench.add_letters(set_straight(text, at, turn_of(right)), "compass mark", name, height);
     };
     letter("N", 0, letter_mm, reach);
     constexpr double k_least_letter_mm = 2.0;

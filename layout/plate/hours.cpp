@@ -66,11 +66,14 @@ class HourDrawer {
         }
     }
 
-    /// Clear way between two rays where they meet the field's border.
-    [[nodiscard]] static double gap_mm(const Ray& a, const Ray& b) {
-        const Point at_a = a.field.back().back(), at_b = b.field.back().back();
-        const Point along = unit(a.field.back().back() - a.field.back().front());
-        return std::abs(cross(along, at_b - at_a));
+    /// Clear way between two rays where they meet the field's border; of rays that are divided in the field, at either
+    /// end.
+    [[nodiscard]] double gap_mm(const Ray& a, const Ray& b) const {
+        const Point along = a.direction();
+        const double outside = std::abs(cross(along, b.end() - a.end()));
+        return bench_.divides_in_field()
+                   ? std::min(outside, std::abs(cross(along, b.field.front().front() - a.field.front().front())))
+                   : outside;
     }
 
     /// For each hour the finest whole step at which all its divisions stand clear of each other.
@@ -140,11 +143,8 @@ class HourDrawer {
     }
 
     /// The last `wanted_mm` of a ray's field part.
-    [[nodiscard]] static Polyline end_part(const Polyline& field, double wanted_mm) {
-        const double whole = distance(field.front(), field.back());
-        if (wanted_mm >= whole)
-            return field;
-        return {between(field.back(), field.front(), wanted_mm / whole), field.back()};
+    [[nodiscard]] static Polyline last_mm(const Polyline& field, double wanted_mm) {
+        return end_part(field, std::min(1.0, wanted_mm / distance(field.front(), field.back())));
     }
 
     void draw_ray(const Ray& ray) {
@@ -161,6 +161,8 @@ class HourDrawer {
             bench_.add_line(*ray.line, last, label_of(*ray.line), width);
             return;
         }
+        if (bench_.divides_in_field())
+            draw_in_field(ray, width);
         if (ray.tick.empty())
             return; // divisions live in the ring
         const double into_field = step == 30   ? bench_.half_hour_reach_mm()
@@ -169,8 +171,26 @@ class HourDrawer {
         const double across = step >= 10 ? 1.0 : step == 5 ? 0.7 : 0.45;
         Polyline mark{between(ray.tick.back(), ray.tick.front(), across), ray.tick.back()};
         if (into_field > 0)
-            mark.front() = end_part(ray.field.back(), into_field).front();
+            mark.front() = last_mm(ray.field.back(), into_field).front();
         bench_.add_line(*ray.line, mark, label_of(*ray.line), width);
+    }
+
+    /// Between the solstices, where the nodus' shadow runs: half hours whole, finer divisions as short marks at both
+    /// ends, as on a scale. Common practice, no source.
+    void draw_in_field(const Ray& ray, double width) {
+        const int step = ray.line->step_min;
+        const std::string label = label_of(*ray.line);
+        if (step == 30) {
+            for (const Polyline& piece : ray.field)
+                bench_.add_line(*ray.line, piece, label, width);
+            return;
+        }
+        const double part = step == 15 ? k_field_mark : step >= 5 ? 0.6 * k_field_mark : 0.4 * k_field_mark;
+        const Polyline &first = ray.field.front(), &last = ray.field.back();
+        std::vector<Polyline> marks{end_part({first.back(), first.front()}, part), end_part(last, part)};
+        drop_scraps(marks, width);
+        for (const Polyline& mark : marks)
+            bench_.add_line(*ray.line, mark, label, width);
     }
 
     [[nodiscard]] std::string label_of(const DialLine& line) const {

@@ -15,7 +15,7 @@ namespace {
 
 class Inscriber {
   public:
-    explicit Inscriber(Bench& bench) : bench_{bench}, right_{bench.up.y_mm, -bench.up.x_mm} {}
+    explicit Inscriber(Bench& bench) : bench_{bench}, right_{right_of(bench.up)} {}
 
     /// @param asked  the maker named the height, and is told where it has to be less
     void inscribe(const std::string& text, double height_mm, bool asked, const std::string& name) {
@@ -57,7 +57,8 @@ class Inscriber {
                 const Point towards = near_side ? -1.0 * bench_.up : bench_.up;
                 if (!arc_is_clear(field.centre(), outer, inner, turn_of(towards), half_turn, 0.45 * height))
                     continue;
-                bench_.add_letters(set_on_circle(line, field.centre(), base, turn_of(towards), near_side), name);
+                bench_.add_letters(set_on_circle(line, field.centre(), base, turn_of(towards), near_side), name, "",
+                                   height);
                 block_arc(field.centre(), outer + 0.35 * height, inner - 0.35 * height, turn_of(towards), half_turn);
                 return true;
             }
@@ -93,35 +94,14 @@ class Inscriber {
 
     /// Straight, upright for the reader, on the plate's middle line or anywhere.
     bool straight(const LetteredLine& line, double height, const std::string& name, bool anywhere) {
-        const Box field = bench_.rings.divisions.box();
-        const double wanted = 0.5 * height;
-        TurnedBox best{{}, line.ink.width_mm() / 2, height / 2, turn_of(right_)};
-        double best_score = -1e300;
-        const double reach = (field.width_mm() + field.height_mm()) / 2;
-        const Point middle = field.middle();
-        for (int row = -40; row <= 40; ++row)
-            for (int column = anywhere ? -24 : 0; column <= (anywhere ? 24 : 0); ++column) {
-                TurnedBox box = best;
-                box.middle = middle + (reach / 2 * column / 24.0) * right_ + (reach / 2 * row / 40.0) * bench_.up;
-                if (bench_.clear.clearance_mm(box.middle) < wanted + height / 2)
-                    continue;
-                const double clearance = bench_.clear.clearance_mm(box);
-                if (clearance < wanted)
-                    continue;
-                // Room counts up to twice the height; then the middle line; then low rather than high.
-                const double score =
-                    std::min(clearance, 2 * height) - 0.6 * std::abs(column) / 24.0 * reach / 2 - 0.002 * row;
-                if (score > best_score) {
-                    best_score = score;
-                    best.middle = box.middle;
-                }
-            }
-        if (best_score <= -1e300)
+        TurnedBox box{{}, line.ink.width_mm() / 2, height / 2, turn_of(right_)};
+        const auto middle = find_room(bench_, box.half_width_mm, box.half_height_mm, 0.5 * height, {anywhere, 0.6});
+        if (!middle)
             return false;
-        const Point start =
-            best.middle - (line.ink.left_mm + line.ink.width_mm() / 2) * right_ - height / 2 * bench_.up;
-        bench_.add_letters(set_straight(line, start, turn_of(right_)), name);
-        bench_.clear.block(best);
+        box.middle = *middle;
+        const Point start = *middle - (line.ink.left_mm + line.ink.width_mm() / 2) * right_ - height / 2 * bench_.up;
+        bench_.add_letters(set_straight(line, start, turn_of(right_)), name, "", height);
+        bench_.clear.block(box);
         return true;
     }
 
@@ -130,6 +110,33 @@ class Inscriber {
 };
 
 } // namespace
+
+std::optional<Point> find_room(const Bench& bench, double half_width_mm, double half_height_mm, double wanted_mm,
+                               RoomWish wish) {
+    const Box field = bench.rings.divisions.box();
+    const Point right = right_of(bench.up), middle = field.middle();
+    const double reach = (field.width_mm() + field.height_mm()) / 2;
+    std::optional<Point> best;
+    double best_score = -1e300;
+    for (int row = -40; row <= 40; ++row)
+        for (int column = wish.anywhere ? -24 : 0; column <= (wish.anywhere ? 24 : 0); ++column) {
+            const Point at = middle + (reach / 2 * column / 24.0) * right + (reach / 2 * row / 40.0) * bench.up;
+            if (bench.clear.clearance_mm(at) < wanted_mm + std::min(half_width_mm, half_height_mm))
+                continue;
+            const double clearance =
+                bench.clear.clearance_mm(TurnedBox{at, half_width_mm, half_height_mm, turn_of(right)}, wanted_mm);
+            if (clearance < wanted_mm)
+                continue;
+            // Room counts up to four times what is wanted; then the middle line; then low rather than high.
+            const double score =
+                std::min(clearance, 4 * wanted_mm) - wish.middle * std::abs(column) / 24.0 * reach / 2 - 0.002 * row;
+            if (score > best_score) {
+                best_score = score;
+                best = at;
+            }
+        }
+    return best;
+}
 
 void draw_motto(Bench& bench) {
     Inscriber{bench}.inscribe(bench.spec.lettering.motto, bench.spec.lettering.motto_height_mm,

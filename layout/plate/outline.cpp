@@ -83,7 +83,7 @@ Outline Outline::of(const Plate& plate) {
         box.add(corners.back());
     }
     for (Point& corner : corners)
-        corner = (corner - box.middle());
+        corner = corner - box.middle();
     return polygon(std::move(corners));
 }
 
@@ -99,7 +99,7 @@ Box Outline::box() const {
 
 bool Outline::contains(Point p) const {
     if (is_round())
-        return std::hypot(p.x_mm - centre_.x_mm, p.y_mm - centre_.y_mm) <= radius_mm_;
+        return distance(p, centre_) <= radius_mm_;
     bool inside = false;
     for (std::size_t i = 0, j = corners_.size() - 1; i < corners_.size(); j = i++) {
         const Point& a = corners_[i];
@@ -113,14 +113,10 @@ bool Outline::contains(Point p) const {
 
 double Outline::distance_mm(Point p) const {
     if (is_round())
-        return std::abs(std::hypot(p.x_mm - centre_.x_mm, p.y_mm - centre_.y_mm) - radius_mm_);
+        return std::abs(distance(p, centre_) - radius_mm_);
     double best = 1e300;
-    for (std::size_t i = 0; i < corners_.size(); ++i) {
-        const Point a = corners_[i], d = (corners_[(i + 1) % corners_.size()] - a), to = (p - a);
-        const double t =
-            std::clamp((to.x_mm * d.x_mm + to.y_mm * d.y_mm) / (d.x_mm * d.x_mm + d.y_mm * d.y_mm), 0.0, 1.0);
-        best = std::min(best, std::hypot(to.x_mm - t * d.x_mm, to.y_mm - t * d.y_mm));
-    }
+    for (std::size_t i = 0; i < corners_.size(); ++i)
+        best = std::min(best, distance_to_side(p, corners_[i], corners_[(i + 1) % corners_.size()]));
     return best;
 }
 
@@ -153,16 +149,14 @@ std::optional<Outline> Outline::inset(double by_mm) const {
 }
 
 void Outline::crossings(Point a, Point b, std::vector<double>& t) const {
-    const Point d = (b - a);
+    const Point d = b - a;
     const auto take = [&](double at) {
         if (at > 0 && at < 1)
             t.push_back(at);
     };
     if (is_round()) {
-        const Point from = (a - centre_);
-        const double qa = d.x_mm * d.x_mm + d.y_mm * d.y_mm;
-        const double qb = from.x_mm * d.x_mm + from.y_mm * d.y_mm;
-        const double qc = from.x_mm * from.x_mm + from.y_mm * from.y_mm - radius_mm_ * radius_mm_;
+        const Point from = a - centre_;
+        const double qa = dot(d, d), qb = dot(from, d), qc = dot(from, from) - radius_mm_ * radius_mm_;
         const double under_root = qb * qb - qa * qc;
         if (qa <= 0 || under_root <= 0)
             return;
@@ -172,41 +166,35 @@ void Outline::crossings(Point a, Point b, std::vector<double>& t) const {
         return;
     }
     for (std::size_t i = 0; i < corners_.size(); ++i) {
-        const Point p = corners_[i], side = (corners_[(i + 1) % corners_.size()] - p);
+        const Point p = corners_[i], side = corners_[(i + 1) % corners_.size()] - p;
         const double turn = cross(d, side);
         if (turn == 0)
             continue;
-        const double on_side = cross((p - a), d) / turn;
+        const double on_side = cross(p - a, d) / turn;
         if (on_side >= 0 && on_side <= 1)
-            take(cross((p - a), side) / turn);
+            take(cross(p - a, side) / turn);
     }
 }
 
 std::optional<Outline::Exit> Outline::exit(Point from, Point direction) const {
     const Box reach = box();
-    const double far =
-        2 * (reach.width_mm() + reach.height_mm()) + std::hypot(from.x_mm - centre_.x_mm, from.y_mm - centre_.y_mm);
-    const double length = std::hypot(direction.x_mm, direction.y_mm);
-    const Point end{from.x_mm + far * direction.x_mm / length, from.y_mm + far * direction.y_mm / length};
+    const double far = 2 * (reach.width_mm() + reach.height_mm()) + distance(from, centre_);
+    const Point end = from + far * unit(direction);
     std::vector<double> t;
     crossings(from, end, t);
     if (t.empty())
         return std::nullopt;
     const Point at = between(from, end, *std::max_element(t.begin(), t.end()));
     if (is_round())
-        return Exit{at, {(at.x_mm - centre_.x_mm) / radius_mm_, (at.y_mm - centre_.y_mm) / radius_mm_}};
+        return Exit{at, (1 / radius_mm_) * (at - centre_)};
     // The side nearest to the point has its normal to the right of its run.
     Exit best{at, {}};
     double nearest = 1e300;
     for (std::size_t i = 0; i < corners_.size(); ++i) {
-        const Point p = corners_[i], side = (corners_[(i + 1) % corners_.size()] - p);
-        const double run = std::hypot(side.x_mm, side.y_mm);
-        const double part = std::clamp(((at - p).x_mm * side.x_mm + (at - p).y_mm * side.y_mm) / (run * run), 0.0, 1.0);
-        const Point on_side = between(p, corners_[(i + 1) % corners_.size()], part);
-        const double off = std::hypot(at.x_mm - on_side.x_mm, at.y_mm - on_side.y_mm);
-        if (off < nearest) {
+        const Point p = corners_[i], next = corners_[(i + 1) % corners_.size()];
+        if (const double off = distance_to_side(at, p, next); off < nearest) {
             nearest = off;
-            best.normal = {side.y_mm / run, -side.x_mm / run};
+            best.normal = right_of(unit(next - p));
         }
     }
     return best;
@@ -265,7 +253,7 @@ std::vector<Polyline> clipped(const Polyline& line, const Region& region) {
 double length_mm(const Polyline& line) {
     double sum = 0;
     for (std::size_t i = 0; i + 1 < line.size(); ++i)
-        sum += std::hypot(line[i + 1].x_mm - line[i].x_mm, line[i + 1].y_mm - line[i].y_mm);
+        sum += distance(line[i], line[i + 1]);
     return sum;
 }
 

@@ -28,8 +28,7 @@ class Placer {
         : plan_{plan}, spec_{spec}, rings_{Rings::of(spec)}, season_{-year.obliquity(), year.obliquity()},
           caster_{caster_of(unit_plan(plan))}, style_{style_of(caster_.surface().frame(), 1.0, plan.site.latitude)} {
         // Hours that count from the Sun's rising or setting spread over the same shadows as the Sun's own hours do.
-        const Family family = family_of(plan.hours.time);
-        const bool own_hours = family == Family::hour || family == Family::clock_hour;
+        const bool own_hours = !counts_from_horizon(plan.hours.time);
         for (int hour = 0; hour < 24; ++hour) {
             const bool asked = !own_hours || ((!plan.hours.first_h || hour >= *plan.hours.first_h) &&
                                               (!plan.hours.last_h || hour <= *plan.hours.last_h));

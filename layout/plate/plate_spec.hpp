@@ -69,6 +69,7 @@ struct LetteringChoice {
     std::string motto;
     double motto_height_mm = 0.0;
     std::string place_line; ///< empty: none
+    bool legend = true;     ///< lines that tell families' figures apart, where there are several
 };
 
 /// What the lines are cut with.

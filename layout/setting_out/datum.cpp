@@ -17,11 +17,6 @@ std::string letter(std::size_t i) {
     return i < 26 ? fmt::format("{}", static_cast<char>('A' + i)) : fmt::format("{}", i + 1);
 }
 
-double distance_to_side(Point p, Point a, Point b) {
-    const double part = std::clamp(dot(p - a, b - a) / dot(b - a, b - a), 0.0, 1.0);
-    return distance(p, between(a, b, part));
-}
-
 } // namespace
 
 std::string say_place(const BorderPlace& place, bool inches) {

@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "layout/setting_out/setting_out.hpp"
 
+#include "layout/plate/family_words.hpp"
 #include "layout/plate/points.hpp"
 #include "layout/text/figures.hpp"
 
@@ -47,7 +48,7 @@ std::optional<Point> crossing(Point a, Point b, Point c, Point d) {
 struct SeenLine {
     const DrawnLine* line;
     std::string name;
-    Polyline points; ///< as the reader sees the plate; a straight one from the pole outward
+    Polyline points; ///< as the reader sees the plate; a straight one from the centre outward
     [[nodiscard]] bool straight() const { return points.size() == 2 && line->family != Family::date; }
     [[nodiscard]] bool whole_hour() const {
         return line->family == Family::hour && line->set == 0 && line->step_min >= 60;
@@ -114,15 +115,29 @@ class Setter {
         return own;
     }
 
+    /// All pieces of a line run one way: from the dial's centre, on the plate or off it; where it has none, along the substyle.
+    [[nodiscard]] bool runs_inward(const SeenLine& line) const {
+        const Style& style = face_.delineation.style;
+        const Point a = line.points.front(), b = line.points.back();
+        if (!style.centre)
+            return dot(b - a, clockwise_from_up(style.substyle - spec_up_)) < 0;
+        const Point centre = radial_ ? poles_[0].at : seen(*style.centre);
+        return distance(a, centre) > distance(b, centre);
+    }
+
+    [[nodiscard]] Point far_end(const SeenLine& line) const {
+        const Point a = line.points.front(), b = line.points.back();
+        return line.straight() && distance(a, poles_[0].at) > distance(b, poles_[0].at) ? a : b;
+    }
+
     void gather_lines() {
         for (const DrawnLine& line : face_.lines) {
             if (line.points.size() < 2 || (!options_.divisions && is_hour(line.family) && line.step_min < 60))
                 continue;
-            SeenLine made{&line, name_of_family(line.family) + line.label, {}};
+            SeenLine made{&line, line_name(line.family, line.time, line.set, line.label), {}};
             for (const PlatePoint& p : line.points)
                 made.points.push_back(seen(p));
-            if (made.straight() &&
-                distance(made.points.front(), poles_[0].at) > distance(made.points.back(), poles_[0].at))
+            if (made.straight() && runs_inward(made))
                 std::reverse(made.points.begin(), made.points.end());
             lines_.push_back(std::move(made));
         }
@@ -132,9 +147,9 @@ class Setter {
     void lay_zero_line() {
         double up = 0, nearest = 1e300;
         for (const SeenLine& line : lines_) {
-            up += line.points.back().y_mm - poles_[0].at.y_mm;
+            up += far_end(line).y_mm - poles_[0].at.y_mm;
             if (line.whole_hour())
-                nearest = std::min(nearest, distance(line.points.back(), poles_[0].at));
+                nearest = std::min(nearest, distance(far_end(line), poles_[0].at));
         }
         zero_ = {0, up >= 0 ? 1.0 : -1.0};
         out_.zero_line = up >= 0 ? "straight up" : "straight down";
@@ -162,13 +177,28 @@ class Setter {
         return made;
     }
 
+    /// Whether another piece of the same line, broken for a label or the like, lies on its ray: farther out, or nearer.
+    [[nodiscard]] bool has_piece(const SeenLine& line, bool outward) const {
+        const Point a = line.points.front(), along = unit(line.points.back() - a);
+        return std::any_of(lines_.begin(), lines_.end(), [&](const SeenLine& other) {
+            if (&other == &line || other.name != line.name || !other.straight())
+                return false;
+            const Point from = other.points.front() - a, to = other.points.back() - a;
+            if (std::abs(cross(along, from)) > 1e-6 || std::abs(cross(along, to)) > 1e-6 || dot(along, to - from) < 0)
+                return false;
+            return (dot(along, from) > 0) == outward;
+        });
+    }
+
     void add_straight(const SeenLine& line) {
         const Point a = line.points.front(), b = line.points.back();
-        if (!radial_)
+        const bool first = !has_piece(line, false), last = !has_piece(line, true);
+        if (!radial_ && first)
             add_border_point(line, b, a);
-        out_.points.push_back(point(line.name, "inner end", a, pole_of(line)));
-        out_.points.push_back(point(line.name, "outer end", b, pole_of(line)));
-        add_border_point(line, a, b);
+        out_.points.push_back(point(line.name, first ? "inner end" : "goes on", a, pole_of(line)));
+        out_.points.push_back(point(line.name, last ? "outer end" : "breaks off", b, pole_of(line)));
+        if (last)
+            add_border_point(line, a, b);
     }
 
     /// Where the line, carried on from b, leaves the measured border.
@@ -215,14 +245,22 @@ class Setter {
         for (const SettingOutPoint& p : out_.points)
             if (p.border && p.what.starts_with("meets the "))
                 if (const auto* seen_line = line_named(p.line); seen_line && seen_line->whole_hour())
-                    out_.checks.push_back(fmt::format("the {} line meets the {}", seen_line->line->label,
+                    out_.checks.push_back(fmt::format("the {} meets the {}", name_in_checks(*seen_line, p.pole),
                                                       say_place(*p.border, options_.inches)));
         for (const SeenLine& line : lines_)
-            if (line.whole_hour() && line.straight())
-                out_.checks.push_back(fmt::format("the outer end of the {} line is {} from the {} and {} from the {}",
-                                                  line.line->label, say(distance(line.points.back(), marks[0].at)),
-                                                  marks[0].name, say(distance(line.points.back(), marks[1].at)),
-                                                  marks[1].name));
+            if (line.whole_hour() && line.straight() && !has_piece(line, true))
+                out_.checks.push_back(fmt::format("the outer end of the {} is {} from the {} and {} from the {}",
+                                                  name_in_checks(line, poles_[pole_of(line)].name),
+                                                  say(distance(line.points.back(), marks[0].at)), marks[0].name,
+                                                  say(distance(line.points.back(), marks[1].at)), marks[1].name));
+    }
+
+    /// An hour that runs from both centres, as noon does with a thick gnomon, is called by the centre too.
+    [[nodiscard]] std::string name_in_checks(const SeenLine& line, const std::string& pole) const {
+        const bool twice = std::any_of(lines_.begin(), lines_.end(), [&](const SeenLine& other) {
+            return other.name == line.name && other.straight() && poles_[pole_of(other)].name != pole;
+        });
+        return line.line->label + " line" + (twice ? " from the " + pole : "");
     }
 
     [[nodiscard]] const SeenLine* line_named(const std::string& name) const {

@@ -20,9 +20,9 @@ struct SettingOutOptions {
 
 /// One point to mark. Every length is from one datum, none from another point.
 struct SettingOutPoint {
-    std::string line;                  ///< "hour line XI"; "fixing hole 1"
-    std::string what;                  ///< "inner end", "outer end", "meets the edge", "on hour line XI"
-    Point at;                          ///< mm right and up of the datum
+    std::string line; ///< "hour line XI"; "fixing hole 1"
+    std::string what; ///< "inner end", "outer end", where a piece "breaks off" and "goes on", "meets the edge", …
+    Point at;         ///< mm right and up of the datum
     std::optional<BorderPlace> border; ///< where it lies on the measured border
     std::string pole;                  ///< that radius and angle are measured from; the own centre of an hour line
     double radius_mm = 0.0;            ///< from the pole

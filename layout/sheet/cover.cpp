@@ -39,12 +39,16 @@ void put_face(Flow& flow, const CoverFace& face) {
     flow.space(std::max(0.0, under - y) + 0.5);
 }
 
+constexpr int k_most_beside = 14; ///< columns or rows
+
 void put_map(Flow& flow, const CoverFace& face) {
     const Tiling& tiling = *face.tiling;
     if (tiling.sheets.size() < 2)
         return;
-    const double scale =
-        std::min(1.0, std::min(62.0 / tiling.map_box.height_mm(), 0.5 * flow.width() / tiling.map_box.width_mm()));
+    // Beside the words, or above them where there would be no room for the sheets' names.
+    const bool wide = std::max(tiling.columns, tiling.rows) > k_most_beside;
+    const double scale = std::min({1.0, (wide ? 170.0 : 62.0) / tiling.map_box.height_mm(),
+                                   (wide ? 1.0 : 0.5) * flow.width() / tiling.map_box.width_mm()});
     const double height = scale * tiling.map_box.height_mm();
     flow.need(height + 12);
     flow.heading(face.name.empty() ? "How the sheets join" : "How the sheets of the " + face.name + " join");
@@ -59,10 +63,14 @@ void put_map(Flow& flow, const CoverFace& face) {
         flow.sheet().furniture.push_back(placing(mark));
     for (Note note : tiling.map_notes) {
         note.at = placing(note.at);
-        note.size_mm = std::max(2.5, note.size_mm * scale);
+        const double cell = scale * tiling.map_box.width_mm() / tiling.columns;
+        const double fits = 0.9 * cell / note_width_mm(note.text, 1.0, note.bold);
+        note.size_mm = std::min(std::max(2.5, note.size_mm * scale), fits);
         flow.sheet().notes.push_back(note);
     }
-    const double column = flow.left() + scale * tiling.map_box.width_mm() + 5;
+    if (wide)
+        flow.space(height + 2);
+    const double column = wide ? flow.left() : flow.left() + scale * tiling.map_box.width_mm() + 5;
     std::string text = fmt::format(
         "{} sheets in {} rows and {} columns. Rows are lettered from the top, columns numbered from the left.",
         tiling.sheets.size(), tiling.rows, tiling.columns);
@@ -79,7 +87,7 @@ void put_map(Flow& flow, const CoverFace& face) {
         y -= Flow::k_line_mm;
         flow.note({column, y}, line, Flow::k_text_mm);
     }
-    flow.space(std::max(height, flow.y() - y) + 1);
+    flow.space(std::max(wide ? 0.0 : height, flow.y() - y) + 1);
 }
 
 } // namespace

@@ -115,8 +115,13 @@ Widths widths_of(const std::vector<Flow::Column>& columns, const std::vector<std
 
 void Flow::table(const std::vector<Column>& columns, const std::vector<std::vector<std::string>>& rows,
                  double size_mm) {
+    Widths widths = widths_of(columns, rows, size_mm, width());
+    // A page too narrow for so many columns, though the widest has given way: smaller letters.
+    for (constexpr double k_least_mm = 1.1; widths.all > width() + 0.01 && size_mm > k_least_mm;) {
+        size_mm *= 0.95;
+        widths = widths_of(columns, rows, size_mm, width());
+    }
     const double step = k_line_mm * size_mm / k_text_mm;
-    const Widths widths = widths_of(columns, rows, size_mm, width());
     const std::size_t blocks =
         rows.size() < 16
             ? 1

@@ -31,7 +31,8 @@ class Flow {
         Align align = Align::left;
     };
     /// Columns as wide as what stands in them; the heads again on every page. A cell that would leave the page to the right
-    /// is broken into lines. Long narrow tables stand in two or more blocks side by side.
+    /// is broken into lines; where that is not enough, the letters are smaller. Long narrow tables stand in two or more
+    /// blocks side by side.
     void table(const std::vector<Column>& columns, const std::vector<std::vector<std::string>>& rows,
                double size_mm = k_text_mm);
 

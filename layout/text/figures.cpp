@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "layout/text/figures.hpp"
 
+#include <array>
 #include <cmath>
 #include <fmt/format.h>
 #include <numeric>
@@ -20,6 +21,33 @@ std::string degrees_minutes(Angle angle) {
     return fmt::format("{}{:.0f}° {:04.1f}'", sign, std::floor(tenths / 600.0), std::fmod(tenths, 600.0) / 10.0);
 }
 
+bool append_fixed(std::string& text, double value, int decimals, int least) {
+    // From one whole number, because there are a hundred thousand of them in a packet.
+    static constexpr std::array<double, 11> k_tens{1, 1e1, 1e2, 1e3, 1e4, 1e5, 1e6, 1e7, 1e8, 1e9, 1e10};
+    const double scaled = value * k_tens.at(static_cast<std::size_t>(decimals));
+    if (!(std::abs(scaled) < 9e15))
+        return false;
+    const long long whole = std::llrint(scaled); // as printf rounds
+    std::array<char, 24> digits{};
+    char* const end = digits.data() + digits.size();
+    char* at = end;
+    int left = decimals;
+    auto rest = static_cast<unsigned long long>(whole < 0 ? -whole : whole);
+    for (; left > least && rest % 10 == 0; --left)
+        rest /= 10;
+    for (int i = left; i > 0; --i, rest /= 10)
+        *--at = static_cast<char>('0' + rest % 10);
+    if (left > 0)
+        *--at = '.';
+    do
+        *--at = static_cast<char>('0' + rest % 10);
+    while ((rest /= 10) > 0);
+    if (whole < 0)
+        *--at = '-';
+    text.append(at, static_cast<std::size_t>(end - at));
+    return true;
+}
+
 std::string sixty_fourths(double mm) {
     const long count = std::lround(std::abs(mm) / 25.4 * 64);
     const long whole = count / 64, left = count % 64;
@@ -31,6 +59,10 @@ std::string sixty_fourths(double mm) {
         text += fmt::format("{}{}/{}", whole > 0 ? " " : "", left / common, 64 / common);
     }
     return text;
+}
+
+std::string bare_length(double mm, bool inches) {
+    return inches ? sixty_fourths(mm) : fixed(mm, 1);
 }
 
 std::string say_length(double mm, bool inches) {

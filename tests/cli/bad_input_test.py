@@ -48,6 +48,8 @@ CASES = {
     "tenons longer than their foot": (LEVEL.replace("360 mm", "360 mm, thickness: 12 mm") + "gnomon: {thickness: 6 mm, joint: tenons, foot: 50 mm, tenon length: 40 mm}\n", "4:34", ["gnomon: joint", "do not fit in a foot"]),
     "a socket deeper than the plate": (LEVEL.replace("360 mm", "360 mm, thickness: 10 mm") + "gnomon: {kind: rod, thickness: 5 mm, socket: 60 mm}\n", "4:46", ["gnomon: socket", "leaves the plate"]),
     "screws wider than the gnomon": (LEVEL + "gnomon: {thickness: 6 mm, holes: 2, hole diameter: 5 mm}\n", "4:21", ["gnomon: thickness", "too wide for an edge"]),
+    "a tool that parts no hours": (LEVEL + "cutting: {tool: end mill, diameter: 30 mm}\n", "4:37", ["cutting: diameter", "no hour line of this plate stands clear", "a finer tool"]),
+    "a kerf that closes a slot": (LEVEL.replace("360 mm", "360 mm, thickness: 20 mm") + "gnomon: {thickness: 6 mm, joint: tenons}\ncutting: {kerf: 8 mm}\n", "5:17", ["cutting: kerf", "closes a hole of \"slot for tenon 1\""]),
     "strokes that no letter has": (LEVEL + "cutting: {letters: single strokes}\nlettering: {motto: \"日\"}\n", "5:20", ["lettering: motto", "single-stroke letters have no"]),
     "not a design": (b"%PDF-1.4\n%\xe2\xe3\xcf\xd3\n", "", ["UTF-8"]),
     "nothing at all": (b"", "1:1", ["nothing in it"]),

@@ -3,6 +3,7 @@
 import csv
 import io
 import os
+import re
 import subprocess
 import unittest
 
@@ -10,6 +11,14 @@ from program import (DESIGNS, ERROR, FINE, LEVEL, TWO_FACES, WALL, WITH_WARNINGS
                      numbers_of, run, strict_json)
 
 COMMANDS = ("make", "numbers", "shadow", "check")
+THICK_PIN = """
+place: {name: Kettle Ness, latitude: 85.35, longitude: 20, zone: Europe/Oslo}
+dial: {kind: equatorial, faces: both}
+plate: {diameter: 48 mm, centre: [16 mm, -9.5 mm]}
+borders: {margin: 0.5 mm}
+gnomon: {kind: rod, nodus height: 3.2 mm, thickness: 2.3 mm}
+dates: {months: yes}
+"""
 
 
 class Help(Bench):
@@ -193,6 +202,30 @@ class Check(Bench):
         status, out, _ = run("check", self.design(LEVEL))
         for key in ("title", "hours: divide", "lettering: font", "print: paper", "gnomon: nodus height", "borders: chapter ring"):
             self.assertRegex(out, rf"(?m)^  {key}  +\S")
+
+    def test_a_nodus_that_loses_some_dates_is_told_with_one_that_keeps_more(self):
+        text = LEVEL + "gnomon: {nodus height: 90 mm}\n"
+        _, out, _ = run("check", self.design(text))
+        found = re.search(r"a nodus 90\.0 mm above the plate throws (\d) of its date lines off it \(.*\): about ([\d.]+) mm would keep more", out)
+        self.assertTrue(found, out)
+        _, better, _ = run("check", self.design(text.replace("90 mm", f"{found[2]} mm")))
+        self.assertNotIn("of its date lines off it", better)
+
+    def test_a_nodus_is_not_said_to_be_wrong_where_no_other_can_be_made(self):
+        """The height that the plate would take is too low for a pin as thick as this one."""
+        _, out, err = run("check", self.design(THICK_PIN))
+        self.assertIn("can be made", out, err)
+        self.assertIn("their lines miss the field", out)
+        self.assertNotIn("throws", out)
+
+    def test_what_the_named_tool_cannot_cut_is_told_with_its_place(self):
+        fine = run("check", self.design(LEVEL + "cutting: {tool: laser, diameter: 0.1 mm}\n"))[1]
+        self.assertNotIn("the tool leaves no line", fine)
+        status, out, _ = run("check", self.design(LEVEL + "cutting: {tool: end mill, diameter: 3 mm}\n"))
+        self.assertEqual(status, WITH_WARNINGS)
+        place = r"\d+ mm (right|left) and \d+ mm (up|down) from the plate's middle"
+        self.assertRegex(out, r"the tool leaves no line finer than 3\.00 mm, and letters .* " + place)
+        self.assertRegex(out, r'"hour line \w+" and "date line 21 Jun" leave [\d.]+ mm between them ' + place)
 
     def test_it_writes_nothing(self):
         design = self.design(LEVEL)

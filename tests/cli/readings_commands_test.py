@@ -57,7 +57,7 @@ class Survey(Bench):
 
     def test_sheet(self):
         sheet = self.folder / "survey.pdf"
-        run("survey", self.design(example("survey.md")), "--sheet", sheet)
+        run("survey", self.design(example("survey.md")), "--pdf", sheet)
         text = subprocess.run(["pdftotext", "-layout", sheet, "-"], capture_output=True, text=True, check=True).stdout
         for said in ("Facing S 23° 4' E ± 12'", "left out", "Rings: where the answer puts them"):
             self.assertIn(said, text)
@@ -128,7 +128,7 @@ class Survey(Bench):
 class Adjust(Bench):
     def test_json_and_sheet(self):
         sheet = self.folder / "fitter.pdf"
-        status, out, _ = run("adjust", SLATE, self.design(example("adjust.md")), "--json", "--sheet", sheet)
+        status, out, _ = run("adjust", SLATE, self.design(example("adjust.md")), "--json", "--pdf", sheet)
         made = strict_json(out)
         self.assertEqual(status, FINE)
         answer = made["answers"][0]
@@ -179,7 +179,7 @@ class Restore(Bench):
 
     def test_sheet(self):
         sheet = self.folder / "plate.pdf"
-        run("restore", self.design(example("restore.md")), "--sheet", sheet, "--paper", "Letter")
+        run("restore", self.design(example("restore.md")), "--pdf", sheet, "--paper", "Letter")
         text = subprocess.run(["pdftotext", "-layout", sheet, "-"], capture_output=True, text=True, check=True).stdout
         for said in ("If it stood upright (which is known)", "cut or read wrong", "Black: as measured"):
             self.assertIn(said, text)

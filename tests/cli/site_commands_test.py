@@ -1,5 +1,5 @@
 # SPDX-License-Identifier: MIT
-"""The commands that are asked of a place: sun, sunlight, fix."""
+"""The commands that are asked of a place, of the day of fixing, and of the work to come: sun, sunlight, fix, accuracy."""
 import csv
 import io
 import unittest
@@ -48,7 +48,7 @@ class Sun(Bench):
 
     def test_a_sheet(self):
         sheet = self.folder / "sun.pdf"
-        status, _, err = run("sun", *MOOR, "--on", "2027-06-01", "--to", "2027-06-30", "--sheet", sheet, "--paper", "Letter")
+        status, _, err = run("sun", *MOOR, "--on", "2027-06-01", "--to", "2027-06-30", "--pdf", sheet, "--paper", "Letter")
         self.assertEqual((status, err), (FINE, ""))
         self.assertTrue(sheet.read_bytes().startswith(b"%PDF"))
 
@@ -63,8 +63,8 @@ class Sun(Bench):
             (*MOOR, "--on", "tomorrow"): ["--on", "not a date"],
             (*MOOR, "--on", "2027-06-14", "--to", "2027-06-13"): ["--to", "before the first"],
             (*MOOR, "--on", "2027-06-14", "--to", "2057-06-13"): ["--to", "at most"],
-            (*MOOR, "--on", "2027-06-14", "--sheet", self.folder): ["--sheet", "folder"],
-            (*MOOR, "--on", "2027-06-14", "--sheet", self.folder / "a.pdf", "--paper", "A44"): ["--paper", "A4"],
+            (*MOOR, "--on", "2027-06-14", "--pdf", self.folder): ["--pdf", "folder"],
+            (*MOOR, "--on", "2027-06-14", "--pdf", self.folder / "a.pdf", "--paper", "A44"): ["--paper", "A4"],
             ("--on", "2027-06-14"): ["no place", "--latitude"],
             (self.folder / "none.yaml", "--on", "2027-06-14"): ["no such file"],
             MOOR: ["--on"],
@@ -112,7 +112,7 @@ class Sunlight(Bench):
 
     def test_sheets(self):
         sheet = self.folder / "light.pdf"
-        status, _, err = run("sunlight", self.design(WALL), "--facing", "S", "--sheet", sheet)
+        status, _, err = run("sunlight", self.design(WALL), "--facing", "S", "--pdf", sheet)
         self.assertEqual((status, err), (FINE, ""))
         pages = [page.get_text() for page in fitz.open(sheet)]
         self.assertEqual(len(pages), 3)
@@ -149,13 +149,20 @@ class Fix(Bench):
             for dates in (("--on", "2027-06-14"), ("--on", "2027-03-25", "--to", "2027-04-20")):
                 with self.subTest(design.name, dates=dates):
                     sheet = self.folder / "fix.pdf"
-                    status, out, err = run("fix", design, *dates, "--sheet", sheet)
+                    status, out, err = run("fix", design, *dates, "--pdf", sheet)
                     self.assertEqual((status, err), (FINE, ""))
                     self.assertNotIn("nan", out)
                     pages = [page.get_text() for page in fitz.open(sheet)]
                     self.assertTrue(1 <= len(pages) <= 2)
                     for words in ("Fixing: ", "North by shadows", "Level and plumb", "Never look at the Sun"):
                         self.assertIn(words, "".join(pages))
+
+    def test_the_same_words_give_the_same_bytes(self):
+        design, sheets = self.design(WALL), [self.folder / name for name in ("a.pdf", "b.pdf")]
+        said = [run("fix", design, "--on", "2027-06-14", "--pdf", sheet, env={"TZ": tz, "PATH": "/usr/bin", "HOME": str(self.folder)})
+                for sheet, tz in zip(sheets, ("Pacific/Auckland", "America/Lima"))]
+        self.assertEqual(said[0], said[1])
+        self.assertEqual(sheets[0].read_bytes(), sheets[1].read_bytes())
 
     def test_summer_time_is_in_the_clock(self):
         dates = strict_json(run("fix", self.design(LEVEL), "--on", "2027-03-27", "--to", "2027-03-28", "--json")[1])["dates"]
@@ -204,6 +211,58 @@ class Fix(Bench):
                 self.assertEqual((status, out), (ERROR, ""))
                 for part in parts:
                     self.assertIn(part, err)
+
+
+class Accuracy(Bench):
+    def test_every_design_is_judged_on_one_page_a_face(self):
+        for design in DESIGNS:
+            with self.subTest(design.name):
+                sheet = self.folder / "accuracy.pdf"
+                status, out, err = run("accuracy", design, "--pdf", sheet)
+                self.assertEqual((status, err), (FINE, ""))
+                self.assertNotRegex(out, r"\bnan\b|\binf\b")
+                faces = strict_json(run("accuracy", design, "--json")[1])["faces"]
+                pages = [page.get_text() for page in fitz.open(sheet)]
+                self.assertEqual(len(pages), len(faces))
+                for face, page in zip(faces, pages, strict=True):
+                    self.assertTrue("It supports a reading to" in page or not face["supported"])
+                    self.assertTrue(face["lines"])
+
+    def test_squares_add_up_and_csv_says_the_same(self):
+        design = self.design(WALL)
+        lines = strict_json(run("accuracy", design, "--json")[1])["faces"][0]["lines"]
+        rows = list(csv.DictReader(io.StringIO(run("accuracy", design, "--csv")[1])))
+        cells = [(line, season, cell) for line in lines for season, cell in line["at"].items() if cell]
+        self.assertEqual(len(rows), len(cells))
+        for row, (line, season, cell) in zip(rows, cells, strict=True):
+            self.assertEqual((row["label"], row["season"]), (line["label"], season))
+            self.assertAlmostEqual(float(row["total_min"]), cell["total_min"], places=3)
+            self.assertAlmostEqual(cell["total_min"] ** 2, sum(minutes ** 2 for minutes in cell["slips_min"].values()), places=3)
+            self.assertEqual(cell["slips_min"][cell["most"]], max(cell["slips_min"].values()))
+            self.assertEqual(row["level_min"], "")  # a wall has none
+
+    def test_the_designs_own_figures_count(self):
+        def worst(text, slip):
+            lines = strict_json(run("accuracy", self.design(text), "--json")[1])["faces"][0]["lines"]
+            return max(cell["slips_min"][slip] for line in lines for cell in line["at"].values() if cell)
+
+        for key, given, slip in (("marking", "0.1 mm", "marking"), ("style height", "0.1°", "style_height"), ("substyle", "0.1°", "substyle"),
+                                 ("facing", "0.1°", "facing"), ("lean", "0.1°", "lean"), ("print", "0.01 mm", "print"), ("position", "0.001°", "position")):
+            with self.subTest(key):
+                self.assertLess(worst(WALL + f"accuracy: {{{key}: {given}}}\n", slip), 0.5 * worst(WALL, slip))
+
+    def test_the_packet_has_the_page(self):
+        packet = self.folder / "packet"
+        status, _, err = run("make", self.design(WALL), "--to", packet)
+        self.assertIn(status, (FINE, WITH_WARNINGS), err)
+        self.assertIn("How good it will be", "".join(page.get_text() for page in fitz.open(packet / "sheets.pdf")))
+
+    def test_wrong_words(self):
+        for words, part in (((self.folder / "none.yaml",), "no such file"), ((self.design(WALL), "--pdf", self.folder), "folder"),
+                            ((self.design(WALL), "--json", "--csv"), "--json")):
+            status, out, err = run("accuracy", *words)
+            self.assertEqual((status, out), (ERROR, ""))
+            self.assertIn(part, err)
 
 
 if __name__ == "__main__":

@@ -13,7 +13,7 @@ import ezdxf.bbox
 import fitz
 import numpy as np
 
-from packet_test import Svg
+from drawings import Svg
 from program import FINE, LEVEL, WITH_WARNINGS, Bench, run, strict_json
 
 YEAR = 365.25

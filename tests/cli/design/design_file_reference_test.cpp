@@ -124,6 +124,8 @@ Sections design_around(const Row& row) {
                               : key == "noon at"                      ? "[{name: x, longitude: 5° E}]"
                                                                       : "9 to 11";
     }
+    if (row.section == "extents" && key == "hours")
+        design["hours"] = {{"reach", "season"}};
     if (row.section == "cutting" && key == "diameter")
         design["cutting"] = {{"tool", "end mill"}};
     if (row.section == "hours" && key == "curves")

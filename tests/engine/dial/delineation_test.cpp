@@ -168,13 +168,78 @@ TEST_CASE("Dates that the Sun never shows are named", "[engine][dial]") {
             {"June", Angle::degrees(23.44)}, {"equinox", Angle{}}, {"December", Angle::degrees(-23.44)}};
         return delineate(plan, mean_year(), k_window);
     };
-    CHECK(dated({Angle::degrees(180), Angle{}}).unlit_dates.empty());
-    CHECK(dated(equatorial_attitude(Angle::degrees(54), true)).unlit_dates ==
+    const auto unlit = [](const Delineation& dial) {
+        std::vector<std::string> names;
+        for (const MissedLine& missed : dial.missed) {
+            CHECK(missed.line.family == Family::date);
+            CHECK_FALSE(missed.lit);
+            names.push_back(missed.line.label);
+        }
+        return names;
+    };
+    CHECK(unlit(dated({Angle::degrees(180), Angle{}})).empty());
+    CHECK(unlit(dated(equatorial_attitude(Angle::degrees(54), true))) ==
           std::vector<std::string>{"equinox", "December"});
-    CHECK(dated(equatorial_attitude(Angle::degrees(54), false)).unlit_dates ==
-          std::vector<std::string>{"June", "equinox"});
-    const Delineation north = dated({Angle{}, Angle{}});
-    CHECK(north.unlit_dates == std::vector<std::string>{"equinox", "December"});
+    CHECK(unlit(dated(equatorial_attitude(Angle::degrees(54), false))) == std::vector<std::string>{"June", "equinox"});
+    CHECK(unlit(dated({Angle{}, Angle{}})) == std::vector<std::string>{"equinox", "December"});
+}
+
+TEST_CASE("Lines that the Sun shows outside the plate alone are told apart from unlit ones", "[engine][dial]") {
+    DialPlan plan = plan_at(54, -2, {Angle::degrees(180), Angle{}});
+    plan.dates.lines = {{"June", Angle::degrees(23.44)}};
+    plan.altitudes = {Angle::degrees(10), Angle::degrees(80)};
+    plan.azimuths = {Angle::degrees(0), Angle::degrees(180)};
+    HourPlan left;
+    left.time = HourTime::to_sunset;
+    left.first_h = left.last_h = 20;
+    plan.more_hours = {left};
+    // Far up the wall no shadow falls at all.
+    const auto missed = delineate(plan, mean_year(), {-100, 900, 100, 1000}).missed;
+    REQUIRE(missed.size() == 6);
+    CHECK((missed[0].line.family == Family::to_sunset && missed[0].line.time_h == 20 && !missed[0].lit));
+    CHECK((missed[1].line.level == Angle::degrees(10) && missed[1].lit));
+    CHECK((missed[2].line.level == Angle::degrees(80) && !missed[2].lit)); // the Sun stands no higher than 59.4°
+    CHECK((missed[3].line.family == Family::azimuth && !missed[3].lit));
+    CHECK((missed[4].line.level == Angle::degrees(180) && missed[4].lit));
+    CHECK((missed[5].line.family == Family::date && missed[5].lit));
+}
+
+TEST_CASE("A clock-time curve that is lit for some days about a solstice is drawn", "[engine][dial]") {
+    // Over a hill the Sun of noon shows for a few days at midsummer only: 36° + 23.44° high.
+    DialPlan plan = plan_at(54, 0, {});
+    plan.zone_meridian = Angle{};
+    plan.hours.time = HourTime::clock;
+    plan.hours.first_h = plan.hours.last_h = 12;
+    plan.skyline = Skyline{{{Angle::degrees(10), Angle::degrees(59.40)}, {Angle::degrees(350), Angle::degrees(59.40)}}};
+    const Delineation dial = delineate(plan, mean_year(), k_window);
+    REQUIRE(dial.lines.size() == 1);
+    REQUIRE(dial.lines[0].pieces.size() == 1);
+    CHECK(dial.lines[0].pieces[0].size() > 2);
+}
+
+TEST_CASE("Date lines may run between two hours alone", "[engine][dial]") {
+    DialPlan plan = plan_at(54, -2, {Angle::degrees(170), Angle{}});
+    plan.dates.lines = {{"June", Angle::degrees(23.44)}, {"equinox", Angle{}}};
+    plan.dates.first = Angle::hours(-3);
+    plan.dates.last = Angle::hours(2);
+    const Caster<Plane> caster = caster_of(plan);
+    const Delineation dial = delineate(plan, mean_year(), {-4000, -4000, 4000, 4000});
+    int dates = 0;
+    for (const DialLine& line : dial.lines)
+        if (line.family == Family::date) {
+            ++dates;
+            REQUIRE(line.pieces.size() == 1);
+            std::vector<PlatePoint> ends{line.pieces[0].front(), line.pieces[0].back()};
+            for (const double hour : {-3.0, 2.0}) {
+                const auto shadow = caster.cast({Angle::hours(hour), *line.declination}, Light::seen);
+                REQUIRE(shadow.has_value());
+                const auto off = [&](PlatePoint p) {
+                    return std::hypot(p.u_mm - shadow->point.u_mm, p.v_mm - shadow->point.v_mm);
+                };
+                CHECK(std::min(off(ends[0]), off(ends[1])) < 1e-6);
+            }
+        }
+    CHECK(dates == 2);
 }
 
 TEST_CASE("An equatorial dial's lit hours turn with its face", "[engine][dial]") {

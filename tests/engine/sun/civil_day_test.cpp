@@ -104,3 +104,20 @@ TEST_CASE("dates that lack something say so", "[engine][civil_day]") {
     CHECK(count(apia[2], Kind::noon) == 1);
     CHECK_THROWS_AS(civil_days(north, oslo, 2027y / 6 / 2, 2027y / 6 / 1), std::invalid_argument);
 }
+
+TEST_CASE("rise, set and noon of the published example, by the clocks of its zone", "[engine][civil_day][published]") {
+    // Source: Reda and Andreas, NREL/TP-560-34302, rev. 2008, table A5 (from memory): rise 06:12:43 and set 17:20:19 at UTC - 7,
+    // transit 11:46:04. The set that it prints is that of the evening before, by Denver's clocks (summer time, UTC - 6).
+    const Site site = place(39.742476, -105.1786);
+    const auto days = civil_days(site, zone("America/Denver"), 2003y / 10 / 16, 2003y / 10 / 17);
+    const auto seconds_off = [](const SunEvent* event, Instant published) {
+        REQUIRE(event != nullptr);
+        return std::abs(duration<double>(event->at - published).count());
+    };
+    const Instant rise = sys_days{2003y / 10 / 17} + 13h + 12min + 43s,
+                  noon = sys_days{2003y / 10 / 17} + 18h + 46min + 4s,
+                  set = sys_days{2003y / 10 / 17} + 0h + 20min + 19s;
+    CHECK(seconds_off(days[1].first(SunEvent::Kind::rise), rise) < 1.5);
+    CHECK(seconds_off(days[1].first(SunEvent::Kind::noon), noon) < 1.5);
+    CHECK(seconds_off(days[0].first(SunEvent::Kind::set), set) < 1.5);
+}

@@ -140,6 +140,31 @@ TEST_CASE("Curves become chords at the right distance", "[layout]") {
     CHECK_THAT(greatest, WithinAbs(0.5, 0.005));
 }
 
+TEST_CASE("A slot that is open at the part's edge narrows as a hole does", "[layout]") {
+    const Path slot = polyline({{-0.5, 27}, {40, 27}, {40, 33}, {-0.5, 33}});
+    const Kerfed made = with_kerf(cut_out({rectangle({0, 0, 100, 60}), slot}), 0.4);
+    CHECK(made.moved == 2);
+    CHECK(made.left_alone == 0);
+    CHECK(made.said.find("not moved") == std::string::npos);
+    std::vector<Point> corners;
+    for (const Mark& mark : made.drawing.marks)
+        for (const Path& path : mark.paths)
+            if (!path.closed) {
+                corners.push_back(path.start);
+                for (const Piece& piece : path.pieces)
+                    corners.push_back(end_of(piece));
+            }
+    const std::vector<Point> wanted{{-0.5, 27.2}, {39.8, 27.2}, {39.8, 32.8}, {-0.5, 32.8}};
+    REQUIRE(corners.size() == wanted.size());
+    for (std::size_t i = 0; i < wanted.size(); ++i) {
+        CHECK_THAT(corners[i].x_mm, WithinAbs(wanted[i].x_mm, 1e-9));
+        CHECK_THAT(corners[i].y_mm, WithinAbs(wanted[i].y_mm, 1e-9));
+    }
+    CHECK_THROWS_WITH(with_kerf(cut_out({rectangle({0, 0, 100, 60}), slot}), 7), Catch::Contains("closes a hole"));
+    // A saw's cut across the part is no slot.
+    CHECK(with_kerf(cut_out({rectangle({0, 0, 100, 60}), polyline({{-1, 30}, {101, 30}})}), 0.4).left_alone == 1);
+}
+
 TEST_CASE("A kerf that a part does not bear is said, with the part's name", "[layout]") {
     const Catch::Matchers::StdString::ContainsMatcher part = Catch::Contains("\"gnomon\"");
     CHECK_THROWS_WITH(with_kerf(cut_out({rectangle({0, 0, 50, 2})}), 2.5), part && Catch::Contains("wider than"));

@@ -21,6 +21,14 @@ double area_by_chords(const Path& path) {
     return sum / 2;
 }
 
+double length_by_chords(const Path& path) {
+    const auto p = flattened(path, 1e-7);
+    double sum = 0;
+    for (std::size_t i = 1; i < p.size(); ++i)
+        sum += std::hypot(p[i].x_mm - p[i - 1].x_mm, p[i].y_mm - p[i - 1].y_mm);
+    return sum;
+}
+
 } // namespace
 
 TEST_CASE("Lengths and areas of lines, arcs and curves", "[layout]") {
@@ -32,6 +40,17 @@ TEST_CASE("Lengths and areas of lines, arcs and curves", "[layout]") {
     const Path bow{{5, 5}, {CurveTo{{5, 30}, {47, 33}, {40, 5}}, LineTo{{5, 5}}}, true};
     CHECK_THAT(area_of(bow), WithinAbs(area_by_chords(bow), 1e-3));
     CHECK_THAT(area_of(reversed(bow)), WithinAbs(-area_of(bow), 1e-9));
+}
+
+TEST_CASE("Lengths of curves that bow, double back, or stand still on the way", "[layout]") {
+    for (const CurveTo& curve : {CurveTo{{5, 30}, {47, 33}, {40, 5}}, CurveTo{{45, 40}, {5, 40}, {40, 5}},
+                                 CurveTo{{40, 5}, {5, 5}, {40, 5}}, CurveTo{{5, 5}, {5.2, 5}, {5.3, 5.4}},
+                                 CurveTo{{5, 5}, {5, 5}, {5, 5}}, CurveTo{{100, 5}, {-60, 5.001}, {40, 5}}}) {
+        const Path path{{5, 5}, {curve}, false};
+        const double length = length_by_chords(path);
+        CHECK_THAT(length_of(path), WithinAbs(length, 1e-4 * length));
+        CHECK_THAT(length_of(reversed(path)), WithinAbs(length, 1e-4 * length));
+    }
 }
 
 TEST_CASE("A contour knows what goes round it", "[layout]") {

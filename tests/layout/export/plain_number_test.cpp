@@ -22,6 +22,7 @@ TEST_CASE("Numbers are plain", "[layout]") {
     CHECK(written(-0.00004, 4, 0) == "0");
     CHECK(written(-0.00004, 4, 1) == "0.0");
     CHECK(written(-0.00006, 4, 1) == "-0.0001");
+    CHECK(written(-360.123456789, 9, 0) == "-360.123456789");
     CHECK(written(1e-9, 10, 1) == "0.000000001");
     CHECK(written(9999999, 4, 1) == "9999999.0");
     CHECK_THROWS_AS(written(1e8, 4, 1), ExportError);
