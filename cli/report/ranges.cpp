@@ -35,6 +35,8 @@ std::string say_seconds(double seconds) {
     const long whole = std::lround(std::abs(seconds));
     if (whole < 60)
         return fmt::format("{} s", whole);
+    if (whole >= 3600)
+        return fmt::format("{} h {} min", whole / 3600, whole % 3600 / 60);
     return whole % 60 == 0 ? fmt::format("{} min", whole / 60) : fmt::format("{} min {} s", whole / 60, whole % 60);
 }
 

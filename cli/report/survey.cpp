@@ -8,6 +8,7 @@
 #include "engine/time/instant_text.hpp"
 
 #include <algorithm>
+#include <array>
 #include <cmath>
 
 namespace dialwright::cli {
@@ -33,16 +34,29 @@ std::string next_words(const SurveyFile& file, const WallSurvey& survey) {
         say_clock(*file.zone, survey.next->at), say_give(survey.next->facing_range_deg));
 }
 
-void judge_clock_and_level(const WallSurvey& survey, SurveyVerdict& verdict) {
+/// A figure beside the shadows was held to be wrong.
+bool of_figure(Fault fault) {
+    return fault == Fault::bearing || fault == Fault::lean || fault == Fault::grazing;
+}
+
+void judge_faults(const SurveyFile& file, const WallSurvey& survey, SurveyVerdict& verdict) {
     const WallAnswer& first = survey.answers.front();
     if (survey.answers.size() > 1) {
         std::string ways;
         for (const WallAnswer& answer : survey.answers)
             ways += (ways.empty() ? "either " : ", or ") + fault_words(answer);
-        verdict.notes.push_back(ways +
-                                ". Such readings alone can't tell which, and the facing depends on it. Try the clock "
-                                "against a time signal and the board against a plumb line; a lean measured with "
-                                "plumb line and rule (\"lean: 0° 10' back ± 0.2°\") may tell them apart");
+        ways += ". Such readings alone can't tell which, and the facing depends on it. ";
+        if (file.readings.shadows.empty())
+            ways += "Measure each again, and time the shadow of a peg, six times over a day";
+        else
+            ways += "Try the clock against a time signal and the board against a plumb line; ";
+        if (!file.readings.shadows.empty() && file.readings.lean_deg)
+            ways += "measure again what was measured beside the shadows";
+        else if (!file.readings.shadows.empty())
+            ways += "a lean measured with plumb line and rule (\"lean: 0° 10' back ± 0.2°\") may tell them apart";
+        verdict.notes.push_back(std::move(ways));
+    } else if (of_figure(first.fault)) {
+        verdict.notes.push_back(fault_words(first) + ", if all else is right. It was left out; measure it again");
     } else if (first.fault != Fault::none) {
         verdict.notes.push_back(fault_words(first) +
                                 ". The facing allows for it; put it right and take another reading to be sure");
@@ -68,7 +82,8 @@ void fail(const SurveyFile& file, SurveyVerdict& verdict, std::string message, s
 }
 
 const char* fault_name(Fault fault) {
-    return fault == Fault::none ? "none" : fault == Fault::clock ? "clock" : "level";
+    static constexpr std::array<const char*, 6> k_names{"none", "clock", "level", "bearing", "lean", "grazing"};
+    return k_names[std::size_t(fault)];
 }
 
 void say_answer(LinesOfText& text, const WallAnswer& answer, bool several) {
@@ -91,7 +106,14 @@ std::string fault_words(const WallAnswer& answer) {
     if (answer.fault == Fault::level)
         return fmt::format("the board was out of plumb by {} {}, its top to the {}", say_arc(answer.level_deg.value),
                            say_give(answer.level_deg.range), answer.level_deg.value > 0 ? "right" : "left");
-    return "clock, board and peg were as good as their ± say";
+    if (answer.fault == Fault::bearing)
+        return fmt::format("the compass bearing was off by {}", say_arc(answer.figure_off_deg));
+    if (answer.fault == Fault::lean)
+        return fmt::format("the lean was measured wrong by {}", say_arc(answer.figure_off_deg));
+    if (answer.fault == Fault::grazing)
+        return fmt::format("grazing moment {} was wrong, with the Sun {} from the wall's plane", answer.grazing + 1,
+                           say_arc(answer.figure_off_deg));
+    return "all was as good as its ± says";
 }
 
 ShadowTable shadow_table(const SurveyFile& file, const WallAnswer& answer) {
@@ -122,7 +144,8 @@ SurveyVerdict verdict_on(const SurveyFile& file, const WallSurvey& survey) {
         return verdict;
     }
     if (survey.answers.empty() || survey.too_scattered) {
-        std::string hint = "check the peg's length, the place, the zone, and that all were taken on this wall";
+        std::string hint = "check the peg's length, the place, the zone, that morning and afternoon are not confused, "
+                           "and that all were taken on this wall";
         if (survey.swap == WallSurvey::Swap::left_for_right)
             hint = "with left and right exchanged they fit: right is to the right of who faces the wall, left is below "
                    "zero";
@@ -140,7 +163,7 @@ SurveyVerdict verdict_on(const SurveyFile& file, const WallSurvey& survey) {
         return verdict;
     }
     judge_strays(file, answer, verdict);
-    judge_clock_and_level(survey, verdict);
+    judge_faults(file, survey, verdict);
     if (answer.facing_deg.range > k_good_facing_deg)
         verdict.notes.push_back(
             fmt::format("{} is not near enough to cut a dial by; {}", say_give(answer.facing_deg.range),
@@ -149,7 +172,9 @@ SurveyVerdict verdict_on(const SurveyFile& file, const WallSurvey& survey) {
         verdict.notes.push_back(
             "a compass is pulled by iron in walls, gutters, rails and cars, and by the pocket it came "
             "from: hold it a few metres off the wall, at several places, and trust shadows over it");
-    if (!shadows)
+    // Facing and lean take two figures.
+    if (const WallReadings& given = file.readings;
+        !shadows && given.grazings.size() + (given.bearing_deg ? 1 : 0) + (given.lean_deg ? 1 : 0) < 3)
         verdict.notes.push_back("nothing here checks these figures against each other");
     verdict.good_to_cut = survey.answers.size() == 1 && answer.facing_deg.range <= k_least_facing_deg;
     return verdict;
@@ -209,6 +234,7 @@ std::string survey_json(const SurveyFile& file, const WallSurvey& survey, const 
     Json answers = Json::array();
     for (const WallAnswer& answer : survey.answers) {
         Json one{{"fault", fault_name(answer.fault)},
+                 {"figure_off_deg", of_figure(answer.fault) ? json_number(answer.figure_off_deg) : Json{}},
                  {"facing_deg", json_found(answer.facing_deg)},
                  {"lean_deg", json_found(answer.lean_deg)},
                  {"clock_slow_s", json_found(answer.clock_s)},

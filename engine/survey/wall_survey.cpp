@@ -22,8 +22,15 @@ enum Index { k_facing, k_lean, k_turn, k_clock, k_peg, k_foot_right, k_foot_up, 
 constexpr double k_marking_mm = 0.5, k_blur = 0.25 / 107;
 /// What is no doubt of a reading but of its wall: a Sun nearer to the wall's plane than this throws no shadow to measure.
 constexpr double k_least_light = 0.01;
-constexpr double k_unlit = 1e4; // residual of a shadow that the wall could not have had
+constexpr double k_unlit = 1e4;    // residual of a shadow that the wall could not have had
+constexpr double k_doubted = 1e-4; // of a figure's weight, where it is held to be wrong
 constexpr double k_any_facing_deg = 60, k_any_lean_deg = 40, k_any_clock_s = 7200, k_any_level_deg = 15;
+
+/// What an explanation holds to be wrong.
+struct Suspect {
+    WallAnswer::Fault fault = WallAnswer::Fault::none;
+    std::size_t grazing = 0; ///< which one
+};
 
 class Survey {
   public:
@@ -72,13 +79,32 @@ class Survey {
         return true;
     }
 
-    [[nodiscard]] FitTask task(WallAnswer::Fault fault) const {
+    /// The figures that stand beside the shadows, one by one.
+    [[nodiscard]] std::vector<Suspect> figures() const {
+        using Fault = WallAnswer::Fault;
+        std::vector<Suspect> figures;
+        for (std::size_t i = 0; i < readings_.grazings.size(); ++i)
+            figures.push_back({Fault::grazing, i});
+        if (readings_.bearing_deg)
+            figures.push_back({Fault::bearing});
+        if (readings_.lean_deg)
+            figures.push_back({Fault::lean});
+        return figures;
+    }
+
+    [[nodiscard]] FitTask task(const Suspect& suspect) const {
+        const WallAnswer::Fault fault = suspect.fault;
         FitTask task;
         task.readings = int(readings_.shadows.size());
         task.width = 2;
         task.known_rows =
             int(readings_.grazings.size()) + (readings_.bearing_deg ? 1 : 0) + (readings_.lean_deg ? 1 : 0);
-        task.residuals = [this](const VectorXd& x, VectorXd& r) { return residuals(x, r); };
+        task.residuals = [this, row = row_of(suspect)](const VectorXd& x, VectorXd& r) {
+            const bool can_be = residuals(x, r);
+            if (can_be && row >= 0)
+                r[row] *= k_doubted;
+            return can_be;
+        };
         task.unknowns.resize(k_unknowns);
         const auto set = [&](Index i, double step, double known_to) {
             task.unknowns[i].step = step;
@@ -105,9 +131,30 @@ class Survey {
         return fit_without_strays(task, k_once_in, 3);
     }
 
-    [[nodiscard]] WallAnswer answer(const Fit& fit, const FitTask& task, WallAnswer::Fault fault) const {
+    /// The chance that a suspected figure, if it is as good as its ± says, lies so far from what the rest say of it.
+    [[nodiscard]] double chance_of(const Suspect& suspect, const Fit& fit, const FitTask& task) const {
+        const int row = row_of(suspect);
+        VectorXd x = fit.values, ahead(fit.residuals.size()), behind(fit.residuals.size()), slopes(k_unknowns);
+        for (int k = 0; k < k_unknowns; ++k) {
+            const double step = task.unknowns[std::size_t(k)].step;
+            x[k] = fit.values[k] + step;
+            const bool can_ahead = residuals(x, ahead);
+            x[k] = fit.values[k] - step;
+            const bool can_behind = residuals(x, behind);
+            x[k] = fit.values[k];
+            slopes[k] = can_ahead && can_behind ? (ahead[row] - behind[row]) / (2 * step) : 0.0;
+        }
+        const Spread spread = fit.spread(slopes, 1.0);
+        const double out = fit.residuals[row] / k_doubted / spread.deviation;
+        return fisher_above(out * out, 1.0, std::max(0.5, spread.freedom));
+    }
+
+    [[nodiscard]] WallAnswer answer(const Fit& fit, const FitTask& task, const Suspect& suspect) const {
         WallAnswer answer;
-        answer.fault = fault;
+        answer.fault = suspect.fault;
+        answer.grazing = suspect.grazing;
+        if (const int row = row_of(suspect); row >= 0)
+            answer.figure_off_deg = fit.residuals[row] / k_doubted * deviation_of(suspect);
         const auto found = [&](Index i) {
             return Found{fit.values[i], fit.spread(i).range_95, fit.untold(i, task) < 0.5};
         };
@@ -173,6 +220,29 @@ class Survey {
     }
 
   private:
+    /// The row of a figure beside the shadows; −1 of other suspects.
+    [[nodiscard]] int row_of(const Suspect& suspect) const {
+        using Fault = WallAnswer::Fault;
+        const int grazing = int(2 * readings_.shadows.size()), bearing = grazing + int(readings_.grazings.size());
+        switch (suspect.fault) {
+        case Fault::grazing:
+            return grazing + int(suspect.grazing);
+        case Fault::bearing:
+            return bearing;
+        case Fault::lean:
+            return bearing + (readings_.bearing_deg ? 1 : 0);
+        default:
+            return -1;
+        }
+    }
+
+    /// One standard deviation of a figure beside the shadows, in degrees.
+    [[nodiscard]] double deviation_of(const Suspect& figure) const {
+        if (figure.fault == WallAnswer::Fault::grazing)
+            return Known{0, readings_.grazings[figure.grazing].give.in_degrees()}.deviation();
+        return (figure.fault == WallAnswer::Fault::lean ? readings_.lean_deg : readings_.bearing_deg)->deviation();
+    }
+
     [[nodiscard]] PlateFrame board_of(const VectorXd& x) const {
         const PlateFrame wall = frame_of({Angle::degrees(x[k_facing]), Angle::degrees(x[k_lean])});
         const double sine = sin(Angle::degrees(x[k_turn])), cosine = cos(Angle::degrees(x[k_turn]));
@@ -254,31 +324,57 @@ WallReadings swapped(WallReadings readings, WallSurvey::Swap swap) {
 
 /// One explanation and its fit.
 struct Way {
-    WallAnswer::Fault fault;
+    Suspect suspect;
     FitTask task;
     Fit fit;
+
+    /// The same fit with other readings left out.
+    void leave_out(const std::vector<bool>& strays) {
+        if (fit.left_out == strays)
+            return;
+        FitTask again = task;
+        again.left_out = strays;
+        for (int i = 0; i < k_unknowns; ++i)
+            again.unknowns[std::size_t(i)].start = fit.values[i];
+        again.unknowns[k_facing].known = fit.values[k_facing];
+        fit = dialwright::fit(again);
+    }
 };
 
-/// As measured first; then, of shadows enough, with the clock or the board free. Empty where nothing settles.
+/// As measured first; then without one of the figures beside the shadows; then, of shadows enough, with the clock or the
+/// board free. The same readings count in all, so that the ways compare. Empty where nothing settles.
 std::vector<Way> ways_of(const Survey& survey, std::size_t shadows) {
     using Fault = WallAnswer::Fault;
     std::vector<Way> ways;
-    FitTask task = survey.task(Fault::none);
-    Fit found = survey.best(task);
-    if (!found.settled)
-        return ways;
-    ways.push_back({Fault::none, std::move(task), std::move(found)});
+    std::vector<Suspect> whole{{}};
+    for (const Suspect& figure : survey.figures())
+        whole.push_back(figure);
+    for (const Suspect& suspect : whole) {
+        FitTask task = survey.task(suspect);
+        if (Fit made = survey.best(task); made.settled)
+            ways.push_back({suspect, std::move(task), std::move(made)});
+        else if (suspect.fault == Fault::none)
+            return ways;
+    }
+    // A wrong figure may have cast suspicion on right shadows: as few as any way needs are left out.
+    std::vector<bool> strays = ways.front().fit.left_out;
+    const auto count = [](const std::vector<bool>& flags) { return std::count(flags.begin(), flags.end(), true); };
+    for (const Way& way : ways)
+        if (count(way.fit.left_out) < count(strays))
+            strays = way.fit.left_out;
+    for (Way& way : ways)
+        way.leave_out(strays);
     for (const Fault fault : {Fault::clock, Fault::level}) {
         if (shadows < 3)
             break;
         const Fit& first = ways.front().fit;
-        FitTask other = survey.task(fault);
-        other.left_out = first.left_out; // the same readings count, so that the ways compare
+        FitTask other = survey.task({fault});
+        other.left_out = strays;
         for (int i = 0; i < k_unknowns; ++i)
             other.unknowns[std::size_t(i)].start = first.values[i];
         other.unknowns[k_facing].known = first.values[k_facing];
         if (Fit made = fit(other); made.settled)
-            ways.push_back({fault, std::move(other), std::move(made)});
+            ways.push_back({{fault}, std::move(other), std::move(made)});
     }
     return ways;
 }
@@ -289,7 +385,7 @@ WallSurvey::Swap swap_that_fits(const WallReadings& readings, double noise) {
     for (const WallSurvey::Swap swap : {WallSurvey::Swap::left_for_right, WallSurvey::Swap::up_for_down}) {
         const WallReadings other = swapped(readings, swap);
         const Survey again{other};
-        const Fit made = again.best(again.task(WallAnswer::Fault::none));
+        const Fit made = again.best(again.task({}));
         if (made.settled && made.noise < noise / k_far_better)
             return swap;
     }
@@ -301,6 +397,7 @@ WallSurvey::Swap swap_that_fits(const WallReadings& readings, double noise) {
 WallSurvey survey_wall(const WallReadings& readings) {
     constexpr double k_rare = 0.001, k_tells = 9.0; // −2 log likelihood: e^(9/2), some ninety to one
     constexpr double k_shows = 2.5;                 // ranges: what is so far off passes the two tests nearly always
+    constexpr double k_open_deg = 45;               // a facing that is no better known is none
     constexpr double k_scattered = 10;              // nominal deviations: such readings are of no wall
     const Survey survey{readings};
     WallSurvey made;
@@ -313,11 +410,17 @@ WallSurvey survey_wall(const WallReadings& readings) {
     std::vector<const Way*> good{&as_said};
     for (std::size_t i = 1; i < ways.size(); ++i) {
         const Way& way = ways[i];
-        const bool clock = way.fault == WallAnswer::Fault::clock;
-        const int unknown = clock ? k_clock : k_turn;
-        const double thought_to = as_said.task.unknowns[std::size_t(unknown)].known_to;
-        (clock ? made.clock_told_s : made.level_told_deg) = k_shows * way.fit.spread(unknown).range_95;
-        if (way.fit.chance_of(unknown, thought_to) < k_rare && way.fit.misfit < as_said.fit.misfit - k_tells)
+        const WallAnswer::Fault fault = way.suspect.fault;
+        double chance = 1.0;
+        if (fault == WallAnswer::Fault::clock || fault == WallAnswer::Fault::level) {
+            const bool clock = fault == WallAnswer::Fault::clock;
+            const int unknown = clock ? k_clock : k_turn;
+            (clock ? made.clock_told_s : made.level_told_deg) = k_shows * way.fit.spread(unknown).range_95;
+            chance = way.fit.chance_of(unknown, as_said.task.unknowns[std::size_t(unknown)].known_to);
+        } else if (way.fit.settled && way.fit.spread(k_facing).range_95 < k_open_deg) {
+            chance = survey.chance_of(way.suspect, way.fit, way.task);
+        }
+        if (chance < k_rare && way.fit.misfit < as_said.fit.misfit - k_tells)
             good.push_back(&way);
     }
     std::stable_sort(good.begin(), good.end(),
@@ -325,7 +428,7 @@ WallSurvey survey_wall(const WallReadings& readings) {
     const Way& best = *good.front();
     for (const Way* way : good)
         if (way->fit.misfit < best.fit.misfit + k_tells)
-            made.answers.push_back(survey.answer(way->fit, way->task, way->fault));
+            made.answers.push_back(survey.answer(way->fit, way->task, way->suspect));
     if (made.checked)
         made.next = survey.next(best.fit, best.task);
     made.too_scattered = made.checked && best.fit.noise > k_scattered;

@@ -42,9 +42,12 @@ struct WallReadings {
 
 /// One way in which the readings hang together.
 struct WallAnswer {
-    /// What has to be wrong for it: nothing beyond its ±, the clock, or the board's plumb line.
-    enum class Fault { none, clock, level };
+    /// What has to be wrong for it: nothing beyond its ±, the clock, the board's plumb line, or one figure beside the
+    /// shadows, which then was left out.
+    enum class Fault { none, clock, level, bearing, lean, grazing };
     Fault fault = Fault::none;
+    std::size_t grazing = 0;     ///< which one, of Fault::grazing
+    double figure_off_deg = 0.0; ///< that figure, less what the rest say of it
     Found facing_deg, lean_deg;
     Found clock_s;           ///< the clock was slow by this
     Found level_deg;         ///< the board's top was turned to the right by this, as its reader sees it
@@ -74,7 +77,7 @@ struct WallSurvey {
 
 /// Fits facing and lean, and beside them the clock, the board's plumb line, the peg's length and foot as far as their ± go.
 /// A wrong clock and a board out of plumb turn the readings alike about the pole; only a measured lean or a second wall can
-/// part them.
+/// part them. A lean, a bearing or a grazing moment that the rest can't agree with is an answer of its own, without it.
 /// @param readings  at least one of its kinds; every instant with the Sun up
 /// Accuracy: the stated ranges hold the truth in 92 to 98 % of simulated walls. Test: tests/against/ephem_surveys.py
 [[nodiscard]] WallSurvey survey_wall(const WallReadings& readings);
