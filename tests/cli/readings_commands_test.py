@@ -55,6 +55,15 @@ class Survey(Bench):
         self.assertEqual([shadow["left_out"] for shadow in answer["shadows"]], [False] * 3 + [True] + [False] * 3)
         self.assertTrue(made["good_to_cut"])
 
+    def test_a_bearing_or_a_lean_that_the_shadows_contradict_is_left_out(self):
+        for wrong, said in (("compass: {bearing: S 61° E ± 3°, variation: 1° W}\n", "the compass bearing was off by 3"),
+                            ("lean: 1.4° forward ± 0.2°\n", "the lean was measured wrong by 2")):
+            readings = self.design(example("survey.md") + wrong)
+            self.assertIn("note: " + said, run("survey", readings)[2])
+            [answer] = strict_json(run("survey", readings, "--json")[1])["answers"]
+            self.assertAlmostEqual(answer["facing_deg"]["value"], 157, delta=answer["facing_deg"]["range"])
+            self.assertAlmostEqual(answer["lean_deg"]["value"], 1.5, delta=answer["lean_deg"]["range"])
+
     def test_sheet(self):
         sheet = self.folder / "survey.pdf"
         run("survey", self.design(example("survey.md")), "--pdf", sheet)
