@@ -3,6 +3,7 @@
 
 #include "layout/drawing/measures.hpp"
 #include "layout/drawing/offset.hpp"
+#include "layout/plate/points.hpp"
 
 #include <algorithm>
 #include <cmath>
@@ -230,6 +231,36 @@ void tell_lines(const Face& face, const FaceSpec& spec, std::vector<std::string>
                                    others, spec.cutting.least_gap_mm));
 }
 
+/// The gap between the two half-dials of a thick gnomon: one hour is drawn twice, once for each edge, side by side.
+void tell_noon_gap(const Face& face, const FaceSpec& spec, std::vector<std::string>& told) {
+    constexpr double k_parallel = 1e-6, k_one_line_mm = 0.02, k_rounding_mm = 0.005;
+    for (std::size_t i = 0; i < face.lines.size(); ++i)
+        for (std::size_t k = i + 1; k < face.lines.size(); ++k) {
+            const DrawnLine &a = face.lines[i], &b = face.lines[k];
+            const auto of_ring = [](const DrawnLine& line) {
+                return line.set == 0 && line.family == Family::hour && line.step_min >= 60 && line.points.size() == 2;
+            };
+            if (!of_ring(a) || !of_ring(b) || std::abs(a.time_h - b.time_h) > 1e-6)
+                continue;
+            const auto run_of = [&](const DrawnLine& line) {
+                const PlatePoint from = line.points.front(), to = line.points.back();
+                return unit({to.u_mm - from.u_mm, to.v_mm - from.v_mm});
+            };
+            const Point run = run_of(a), start = to_work(a.points.front(), face.placement.foot),
+                        other = to_work(b.points.front(), face.placement.foot);
+            const double apart = std::abs(cross(run, other - start));
+            const double gap = apart - (a.width_mm + b.width_mm) / 2;
+            if (std::abs(cross(run, run_of(b))) > k_parallel || apart < k_one_line_mm ||
+                gap > spec.cutting.least_gap_mm - k_rounding_mm)
+                continue;
+            told.push_back(
+                fmt::format("the gap for the gnomon leaves {:.2f} mm between the two lines of {}, and the tool "
+                            "wants {:.2f} mm: take a thicker gnomon, or a finer tool",
+                            std::max(0.0, gap), a.label, spec.cutting.least_gap_mm));
+            return;
+        }
+}
+
 void tell_widths(const FaceSpec& spec, std::vector<std::string>& told) {
     const double thinnest = thinnest_line_mm(spec.cutting);
     const LineWidths& widths = spec.widths;
@@ -278,6 +309,7 @@ std::vector<std::string> tool_warnings(const Face& face, const FaceSpec& spec) {
     std::vector<std::string> told;
     if (spec.cutting.tool != Tool::any) {
         tell_letters(face, spec.cutting, told);
+        tell_noon_gap(face, spec, told);
         tell_widths(spec, told);
     }
     tell_lines(face, spec, told);

@@ -102,6 +102,16 @@ TEST_CASE("Sentences for the maker", "[layout]") {
     CHECK(tool_warnings(face, spec_of(Tool::any, 0.5)).empty());
 }
 
+TEST_CASE("A gnomon's gap that is too narrow is told", "[layout]") {
+    Face face = face_of(Angle::degrees(15), 9.0);
+    face.lines.push_back(line(Family::hour, "XII", 12, {{3, 20}, {3, 100}}));
+    CHECK(tool_warnings(face, spec_of(Tool::laser, 1.0)).empty()); // 2 mm of stock between lines of 1 mm, as wanted
+    const auto told = tool_warnings(face, spec_of(Tool::laser, 1.2));
+    REQUIRE(told.size() == 1);
+    CHECK_THAT(told[0], Contains("leaves 2.00 mm between the two lines of XII") && Contains("wants 2.40 mm"));
+    CHECK(tool_warnings(face, spec_of(Tool::any, 1.2)).empty());
+}
+
 TEST_CASE("A tool that parts no hours", "[layout]") {
     CHECK_FALSE(parts_no_hours(face_of(Angle::degrees(3), 9), spec_of(Tool::end_mill, 1.0)));
     CHECK(parts_no_hours(face_of(Angle::degrees(3), 9), spec_of(Tool::end_mill, 2.5))); // 6 / sin 3° is 115 mm
